@@ -1,0 +1,136 @@
+import type { FitBasis, SystemPoints } from "./systems.ts";
+
+/** Scales pooled over the whole edition. All are standard deviations of ln value. */
+export interface PooledScales {
+  /** Within-source scatter by source (position in the edition's list), shrunk towards the edition's. */
+  readonly within: Float64Array;
+  /** Between-source scatter: general, and for salts in water. */
+  readonly between: number;
+  readonly betweenAqueousSalt: number;
+  /** Degrees of freedom behind the two; 0 = the default setting was used, nothing could be estimated. */
+  readonly betweenDegreesOfFreedom: number;
+  readonly betweenAqueousSaltDegreesOfFreedom: number;
+}
+
+/** How far the sources of a system agree. */
+export type Agreement = "agreed" | "conflict" | "cannot tell";
+
+/** The robust screening fit of one system: which points stay, and how far each lies from what the others say. */
+export interface RobustFit {
+  readonly system: number;
+  readonly points: SystemPoints;
+  readonly agreement: Agreement;
+  /** 1 = stays in the published curve. */
+  readonly kept: Uint8Array;
+  /** ln value expected at each point with that point left out (its whole source, where that is set apart). */
+  readonly predicted: Float64Array;
+  /** lnValue - predicted. */
+  readonly deviation: Float64Array;
+  /** Standard deviation of the deviation: noise, source offset and curve uncertainty together. */
+  readonly deviationSd: Float64Array;
+  /** Degrees of freedom for judging z = deviation / deviationSd. */
+  readonly degreesOfFreedom: number;
+  /** Sources (positions in the edition's list) whose blocks are sound: they agree and form the majority. Ascending. */
+  readonly soundSources: readonly number[];
+  /** Sources whose whole block lies apart from the sound majority. Ascending. */
+  readonly apartSources: readonly number[];
+  /** In a conflict: the groups of sources that agree within themselves, largest first. */
+  readonly camps: readonly (readonly number[])[];
+}
+
+/** Names of the curve models. */
+export type CurveModel =
+  | "van 't Hoff"
+  | "modified Apelblat"
+  | "Buchowski-Ksiazczak lambda-h"
+  | "quadratic in 1/T"
+  | "constant";
+
+/** A model that was tried and not chosen. */
+export interface RunnerUp {
+  readonly model: CurveModel;
+  /** AICc by least squares on the common set of kept points. */
+  readonly aicc: number;
+  /** Root mean square leave-one-out residual of ln value. */
+  readonly leaveOneOut: number;
+  /** Why it was passed over. */
+  readonly why: string;
+}
+
+/** A fitted temperature model with what is needed to evaluate it and its limits. */
+export interface Curve {
+  readonly curveId: string;
+  readonly system: number;
+  readonly branch: number;
+  readonly model: CurveModel;
+  readonly fitBasis: FitBasis;
+  /** Coefficients in the usual published form, with their standard uncertainties; names by model (A, B, C; lambda, h). */
+  readonly coefficients: readonly {
+    readonly name: string;
+    readonly value: number;
+    readonly standardUncertainty: number;
+  }[];
+  /** Covariance of the coefficients, row-major, in the same order. */
+  readonly covariance: readonly number[];
+  /** Lowest and highest temperature of the kept points, K. */
+  readonly temperatureRangeK: readonly [number, number];
+  readonly n: number;
+  readonly nSources: number;
+  readonly nLaboratories: number;
+  /** Root mean square deviation of ln value. */
+  readonly rmsd: number;
+  /** Average relative deviation of the value, percent. */
+  readonly ardPercent: number;
+  /** Residual standard deviation within sources; undefined where n - p is below 5. */
+  readonly withinSd: number | undefined;
+  /** Between-source standard deviation used in the limits, and its degrees of freedom (0 = default setting). */
+  readonly betweenSd: number;
+  readonly betweenDegreesOfFreedom: number;
+  readonly aicc: number;
+  readonly runnersUp: readonly RunnerUp[];
+  /** Remarks: few points, large |C|, why no richer model. */
+  readonly notices: readonly string[];
+  /** Apparent dissolution enthalpy at the mean (harmonic) temperature, J/mol, with 95 % limits. */
+  readonly dissolutionEnthalpy:
+    | { readonly value: number; readonly low: number; readonly high: number; readonly temperatureK: number }
+    | undefined;
+  /** ln value at a temperature inside the range. @throws RangeError outside it. */
+  readonly evaluate: (temperatureK: number) => number;
+  /** Half-widths, in ln value, of the 95 % limits of the curve and of a new measurement from a new source. */
+  readonly limits: (temperatureK: number) => { readonly curve: number; readonly newMeasurement: number };
+}
+
+/** Why a system has no curve. */
+export interface NoCurve {
+  readonly system: number;
+  readonly reason: string;
+}
+
+/** Outcome of fitting one system. */
+export interface SystemFit {
+  readonly robust: RobustFit;
+  readonly curves: readonly Curve[];
+  readonly noCurve?: string;
+}
+
+/** A remark on a measurement, block, source or system, as `flags.csv` lists it. */
+export interface Flag {
+  readonly scope: "measurement" | "block" | "source" | "system";
+  readonly code: string;
+  readonly severity: "blocking" | "notice";
+  /** Row of the measurement table, for scope measurement. */
+  readonly row?: number;
+  /** Position of the source, for scope measurement, block or source. */
+  readonly source?: number;
+  /** Position of the system; absent for scope source. */
+  readonly system?: number;
+  readonly suspectedCause?: string;
+  readonly causeDetail?: string;
+  readonly causeProbability?: number;
+  /** Value that would fit, in the reported unit. */
+  readonly proposedValue?: number;
+  /** What was seen, in words with figures. */
+  readonly evidence: string;
+  /** What a person should look at. */
+  readonly lookAt: string;
+}

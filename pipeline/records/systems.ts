@@ -1,0 +1,81 @@
+import { type MeasurementTable, RowState } from "./measurements.ts";
+
+/** What was dissolved in what: everything that decides which curve a measurement belongs to. */
+export interface Identity {
+  /** Key of the solute: its name in the substance tables, else its strongest identifier as given. */
+  readonly solute: string;
+  /** Name of the solid form, or `unspecified`. */
+  readonly solidForm: string;
+  /** Name of the solvent; components of a mixture joined by ` + `. */
+  readonly solvent: string;
+  /** Composition key of a mixture (mass fractions); "" for a pure solvent. */
+  readonly composition: string;
+  /** Medium (buffer, common ion, co-former); "" for none. */
+  readonly medium: string;
+  /** Molar mass of the unsolvated solute, g/mol; NaN where unknown. */
+  readonly soluteMolarMass: number;
+  /** Mean molar mass of the solvent, g/mol. */
+  readonly solventMolarMass: number;
+  /** A salt or other electrolyte in water: its own defaults for thresholds and between-source scatter. */
+  readonly aqueousSalt: boolean;
+}
+
+/** What is fitted: the natural logarithm of the mole fraction, or of the mass ratio where no molar mass is known. */
+export type FitBasis = "ln x" | "ln r";
+
+/** One solute in one solid form, one solvent composition and one medium; what one curve describes. */
+export interface System {
+  /** Position in the edition's list of systems, which is sorted by id. */
+  readonly index: number;
+  /** Readable ASCII slug + 8 hex digits of the canonical key. */
+  readonly id: string;
+  readonly key: string;
+  /** Id of the family: the same with any solid form. */
+  readonly family: string;
+  readonly identity: Identity;
+  readonly fitBasis: FitBasis;
+  /** Rows of the measurement table, ascending. */
+  readonly rows: Int32Array;
+}
+
+/** The points of one system as a fit wants them: parallel arrays, row order. Intervals and rows not fitted are left out. */
+export interface SystemPoints {
+  readonly n: number;
+  /** Row in the measurement table. */
+  readonly row: Int32Array;
+  /** T, K. */
+  readonly temperatureK: Float64Array;
+  /** Standard uncertainty of T, K. */
+  readonly temperatureU: Float64Array;
+  /** ln x or ln r. */
+  readonly lnValue: Float64Array;
+  /** Standard uncertainty of lnValue as reported or by default, temperature not included. */
+  readonly lnU: Float64Array;
+  /** Position of the source in the edition's list. */
+  readonly source: Int32Array;
+  /** Level for the material threshold: mg per mL of solution, or 1000 r where no density is known. */
+  readonly level: Float64Array;
+}
+
+/** Collects the points of a system from the column store. `omit` holds rows set aside by a ruling. */
+export function systemPoints(table: MeasurementTable, system: System, omit?: ReadonlySet<number>): SystemPoints {
+  const rows = system.rows.filter((row) => table.state[row] === RowState.point && !omit?.has(row));
+  const n = rows.length;
+  const of = (column: Float64Array): Float64Array => Float64Array.from(rows, (row) => column[row] as number);
+  const value = of(system.fitBasis === "ln x" ? table.moleFraction : table.massRatio);
+  const level = of(table.massConcentration);
+  for (let i = 0; i < n; i++) {
+    value[i] = Math.log(value[i] as number);
+    if (Number.isNaN(level[i])) level[i] = 1000 * (table.massRatio[rows[i] as number] as number);
+  }
+  return {
+    n,
+    row: rows,
+    temperatureK: of(table.temperatureK),
+    temperatureU: of(table.temperatureU),
+    lnValue: value,
+    lnU: of(table.relativeU),
+    source: Int32Array.from(rows, (row) => table.source[row] as number),
+    level,
+  };
+}
