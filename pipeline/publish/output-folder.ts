@@ -16,6 +16,7 @@ import {
 } from "node:fs";
 import { basename, dirname, join, resolve, sep } from "node:path";
 import { type Problem, problem } from "../problems/catalogue.ts";
+import type { WrittenFile } from "../records/generated/summary.ts";
 
 /** Raised when an output folder cannot be used or written; `problem` says why and how to mend it. */
 export class OutputError extends Error {
@@ -33,8 +34,8 @@ const PIECE = 1 << 20;
 export interface OutputFolder {
   /** Writes one file, piece by piece, and remembers its SHA-256. */
   readonly write: (name: string, text: Iterable<string>) => void;
-  /** SHA-256 of every file written so far, by name with forward slashes, in code-unit order. */
-  readonly checksums: () => Record<string, string>;
+  /** Every file written so far with its size and SHA-256, in code-unit order of the paths. */
+  readonly files: () => WrittenFile[];
   /** Puts the finished folder in its place; from here on readers see the new tables only. */
   readonly commit: () => void;
   /** Removes everything written; harmless after commit. */
@@ -103,7 +104,11 @@ function checkIsOurs(folder: string, collection: string): void {
 function hasOurSummary(folder: string): boolean {
   try {
     const summary = JSON.parse(readFileSync(join(folder, "summary.json"), "utf8")) as Record<string, unknown>;
-    return summary["written_by"] === "saltern";
+    return (
+      typeof summary["format"] === "number" &&
+      typeof summary["program_version"] === "string" &&
+      Array.isArray(summary["files"])
+    );
   } catch {
     return false;
   }
@@ -117,7 +122,7 @@ function hasOurSummary(folder: string): boolean {
 export function openOutputFolder(path: string, collection: string): OutputFolder {
   const folder = resolve(path);
   const { fresh, old } = siblings(folder);
-  const files = new Map<string, string>();
+  const files = new Map<string, WrittenFile>();
   let open = false;
   const guarded = <T>(action: () => T): T => {
     try {
@@ -135,8 +140,8 @@ export function openOutputFolder(path: string, collection: string): OutputFolder
   });
 
   return {
-    write: (name, text) => guarded(() => files.set(name, writeWhole(join(fresh, name), text))),
-    checksums: () => Object.fromEntries([...files].sort(([a], [b]) => (a < b ? -1 : 1))),
+    write: (name, text) => guarded(() => files.set(name, { path: name, ...writeWhole(join(fresh, name), text) })),
+    files: () => [...files.values()].sort((a, b) => (a.path < b.path ? -1 : 1)),
     commit: () =>
       guarded(() => {
         rmSync(join(fresh, CLAIM));
@@ -183,17 +188,19 @@ export function repairSwap(folder: string): void {
   else renameSync(old, folder);
 }
 
-/** Writes one file in pieces, flushes it to disk, and returns its SHA-256 in hexadecimal. */
-function writeWhole(file: string, text: Iterable<string>): string {
+/** Writes one file in pieces, flushes it to disk, and returns its size in bytes and its SHA-256 in hexadecimal. */
+function writeWhole(file: string, text: Iterable<string>): { bytes: number; sha256: string } {
   mkdirSync(dirname(file), { recursive: true });
   const hash = createHash("sha256");
   const descriptor = openSync(file, "wx");
+  let size = 0;
   try {
     let piece = "";
     const flush = () => {
       const bytes = Buffer.from(piece, "utf8");
       for (let done = 0; done < bytes.length; ) done += writeSync(descriptor, bytes, done);
       hash.update(bytes);
+      size += bytes.length;
       piece = "";
     };
     for (const part of text) {
@@ -205,5 +212,5 @@ function writeWhole(file: string, text: Iterable<string>): string {
   } finally {
     closeSync(descriptor);
   }
-  return hash.digest("hex");
+  return { bytes: size, sha256: hash.digest("hex") };
 }

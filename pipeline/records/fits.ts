@@ -7,9 +7,12 @@ export interface PooledScales {
   /** Between-source scatter: general, and for salts in water. */
   readonly between: number;
   readonly betweenAqueousSalt: number;
-  /** Degrees of freedom behind the two; 0 = the default setting was used, nothing could be estimated. */
+  /** Between-source scatter of systems at one temperature, which mostly come from compilations. */
+  readonly betweenOneTemperature: number;
+  /** Degrees of freedom behind the three; 0 = the default setting was used, nothing could be estimated. */
   readonly betweenDegreesOfFreedom: number;
   readonly betweenAqueousSaltDegreesOfFreedom: number;
+  readonly betweenOneTemperatureDegreesOfFreedom: number;
 }
 
 /** How far the sources of a system agree. */
@@ -28,6 +31,12 @@ export interface RobustFit {
   readonly deviation: Float64Array;
   /** Standard deviation of the deviation: noise, source offset and curve uncertainty together. */
   readonly deviationSd: Float64Array;
+  /** Standard deviation of the noise of each point within its source, as the fit assumed it. */
+  readonly noiseSd: Float64Array;
+  /** Between-source standard deviation the fit assumed. */
+  readonly betweenSd: number;
+  /** Temperature at which the screening curve was allowed to break, K; NaN = nowhere. */
+  readonly breakTemperatureK: number;
   /** Degrees of freedom for judging z = deviation / deviationSd. */
   readonly degreesOfFreedom: number;
   /** Sources (positions in the edition's list) whose blocks are sound: they agree and form the majority. Ascending. */

@@ -1,5 +1,6 @@
 import type { Problem } from "../problems/catalogue.ts";
 import type { SourceCard } from "./generated/source-card.ts";
+import type { DecimalMark } from "./number-text.ts";
 
 /** Every field a measurement may have. The first four are needed; the rest raise the grade or settle the basis. */
 export const FIELDS = [
@@ -43,7 +44,7 @@ export interface Reading {
   readonly own?: FieldPlaces;
 }
 
-/** A reading that did not become a measurement, or a notice about a file, with its place. */
+/** A source as it was read: its readings, those refused on the way, and where every field comes from. */
 export interface SourceTable {
   /** Name of the source, unique in the collection. */
   readonly name: string;
@@ -52,6 +53,8 @@ export interface SourceTable {
   readonly file: string;
   /** SHA-256 of the table file as it stands on disk, lower-case hexadecimal. */
   readonly sha256: string;
+  /** Decimal mark of the numbers, from the card or found in the number columns. */
+  readonly decimal: DecimalMark;
   /** Headings of the table as written. */
   readonly headings: readonly string[];
   readonly places: FieldPlaces;
@@ -78,17 +81,12 @@ export interface RefusedSource {
   readonly problem: Problem;
 }
 
-/** Text of a field for one reading: the reading's own place first, then the source's; "" where it was not reported. */
-export function fieldText(places: FieldPlaces, reading: Reading, field: string): string {
-  const place = reading.own?.[field] ?? places[field];
-  if (place === undefined) return "";
-  return place.kind === "constant" ? place.text : (reading.cells[place.index] ?? "");
-}
-
-/** Unit text of a field for one reading, from the card or from the unit column; "" where none was stated. */
-export function fieldUnit(places: FieldPlaces, reading: Reading, field: string): string {
-  const place = reading.own?.[field] ?? places[field];
-  if (place === undefined) return "";
-  if (place.kind === "column" && place.unitIndex !== undefined) return reading.cells[place.unitIndex] ?? "";
-  return place.unit ?? "";
+/** One line of a table of substances, solid forms, property values or rulings, as text. */
+export interface TableRow {
+  /** File for messages: relative to the collection, or to the program's own folder of properties. */
+  readonly file: string;
+  /** First physical line, 1-based. */
+  readonly line: number;
+  /** Trimmed text of every column the table may have; "" where the table leaves it out. */
+  readonly values: Readonly<Record<string, string>>;
 }

@@ -1,0 +1,116 @@
+import { fitEdition } from "./fit/edition-fits.ts";
+import { rowResults } from "./fit/row-results.ts";
+import { gradeEdition } from "./grade/edition-grades.ts";
+import { groupIntoSystems } from "./group/systems.ts";
+import { createIdentityRegister, type IdentityRegister, identifySource } from "./identify/source.ts";
+import { indexSubstances, massFromSmiles } from "./identify/substance-tables.ts";
+import { usedSubstances } from "./identify/used-substances.ts";
+import { type Normalised, normaliseEdition } from "./normalise/edition.ts";
+import type { Problem } from "./problems/catalogue.ts";
+import type { SubstanceIndex } from "./properties/substances.ts";
+import { openAccounts } from "./read/accounts.ts";
+import type { Collection } from "./read/collection.ts";
+import type { Edition, SourceAccount } from "./records/edition.ts";
+import { settingsInForce } from "./records/settings.ts";
+import { materialThreshold } from "./screen/material-threshold.ts";
+import { screenEdition } from "./screen/screen-edition.ts";
+
+/** An edition with what `check` needs to judge new rows against it. */
+export interface Curated {
+  readonly edition: Edition;
+  readonly index: SubstanceIndex;
+  readonly register: IdentityRegister;
+  readonly normalised: Normalised;
+}
+
+/** Told before each stage starts, with its name; for progress and for timing. */
+export type OnStage = (stage: string) => void;
+
+/**
+ * The map: everything that happens to a collection between reading and writing, in order. Each stage takes records and
+ * gives records; none of them touches a file, a clock or a terminal.
+ */
+export async function curate(
+  collection: Collection,
+  programVersion: string,
+  onStage: OnStage = () => {},
+): Promise<Curated> {
+  const settings = settingsInForce(collection.card.settings);
+
+  onStage("identify");
+  const { index, notices } = indexSubstances(collection.program, collection.own);
+  const smilesMass = await massFromSmiles(collection.sources);
+  const register = createIdentityRegister();
+  const identified = collection.sources.map((source) => identifySource(source, index, smilesMass, register));
+
+  onStage("normalise");
+  const accounts = openAccounts(collection);
+  const positions = collection.sources.map(({ name }) => accounts.findIndex((account) => account.name === name));
+  const normalised = normaliseEdition(identified, positions, register.identities, settings);
+  const { table } = normalised;
+
+  onStage("group");
+  const systems = groupIntoSystems(table, register.identities);
+  const liquors = systems.map(normalised.liquorOf);
+
+  onStage("fit");
+  const { fits, scales } = fitEdition(table, systems, {
+    sourceCount: accounts.length,
+    laboratories: accounts.map(({ card }) => card?.laboratory ?? ""),
+    meltingPointK: ({ index: i }) => liquors[i]?.formMeltingPointK ?? Number.NaN,
+    liquidRangeK: ({ index: i }) => [
+      liquors[i]?.solventFreezingPointK ?? Number.NaN,
+      liquors[i]?.solventBoilingPointK ?? Number.NaN,
+    ],
+    threshold: ({ identity }, level, lnU) => materialThreshold(level, lnU, identity.aqueousSalt ? "aqueous salt" : "general", settings),
+    settings,
+  });
+
+  onStage("screen");
+  const flags = screenEdition({ table, systems, fits, scales, sources: accounts, liquors, settings, register });
+
+  onStage("grade");
+  const refused = [
+    ...collection.refusedSources.map(({ name, problem }) => ({
+      ...problem,
+      place: { ...problem.place, source: name },
+    })),
+    ...collection.sources.flatMap((source) => source.refused),
+    ...identified.flatMap((source) => source.refused),
+    ...normalised.refused,
+  ].sort(byPlace);
+  const refusedOf = new Map<string, number>();
+  for (const { place } of refused) refusedOf.set(place.source ?? "", (refusedOf.get(place.source ?? "") ?? 0) + 1);
+  const sources = accounts.map((account): SourceAccount => {
+    const lost = refusedOf.get(account.name) ?? 0;
+    return { ...account, accepted: account.readings - lost, refused: lost };
+  });
+  const edition: Edition = {
+    programVersion,
+    collection: {
+      name: collection.card.name,
+      title: collection.card.title ?? collection.card.name,
+      steward: collection.card.steward ?? "",
+    },
+    settings,
+    sources,
+    substances: usedSubstances(systems, register),
+    table,
+    systems,
+    fits,
+    scales,
+    flags,
+    refused,
+    notices: [...collection.notices, ...notices, ...collection.sources.flatMap((source) => source.notices)],
+    grades: gradeEdition(table, systems, fits, flags, sources),
+    rowResults: rowResults(fits, table.count),
+    liquors,
+  };
+  return { edition, index, register, normalised };
+}
+
+/** Order of refused readings: by source, then line, then column, in code units. */
+function byPlace({ place: a }: Problem, { place: b }: Problem): number {
+  const text = (x = "", y = "") => (x < y ? -1 : x > y ? 1 : 0);
+  return text(a.source, b.source) || (a.line ?? 0) - (b.line ?? 0) || text(a.column, b.column);
+}

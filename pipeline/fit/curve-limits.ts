@@ -1,0 +1,71 @@
+import type { Candidate, CommonFit, LinearFit } from "./candidate.ts";
+import { curveVariances, type Variance } from "./curve-variances.ts";
+import { limitFactor } from "./limit-factor.ts";
+import type { CurveContext, FittedModels } from "./system-models.ts";
+
+/** 95 % limits of a curve as half-widths about the published curve. */
+export interface CurveLimits {
+  /** In ln value: of the curve, and of a new measurement from a new source. */
+  readonly halfWidths: (temperatureK: number) => { readonly curve: number; readonly newMeasurement: number };
+  /** In d ln value/dT, 1/K. */
+  readonly slopeHalfWidth: (temperatureK: number) => number;
+}
+
+/**
+ * Limits of a published curve, from the largest admissible model whatever model was chosen.
+ *
+ * The half-width is t sqrt(V + d^2): V and the degrees of freedom of t from {@link curveVariances}, d the distance between
+ * the published curve and that model, which stands for the bias of the choice.
+ */
+export function curveLimits(fitted: FittedModels, chosen: Candidate, { scales }: CurveContext): CurveLimits {
+  const { points, common, scale, largest, betweenDegreesOfFreedom } = fitted;
+  const variances = curveVariances(largest, points.centreK, {
+    withinDegreesOfFreedom: scale.degreesOfFreedom,
+    betweenVariance: scale.betweenVariance,
+    betweenDegreesOfFreedom,
+    newSourceVariance: scale.varianceFactor * newSourceVariance(common, scales.within),
+    oneSource: points.sources.length === 1,
+  });
+  const largestValue = lnValueOf(largest, points.centreK);
+  const half = (variance: Variance, bias: number): number =>
+    limitFactor(variance.degreesOfFreedom) * Math.sqrt(variance.value + bias);
+  return {
+    halfWidths: (T) => {
+      const bias = (chosen.lnValue(T) - largestValue(T)) ** 2;
+      return {
+        curve: half(variances.ofCurve(T), bias),
+        newMeasurement: half(variances.ofNewMeasurement(T), bias),
+      };
+    },
+    slopeHalfWidth: (T) => half(variances.ofSlope(T), 0),
+  };
+}
+
+function lnValueOf({ model, coefficients }: LinearFit, centreK: number): (temperatureK: number) => number {
+  const row = new Float64Array(model.parameterCount);
+  return (T) => {
+    model.writeDesignRow(row, 0, T, centreK);
+    let sum = 0;
+    for (let j = 0; j < row.length; j++) sum += (row[j] as number) * (coefficients[j] as number);
+    return sum;
+  };
+}
+
+/**
+ * Expected variance of a measurement by a source not yet seen: the mean over the edition's sources, raised as those of
+ * this system are (a value near a detection limit scatters more for everybody).
+ */
+function newSourceVariance({ start, within, points }: CommonFit, pooledWithin: Float64Array): number {
+  let edition = 0;
+  for (const sd of pooledWithin) edition += (sd * sd) / pooledWithin.length;
+  let shape = 0;
+  for (let i = 0; i < points.n; i++) {
+    const pooled = pooledWithin[points.sources[points.block[i] as number] as number] as number;
+    shape += (within[points.block[i] as number] as number) ** 2 / (pooled * pooled) / points.n;
+  }
+  const raised = edition * shape;
+  if (raised > 0 && raised < Number.POSITIVE_INFINITY) return raised;
+  let mean = 0;
+  for (const variance of start.variance) mean += variance / points.n;
+  return mean;
+}

@@ -1,0 +1,76 @@
+import { quadraticForm } from "../curves/coefficient-transformation.ts";
+import type { LinearFit } from "./candidate.ts";
+import { withinPart } from "./generalised-least-squares.ts";
+
+/** Where the variance of a limit comes from. */
+export interface LimitScales {
+  /** Degrees of freedom of the scatter within sources. */
+  readonly withinDegreesOfFreedom: number;
+  /** tau^2 and its degrees of freedom; 0 = the default setting, taken as given. */
+  readonly betweenVariance: number;
+  readonly betweenDegreesOfFreedom: number;
+  /** Variance of a single measurement within a source whose noise is not known. */
+  readonly newSourceVariance: number;
+  /** True if only one source was fitted: its offset is then not in the covariance of the coefficients. */
+  readonly oneSource: boolean;
+}
+
+/** A variance and its effective degrees of freedom. */
+export interface Variance {
+  readonly value: number;
+  readonly degreesOfFreedom: number;
+}
+
+/**
+ * Variances of linear functions of a fitted curve, split by origin: scatter within sources and offsets between them.
+ *
+ * The degrees of freedom are those of Satterthwaite for the sum of the two parts.
+ * @see Satterthwaite, Biometrics Bull. 2 (1946) 110-114.
+ */
+export interface CurveVariances {
+  /** Of ln value at T (K). */
+  readonly ofCurve: (temperatureK: number) => Variance;
+  /** Of ln value of a new measurement at T (K) by a new source. */
+  readonly ofNewMeasurement: (temperatureK: number) => Variance;
+  /** Of d ln value/dT at T (K). */
+  readonly ofSlope: (temperatureK: number) => Variance;
+}
+
+/**
+ * @param largest fit of the largest admissible model: the limits rest on it whatever model is published
+ * @param centreK T0 of its basis, K
+ */
+export function curveVariances(largest: LinearFit, centreK: number, scales: LimitScales): CurveVariances {
+  const { model, covariance, columns, K } = largest;
+  const within = withinPart(K, columns, covariance);
+  const row = new Float64Array(model.parameterCount);
+  const offset = scales.oneSource ? scales.betweenVariance : 0;
+  const parts = (): { within: number; between: number } => {
+    const ofScatter = quadraticForm(within, row);
+    return { within: ofScatter, between: Math.max(0, quadraticForm(covariance, row) - ofScatter) };
+  };
+  return {
+    ofCurve: (T) => {
+      model.writeDesignRow(row, 0, T, centreK);
+      const { within: w, between: b } = parts();
+      return sumOfParts(w, b + offset, scales);
+    },
+    ofNewMeasurement: (T) => {
+      model.writeDesignRow(row, 0, T, centreK);
+      const { within: w, between: b } = parts();
+      return sumOfParts(w + scales.newSourceVariance, b + offset + scales.betweenVariance, scales);
+    },
+    ofSlope: (T) => {
+      model.writeSlopeRow(row, 0, T, centreK);
+      const { within: w, between: b } = parts();
+      return sumOfParts(w, b, scales);
+    },
+  };
+}
+
+function sumOfParts(within: number, between: number, scales: LimitScales): Variance {
+  const value = within + between;
+  const ofWithin = within ** 2 / scales.withinDegreesOfFreedom;
+  const ofBetween = scales.betweenDegreesOfFreedom > 0 ? between ** 2 / scales.betweenDegreesOfFreedom : 0;
+  return { value, degreesOfFreedom: value ** 2 / (ofWithin + ofBetween) };
+}

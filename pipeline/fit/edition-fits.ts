@@ -1,0 +1,62 @@
+import type { Curve, PooledScales, SystemFit } from "../records/fits.ts";
+import type { MeasurementTable } from "../records/measurements.ts";
+import type { Settings } from "../records/settings.ts";
+import { type System, systemPoints } from "../records/systems.ts";
+import { isCurve, publishedCurve } from "./published-curve.ts";
+import { robustFits } from "./robust-fit.ts";
+
+/** What fitting an edition needs to know besides its rows. */
+export interface FitContext {
+  /** Number of sources in the edition's list. */
+  readonly sourceCount: number;
+  /** Laboratory of each source by position; "" where not stated. */
+  readonly laboratories: readonly string[];
+  /** Melting point of a system's solid form, K; NaN where unknown. */
+  readonly meltingPointK: (system: System) => number;
+  /** Liquid range of a system's solvent, K; NaN where unknown. Points outside are shown, never fitted. */
+  readonly liquidRangeK: (system: System) => readonly [freezing: number, boiling: number];
+  /** Smallest |deviation| in ln value worth a person's time, by level and uncertainty. */
+  readonly threshold: (system: System, level: number, lnU: number) => number;
+  readonly settings: Settings;
+}
+
+/** Every system's robust fit and published curve, with the scales pooled over the edition. */
+export interface EditionFits {
+  readonly fits: readonly SystemFit[];
+  readonly scales: PooledScales;
+}
+
+/** 1 for points outside the liquid range of the solvent. */
+function outside(temperatureK: Float64Array, [freezing, boiling]: readonly [number, number]): Uint8Array {
+  return Uint8Array.from(temperatureK, (t) => (t < freezing || t > boiling ? 1 : 0));
+}
+
+/** Fits all systems: robust screening fits with pooled scales first, then the published curve of each. */
+export function fitEdition(table: MeasurementTable, systems: readonly System[], context: FitContext): EditionFits {
+  const { settings, laboratories, sourceCount } = context;
+  const points = systems.map((system) => systemPoints(table, system));
+  const perSystem = systems.map((system, i) => ({
+    aqueousSalt: system.identity.aqueousSalt,
+    water: system.identity.solvent === "water",
+    excluded: outside(points[i]?.temperatureK ?? new Float64Array(), context.liquidRangeK(system)),
+  }));
+  const between = settings.between_laboratory_percent;
+  const { fits: robust, scales } = robustFits(points, perSystem, sourceCount, {
+    defaults: { between: between.general / 100, betweenAqueousSalt: between.aqueous_salts / 100 },
+    threshold: (system, point) =>
+      context.threshold(
+        systems[system] as System,
+        points[system]?.level[point] as number,
+        points[system]?.lnU[point] as number,
+      ),
+  });
+  const curveContext = { scales, laboratories, weighting: settings.fit_weighting };
+  const fits = systems.map((system, i): SystemFit => {
+    const fit = robust[i] as (typeof robust)[number];
+    const subject = { system, branch: 1, meltingPointK: context.meltingPointK(system) };
+    const outcome = publishedCurve(fit, subject, curveContext);
+    const curves: Curve[] = isCurve(outcome) ? [outcome] : [];
+    return isCurve(outcome) ? { robust: fit, curves } : { robust: fit, curves, noCurve: outcome.reason };
+  });
+  return { fits, scales };
+}

@@ -1,0 +1,139 @@
+import { SCREENING_STRIDE, setScreeningPrior, writeScreeningBasis } from "../curves/screening-basis.ts";
+import { createGroupedModel, type GroupedModel, type GroupedRows } from "../numerics/grouped-model.ts";
+import { medianInPlace } from "../numerics/order-statistics.ts";
+import type { SystemPoints } from "../records/systems.ts";
+
+/** One system laid out for the robust fit: points ordered by source, sources numbered 0 to `groups` - 1. */
+export interface RobustWorkspace {
+  readonly rows: GroupedRows;
+  /** Position in the system's points of each row here. */
+  readonly order: Int32Array;
+  readonly temperatureK: Float64Array;
+  /** |deviation| in ln value from which a point may be left out. */
+  readonly tolerance: Float64Array;
+  /** 1 = may enter the fit at all. */
+  readonly usable: Uint8Array;
+  readonly use: Uint8Array;
+  readonly deviation: Float64Array;
+  readonly deviationVariance: Float64Array;
+  readonly scratch: Float64Array;
+  /** Position in the edition's list of the source behind each group. */
+  readonly sourceOf: Int32Array;
+  /** First row of each group, and n behind the last. */
+  readonly groupStart: Int32Array;
+  /** 1 = the group belongs to the sound majority. */
+  readonly sound: Uint8Array;
+  readonly location: Float64Array;
+  readonly locationVariance: Float64Array;
+  groups: number;
+  centreK: number;
+  /** Subtracted from ln value: their median. */
+  shift: number;
+  breakK: number;
+  readonly smooth: GroupedModel;
+  readonly broken: GroupedModel;
+  readonly groupOfSource: Int32Array;
+}
+
+/** A workspace for systems of up to `capacity` points from `nSources` sources. */
+export function createRobustWorkspace(capacity: number, nSources: number): RobustWorkspace {
+  const reals = () => new Float64Array(capacity);
+  const groups = Math.max(1, Math.min(capacity, nSources)) + 1;
+  const [smooth, broken] = [createGroupedModel(3, groups), createGroupedModel(4, groups)];
+  setScreeningPrior(smooth);
+  setScreeningPrior(broken);
+  return {
+    rows: {
+      n: 0,
+      design: new Float64Array(capacity * SCREENING_STRIDE),
+      stride: SCREENING_STRIDE,
+      response: reals(),
+      variance: reals(),
+      group: new Int32Array(capacity),
+    },
+    order: new Int32Array(capacity),
+    temperatureK: reals(),
+    tolerance: reals(),
+    usable: new Uint8Array(capacity),
+    use: new Uint8Array(capacity),
+    deviation: reals(),
+    deviationVariance: reals(),
+    scratch: reals(),
+    sourceOf: new Int32Array(groups),
+    groupStart: new Int32Array(groups + 1),
+    sound: new Uint8Array(groups),
+    location: new Float64Array(groups),
+    locationVariance: new Float64Array(groups),
+    groups: 0,
+    centreK: 298.15,
+    shift: 0,
+    breakK: Number.NaN,
+    smooth,
+    broken,
+    groupOfSource: new Int32Array(nSources).fill(-1),
+  };
+}
+
+/** The model in use: with a break where the system has one. */
+export function modelOf(ws: RobustWorkspace): GroupedModel {
+  return Number.isNaN(ws.breakK) ? ws.smooth : ws.broken;
+}
+
+/**
+ * Lays out one system. Variances, tolerances and the basis are filled by the caller's next steps; `usable` says which
+ * points have finite numbers and are not excluded by `excluded`.
+ */
+export function loadSystem(ws: RobustWorkspace, points: SystemPoints, excluded: Uint8Array | undefined): void {
+  const { rows, order, sourceOf, groupStart, groupOfSource, scratch, usable } = ws;
+  const n = points.n;
+  rows.n = n;
+  ws.groups = 0;
+  for (let i = 0; i < n; i++) {
+    const source = points.source[i]!;
+    if (groupOfSource[source] === -1) {
+      groupOfSource[source] = ws.groups;
+      sourceOf[ws.groups++] = source;
+    }
+  }
+  groupStart.fill(0, 0, ws.groups + 1);
+  for (let i = 0; i < n; i++) groupStart[groupOfSource[points.source[i]!]! + 1]!++;
+  for (let g = 0; g < ws.groups; g++) groupStart[g + 1]! += groupStart[g]!;
+  for (let i = 0; i < n; i++) {
+    const g = groupOfSource[points.source[i]!]!;
+    order[groupStart[g]!++] = i;
+  }
+  for (let g = ws.groups; g > 0; g--) groupStart[g] = groupStart[g - 1]!;
+  groupStart[0] = 0;
+  let finite = 0;
+  let sumT = 0;
+  for (let g = 0; g < ws.groups; g++) {
+    groupOfSource[sourceOf[g]!] = -1;
+    for (let k = groupStart[g]!; k < groupStart[g + 1]!; k++) {
+      const i = order[k]!;
+      const T = points.temperatureK[i]!;
+      const y = points.lnValue[i]!;
+      rows.group[k] = g;
+      ws.temperatureK[k] = T;
+      rows.response[k] = y;
+      const ok = T > 0 && T < 1e5 && Math.abs(y) < 1e3 && excluded?.[i] !== 1;
+      usable[k] = ok ? 1 : 0;
+      if (!ok) continue;
+      scratch[finite++] = y;
+      sumT += T;
+    }
+  }
+  ws.centreK = finite > 0 ? sumT / finite : 298.15;
+  ws.shift = finite > 0 ? medianInPlace(scratch, finite) : 0;
+  for (let k = 0; k < n; k++) rows.response[k]! -= ws.shift;
+}
+
+/** Fills the basis for the system's temperatures, with the break at `breakK` (NaN = none). */
+export function fillBasis(ws: RobustWorkspace, breakK: number): void {
+  ws.breakK = breakK;
+  const { design } = ws.rows;
+  for (let k = 0; k < ws.rows.n; k++) {
+    const T = ws.temperatureK[k]!;
+    if (T > 0 && T < 1e5) writeScreeningBasis(T, ws.centreK, breakK, design, k * SCREENING_STRIDE);
+    else design.fill(0, k * SCREENING_STRIDE, (k + 1) * SCREENING_STRIDE);
+  }
+}

@@ -1,0 +1,144 @@
+import type { Substance, SubstanceIndex } from "../properties/substances.ts";
+import { type CellFault, cellGetter, readingProblem } from "../records/cells.ts";
+import type { Identified, IdentifiedSource } from "../records/identified.ts";
+import type { Reading, SourceTable } from "../records/readings.ts";
+import type { Identity } from "../records/systems.ts";
+import { type ResolvedForm, resolveForm } from "./solid-form.ts";
+import { type KnownSolute, resolveSolute, type SmilesMass } from "./solute.ts";
+import { resolveSolvent } from "./solvent.ts";
+
+/** Fields that decide which substance, form, solvent and medium a reading is about. */
+const IDENTITY_FIELDS = [
+  ...["solute", "cas", "inchikey", "smiles", "formula", "molar_mass", "solid_form", "stereo"],
+  ...["solvent", "composition", "solvent_water_wt_percent", "medium"],
+];
+
+/** Identities met so far over all sources of an edition, each once, in order of first use. */
+export interface IdentityRegister {
+  readonly identities: Identity[];
+  readonly solutes: Map<string, KnownSolute>;
+  readonly solvents: Map<string, Substance>;
+  readonly positions: Map<string, number>;
+  /** Names and identifiers that stand for different substances, with the place of first use. */
+  readonly contradictions: { readonly source: string; readonly line: number; readonly text: string }[];
+}
+
+/** An empty register. */
+export function createIdentityRegister(): IdentityRegister {
+  return { identities: [], solutes: new Map(), solvents: new Map(), positions: new Map(), contradictions: [] };
+}
+
+/** Position of an identity in the register, added on first use. */
+function positionOf(register: IdentityRegister, identity: Identity): number {
+  const { solute, solidForm, solvent, composition, medium } = identity;
+  const key = JSON.stringify([solute, solidForm, solvent, composition, medium]);
+  const known = register.positions.get(key);
+  if (known !== undefined) {
+    // A molar mass stated by a later source serves the rows of the earlier ones too.
+    const before = register.identities[known] as Identity;
+    if (Number.isNaN(before.soluteMolarMass)) register.identities[known] = identity;
+    return known;
+  }
+  register.positions.set(key, register.identities.length);
+  return register.identities.push(identity) - 1;
+}
+
+/** Medium with stereochemistry: both keep systems apart. Blanks are folded, case is kept. */
+function mediumOf(medium: string, stereo: string): string {
+  const fold = (text: string) => text.trim().replace(/\s+/g, " ");
+  return [fold(medium), fold(stereo)].filter((part) => part !== "").join("; ");
+}
+
+/** Joins what was found about solute, form and solvent into one identity. */
+function identify(
+  register: IdentityRegister,
+  solute: KnownSolute,
+  form: ResolvedForm,
+  solvent: Substance,
+  medium: string,
+): Identified {
+  const identity: Identity = {
+    solute: form.solute,
+    solidForm: form.name,
+    solvent: solvent.name,
+    composition: "",
+    medium,
+    soluteMolarMass: form.unsolvatedMolarMass,
+    solventMolarMass: solvent.molarMass ?? Number.NaN,
+    aqueousSalt: solvent.name === "water" && (form.substance?.electrolyte ?? false),
+  };
+  if (!register.solutes.has(identity.solute))
+    register.solutes.set(identity.solute, { ...solute, key: identity.solute });
+  register.solvents.set(solvent.name, solvent);
+  return {
+    index: positionOf(register, identity),
+    solute: form.substance,
+    solvent,
+    form: form.form,
+    crystalMassFactor: form.crystalMassFactor,
+    solvated: form.solvated,
+    assumptions: form.assumptions,
+  };
+}
+
+/**
+ * Identifies every reading of a source: solute, solid form, solvent, medium. Rows that spell the same are resolved once.
+ * A reading that cannot be identified is refused with its place; nothing is guessed from a near spelling.
+ */
+export function identifySource(
+  source: SourceTable,
+  index: SubstanceIndex,
+  smilesMass: SmilesMass,
+  register: IdentityRegister,
+): IdentifiedSource {
+  const get = Object.fromEntries(IDENTITY_FIELDS.map((field) => [field, cellGetter(source.places, field)]));
+  const text = (field: string, reading: Reading): string => (get[field] as (reading: Reading) => string)(reading);
+  const varying = IDENTITY_FIELDS.filter(
+    (field) => source.places[field]?.kind === "column" || source.readings.some((reading) => reading.own?.[field]),
+  ).map((field) => get[field] as (reading: Reading) => string);
+  const resolve = (reading: Reading): Identified | CellFault => {
+    const cells = (field: string) => text(field, reading);
+    const solute = resolveSolute(
+      {
+        solute: cells("solute"),
+        cas: cells("cas"),
+        inchikey: cells("inchikey"),
+        smiles: cells("smiles"),
+        formula: cells("formula"),
+        molarMass: cells("molar_mass"),
+      },
+      index,
+      smilesMass,
+    );
+    if ("code" in solute) return solute;
+    const solvent = resolveSolvent(cells("solvent"), cells("composition"), cells("solvent_water_wt_percent"), index);
+    if ("code" in solvent) return solvent;
+    const form = resolveForm(solute, cells("solid_form"), solvent, index);
+    if ("code" in form) return form;
+    if (form.solute === solvent.name) {
+      return { field: "solvent", code: "solvent-is-solute", found: `${form.solute} is both solute and solvent` };
+    }
+    if (solute.contradiction !== undefined) {
+      register.contradictions.push({ source: source.name, line: reading.line, text: solute.contradiction });
+    }
+    return identify(register, solute, form, solvent, mediumOf(cells("medium"), cells("stereo")));
+  };
+
+  const resolved = new Map<string, Identified | CellFault>();
+  const [readings, who, refused]: [Reading[], Identified[], IdentifiedSource["refused"][number][]] = [[], [], []];
+  for (const reading of source.readings) {
+    let key = "";
+    for (const cell of varying) key += `${cell(reading)}\u0000`;
+    let found = resolved.get(key);
+    if (found === undefined) {
+      found = resolve(reading);
+      resolved.set(key, found);
+    }
+    if ("code" in found) refused.push(readingProblem(source, reading, found));
+    else {
+      readings.push(reading);
+      who.push(found);
+    }
+  }
+  return { source, readings, who, refused };
+}

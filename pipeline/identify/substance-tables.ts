@@ -1,0 +1,50 @@
+import { type Problem, problem } from "../problems/catalogue.ts";
+import { loadSmilesReader } from "../properties/smiles-formula.ts";
+import { substanceIndex } from "../properties/substance-index.ts";
+import type { SubstanceIndex } from "../properties/substances.ts";
+import type { SourceTable, TableRow } from "../records/readings.ts";
+import type { SmilesMass } from "./solute.ts";
+
+/** Tables of substances as they were read: the program's own, or a group's. */
+export interface SubstanceTables {
+  readonly substances: readonly TableRow[];
+  readonly solidForms: readonly TableRow[];
+  readonly propertyValues: readonly TableRow[];
+}
+
+/** The index of all substances, a group's own tables laid over the program's, and what is wrong with the group's. */
+export function indexSubstances(
+  program: SubstanceTables,
+  own: SubstanceTables,
+): { readonly index: SubstanceIndex; readonly notices: readonly Problem[] } {
+  const cells = (rows: readonly TableRow[]) => rows.map(({ values }) => values);
+  const layer = (origin: string, { substances, solidForms, propertyValues }: SubstanceTables) => ({
+    origin,
+    substances: cells(substances),
+    solidForms: cells(solidForms),
+    propertyValues: cells(propertyValues),
+  });
+  const index = substanceIndex([layer("program", program), layer("collection", own)]);
+  const tables = { substances: own.substances, solid_forms: own.solidForms, "property-values": own.propertyValues };
+  const notices = index.faults
+    .filter(({ origin }) => origin === "collection")
+    .map(({ table, row, column, message }) => {
+      const at = tables[table][row];
+      return problem(
+        "substance-left-out",
+        { file: at?.file ?? table, line: at?.line ?? 1, column },
+        { found: message },
+      );
+    });
+  return { index, notices };
+}
+
+/** Molar masses from SMILES; the reader behind it is loaded only where a source has structures. */
+export async function massFromSmiles(sources: readonly SourceTable[]): Promise<SmilesMass> {
+  if (!sources.some(({ places }) => places["smiles"] !== undefined)) return () => undefined;
+  const read = await loadSmilesReader();
+  return (smiles) => {
+    const found = read(smiles);
+    return found.ok ? found.molarMass.value : undefined;
+  };
+}

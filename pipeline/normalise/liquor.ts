@@ -1,0 +1,98 @@
+import type { Needs, Quantity } from "../bases/needs.ts";
+import { apparentDensityFromSolid, massConcentration, type SolutionDensity } from "../bases/solution-density.ts";
+import { liquidDensity } from "../properties/liquid-density.ts";
+import { solutionDensityModel } from "../properties/solution-density-model.ts";
+import type { Substance } from "../properties/substances.ts";
+import type { Identified } from "../records/identified.ts";
+import type { Identity } from "../records/systems.ts";
+
+/** Relative uncertainty of the density of a solution of an electrolyte without coefficients (common practice). */
+const ELECTROLYTE_U = 0.04;
+/** Solvent is dispensed cold: its volumes are at this temperature unless stated, K. */
+const DISPENSED_K = 293.15;
+/** Relative uncertainty of a measured density of a solution that states none (common practice). */
+const MEASURED_DENSITY_U = 0.001;
+const WATER_MOLAR_MASS_U = 0.0005;
+
+/** Properties of one liquor, kept for all rows of its system; the densities follow the conditions set last. */
+export interface LiquorModel {
+  readonly needs: Needs;
+  /**
+   * Sets the densities for one row: temperature of the solution; temperature of the stated volume and measured density
+   * of the solution (kg/m3) where given, else NaN.
+   */
+  readonly setConditions: (temperatureK: number, volumeTemperatureK: number, measuredDensity: number) => void;
+  /** Mass concentration, g/L solution, at mass ratio r under the conditions set; NaN where no density is known. */
+  readonly massConcentration: (massRatio: number) => number;
+  /** Which density is not known under the conditions set, in words; undefined where none is missing. */
+  readonly missingDensity: () => string | undefined;
+}
+
+/** Density model of the solution at a temperature: published, else additive volumes; undefined without a solvent density. */
+function solutionDensity(
+  solute: Substance | undefined,
+  solvent: Substance,
+  apparent: Quantity,
+  temperatureK: number,
+): SolutionDensity | undefined {
+  const published = solute && solutionDensityModel(solute, solvent, temperatureK);
+  const pure = liquidDensity(solvent, temperatureK);
+  if (published === undefined) {
+    if (pure === undefined) return undefined;
+    const electrolyte = (solute?.electrolyte ?? false) && solvent.name === "water";
+    return {
+      kind: "additive volumes",
+      apparentSoluteDensity: apparent,
+      solventDensity: pure,
+      ...(electrolyte ? { modelRelativeUncertainty: ELECTROLYTE_U } : {}),
+    };
+  }
+  return published;
+}
+
+/** Largest number of temperatures whose densities are kept. */
+const KEPT = 4096;
+
+/**
+ * The liquor of one identity. Densities are evaluated once per distinct temperature; nothing is extrapolated beyond the
+ * range of a correlation.
+ */
+export function liquorModel(who: Identified, identity: Identity): LiquorModel {
+  const { solute, solvent, form, crystalMassFactor } = who;
+  const apparent = apparentDensityFromSolid(solute?.solidDensity);
+  const known = new Map<number, SolutionDensity | undefined>();
+  const quantity = (value: number, relative: number, reference?: string): Quantity | undefined =>
+    Number.isNaN(value) ? undefined : { value, standardUncertainty: relative * value, reference };
+  const solventAt20 = liquidDensity(solvent, DISPENSED_K);
+  const solventMass = solvent.molarMass ?? identity.solventMolarMass;
+  const needs: { -readonly [K in keyof Needs]: Needs[K] } = {
+    soluteMolarMass: quantity(identity.soluteMolarMass, (solute?.molarMassUncertainty ?? 0) / identity.soluteMolarMass),
+    crystalMolarMass: quantity(crystalMassFactor * identity.soluteMolarMass, 0, form?.reference),
+    solventMolarMass: quantity(solventMass, (solvent.molarMassUncertainty ?? WATER_MOLAR_MASS_U) / solventMass),
+    solventDensityAt20C: solventAt20,
+  };
+  let conditions = "";
+  const modelAt = (temperatureK: number) => {
+    if (known.has(temperatureK)) return known.get(temperatureK);
+    const model = solutionDensity(solute, solvent, apparent, temperatureK);
+    if (known.size < KEPT) known.set(temperatureK, model);
+    return model;
+  };
+  return {
+    needs,
+    setConditions: (temperatureK, volumeTemperatureK, measuredDensity) => {
+      const volumeAt = Number.isNaN(volumeTemperatureK) ? temperatureK : volumeTemperatureK;
+      conditions = `at ${(volumeAt - 273.15).toFixed(1)} °C`;
+      needs.solventDensityAtVolumeTemperature = Number.isNaN(volumeTemperatureK)
+        ? undefined
+        : liquidDensity(solvent, volumeTemperatureK);
+      needs.solutionDensity = Number.isNaN(measuredDensity)
+        ? modelAt(volumeAt)
+        : { kind: "measured", density: quantity(measuredDensity, MEASURED_DENSITY_U, "measured") as Quantity };
+    },
+    massConcentration: (massRatio) =>
+      needs.solutionDensity === undefined ? Number.NaN : massConcentration(needs.solutionDensity, massRatio),
+    missingDensity: () =>
+      needs.solutionDensity === undefined ? `no density of ${solvent.name} is known ${conditions}` : undefined,
+  };
+}

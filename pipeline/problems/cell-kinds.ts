@@ -1,0 +1,187 @@
+import type { Kind } from "./kind.ts";
+
+/** Problems of single cells and of what they say together. Each stops one reading unless it says otherwise. */
+export const cellKinds = {
+  "missing-solute": {
+    stops: "reading",
+    meaning: "The row names no solute.",
+    expected: "a name, registry number, structure or formula of the solute",
+    mend: "fill the cell, or state the solute as a constant in the card",
+  },
+  "missing-solvent": {
+    stops: "reading",
+    meaning: "The row names no solvent.",
+    expected: "a name of the solvent",
+    mend: "fill the cell, or state the solvent as a constant in the card",
+  },
+  "missing-temperature": {
+    stops: "reading",
+    meaning: "The row has no temperature.",
+    expected: "the temperature of the measurement",
+    mend: "fill the cell, or state the temperature as a constant in the card",
+  },
+  "not-a-number": {
+    stops: "reading",
+    meaning: "The cell is not a number.",
+    expected: "a number such as 12.5, -3 or 1.2e-4, in digits only",
+    mend: "correct the cell; remarks and units belong in columns of their own; a mark for no value is listed under missing in the card",
+  },
+  "number-out-of-range": {
+    stops: "reading",
+    meaning: "The number is too large or too small to be stored.",
+    expected: "a number between 1e-307 and 1e308 in magnitude",
+    mend: "check the exponent",
+  },
+  "ambiguous-number": {
+    stops: "reading",
+    meaning:
+      "The number can be read in more than one way, because a comma or point may separate thousands or decimals.",
+    expected: "no thousands separators, and one decimal mark throughout the source",
+    mend: 'write the number without thousands separators, or state "decimal" in the card',
+  },
+  "value-not-positive": {
+    stops: "reading",
+    meaning: "A solubility of zero or below cannot be a measured value.",
+    expected: "a value above 0",
+    mend: "correct the cell; for a value below the limit of detection write it as a limit, such as <0.05",
+  },
+  "fraction-at-or-above-one": {
+    stops: "reading",
+    meaning: "A fraction of one (100 %) or more leaves no room for the solvent.",
+    expected: "a mass or mole fraction below 1 (100 %)",
+    mend: "check the unit: grams per 100 g of solvent may exceed 100, per 100 g of solution may not",
+  },
+  "below-absolute-zero": {
+    stops: "reading",
+    meaning: "The temperature is at or below absolute zero.",
+    expected: "a temperature above 0 K (-273.15 °C)",
+    mend: "check the value and the temperature unit",
+  },
+  "unknown-unit": {
+    stops: "reading",
+    meaning: "The unit of solubility is not known.",
+    expected: "a unit such as g/100 g solvent, g/L solution, mole fraction or mol/kg solvent",
+    mend: "correct the unit in the card or in the unit column",
+  },
+  "open-unit": {
+    stops: "reading",
+    meaning: "The unit does not say what the amount refers to, so it has several readings.",
+    expected: "a unit that says solvent or solution",
+    mend: "write the unit out in full, as the origin of the data defines it",
+  },
+  "unknown-temperature-unit": {
+    stops: "reading",
+    meaning: "The unit of temperature is not known, or none was stated.",
+    expected: "°C, K or °F",
+    mend: "state the unit of the temperature in the card",
+  },
+  "open-volume-basis": {
+    stops: "reading",
+    meaning:
+      "Above 20 g/L it matters whether the volume is that of the solution or of the solvent, and the unit does not say.",
+    expected: "mg/mL solution, mg/mL solvent, g/L solution or g/L solvent",
+    mend: "write the unit out in full, as the origin of the data defines it",
+  },
+  "open-hydrate-basis": {
+    stops: "reading",
+    meaning: "The solid is a hydrate or solvate, and it is open whether the amount counts its crystal solvent.",
+    expected: "solute_basis: anhydrous, hydrate per added solvent, or hydrate equivalent per total solvent",
+    mend: "state solute_basis in a column or as a constant of the card",
+  },
+  "open-composition": {
+    stops: "reading",
+    meaning: "The composition of the solvent does not say on which basis it is.",
+    expected: "composition_basis: mass, mole, volume before mixing, or % vol",
+    mend: "state composition_basis in a column or as a constant of the card",
+  },
+  "unsupported-composition": {
+    stops: "reading",
+    meaning: "This way of giving a solvent mixture cannot be followed.",
+    expected: "a pure solvent, or two solvents with their fractions",
+    mend: "give the mixture as components with a composition and its basis",
+  },
+  "unknown-solvent": {
+    stops: "reading",
+    meaning: "The solvent is not in the tables of substances.",
+    expected: "a name, synonym or registry number of a listed solvent",
+    mend: "correct the name, or add the solvent to substances.csv of the collection",
+  },
+  "unresolved-identity": {
+    stops: "reading",
+    meaning: "It cannot be told which substance is meant.",
+    expected: "a name or identifier that stands for exactly one substance",
+    mend: "add a registry number or InChIKey to the row, or a synonym to substances.csv",
+  },
+  "contradictory-identity": {
+    stops: "reading",
+    meaning: "Name and identifiers of one row stand for different substances.",
+    expected: "name, registry number, InChIKey and structure of one substance",
+    mend: "find out which of them is right and correct the others",
+  },
+  "solvent-is-solute": {
+    stops: "reading",
+    meaning: "Solute and solvent are the same substance.",
+    expected: "two different substances",
+    mend: "correct the row; in the card, check that the two columns were not exchanged",
+  },
+  "invalid-registry-number": {
+    stops: "reading",
+    meaning: "The CAS Registry Number has a wrong form or a wrong check digit.",
+    expected: "a number such as 7732-18-5 whose last digit agrees with the others",
+    mend: "copy the number again from its origin; a spreadsheet may have turned it into a date",
+  },
+  "invalid-formula": {
+    stops: "reading",
+    meaning: "The formula cannot be read.",
+    expected: "element symbols with counts, such as CuSO4·5H2O or Ca(NO3)2",
+    mend: "correct the formula",
+  },
+  "contradictory-molar-mass": {
+    stops: "reading",
+    meaning: "The molar mass stated does not belong to the formula or substance.",
+    expected: "the molar mass that follows from the formula",
+    mend: "check whether the mass is that of a hydrate, a salt or the free base, and correct the row",
+  },
+  "no-molar-mass": {
+    stops: "reading",
+    meaning: "The conversion needs a molar mass that is not known.",
+    expected: "a molar mass, formula or structure of the substance",
+    mend: "add the formula or molar mass to substances.csv or to the row",
+  },
+  "no-density": {
+    stops: "reading",
+    meaning: "The conversion needs a density that is not known at this temperature.",
+    expected: "a density of the solvent that covers the temperature",
+    mend: "give solution_density in the row, or add the density to property-values",
+  },
+  "unknown-density-unit": {
+    stops: "reading",
+    meaning: "The unit of the solution density is not known, or none was stated.",
+    expected: "g/mL, g/cm3, kg/L, kg/m3 or g/L",
+    mend: "state the unit of solution_density in the card",
+  },
+  "implausible-density": {
+    stops: "reading",
+    meaning: "No saturated solution has such a density, so its unit or value is wrong.",
+    expected: "a density between 300 and 5000 kg/m3 (0.3 and 5 g/mL)",
+    mend: "check the unit: 0.8 kg/m3 is usually 0.8 g/mL",
+  },
+  "bad-uncertainty": {
+    stops: "reading",
+    meaning: "The uncertainty cannot be used.",
+    expected: "a number at or above 0, and a coverage factor above 0 where one is given",
+    mend: "correct the cell, or leave it empty",
+  },
+  "bad-choice": {
+    stops: "reading",
+    meaning: "The field takes certain words only, and this is none of them.",
+    expected: "one of the words listed",
+    mend: "correct the cell",
+  },
+  "unknown-setting": {
+    stops: "command",
+    meaning: "This setting does not exist, or its value cannot be used.",
+    expected: "a setting described in schemas/collection.schema.json",
+    mend: "correct the name or the value in collection.json",
+  },
+} as const satisfies Record<string, Kind>;

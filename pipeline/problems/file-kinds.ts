@@ -1,0 +1,167 @@
+import type { Kind } from "./kind.ts";
+
+/** Problems of files and of their structure. When structure is lost, no cell can be trusted, so the source stops. */
+export const fileKinds = {
+  "empty-file": {
+    stops: "source",
+    meaning: "The table holds nothing: no header and no row.",
+    expected: "a header line and at least one row",
+    mend: "export the table again, or name the right file in the card",
+  },
+  "header-only": {
+    stops: "source",
+    meaning: "The table has a header but no row below it.",
+    expected: "at least one row below the header",
+    mend: "export the table again with its rows; if the header stands further down, state header_line in the card",
+  },
+  "no-readings": {
+    stops: "nothing",
+    meaning: "The table has rows, but every solubility cell is empty or holds a missing mark.",
+    expected: "at least one solubility value",
+    mend: "check that the card names the right solubility column",
+  },
+  "unclosed-quote": {
+    stops: "source",
+    meaning: "A quoted cell never ends, so the rows after it cannot be told apart.",
+    expected: "a closing quote for every opening quote",
+    mend: 'close the quote in the row that begins at this line; a quote inside a quoted cell is written twice ("")',
+  },
+  "stray-quote": {
+    stops: "source",
+    meaning: "A quote stands in the middle of a cell, so the limits of the cells cannot be told.",
+    expected: 'quotes around whole cells only, and a quote inside a quoted cell written twice ("")',
+    mend: "remove the quote, or put the whole cell in quotes and write each inner quote twice",
+  },
+  "ragged-row": {
+    stops: "reading",
+    meaning: "The row has more or fewer cells than the header, so it is open which value stands under which heading.",
+    expected: "as many cells as the header has",
+    mend: "add the missing cells or delimiters, or put a cell that contains the delimiter in quotes",
+  },
+  "nul-byte": {
+    stops: "source",
+    meaning: "The file contains a NUL byte: it is damaged, is no text, or is in an encoding that was not stated.",
+    expected: "a text file without NUL bytes",
+    mend: 'export the table as UTF-8 text; if it is UTF-16, state "encoding": "utf-16le" in the card',
+  },
+  "bad-encoding": {
+    stops: "source",
+    meaning: "The bytes of the file are not text in the encoding expected.",
+    expected: "UTF-8, or the encoding stated in the card",
+    mend: 'state the encoding in the card ("encoding": "windows-1252" for most older office exports), or save as UTF-8',
+  },
+  "oversized-cell": {
+    stops: "source",
+    meaning: "A row is larger than 1 MiB; most often a missing quote has swallowed the rows that follow.",
+    expected: "rows of at most 1 MiB",
+    mend: "look for a missing closing quote in the row that begins at this line, or shorten the cell",
+  },
+  "missing-column": {
+    stops: "source",
+    meaning: "The card names a column that the table does not have.",
+    expected: "a heading spelled exactly as in the card",
+    mend: "correct the name in the card, or the heading in the table",
+  },
+  "duplicate-column": {
+    stops: "source",
+    meaning: "The card names a heading that occurs more than once in the table.",
+    expected: "every heading that the card names once",
+    mend: "rename one of the columns in the table",
+  },
+  "ambiguous-delimiter": {
+    stops: "source",
+    meaning: "It is open which character separates the cells.",
+    expected: "cells separated by comma, semicolon, tab or vertical bar",
+    mend: 'state the delimiter in the card ("delimiter": ";")',
+  },
+  "not-json": {
+    stops: "source",
+    meaning: "The file is not strict JSON.",
+    expected: "strict JSON: double quotes, no comments, no trailing commas, every key once",
+    mend: "correct the place told",
+  },
+  "wrong-card": {
+    stops: "source",
+    meaning: "The source card says something that cannot be followed.",
+    expected: "a card as described in schemas/source-card.schema.json",
+    mend: "correct the card at the place told",
+  },
+  "wrong-collection": {
+    stops: "command",
+    meaning: "The file collection.json says something that cannot be followed.",
+    expected: "settings as described in schemas/collection.schema.json",
+    mend: "correct collection.json at the place told",
+  },
+  "wrong-table": {
+    stops: "command",
+    meaning: "A table of the collection or of the program (substances, solid forms, rulings) cannot be followed.",
+    expected: "the columns described in schemas/",
+    mend: "correct the table at the place told",
+  },
+  "missing-file": {
+    stops: "source",
+    meaning: "A file that is needed does not exist.",
+    expected: "a file of this name",
+    mend: "put the file there, or correct its name",
+  },
+  "unreadable-file": {
+    stops: "source",
+    meaning: "The file exists but cannot be read.",
+    expected: "an ordinary file that you may read",
+    mend: "check its permissions, and that it is a file and not a folder",
+  },
+  "outside-collection": {
+    stops: "source",
+    meaning: "The path leads out of the collection.",
+    expected: "a relative path inside the collection, not by .., an absolute path or a symbolic link",
+    mend: "put the file inside the collection and name it by a relative path",
+  },
+  "duplicate-source": {
+    stops: "source",
+    meaning: "Two cards give the same source name.",
+    expected: "a source name that no other card uses",
+    mend: 'give one of the cards another name ("source")',
+  },
+  "bad-source-name": {
+    stops: "source",
+    meaning: "The name of the source cannot be used in identifiers.",
+    expected: "1 to 64 lower-case letters, digits and hyphens, beginning with a letter or digit",
+    mend: "rename the source, for example harbour-2026-gravimetry",
+  },
+  "no-sources": {
+    stops: "nothing",
+    meaning: "The collection has no source card.",
+    expected: "at least one sources/NAME.source.json",
+    mend: "put a table and its card in the folder sources/",
+  },
+  "table-without-card": {
+    stops: "nothing",
+    meaning: "A table in sources/ has no card and was not read.",
+    expected: "a card NAME.source.json that names it",
+    mend: "write a card for the table, or move the table out of sources/",
+  },
+  "subfolder-not-read": {
+    stops: "nothing",
+    meaning: "Sub-folders of sources/ are not read.",
+    expected: "tables and cards directly in sources/",
+    mend: "move the tables and cards up into sources/",
+  },
+  "unsupported-file-kind": {
+    stops: "source",
+    meaning: "This kind of file, or this shape of table, cannot be read.",
+    expected: "a .csv or .tsv file in long shape: one solubility value in a row",
+    mend: "export the table as CSV, one measurement in a row",
+  },
+  "resaved-by-spreadsheet": {
+    stops: "nothing",
+    meaning: "The file looks as if a spreadsheet had saved it again; it was read.",
+    expected: "the file as it was exported first",
+    mend: "check that names, dates and numbers were not changed on saving",
+  },
+  "substance-left-out": {
+    stops: "nothing",
+    meaning: "A value of the collection's own tables contradicts itself or another, and is not used.",
+    expected: "names, identifiers and molar masses that agree",
+    mend: "correct the table",
+  },
+} as const satisfies Record<string, Kind>;

@@ -1,0 +1,73 @@
+import type { Edition, Liquor } from "../../records/edition.ts";
+import type { Curve } from "../../records/fits.ts";
+import type { PlanningCoolingRow } from "../../records/generated/planning-cooling.ts";
+import type { System } from "../../records/systems.ts";
+import { massRatioFromLn } from "../mass-ratio.ts";
+import { type CoolingPlan, planCooling } from "../planning/cooling.ts";
+import { known } from "./account.ts";
+
+/** What no planning figure holds. */
+const NOTE = "equilibrium, pure solute, this solid form; no kinetics, cake hold-up or impurity effect";
+
+function coolingPlan(curve: Curve, system: System, liquor: Liquor, excessSolventPercent: number): CoolingPlan {
+  return planCooling(curve, {
+    massRatioAt: (temperatureK) => massRatioFromLn(curve.evaluate(temperatureK), system),
+    halfWidthAt: (temperatureK) => curve.limits(temperatureK).curve,
+    boilingPointK: liquor.solventBoilingPointK,
+    freezingPointK: liquor.solventFreezingPointK,
+    formMeltingPointK: liquor.formMeltingPointK,
+    crystalAt: liquor.crystalAt,
+    transitionsK: liquor.transitionsK,
+    solventDensity20C: liquor.solventDensity20C,
+    excessSolventPercent,
+  });
+}
+
+const percent = (ratio: number | undefined) => (ratio === undefined ? undefined : 100 * ratio);
+
+function planRow(
+  system: System,
+  curve: Curve | undefined,
+  plan: CoolingPlan,
+  excess: number,
+  hazards: readonly string[],
+) {
+  const cautions = [...plan.cautions, ...(plan.blankReason === "" ? hazards : [])];
+  return known({
+    system: system.id,
+    curve_id: curve?.curveId,
+    crystal_form: plan.crystalForm,
+    T_hot_K: plan.hotK,
+    T_cold_K: plan.coldK,
+    hot_g_per_100g_solvent: percent(plan.hotMassRatio),
+    cold_g_per_100g_solvent: percent(plan.coldMassRatio),
+    max_recovery_equilibrium_percent: plan.maxRecovery?.value,
+    max_recovery_equilibrium_percent_low: plan.maxRecovery?.low,
+    max_recovery_equilibrium_percent_high: plan.maxRecovery?.high,
+    excess_solvent_percent: plan.maxRecovery === undefined ? undefined : excess,
+    working_recovery_percent: plan.workingRecovery,
+    solvent_mL_per_g: plan.solventMLPerG,
+    solids_cold_percent: plan.solidsPercent,
+    loss_to_liquor_percent: plan.lossPercent,
+    saturation_temperature_K: plan.saturationK,
+    cautions: cautions.join("; ") || undefined,
+    note: NOTE,
+    blank_reason: plan.blankReason || undefined,
+  }) as PlanningCoolingRow;
+}
+
+/** Rows of `planning-cooling.csv`: one per curve; a system without one gets a blank row with the reason. */
+export function* coolingRows(edition: Edition): Generator<PlanningCoolingRow> {
+  const excess = edition.settings.planning_excess_solvent_percent;
+  for (const system of edition.systems) {
+    const liquor = edition.liquors[system.index] as Liquor;
+    const fit = edition.fits[system.index];
+    if (!fit || fit.curves.length === 0) {
+      const blank: CoolingPlan = { cautions: [], blankReason: fit?.noCurve ?? "no curve" };
+      yield planRow(system, undefined, blank, excess, []);
+    }
+    for (const curve of fit?.curves ?? []) {
+      yield planRow(system, curve, coolingPlan(curve, system, liquor, excess), excess, liquor.hazards);
+    }
+  }
+}

@@ -1,0 +1,51 @@
+import type { Change } from "../reread.ts";
+
+/** The causes a flag may name. */
+export type CauseName =
+  | "power of ten"
+  | "dilution factor"
+  | "basis mix-up"
+  | "temperature unit"
+  | "hydrate basis"
+  | "rows shifted"
+  | "digits transposed"
+  | "value of another solvent"
+  | "logarithm base";
+
+/** What a cause may look at: one point, or one block whose rows stand in the order of its file. */
+export interface Suspects {
+  /** Suspected rows: one for a point, all rows of the block otherwise. */
+  readonly rows: readonly number[];
+  /** Unit as reported, one for all rows; "" where they differ. */
+  readonly unit: string;
+  readonly temperatureK: (row: number) => number;
+  readonly reportedValue: (row: number) => number;
+  /** Row of the same block before or behind a row in its file; undefined at the ends. */
+  readonly neighbour: (row: number, step: 1 | -1) => number | undefined;
+  /** Other systems with the same solute and solid form in another solvent, for which this source has values too. */
+  readonly otherSolvents: readonly { readonly system: number; readonly name: string }[];
+}
+
+/** One way a cause may have worked. */
+export interface Explanation {
+  /** What happened, in words. */
+  readonly detail: string;
+  /** Share of this way among all ways of the cause; the shares of one cause add up to at most 1. */
+  readonly weight: number;
+  /** What undoes it for a row; undefined where it does not apply to that row. */
+  readonly change: (row: number) => Change | undefined;
+  /** System whose curve the re-read value must fit, where not the row's own. */
+  readonly system?: number;
+}
+
+/** A kind of mistake that screening can recognise. */
+export interface Cause {
+  readonly name: CauseName;
+  /** Prior probability that this is what is wrong with a single row that is off. Common practice. */
+  readonly pointPrior: number;
+  /** Prior probability that this is what is wrong with a whole block that is off. Common practice. */
+  readonly blockPrior: number;
+  /** What the person who measured should look at. */
+  readonly lookAt: string;
+  readonly explanations: (suspects: Suspects) => readonly Explanation[];
+}

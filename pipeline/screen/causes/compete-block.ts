@@ -1,0 +1,171 @@
+import type { RobustFit } from "../../records/fits.ts";
+import type { ScreenInput } from "../screen-input.ts";
+import { fitSources, predict, predictCurve, type Series, type SystemModel, seriesLogDensity } from "../system-model.ts";
+import type { CauseName, Explanation, Suspects } from "./cause.ts";
+import { EVERY_CAUSE } from "./every-cause.ts";
+
+/** Readings of a block that are no mistake of a known kind. */
+export const AS_READ = "as read";
+export const FREE_OFFSET = "free offset";
+
+/** One reading of a whole block: its weight before the sources are compared (ln), and what it says. */
+export interface BlockReading {
+  /** Key that is the same for the same mistake in every block of a source. */
+  readonly key: string;
+  readonly cause: CauseName | undefined;
+  readonly detail: string;
+  readonly lookAt: string;
+  readonly logPrior: number;
+  readonly logDensity: number;
+}
+
+/** A block to be explained. */
+export interface BlockCase {
+  readonly input: ScreenInput;
+  readonly models: readonly [own: SystemModel, other: SystemModel];
+  readonly fit: RobustFit;
+  /** Points of the block, in the order of `suspects.rows`. */
+  readonly points: readonly number[];
+  readonly source: number;
+  readonly suspects: Suspects;
+  readonly threshold: number;
+}
+
+/** Prior probability that a block is sound as read, and that an off block has no known cause. Common practice. */
+const AS_READ_PRIOR = 0.9;
+const NONE_PRIOR = 0.25;
+/** Variance of the offset of a block that is off for no known cause, ln units squared. */
+const FREE_VARIANCE = 0.64;
+/** Standardised residuals beyond this from the block's own median count as single faults within the block. */
+const STRAY_Z = 5;
+/** ln of the density given to a stray point: a chance of 0.03, spread over about 3 ln units. */
+const STRAY_LOG_DENSITY = Math.log(0.03 / 3);
+/** At most this share of a block may be stray. */
+const STRAY_SHARE = 0.25;
+const [LOWEST_K, HIGHEST_K] = [150, 650];
+
+/**
+ * All readings of a block with the log-likelihood of the whole re-read series under the prediction for a new source:
+ * as read, with a free offset, and each way of each cause. The own model must hold the fit without this block.
+ */
+export function blockReadings(of: BlockCase): BlockReading[] {
+  const between = of.fit.betweenSd ** 2;
+  const asRead = seriesOf(of, undefined);
+  if (asRead === undefined) return [];
+  const offPrior = Math.log(1 - AS_READ_PRIOR);
+  const none = { cause: undefined, detail: "", lookAt: "" };
+  const readings: BlockReading[] = [
+    { ...none, key: AS_READ, logPrior: Math.log(AS_READ_PRIOR), logDensity: densityOf(of, of.models[0], asRead, between) },
+    {
+      ...none,
+      key: FREE_OFFSET,
+      logPrior: offPrior + Math.log(NONE_PRIOR),
+      logDensity: densityOf(of, of.models[0], asRead, FREE_VARIANCE + between),
+    },
+  ];
+  for (const cause of EVERY_CAUSE) {
+    if (cause.blockPrior === 0) continue;
+    for (const explanation of cause.explanations(of.suspects)) {
+      const logDensity = explained(of, explanation, between);
+      if (logDensity === undefined) continue;
+      readings.push({
+        key: `${cause.name}: ${explanation.detail}`,
+        cause: cause.name,
+        detail: explanation.detail,
+        lookAt: cause.lookAt,
+        logPrior: offPrior + Math.log(cause.blockPrior * explanation.weight),
+        logDensity,
+      });
+    }
+  }
+  return readings;
+}
+
+/** Log density of the re-read block, or undefined where it cannot be re-read or would still be off. */
+function explained(of: BlockCase, how: Explanation, between: number): number | undefined {
+  const series = seriesOf(of, how);
+  if (series === undefined) return undefined;
+  if (how.system !== undefined) fitSources(of.models[1], of.input.fits[how.system]!, (s) => s !== of.source);
+  const model = of.models[how.system === undefined ? 0 : 1];
+  const residuals = series.lnValue.map((y, i) => y - predictCurve(model, series.temperatureK[i]!).mean);
+  if (Math.abs(middle(residuals)) > Math.max(of.threshold, 3 * Math.sqrt(between))) return undefined;
+  return densityOf(of, model, series, between);
+}
+
+/** The block re-read; rows that a shift leaves without a number count as stray. */
+function seriesOf({ input, fit, points, suspects }: BlockCase, how: Explanation | undefined): Series | undefined {
+  const series = { temperatureK: [] as number[], lnValue: [] as number[], noiseVariance: [] as number[] };
+  let left = 0;
+  for (const [j, point] of points.entries()) {
+    const row = suspects.rows[j]!;
+    const change = how?.change(row);
+    const read =
+      how === undefined
+        ? { lnValue: fit.points.lnValue[point]!, temperatureK: fit.points.temperatureK[point]! }
+        : change === undefined
+          ? undefined
+          : input.reread(row, change);
+    if (read === undefined || !(read.temperatureK > LOWEST_K && read.temperatureK < HIGHEST_K)) {
+      if (++left > 1) return undefined;
+      continue;
+    }
+    series.temperatureK.push(read.temperatureK);
+    series.lnValue.push(read.lnValue);
+    series.noiseVariance.push(fit.noiseSd[point]! ** 2);
+  }
+  return series.lnValue.length < 2 ? undefined : series;
+}
+
+/** Joint log density with single stray points of the block taken out at a fixed price. */
+function densityOf(of: BlockCase, model: SystemModel, series: Series, offsetVariance: number): number {
+  const n = series.lnValue.length;
+  const spread = series.lnValue.map((y, i) => {
+    const { mean, variance } = predictCurve(model, series.temperatureK[i]!);
+    return { residual: y - mean, sd: Math.sqrt(variance + series.noiseVariance[i]!) };
+  });
+  const centre = middle(spread.map(({ residual }) => residual));
+  const stray = spread.map(({ residual, sd }) => Math.abs(residual - centre) > Math.max(STRAY_Z * sd, of.threshold));
+  const strays = stray.filter(Boolean).length;
+  if (strays > STRAY_SHARE * n) return seriesLogDensity(model, series, offsetVariance);
+  const keep = <T>(values: readonly T[]) => values.filter((_, i) => !stray[i]);
+  const missing = of.points.length - n;
+  return (
+    seriesLogDensity(
+      model,
+      {
+        temperatureK: keep(series.temperatureK),
+        lnValue: keep(series.lnValue),
+        noiseVariance: keep(series.noiseVariance),
+      },
+      offsetVariance,
+    ) +
+    (strays + missing) * STRAY_LOG_DENSITY
+  );
+}
+
+/** Median of a short list. */
+export function middle(values: readonly number[]): number {
+  const sorted = [...values].sort((a, b) => a - b);
+  const half = sorted.length >> 1;
+  return sorted.length % 2 === 1 ? sorted[half]! : (sorted[half - 1]! + sorted[half]!) / 2;
+}
+
+/** Offset of a block from the curve of the others: median, its standard deviation, share of points beyond both limits. */
+export function blockOffset(of: BlockCase): { median: number; sd: number; failing: number } {
+  const { fit, points, models, source } = of;
+  const deviations: number[] = [];
+  const variances: number[] = [];
+  let failing = 0;
+  for (const point of points) {
+    const { mean, variance } = predict(models[0], fit.points.temperatureK[point]!, source);
+    const deviation = fit.points.lnValue[point]! - mean;
+    const sd = Math.sqrt(variance + fit.noiseSd[point]! ** 2);
+    deviations.push(deviation);
+    variances.push(variance);
+    if (Math.abs(deviation) > Math.max(3.5 * sd, of.threshold)) failing++;
+  }
+  const noise = middle(points.map((point) => fit.noiseSd[point]! ** 2));
+  // 1.57: variance of a median relative to that of a mean under Gaussian noise.
+  const sd = Math.sqrt(middle(variances) + (1.57 * noise) / points.length);
+  return { median: middle(deviations), sd, failing: failing / points.length };
+}

@@ -1,0 +1,121 @@
+import type { RobustFit } from "../../records/fits.ts";
+import type { ScreenInput } from "../screen-input.ts";
+import { fitSources, predict, type SystemModel } from "../system-model.ts";
+import type { CauseName, Explanation, Suspects } from "./cause.ts";
+import { EVERY_CAUSE } from "./every-cause.ts";
+
+/** The outcome of the competition. */
+export interface Verdict {
+  /** The winning cause; undefined where none passes 0.5. */
+  readonly cause: CauseName | undefined;
+  readonly detail: string;
+  readonly probability: number;
+  /** Number in the reported unit that would be right; undefined where a cause changes something else, or none won. */
+  readonly proposedValue: number | undefined;
+  readonly lookAt: string;
+}
+
+/** A cause is named above this posterior probability; a value is proposed above the other. */
+export const NAMED_ABOVE = 0.5;
+export const PROPOSED_ABOVE = 0.9;
+/** What to look at where no cause wins. */
+export const LOOK_AGAIN = "Look the value and its temperature up in the notebook or the original table; if they stand, measure again.";
+
+/** Prior probability of a random error, and how its size in ln value is spread. Common practice. */
+const NONE_PRIOR = 0.3;
+const NONE_SCALE = 0.5;
+const NONE_WIDEST = 10;
+/** A re-read value must come this near, in standard deviations. */
+const NEAR_Z = 3;
+/** Temperatures a re-reading may lead to, K. */
+const [LOWEST_K, HIGHEST_K] = [150, 650];
+
+/** A point to be explained, with what is expected of it. */
+export interface PointCase {
+  readonly input: ScreenInput;
+  /** Two workspaces: one for the point's own system, one for others. */
+  readonly models: readonly [own: SystemModel, other: SystemModel];
+  readonly fit: RobustFit;
+  readonly point: number;
+  readonly suspects: Suspects;
+  /** Material threshold of the point, ln value. */
+  readonly threshold: number;
+}
+
+/**
+ * The causes and "none" compete for one off point: prior x share of the detail x likelihood of the re-read value at the
+ * re-read temperature, given the kept points without it; shares within a cause are summed. What is impossible is
+ * skipped.
+ */
+export function competeForPoint(of: PointCase): Verdict {
+  const { fit, point, models } = of;
+  const sound = fit.apartSources.length === 0 ? undefined : new Set(fit.soundSources);
+  fitSources(models[0], fit, (source) => sound?.has(source) !== false, point);
+  let total = NONE_PRIOR * noneDensity(fit.deviation[point]!);
+  let best: Verdict | undefined;
+  let bestWeight = 0;
+  for (const cause of EVERY_CAUSE) {
+    if (cause.pointPrior === 0) continue;
+    let sum = 0;
+    let top = 0;
+    let winner: Evaluated | undefined;
+    for (const explanation of cause.explanations(of.suspects)) {
+      const evaluated = evaluate(of, explanation);
+      if (evaluated === undefined) continue;
+      sum += evaluated.density;
+      if (evaluated.density <= top) continue;
+      top = evaluated.density;
+      winner = evaluated;
+    }
+    sum *= cause.pointPrior;
+    total += sum;
+    if (winner === undefined || sum <= bestWeight) continue;
+    bestWeight = sum;
+    const { detail, proposedValue } = winner;
+    best = { cause: cause.name, probability: 0, lookAt: cause.lookAt, detail, proposedValue };
+  }
+  return decided(best, bestWeight / total);
+}
+
+interface Evaluated {
+  readonly detail: string;
+  readonly density: number;
+  readonly proposedValue: number | undefined;
+}
+
+/** Likelihood of one explanation times its share; undefined where it is impossible or leaves the point off. */
+function evaluate({ input, models, fit, point, suspects, threshold }: PointCase, how: Explanation): Evaluated | undefined {
+  const row = suspects.rows[0]!;
+  const source = fit.points.source[point]!;
+  const change = how.change(row);
+  const reread = change === undefined ? undefined : input.reread(row, change);
+  if (change === undefined || reread === undefined) return undefined;
+  if (!(reread.temperatureK > LOWEST_K && reread.temperatureK < HIGHEST_K)) return undefined;
+  if (how.system !== undefined) fitSources(models[1], input.fits[how.system]!, () => true);
+  const expected = predict(models[how.system === undefined ? 0 : 1], reread.temperatureK, source);
+  const deviation = reread.lnValue - expected.mean;
+  const variance = expected.variance + fit.noiseSd[point]! ** 2;
+  if (!(Math.abs(deviation) < Math.min(threshold, NEAR_Z * Math.sqrt(variance)))) return undefined;
+  const changesValue = change.kind !== "temperature scale" && change.kind !== "temperature" && change.kind !== "solvent";
+  return {
+    detail: how.detail,
+    density: how.weight * normalDensity(deviation, variance),
+    proposedValue: changesValue ? reread.reportedValue : undefined,
+  };
+}
+
+/** Names the best cause above 0.5, keeps its value above 0.9. */
+export function decided(best: Verdict | undefined, probability: number): Verdict {
+  if (best === undefined || !(probability > NAMED_ABOVE))
+    return { cause: undefined, detail: "", probability: Number.NaN, proposedValue: undefined, lookAt: LOOK_AGAIN };
+  return { ...best, probability, proposedValue: probability > PROPOSED_ABOVE ? best.proposedValue : undefined };
+}
+
+function normalDensity(deviation: number, variance: number): number {
+  return Math.exp((-0.5 * deviation * deviation) / variance) / Math.sqrt(2 * Math.PI * variance);
+}
+
+/** Density of the deviation of a random error: mostly moderate, sometimes anything. */
+function noneDensity(deviation: number): number {
+  return 0.5 * (Math.exp(-Math.abs(deviation) / NONE_SCALE) / (2 * NONE_SCALE)) + 0.5 / NONE_WIDEST;
+}

@@ -1,0 +1,40 @@
+import type { PooledScales, RobustFit } from "../records/fits.ts";
+import type { MeasurementTable } from "../records/measurements.ts";
+import type { Settings } from "../records/settings.ts";
+import type { System } from "../records/systems.ts";
+import { materialThreshold, type ThresholdKind, type ThresholdSettings } from "./material-threshold.ts";
+import type { InReportedUnit, Reread } from "./reread.ts";
+
+/** What screening must know of a system beyond its fit. */
+export interface ScreenedSystem {
+  readonly kind: ThresholdKind;
+  /** Normal boiling and freezing point of the solvent, K; NaN where unknown. */
+  readonly boilingPointK: number;
+  readonly freezingPointK: number;
+}
+
+/** Everything screening looks at. Rulings are not among it: flags depend on sources and settings only. */
+export interface ScreenInput {
+  readonly table: MeasurementTable;
+  readonly systems: readonly System[];
+  /** By position of the system. */
+  readonly fits: readonly RobustFit[];
+  readonly about: readonly ScreenedSystem[];
+  readonly scales: PooledScales;
+  readonly sourceNames: readonly string[];
+  readonly reread: Reread;
+  readonly inReportedUnit: InReportedUnit;
+  readonly settings: ThresholdSettings & Pick<Settings, "false_discovery_rate">;
+}
+
+/** Material threshold of a point of a system, ln value. */
+export function thresholdOf(input: ScreenInput, system: number, point: number): number {
+  const { points } = input.fits[system]!;
+  const kind = input.about[system]?.kind ?? "general";
+  return materialThreshold(points.level[point]!, points.lnU[point]!, kind, input.settings);
+}
+
+/** Name of a source by its position. */
+export function sourceName(input: ScreenInput, source: number): string {
+  return input.sourceNames[source] ?? `source ${source + 1}`;
+}

@@ -1,0 +1,167 @@
+import { SCREENING_STRIDE, setScreeningPrior, writeScreeningBasis } from "../curves/screening-basis.ts";
+import {
+  createGroupedModel,
+  expected,
+  expectedVariance,
+  fitGroupedModel,
+  type GroupedModel,
+  type GroupedRows,
+  groupVariance,
+  logMarginalDensity,
+  priorFromPosterior,
+} from "../numerics/grouped-model.ts";
+import type { RobustFit } from "../records/fits.ts";
+
+/** The screening model of one system at a time, rebuilt from its robust fit: a workspace that is filled again and again. */
+export interface SystemModel {
+  readonly rows: GroupedRows;
+  readonly use: Uint8Array;
+  readonly smooth: GroupedModel;
+  readonly broken: GroupedModel;
+  /** Source behind each group; the last group is empty and stands for a new source. */
+  readonly groupOfSource: Map<number, number>;
+  model: GroupedModel;
+  centreK: number;
+  breakK: number;
+  shift: number;
+  readonly point: Float64Array;
+}
+
+/** A normal prediction of ln value. */
+export interface Prediction {
+  readonly mean: number;
+  /** Variance of a measurement's expectation: curve and offset, without the noise of the measurement. */
+  readonly variance: number;
+}
+
+/** Room for systems of up to `capacity` points. */
+export function createSystemModel(capacity: number): SystemModel {
+  const groups = capacity + 1;
+  const smooth = createGroupedModel(3, groups);
+  const broken = createGroupedModel(4, groups);
+  setScreeningPrior(smooth);
+  setScreeningPrior(broken);
+  return {
+    rows: {
+      n: 0,
+      design: new Float64Array(capacity * SCREENING_STRIDE),
+      stride: SCREENING_STRIDE,
+      response: new Float64Array(capacity),
+      variance: new Float64Array(capacity),
+      group: new Int32Array(capacity),
+    },
+    use: new Uint8Array(capacity),
+    smooth,
+    broken,
+    groupOfSource: new Map(),
+    model: smooth,
+    centreK: 298.15,
+    breakK: Number.NaN,
+    shift: 0,
+    point: new Float64Array(SCREENING_STRIDE),
+  };
+}
+
+/**
+ * Fits the kept points of the given sources. Deterministic; at the cost of O(n).
+ *
+ * @param withSource which sources take part
+ * @param without point that takes no part
+ */
+export function fitSources(
+  target: SystemModel,
+  fit: RobustFit,
+  withSource: (source: number) => boolean,
+  without = -1,
+): void {
+  const { rows, use, groupOfSource } = target;
+  const { points, kept } = fit;
+  groupOfSource.clear();
+  rows.n = points.n;
+  target.breakK = fit.breakTemperatureK;
+  target.model = Number.isNaN(target.breakK) ? target.smooth : target.broken;
+  target.centreK = meanOfKept(points.temperatureK, kept, 298.15);
+  target.shift = meanOfKept(points.lnValue, kept, 0);
+  for (let i = 0; i < points.n; i++) {
+    const source = points.source[i]!;
+    let group = groupOfSource.get(source);
+    if (group === undefined) {
+      group = groupOfSource.size;
+      groupOfSource.set(source, group);
+    }
+    rows.group[i] = group;
+    use[i] = kept[i] === 1 && i !== without && withSource(source) ? 1 : 0;
+    rows.response[i] = points.lnValue[i]! - target.shift;
+    rows.variance[i] = fit.noiseSd[i]! ** 2;
+    const T = points.temperatureK[i]!;
+    if (T > 0) writeScreeningBasis(T, target.centreK, target.breakK, rows.design, i * SCREENING_STRIDE);
+  }
+  target.model.groups = groupOfSource.size + 1;
+  const conflict = fit.agreement === "conflict";
+  target.model.offsetVariance.fill(conflict ? 25 : fit.betweenSd ** 2, 0, target.model.groups);
+  fitGroupedModel(target.model, rows, use);
+}
+
+function meanOfKept(values: Float64Array, kept: Uint8Array, otherwise: number): number {
+  let sum = 0;
+  let count = 0;
+  for (let i = 0; i < values.length; i++) {
+    if (kept[i] !== 1) continue;
+    sum += values[i]!;
+    count++;
+  }
+  return count === 0 ? otherwise : sum / count;
+}
+
+/** ln value expected at a temperature (K) from a source; one that took no part in the fit counts as new. */
+export function predict(of: SystemModel, temperatureK: number, source: number): Prediction {
+  const { model, point } = of;
+  writeScreeningBasis(temperatureK, of.centreK, of.breakK, point, 0);
+  const group = of.groupOfSource.get(source) ?? model.groups - 1;
+  return {
+    mean: of.shift + expected(model, point, 0) + model.offsets[group]!,
+    variance: groupVariance(model, point, 0, group),
+  };
+}
+
+/** ln value expected of sources in general, and the variance of that. */
+export function predictCurve(of: SystemModel, temperatureK: number): Prediction {
+  writeScreeningBasis(temperatureK, of.centreK, of.breakK, of.point, 0);
+  return { mean: of.shift + expected(of.model, of.point, 0), variance: expectedVariance(of.model, of.point, 0) };
+}
+
+/** A series of values of one source to be judged as a whole. */
+export interface Series {
+  readonly temperatureK: readonly number[];
+  readonly lnValue: readonly number[];
+  readonly noiseVariance: readonly number[];
+}
+
+/**
+ * ln of the joint density of a series from a new source, given the fitted sources: curve uncertainty, one common
+ * offset of variance `offsetVariance` and noise together.
+ */
+export function seriesLogDensity(of: SystemModel, series: Series, offsetVariance: number): number {
+  const n = series.lnValue.length;
+  const seriesModel = createGroupedModel(of.model.p, 1);
+  priorFromPosterior(seriesModel, of.model);
+  seriesModel.groups = 1;
+  seriesModel.offsetVariance[0] = offsetVariance;
+  const design = new Float64Array(n * SCREENING_STRIDE);
+  const response = new Float64Array(n);
+  for (let i = 0; i < n; i++) {
+    writeScreeningBasis(series.temperatureK[i]!, of.centreK, of.breakK, design, i * SCREENING_STRIDE);
+    response[i] = series.lnValue[i]! - of.shift - expected(of.model, design, i * SCREENING_STRIDE);
+  }
+  const rows: GroupedRows = {
+    n,
+    design,
+    stride: SCREENING_STRIDE,
+    response,
+    variance: Float64Array.from(series.noiseVariance),
+    group: new Int32Array(n),
+  };
+  const use = new Uint8Array(n).fill(1);
+  fitGroupedModel(seriesModel, rows, use);
+  return logMarginalDensity(seriesModel, rows, use);
+}
