@@ -6,6 +6,7 @@ import { createIdentityRegister, type IdentityRegister, identifySource } from ".
 import { indexSubstances, massFromSmiles } from "./identify/substance-tables.ts";
 import { usedSubstances } from "./identify/used-substances.ts";
 import { type Normalised, normaliseEdition } from "./normalise/edition.ts";
+import { createRereader } from "./normalise/reread.ts";
 import type { Problem } from "./problems/catalogue.ts";
 import type { SubstanceIndex } from "./properties/substances.ts";
 import { openAccounts } from "./read/accounts.ts";
@@ -13,7 +14,7 @@ import type { Collection } from "./read/collection.ts";
 import type { Edition, SourceAccount } from "./records/edition.ts";
 import { settingsInForce } from "./records/settings.ts";
 import { materialThreshold } from "./screen/material-threshold.ts";
-import { screenEdition } from "./screen/screen-edition.ts";
+import { screen } from "./screen/screen.ts";
 
 /** An edition with what `check` needs to judge new rows against it. */
 export interface Curated {
@@ -62,12 +63,23 @@ export async function curate(
       liquors[i]?.solventFreezingPointK ?? Number.NaN,
       liquors[i]?.solventBoilingPointK ?? Number.NaN,
     ],
-    threshold: ({ identity }, level, lnU) => materialThreshold(level, lnU, identity.aqueousSalt ? "aqueous salt" : "general", settings),
+    threshold: ({ identity }, level, lnU) =>
+      materialThreshold(level, lnU, identity.aqueousSalt ? "aqueous salt" : "general", settings),
     settings,
   });
 
   onStage("screen");
-  const flags = screenEdition({ table, systems, fits, scales, sources: accounts, liquors, settings, register });
+  const flags = screen({
+    ...{ table, systems, scales, settings },
+    fits: fits.map(({ robust }) => robust),
+    about: systems.map(({ identity, index: i }) => ({
+      kind: identity.aqueousSalt ? ("aqueous salt" as const) : ("general" as const),
+      boilingPointK: liquors[i]?.solventBoilingPointK ?? Number.NaN,
+      freezingPointK: liquors[i]?.solventFreezingPointK ?? Number.NaN,
+    })),
+    sourceNames: accounts.map(({ name }) => name),
+    ...createRereader(table, register.identities, systems, normalised),
+  });
 
   onStage("grade");
   const refused = [

@@ -132,7 +132,9 @@ addCommand(program, "check <file>", "a verdict on every row of a new table; the 
   )
   .addHelpText("after", "\nWithout --card or --like the card beside the file (NAME.source.json) is used.")
   .action((file: string, options: CommonOptions & { collection: string; card?: string; like?: string }) =>
-    run(options, async (terminal) => (await import("./commands/check.ts")).check(file, options, terminal)),
+    run(options, async (terminal) =>
+      (await import("./commands/check.ts")).check(file, { ...options, version }, terminal),
+    ),
   );
 
 addCommand(program, "convert <value-and-unit>", "convert one value, with its uncertainty, every step and assumption")

@@ -8,6 +8,13 @@ export function systemKey(identity: Identity): string {
   return JSON.stringify([solute, solidForm, solvent, composition, medium]);
 }
 
+/** Readable id of the system of an identity. */
+export function systemId(identity: Identity): string {
+  const { solute, solidForm, solvent, composition, medium } = identity;
+  const form = solidForm === "unspecified" ? "" : solidForm;
+  return readableId([solute, form, "in", solvent, composition, medium], systemKey(identity));
+}
+
 /**
  * One system per identity that has measurements, sorted by id in code-unit order; every row lands in exactly one.
  * Rows keep their order, so a system's rows ascend by source, line and column. Counting sort: O(rows + identities).
@@ -25,12 +32,10 @@ export function groupIntoSystems(table: MeasurementTable, identities: readonly I
   identities.forEach((identity, i) => {
     const rows = rowsOf[i] as Int32Array;
     if (rows.length === 0) return;
-    const { solute, solidForm, solvent, composition, medium } = identity;
-    const form = solidForm === "unspecified" ? "" : solidForm;
-    const key = systemKey(identity);
+    const { solute, solvent, composition, medium } = identity;
     systems.push({
-      id: readableId([solute, form, "in", solvent, composition, medium], key),
-      key,
+      id: systemId(identity),
+      key: systemKey(identity),
       family: readableId(
         [solute, "in", solvent, composition, medium],
         JSON.stringify([solute, solvent, composition, medium]),

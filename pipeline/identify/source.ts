@@ -3,15 +3,8 @@ import { type CellFault, cellGetter, readingProblem } from "../records/cells.ts"
 import type { Identified, IdentifiedSource } from "../records/identified.ts";
 import type { Reading, SourceTable } from "../records/readings.ts";
 import type { Identity } from "../records/systems.ts";
-import { type ResolvedForm, resolveForm } from "./solid-form.ts";
-import { type KnownSolute, resolveSolute, type SmilesMass } from "./solute.ts";
-import { resolveSolvent } from "./solvent.ts";
-
-/** Fields that decide which substance, form, solvent and medium a reading is about. */
-const IDENTITY_FIELDS = [
-  ...["solute", "cas", "inchikey", "smiles", "formula", "molar_mass", "solid_form", "stereo"],
-  ...["solvent", "composition", "solvent_water_wt_percent", "medium"],
-];
+import { IDENTITY_FIELDS, type ResolvedIdentity, resolveIdentity } from "./identity.ts";
+import type { KnownSolute, SmilesMass } from "./solute.ts";
 
 /** Identities met so far over all sources of an edition, each once, in order of first use. */
 export interface IdentityRegister {
@@ -43,35 +36,12 @@ function positionOf(register: IdentityRegister, identity: Identity): number {
   return register.identities.push(identity) - 1;
 }
 
-/** Medium with stereochemistry: both keep systems apart. Blanks are folded, case is kept. */
-function mediumOf(medium: string, stereo: string): string {
-  const fold = (text: string) => text.trim().replace(/\s+/g, " ");
-  return [fold(medium), fold(stereo)].filter((part) => part !== "").join("; ");
-}
-
-/** Joins what was found about solute, form and solvent into one identity. */
-function identify(
-  register: IdentityRegister,
-  solute: KnownSolute,
-  form: ResolvedForm,
-  solvent: Substance,
-  medium: string,
-): Identified {
-  const identity: Identity = {
-    solute: form.solute,
-    solidForm: form.name,
-    solvent: solvent.name,
-    composition: "",
-    medium,
-    soluteMolarMass: form.unsolvatedMolarMass,
-    solventMolarMass: solvent.molarMass ?? Number.NaN,
-    aqueousSalt: solvent.name === "water" && (form.substance?.electrolyte ?? false),
-  };
-  if (!register.solutes.has(identity.solute))
-    register.solutes.set(identity.solute, { ...solute, key: identity.solute });
-  register.solvents.set(solvent.name, solvent);
+/** Registers what was resolved, and gives the record that normalising works with. */
+export function register(all: IdentityRegister, { solute, form, solvent, identity }: ResolvedIdentity): Identified {
+  if (!all.solutes.has(identity.solute)) all.solutes.set(identity.solute, { ...solute, key: identity.solute });
+  all.solvents.set(solvent.name, solvent);
   return {
-    index: positionOf(register, identity),
+    index: positionOf(all, identity),
     solute: form.substance,
     solvent,
     form: form.form,
@@ -89,7 +59,7 @@ export function identifySource(
   source: SourceTable,
   index: SubstanceIndex,
   smilesMass: SmilesMass,
-  register: IdentityRegister,
+  all: IdentityRegister,
 ): IdentifiedSource {
   const get = Object.fromEntries(IDENTITY_FIELDS.map((field) => [field, cellGetter(source.places, field)]));
   const text = (field: string, reading: Reading): string => (get[field] as (reading: Reading) => string)(reading);
@@ -97,31 +67,13 @@ export function identifySource(
     (field) => source.places[field]?.kind === "column" || source.readings.some((reading) => reading.own?.[field]),
   ).map((field) => get[field] as (reading: Reading) => string);
   const resolve = (reading: Reading): Identified | CellFault => {
-    const cells = (field: string) => text(field, reading);
-    const solute = resolveSolute(
-      {
-        solute: cells("solute"),
-        cas: cells("cas"),
-        inchikey: cells("inchikey"),
-        smiles: cells("smiles"),
-        formula: cells("formula"),
-        molarMass: cells("molar_mass"),
-      },
-      index,
-      smilesMass,
-    );
-    if ("code" in solute) return solute;
-    const solvent = resolveSolvent(cells("solvent"), cells("composition"), cells("solvent_water_wt_percent"), index);
-    if ("code" in solvent) return solvent;
-    const form = resolveForm(solute, cells("solid_form"), solvent, index);
-    if ("code" in form) return form;
-    if (form.solute === solvent.name) {
-      return { field: "solvent", code: "solvent-is-solute", found: `${form.solute} is both solute and solvent` };
+    const found = resolveIdentity((field) => text(field, reading), index, smilesMass);
+    if ("code" in found) return found;
+    const { contradiction } = found.solute;
+    if (contradiction !== undefined) {
+      all.contradictions.push({ source: source.name, line: reading.line, text: contradiction });
     }
-    if (solute.contradiction !== undefined) {
-      register.contradictions.push({ source: source.name, line: reading.line, text: solute.contradiction });
-    }
-    return identify(register, solute, form, solvent, mediumOf(cells("medium"), cells("stereo")));
+    return register(all, found);
   };
 
   const resolved = new Map<string, Identified | CellFault>();

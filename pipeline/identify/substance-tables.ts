@@ -41,7 +41,7 @@ export function indexSubstances(
 
 /** Molar masses from SMILES; the reader behind it is loaded only where a source has structures. */
 export async function massFromSmiles(sources: readonly SourceTable[]): Promise<SmilesMass> {
-  if (!sources.some(({ places }) => places["smiles"] !== undefined)) return () => undefined;
+  if (!sources.some(({ places }) => places.smiles !== undefined)) return () => undefined;
   const read = await loadSmilesReader();
   return (smiles) => {
     const found = read(smiles);

@@ -40,6 +40,8 @@ interface Row {
   readonly text: string;
   readonly reported: ReportedValue;
   readonly temperature: RowTemperature;
+  readonly volumeTemperatureK: number;
+  readonly solutionDensity: number;
   readonly method: string;
   readonly context: UnitContext;
 }
@@ -130,7 +132,19 @@ export function normaliseSource(
     liquor.setConditions(temperature.kelvin, volume, density);
     const unitText = reported.kind === "range" && reported.term ? TERM_UNIT : cells.unitOf.solubility(reading);
     const context = contextOf(who, unitText, reading, text);
-    return isFault(context) ? context : { reading, who, text, reported, temperature, method, context };
+    return isFault(context)
+      ? context
+      : {
+          reading,
+          who,
+          text,
+          reported,
+          temperature,
+          volumeTemperatureK: volume,
+          solutionDensity: density,
+          method,
+          context,
+        };
   };
 
   readings.forEach((reading, i) => {
@@ -232,7 +246,7 @@ export function normaliseSource(
   }
 
   /** Appends a row with what every row has; returns its number. */
-  function startRow({ reading, who, temperature, method }: Row): number {
+  function startRow({ reading, who, temperature, method, context, volumeTemperatureK, solutionDensity }: Row): number {
     const at = table.count++;
     table.source[at] = sourceIndex;
     table.line[at] = reading.line;
@@ -240,7 +254,11 @@ export function normaliseSource(
     table.identity[at] = who.index;
     table.temperatureK[at] = temperature.kelvin;
     table.temperatureU[at] = temperature.u;
+    table.temperatureUnit[at] = codeOf(table.texts, cells.unitOf.temperature(reading));
     table.reportedUnit[at] = codeOf(table.texts, unitShown(reading));
+    table.soluteBasis[at] = codeOf(table.texts, context.soluteBasis);
+    table.volumeTemperatureK[at] = volumeTemperatureK;
+    table.solutionDensity[at] = solutionDensity;
     table.method[at] = codeOf(table.texts, method);
     table.reference[at] = codeOf(table.texts, cells.text.reference(reading) || (source.card.reference ?? ""));
     table.doi[at] = codeOf(table.texts, cells.text.doi(reading) || (source.card.doi ?? ""));

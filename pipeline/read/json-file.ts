@@ -1,5 +1,5 @@
 import { isUtf8 } from "node:buffer";
-import { readFileSync } from "node:fs";
+import { readFileSync, statSync } from "node:fs";
 import { findNodeAtLocation, type Node, type ParseError, parseTree, printParseErrorCode } from "jsonc-parser";
 import { type Place, problem } from "../problems/catalogue.ts";
 import { InputError } from "../problems/input-error.ts";
@@ -46,7 +46,6 @@ export function placeOf({ text, tree }: JsonFile, path: JsonPath, ofKey: boolean
  */
 export function readJsonFile(path: string, place: Place): JsonFile {
   const bytes = readBytes(path, place);
-  if (bytes.length > MAX_BYTES) throw notJson(place, `the file is larger than ${MAX_BYTES} bytes`);
   if (!isUtf8(bytes)) {
     const mend = "save the file as UTF-8";
     throw new InputError(problem("bad-encoding", place, { found: "the file is not valid UTF-8", mend }));
@@ -70,8 +69,12 @@ export function readJsonFile(path: string, place: Place): JsonFile {
 
 function readBytes(path: string, place: Place): Buffer {
   try {
+    const state = statSync(path);
+    if (!state.isFile()) throw new RangeError(`${path} is not an ordinary file`);
+    if (state.size > MAX_BYTES) throw notJson(place, `the file is larger than ${MAX_BYTES} bytes`);
     return readFileSync(path);
   } catch (error) {
+    if (error instanceof InputError) throw error;
     const { code, message } = error as NodeJS.ErrnoException;
     throw new InputError(problem(code === "ENOENT" ? "missing-file" : "unreadable-file", place, { found: message }));
   }

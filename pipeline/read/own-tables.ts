@@ -14,7 +14,7 @@ import { findDelimiter } from "./delimiter.ts";
 import { asUtf8 } from "./encoding.ts";
 import { didYouMean } from "./near-miss.ts";
 import { fileInside } from "./path-inside.ts";
-import { peek } from "./physical-lines.ts";
+import { orClose, peek } from "./physical-lines.ts";
 import { tableBytes } from "./table-bytes.ts";
 
 /** Columns of a table that stands beside the sources; those not needed may be left out. */
@@ -50,9 +50,9 @@ const PROPERTIES = fileURLToPath(new URL("../../datasets/properties/", import.me
 export async function readProgramTables(folder = PROPERTIES): Promise<PropertyTables> {
   return {
     origin: "datasets/properties",
-    substances: await readOwnTable(folder, "substances.csv"),
-    solidForms: await readOwnTable(folder, "solid_forms.csv"),
-    propertyValues: await readOwnTable(folder, "property-values.csv"),
+    substances: await readOwnTable(folder, "substances.csv", "datasets/properties/"),
+    solidForms: await readOwnTable(folder, "solid_forms.csv", "datasets/properties/"),
+    propertyValues: await readOwnTable(folder, "property-values.csv", "datasets/properties/"),
   };
 }
 
@@ -68,10 +68,11 @@ export async function readCollectionTables(root: string): Promise<PropertyTables
 
 /**
  * A table that stands beside the sources, [] where the collection has none. Columns may stand in any order.
+ * @param shown what goes before the file's name in messages
  * @throws InputError where anything in it cannot be followed: half a table of substances would mislead in silence
  */
-export async function readOwnTable(root: string, name: keyof typeof KINDS): Promise<TableRow[]> {
-  const place: Place = { file: name };
+export async function readOwnTable(root: string, name: keyof typeof KINDS, shown = ""): Promise<TableRow[]> {
+  const place: Place = { file: `${shown}${name}` };
   if (!existsSync(join(root, name))) return [];
   const path = fileInside(root, root, name, place);
   return readRows(path, place, KINDS[name]);
@@ -81,7 +82,7 @@ async function readRows(path: string, place: Place, kind: TableKind): Promise<Ta
   const { columns } = kind;
   const text = asUtf8(tableBytes(path, createHash("sha256"), place), "auto", place);
   const { head, pieces } = await peek(text, 1 << 16);
-  const delimiter = findDelimiter(head, columns, place);
+  const delimiter = await orClose(text, () => findDelimiter(head, columns, place));
   const rows: TableRow[] = [];
   let headings: readonly string[] | undefined;
   await cutIntoRecords(pieces, { delimiter, firstLine: 1, place }, (cells, line) => {

@@ -105,3 +105,13 @@ export async function peek(
   }
   return { head, pieces: whole() };
 }
+
+/** Runs a step between two readings of a stream; if it throws, the stream is closed, and with it the file behind it. */
+export async function orClose<T>(stream: AsyncGenerator<Buffer>, step: () => T): Promise<T> {
+  try {
+    return step();
+  } catch (error) {
+    await stream.return(undefined);
+    throw error;
+  }
+}

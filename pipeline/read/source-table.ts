@@ -8,7 +8,7 @@ import { cutIntoRecords } from "./csv-records.ts";
 import { findDecimalMark } from "./decimal-mark.ts";
 import { findDelimiter } from "./delimiter.ts";
 import { asUtf8, type Decoded } from "./encoding.ts";
-import { peek, withoutLines } from "./physical-lines.ts";
+import { orClose, peek, withoutLines } from "./physical-lines.ts";
 import { tableBytes } from "./table-bytes.ts";
 
 /** Bytes looked at to find the delimiter. */
@@ -58,7 +58,8 @@ export async function readTable(file: TableFile, card: SourceCard): Promise<Sour
   const { head, pieces } = await peek(withoutLines(text, format.header_line - 1), HEAD_BYTES);
   const headerPlace = { ...place, line: format.header_line };
   const named = namedHeadings(card);
-  const delimiter = format.delimiter === "auto" ? findDelimiter(head, named, headerPlace) : format.delimiter;
+  const { delimiter: stated } = format;
+  const delimiter = stated === "auto" ? await orClose(text, () => findDelimiter(head, named, headerPlace)) : stated;
   const take = rowTaker(card, { delimiter, missing: new Set(["", ...format.missing]), place });
   await cutIntoRecords(pieces, { delimiter, firstLine: format.header_line, place }, take.row);
   const rows = take.end(format.header_line);

@@ -1,5 +1,5 @@
 import type { Hash } from "node:crypto";
-import { createReadStream } from "node:fs";
+import { createReadStream, statSync } from "node:fs";
 import { Readable } from "node:stream";
 import { createGunzip } from "node:zlib";
 import { type Place, problem } from "../problems/catalogue.ts";
@@ -20,6 +20,8 @@ const MOST_UNPACKED = 2 ** 31;
 export async function* tableBytes(path: string, hash: Hash, place: Place): AsyncGenerator<Buffer> {
   const stored = storedBytes(path, hash);
   try {
+    // A pipe or a device might never end.
+    if (!statSync(path).isFile()) throw new RangeError(`${path} is not an ordinary file`);
     yield* path.endsWith(".gz") ? unpacked(stored) : stored;
   } catch (error) {
     if (!isFileError(error)) throw error;

@@ -51,6 +51,8 @@ export interface MeasurementTable {
   readonly temperatureK: Float64Array;
   /** Standard uncertainty of the temperature, K. */
   readonly temperatureU: Float64Array;
+  /** Unit of the temperature as stated (`texts`). */
+  readonly temperatureUnit: Int32Array;
   /** Number as reported, in the reported unit; NaN for an interval. */
   readonly reportedValue: Float64Array;
   /** Reported text of an interval, or of a number that is not written in its shortest form (`texts`; 0 = none). */
@@ -73,6 +75,11 @@ export interface MeasurementTable {
   readonly molPerL: Float64Array;
   /** Relative standard uncertainty of the fitted quantity (x, or r where x is unknown), temperature not included. */
   readonly relativeU: Float64Array;
+  /** What the solute was weighed as: a solute basis (`texts`). */
+  readonly soluteBasis: Int32Array;
+  /** Measured density of the solution, kg/m3, and temperature of the stated volume, K; NaN where not given. */
+  readonly solutionDensity: Float64Array;
+  readonly volumeTemperatureK: Float64Array;
   /** Assumptions made, `; ` between them (`texts`). */
   readonly assumptions: Int32Array;
   readonly method: Int32Array;
@@ -85,11 +92,12 @@ export interface MeasurementTable {
 
 const WHOLE = [
   ...["source", "line", "column", "identity", "reportedText", "reportedUnit"],
-  ...["assumptions", "method", "reference", "doi", "carried"],
+  ...["temperatureUnit", "soluteBasis", "assumptions", "method", "reference", "doi", "carried"],
 ] as const;
 const REAL = [
   ...["temperatureK", "temperatureU", "reportedValue", "valueLow", "valueHigh", "massRatioLow", "massRatioHigh"],
   ...["massRatio", "moleFraction", "massConcentration", "molPerL", "relativeU"],
+  ...["solutionDensity", "volumeTemperatureK"],
 ] as const;
 
 /** An empty table with room for `capacity` rows; numbers start as NaN, texts as "". */

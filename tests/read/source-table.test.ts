@@ -1,7 +1,9 @@
+import { execFileSync } from "node:child_process";
 import { createHash } from "node:crypto";
-import { mkdirSync } from "node:fs";
+import { mkdirSync, writeFileSync } from "node:fs";
 import { join } from "node:path";
 import { gzipSync } from "node:zlib";
+import fc from "fast-check";
 import { expect, test } from "vitest";
 import { formatProblem } from "../../pipeline/problems/catalogue.ts";
 import { readSingleSource } from "../../pipeline/read/source.ts";
@@ -250,4 +252,43 @@ test("a table that is a folder, or that is not there, is refused", async () => {
   };
   expect(await code("bench.csv")).toBe("unreadable-file");
   expect(await code("none.csv")).toBe("missing-file");
+});
+
+test.skipIf(process.platform === "win32")(
+  "a pipe in place of a table or card is refused at once, not waited for",
+  async () => {
+    const folder = temporaryFolder({});
+    for (const name of ["bench.csv", "card.json"]) execFileSync("mkfifo", [join(folder, name)]);
+    for (const card of [CARD, join(folder, "card.json")]) {
+      const read = await readSingleSource(join(folder, "bench.csv"), card);
+      expect(read).toMatchObject({ ok: false, refused: { problem: { code: "unreadable-file" } } });
+    }
+  },
+);
+
+test("whatever the bytes, a table is read with its account in order or refused with a reason", async () => {
+  const folder = temporaryFolder({});
+  const path = join(folder, "bench.csv");
+  const part = fc.constantFrom(
+    ...["a,ethanol,20,1", '"', ",", "\n", "\r", "\r\n", "\0", ";", "\t", "é", "n.d.", '"a\nb"', "\ufeff"],
+  );
+  const text = fc.array(part, { maxLength: 30 }).map((parts) => Buffer.from(HEADER + parts.join("")));
+  const noise = fc.uint8Array({ maxLength: 60 }).map((bytes) => Buffer.concat([Buffer.from(HEADER), bytes]));
+  await fc.assert(
+    fc.asyncProperty(fc.oneof(text, noise, fc.uint8Array({ maxLength: 60 })), async (bytes) => {
+      writeFileSync(path, bytes);
+      const read = await readSingleSource(path, CARD);
+      if (!read.ok) {
+        const { found, mend, place } = read.refused.problem;
+        expect([found.length > 0, mend.length > 0, place.file]).toEqual([true, true, path]);
+        return;
+      }
+      const { readings, refused, readingsFound, missingCells } = read.source;
+      expect(readingsFound).toBe(readings.length + refused.length);
+      expect(readingsFound + missingCells).toBeGreaterThan(0);
+      const lines = [...readings, ...refused.map(({ place }) => ({ line: place.line ?? 0 }))].map(({ line }) => line);
+      expect(new Set(lines).size).toBe(lines.length);
+    }),
+    { numRuns: 400 },
+  );
 });

@@ -23,14 +23,16 @@ const MISTAKEN: readonly (readonly string[])[] = [
   ["g/g solvent", "mass fraction", "mole fraction", "g/mL solvent"],
   ["mg/L solution", "mg/kg solution", "mg/kg solvent"],
   ["mg/kg solution", "mg/L solution", "mg/kg solvent"],
-  ["1000 x", "g/kg solution", "g/kg solvent"],
+  ["10^3 x", "g/kg solution", "g/kg solvent"],
   ["100 w", "g/100 g solvent", "mol %"],
   ["g/100 g solution", "g/100 g solvent", "g/100 mL solution", "g/100 mL solvent", "mol %"],
   ["g/100 mL solution", "g/100 mL solvent", "g/100 g solvent", "g/100 g solution"],
   ["g/100 mL solvent", "g/100 mL solution", "g/100 g solvent", "g/100 g solution"],
 ];
 
-const byUnit: ReadonlyMap<string, readonly string[]> = new Map(MISTAKEN.map(([unit = "", ...others]) => [unit, others]));
+const byUnit: ReadonlyMap<string, readonly string[]> = new Map(
+  MISTAKEN.map(([unit = "", ...others]) => [unit, others]),
+);
 
 /**
  * The number is right, what it is per is not: per solution for per solvent, per volume for per mass, mole for mass

@@ -55,7 +55,12 @@ export function blockReadings(of: BlockCase): BlockReading[] {
   const offPrior = Math.log(1 - AS_READ_PRIOR);
   const none = { cause: undefined, detail: "", lookAt: "" };
   const readings: BlockReading[] = [
-    { ...none, key: AS_READ, logPrior: Math.log(AS_READ_PRIOR), logDensity: densityOf(of, of.models[0], asRead, between) },
+    {
+      ...none,
+      key: AS_READ,
+      logPrior: Math.log(AS_READ_PRIOR),
+      logDensity: densityOf(of, of.models[0], asRead, between),
+    },
     {
       ...none,
       key: FREE_OFFSET,
@@ -151,7 +156,7 @@ export function middle(values: readonly number[]): number {
 }
 
 /** Offset of a block from the curve of the others: median, its standard deviation, share of points beyond both limits. */
-export function blockOffset(of: BlockCase): { median: number; sd: number; failing: number } {
+export function blockOffset(of: Omit<BlockCase, "suspects">): { median: number; sd: number; failing: number } {
   const { fit, points, models, source } = of;
   const deviations: number[] = [];
   const variances: number[] = [];

@@ -19,7 +19,8 @@ export interface Verdict {
 export const NAMED_ABOVE = 0.5;
 export const PROPOSED_ABOVE = 0.9;
 /** What to look at where no cause wins. */
-export const LOOK_AGAIN = "Look the value and its temperature up in the notebook or the original table; if they stand, measure again.";
+export const LOOK_AGAIN =
+  "Look the value and its temperature up in the notebook or the original table; if they stand, measure again.";
 
 /** Prior probability of a random error, and how its size in ln value is spread. Common practice. */
 const NONE_PRIOR = 0.3;
@@ -84,7 +85,10 @@ interface Evaluated {
 }
 
 /** Likelihood of one explanation times its share; undefined where it is impossible or leaves the point off. */
-function evaluate({ input, models, fit, point, suspects, threshold }: PointCase, how: Explanation): Evaluated | undefined {
+function evaluate(
+  { input, models, fit, point, suspects, threshold }: PointCase,
+  how: Explanation,
+): Evaluated | undefined {
   const row = suspects.rows[0]!;
   const source = fit.points.source[point]!;
   const change = how.change(row);
@@ -96,7 +100,8 @@ function evaluate({ input, models, fit, point, suspects, threshold }: PointCase,
   const deviation = reread.lnValue - expected.mean;
   const variance = expected.variance + fit.noiseSd[point]! ** 2;
   if (!(Math.abs(deviation) < Math.min(threshold, NEAR_Z * Math.sqrt(variance)))) return undefined;
-  const changesValue = change.kind !== "temperature scale" && change.kind !== "temperature" && change.kind !== "solvent";
+  const changesValue =
+    change.kind !== "temperature scale" && change.kind !== "temperature" && change.kind !== "solvent";
   return {
     detail: how.detail,
     density: how.weight * normalDensity(deviation, variance),

@@ -18,7 +18,8 @@ export const hydrateBasis: Cause = {
   name: "hydrate basis",
   pointPrior: 0.03,
   blockPrior: 0.15,
-  lookAt: "Look at what was weighed in or dried out: the hydrate or the anhydrous solute, and which water it was counted with.",
+  lookAt:
+    "Look at what was weighed in or dried out: the hydrate or the anhydrous solute, and which water it was counted with.",
   explanations: () =>
     READINGS.map((basis) => ({
       detail: basis === "anhydrous" ? "mass is that of the anhydrous solute" : `mass is ${basis}`,

@@ -1,0 +1,248 @@
+/** A solid form. Its molar mass follows from the formulas; temperatures in K are from memory unless a source is named. */
+export interface ListedForm {
+  readonly solute: string;
+  readonly form: string;
+  readonly kind: "polymorph" | "hydrate" | "solvate";
+  readonly guest?: string;
+  readonly guestPerSolute?: number;
+  readonly meltingPointK?: number;
+  readonly transitionK?: number;
+  readonly toForm?: string;
+  readonly remark?: string;
+}
+
+type Details = Omit<ListedForm, "solute" | "form" | "kind" | "guest" | "guestPerSolute">;
+
+const NUMBERS: ReadonlyMap<number, string> = new Map([
+  [0.5, "hemihydrate"],
+  [1, "monohydrate"],
+  [1.5, "sesquihydrate"],
+  [2, "dihydrate"],
+  [3, "trihydrate"],
+  [4, "tetrahydrate"],
+  [5, "pentahydrate"],
+  [6, "hexahydrate"],
+  [7, "heptahydrate"],
+  [8, "octahydrate"],
+  [9, "nonahydrate"],
+  [10, "decahydrate"],
+  [12, "dodecahydrate"],
+  [18, "octadecahydrate"],
+]);
+
+const hydrate = (solute: string, water: number, details: Details = {}, form = NUMBERS.get(water)): ListedForm => {
+  if (form === undefined) throw new Error(`no name for ${water} H2O`);
+  return { solute, form, kind: "hydrate", guest: "water", guestPerSolute: water, ...details };
+};
+
+const anhydrous = (solute: string, details: Details = {}): ListedForm => ({
+  solute,
+  form: "anhydrous",
+  kind: "polymorph",
+  ...details,
+});
+
+const polymorph = (solute: string, form: string, details: Details = {}): ListedForm => ({
+  solute,
+  form,
+  kind: "polymorph",
+  ...details,
+});
+
+const turns = (transitionK: number, toForm: string, remark?: string): Details =>
+  remark === undefined ? { transitionK, toForm } : { transitionK, toForm, remark };
+
+/** Hydrates of salts; the transition is that of the form in contact with its saturated solution on heating. */
+const saltHydrates: readonly ListedForm[] = [
+  hydrate("sodium sulfate", 10, turns(305.53, "anhydrous", "transition 32.38 °C, a fixed point of thermometry")),
+  hydrate("sodium sulfate", 7, { remark: "metastable" }),
+  anhydrous("sodium sulfate"),
+  hydrate("sodium carbonate", 10, turns(305.15, "heptahydrate")),
+  hydrate("sodium carbonate", 7, turns(308.52, "monohydrate")),
+  hydrate("sodium carbonate", 1, turns(382, "anhydrous")),
+  anhydrous("sodium carbonate"),
+  hydrate("copper(II) sulfate", 5, turns(369, "trihydrate")),
+  hydrate("copper(II) sulfate", 3),
+  hydrate("copper(II) sulfate", 1),
+  anhydrous("copper(II) sulfate"),
+  hydrate("magnesium sulfate", 7, turns(321.3, "hexahydrate")),
+  hydrate("magnesium sulfate", 6, turns(341, "monohydrate")),
+  hydrate("magnesium sulfate", 1),
+  anhydrous("magnesium sulfate"),
+  hydrate("calcium sulfate", 2, turns(315, "anhydrous", "published transitions range from 311 to 331 K")),
+  hydrate("calcium sulfate", 0.5, { remark: "metastable in water" }),
+  anhydrous("calcium sulfate"),
+  hydrate("iron(II) sulfate", 7, turns(329.8, "tetrahydrate")),
+  hydrate("iron(II) sulfate", 4, turns(337.6, "monohydrate")),
+  hydrate("iron(II) sulfate", 1),
+  anhydrous("iron(II) sulfate"),
+  hydrate("zinc sulfate", 7, turns(312.2, "hexahydrate")),
+  hydrate("zinc sulfate", 6, turns(343, "monohydrate")),
+  hydrate("zinc sulfate", 1),
+  anhydrous("zinc sulfate"),
+  hydrate("nickel(II) sulfate", 7, turns(304, "hexahydrate")),
+  hydrate("nickel(II) sulfate", 6),
+  anhydrous("nickel(II) sulfate"),
+  hydrate("cadmium sulfate", 8 / 3, turns(316.8, "monohydrate"), "8/3-hydrate"),
+  hydrate("cadmium sulfate", 1),
+  hydrate("barium chloride", 2, turns(375, "monohydrate")),
+  hydrate("barium chloride", 1),
+  anhydrous("barium chloride"),
+  hydrate("magnesium chloride", 6, turns(390, "tetrahydrate")),
+  hydrate("magnesium chloride", 4),
+  anhydrous("magnesium chloride"),
+  hydrate("calcium chloride", 6, turns(303.0, "tetrahydrate")),
+  hydrate("calcium chloride", 4, turns(318.4, "dihydrate")),
+  hydrate("calcium chloride", 2, turns(449, "monohydrate")),
+  hydrate("calcium chloride", 1),
+  anhydrous("calcium chloride"),
+  hydrate("lithium chloride", 2, turns(292.3, "monohydrate")),
+  hydrate("lithium chloride", 1, turns(367, "anhydrous")),
+  anhydrous("lithium chloride"),
+  hydrate("lithium sulfate", 1),
+  anhydrous("lithium sulfate"),
+  hydrate("manganese(II) chloride", 4, turns(331.2, "dihydrate")),
+  hydrate("manganese(II) chloride", 2),
+  hydrate("cobalt(II) chloride", 6, turns(325.5, "dihydrate")),
+  hydrate("cobalt(II) chloride", 2),
+  hydrate("strontium chloride", 6, turns(334.5, "dihydrate")),
+  hydrate("strontium chloride", 2),
+  hydrate("strontium nitrate", 4, turns(302.5, "anhydrous")),
+  anhydrous("strontium nitrate"),
+  hydrate("calcium nitrate", 4, turns(315.8, "trihydrate")),
+  hydrate("calcium nitrate", 3),
+  anhydrous("calcium nitrate"),
+  hydrate("magnesium nitrate", 6),
+  hydrate("calcium iodate", 6, turns(308, "monohydrate")),
+  hydrate("calcium iodate", 1, turns(330.6, "anhydrous")),
+  anhydrous("calcium iodate"),
+  hydrate("barium chlorate", 1),
+  hydrate("potassium aluminium sulfate", 12, { meltingPointK: 365.7, remark: "melts incongruently" }),
+  anhydrous("potassium aluminium sulfate"),
+  hydrate("ammonium aluminium sulfate", 12),
+  hydrate("aluminium sulfate", 18, { remark: "16 to 18 H2O are reported" }),
+  hydrate("disodium hydrogen phosphate", 12, turns(308.6, "heptahydrate")),
+  hydrate("disodium hydrogen phosphate", 7, turns(321.5, "dihydrate")),
+  hydrate("disodium hydrogen phosphate", 2, turns(368.4, "anhydrous")),
+  anhydrous("disodium hydrogen phosphate"),
+  hydrate("sodium dihydrogen phosphate", 2, turns(314.0, "monohydrate")),
+  hydrate("sodium dihydrogen phosphate", 1, turns(330.6, "anhydrous")),
+  anhydrous("sodium dihydrogen phosphate"),
+  hydrate("trisodium phosphate", 12),
+  hydrate("sodium thiosulfate", 5, turns(321.3, "dihydrate")),
+  hydrate("sodium thiosulfate", 2),
+  anhydrous("sodium thiosulfate"),
+  hydrate("sodium sulfite", 7, turns(306.6, "anhydrous")),
+  anhydrous("sodium sulfite"),
+  hydrate("sodium acetate", 3, turns(331.2, "anhydrous")),
+  anhydrous("sodium acetate"),
+  hydrate("sodium chloride", 2, turns(273.25, "anhydrous", "hydrohalite, below 0.1 °C")),
+  anhydrous("sodium chloride"),
+  hydrate("sodium bromide", 2, turns(323.9, "anhydrous")),
+  anhydrous("sodium bromide"),
+  hydrate("sodium iodide", 2, turns(341.4, "anhydrous")),
+  anhydrous("sodium iodide"),
+  hydrate("sodium hydroxide", 1, turns(335.5, "anhydrous")),
+  anhydrous("sodium hydroxide"),
+  hydrate("potassium carbonate", 1.5),
+  anhydrous("potassium carbonate"),
+  hydrate("disodium tetraborate", 10, turns(333.9, "pentahydrate")),
+  hydrate("disodium tetraborate", 5),
+  anhydrous("disodium tetraborate"),
+  hydrate("ammonium oxalate", 1),
+  hydrate("cerium(III) sulfate", 8),
+  hydrate("cerium(III) sulfate", 2),
+  hydrate("trisodium citrate", 2),
+  hydrate("trisodium citrate", 5),
+  hydrate("monosodium L-glutamate", 1),
+];
+
+/** Hydrates and solvates of organic solutes. */
+const organicHydrates: readonly ListedForm[] = [
+  hydrate("citric acid", 1, turns(309.6, "anhydrous")),
+  anhydrous("citric acid"),
+  hydrate("oxalic acid", 2),
+  anhydrous("oxalic acid"),
+  hydrate(
+    "caffeine",
+    0.8,
+    turns(325, "form II", "measured stoichiometry about 0.8 H2O, often called monohydrate"),
+    "hydrate",
+  ),
+  polymorph("caffeine", "form II", turns(426, "form I")),
+  polymorph("caffeine", "form I"),
+  hydrate("theophylline", 1, turns(333, "anhydrous")),
+  anhydrous("theophylline", { remark: "form II" }),
+  hydrate("carbamazepine", 2),
+  polymorph("carbamazepine", "form III", turns(346, "form I", "published transitions range from 343 to 368 K")),
+  polymorph("carbamazepine", "form I"),
+  hydrate("lactose", 1, turns(366.7, "beta anhydrous", "alpha-lactose monohydrate")),
+  polymorph("lactose", "beta anhydrous"),
+  hydrate("D-glucose", 1, turns(327.9, "anhydrous")),
+  anhydrous("D-glucose", { remark: "alpha form" }),
+  hydrate("L-phenylalanine", 1, turns(310, "anhydrous", "about 37 °C")),
+  anhydrous("L-phenylalanine"),
+  hydrate("L-asparagine", 1),
+  anhydrous("L-asparagine"),
+  hydrate("DL-tartaric acid", 1),
+  hydrate("cholesterol", 1),
+  hydrate("quercetin", 2),
+  {
+    solute: "warfarin sodium",
+    form: "2-propanol solvate",
+    kind: "solvate",
+    guest: "2-propanol",
+    remark: "stoichiometry left open; solubility in George De la Rosa et al., J. Chem. Eng. Data 64 (2019) 1399",
+  },
+];
+
+/** Polymorphs; the transition is from the form stable at low to that stable at high temperature. */
+const polymorphs: readonly ListedForm[] = [
+  polymorph("paracetamol", "form I", { meltingPointK: 442, remark: "monoclinic, stable" }),
+  polymorph("paracetamol", "form II", { meltingPointK: 430, remark: "orthorhombic" }),
+  polymorph("glycine", "alpha"),
+  polymorph("glycine", "beta", { remark: "metastable" }),
+  polymorph("glycine", "gamma", turns(440, "alpha", "stable at room temperature")),
+  polymorph("L-glutamic acid", "alpha", { remark: "metastable" }),
+  polymorph("L-glutamic acid", "beta", { remark: "stable" }),
+  polymorph("sulfamerazine", "form I"),
+  polymorph("sulfamerazine", "form II", turns(325, "form I", "from solution at 51 to 54 °C")),
+  polymorph("sulfamerazine", "form V"),
+  polymorph("sulfathiazole", "form I", { meltingPointK: 474.5 }),
+  polymorph("sulfathiazole", "form II"),
+  polymorph("sulfathiazole", "form III"),
+  polymorph("sulfathiazole", "form IV"),
+  polymorph("sulfathiazole", "form V"),
+  polymorph("mefenamic acid", "form I", turns(361, "form II")),
+  polymorph("mefenamic acid", "form II"),
+  polymorph("indomethacin", "gamma", { meltingPointK: 433.5, remark: "stable" }),
+  polymorph("indomethacin", "alpha", { meltingPointK: 428 }),
+  polymorph("acetylsalicylic acid", "form I"),
+  polymorph("acetylsalicylic acid", "form II"),
+  polymorph("4-aminobenzoic acid", "alpha"),
+  polymorph("4-aminobenzoic acid", "beta", turns(287, "alpha")),
+  polymorph("anthranilic acid", "form I"),
+  polymorph("anthranilic acid", "form II"),
+  polymorph("anthranilic acid", "form III"),
+  polymorph("D-mannitol", "alpha"),
+  polymorph("D-mannitol", "beta", { remark: "stable" }),
+  polymorph("D-mannitol", "delta"),
+  polymorph("progesterone", "form 1", { meltingPointK: 402, remark: "stable" }),
+  polymorph("progesterone", "form 2", { meltingPointK: 395 }),
+  polymorph("succinic acid", "beta", turns(410, "alpha")),
+  polymorph("succinic acid", "alpha"),
+  polymorph("pyrazinamide", "alpha"),
+  polymorph("pyrazinamide", "gamma"),
+  polymorph("ammonium nitrate", "phase IV", turns(305.4, "phase III", "transition at 32 °C")),
+  polymorph("ammonium nitrate", "phase III", turns(357.4, "phase II", "transition at 84 °C")),
+  polymorph("ammonium nitrate", "phase II", turns(398.4, "phase I", "transition at 125 °C")),
+  polymorph("ammonium nitrate", "phase I"),
+  polymorph("potassium nitrate", "phase II", turns(402, "phase I")),
+  polymorph("potassium nitrate", "phase I"),
+  polymorph("calcium carbonate", "calcite", { remark: "stable" }),
+  polymorph("calcium carbonate", "aragonite"),
+  polymorph("calcium carbonate", "vaterite"),
+];
+
+/** Every form listed, in the order of the table. */
+export const listedForms: readonly ListedForm[] = [...saltHydrates, ...organicHydrates, ...polymorphs];

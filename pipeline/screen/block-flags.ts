@@ -1,0 +1,71 @@
+import type { Flag, RobustFit } from "../records/fits.ts";
+import type { OffBlock } from "./block-screen.ts";
+import { AS_READ, middle } from "./causes/compete-block.ts";
+import { decided, type Verdict } from "./causes/compete-point.ts";
+import { type ScreenInput, sourceName } from "./screen-input.ts";
+import { counted, inCelsius, offBy } from "./wording.ts";
+
+/** A lower block up to this factor could be a more stable solid; a larger one hardly. Common practice. */
+const LARGEST_FORM_RATIO = Math.log(10);
+const MORE_STABLE_FORM =
+  "Look at the solid at the end of the measurement (XRPD, Raman): the lower values may be those of a more stable form.";
+
+/** The one flag of a block that is off as a whole. */
+export function blockFlag(input: ScreenInput, block: OffBlock): Flag {
+  const fit = input.fits[block.system]!;
+  const verdict = verdictOf(block);
+  const lower = couldBeStableForm(fit, block);
+  const flag = {
+    scope: "block",
+    code: lower ? "possible-more-stable-form" : "block-off-curve",
+    severity: "blocking",
+    source: block.source,
+    system: block.system,
+    suspectedCause: verdict.cause ?? "no simple cause",
+    evidence: evidence(input, fit, block, lower),
+    lookAt: lower ? `${verdict.cause === undefined ? "" : `${verdict.lookAt} `}${MORE_STABLE_FORM}` : verdict.lookAt,
+  } as const;
+  return verdict.cause === undefined
+    ? flag
+    : { ...flag, causeDetail: verdict.detail, causeProbability: verdict.probability };
+}
+
+/** The most likely cause of an off block, its ways summed, given that the block is not sound as read. */
+function verdictOf({ readings, posterior }: OffBlock): Verdict {
+  const off = 1 - (posterior[readings.findIndex(({ key }) => key === AS_READ)] ?? 0);
+  const sums = new Map<string, number>();
+  for (const [r, { cause }] of readings.entries())
+    if (cause !== undefined) sums.set(cause, (sums.get(cause) ?? 0) + posterior[r]! / off);
+  let best: Verdict | undefined;
+  let bestShare = 0;
+  let bestSum = 0;
+  for (const [r, { cause, detail, lookAt }] of readings.entries()) {
+    if (cause === undefined) continue;
+    const sum = sums.get(cause)!;
+    if (sum < bestSum || (sum === bestSum && posterior[r]! <= bestShare)) continue;
+    bestSum = sum;
+    bestShare = posterior[r]!;
+    best = { cause, detail, lookAt, probability: sum, proposedValue: undefined };
+  }
+  return decided(best, bestSum);
+}
+
+/** A coherent lower block: every deviation alike, below by less than an order of magnitude. */
+function couldBeStableForm(fit: RobustFit, { points, offset, threshold }: OffBlock): boolean {
+  if (offset >= 0 || offset < -LARGEST_FORM_RATIO) return false;
+  return middle(points.map((point) => Math.abs(fit.deviation[point]! - offset))) < threshold;
+}
+
+function evidence(input: ScreenInput, fit: RobustFit, block: OffBlock, lower: boolean): string {
+  const deviations = block.points.map((point) => fit.points.lnValue[point]! - fit.predicted[point]!);
+  const temperatures = block.points.map((point) => fit.points.temperatureK[point]!);
+  const [low, high] = [Math.min(...temperatures), Math.max(...temperatures)];
+  const where = low === high ? `at ${inCelsius(low)}` : `from ${inCelsius(low)} to ${inCelsius(high)}`;
+  const [least, most] = [Math.min(...deviations), Math.max(...deviations)];
+  const name = sourceName(input, block.source);
+  const seen =
+    `the ${counted(block.points.length, "point")} of ${name} ${where} lie, in the middle, ${offBy(block.offset)} ` +
+    `the curve of ${counted(block.otherSources, "other source")} that agree (z = ${block.z.toFixed(1)}; ` +
+    `single points ${offBy(least)} to ${offBy(most)})`;
+  return lower ? `${seen}; a majority is no proof of stability: the stable form has the lower solubility` : seen;
+}

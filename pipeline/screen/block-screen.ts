@@ -1,0 +1,133 @@
+import { studentTSurvival } from "../numerics/distributions.ts";
+import type { RobustFit } from "../records/fits.ts";
+import type { Suspects } from "./causes/cause.ts";
+import {
+  AS_READ,
+  type BlockCase,
+  type BlockReading,
+  blockOffset,
+  blockReadings,
+  middle,
+} from "./causes/compete-block.ts";
+import { rejectionLimit } from "./false-discovery.ts";
+import { type ScreenInput, thresholdOf } from "./screen-input.ts";
+import { sourceWidePosteriors } from "./source-wide.ts";
+import { fitSources, type SystemModel } from "./system-model.ts";
+
+/** A block that is off as a whole. */
+export interface OffBlock {
+  readonly system: number;
+  readonly source: number;
+  readonly points: readonly number[];
+  /** Median deviation from the curve of the other sources, ln value, and its z. */
+  readonly offset: number;
+  readonly z: number;
+  readonly otherSources: number;
+  readonly threshold: number;
+  readonly readings: readonly BlockReading[];
+  /** Posterior probability of each reading. */
+  readonly posterior: readonly number[];
+}
+
+interface Tested extends Omit<OffBlock, "posterior"> {
+  readonly p: number;
+  readonly material: boolean;
+}
+
+/** Points of a block from which it is judged as a whole; one point alone is a point. */
+const LEAST_POINTS = 2;
+/** Other sound sources needed. */
+const LEAST_OTHERS = 2;
+/** A block is off where `as read` is less likely than this. */
+const AS_READ_BELOW = 0.5;
+
+/**
+ * Tests every block of a system with at least two other sound sources, comparing the block with the curve of those.
+ * Flagged is what passes Benjamini-Hochberg over all blocks, the material threshold in its median, and is better
+ * explained by some mistake (or a free offset) than as read.
+ */
+export function screenBlocks(
+  input: ScreenInput,
+  models: readonly [SystemModel, SystemModel],
+  suspectsOf: (system: number, source: number, rows: readonly number[]) => Suspects,
+): OffBlock[] {
+  const tested: Tested[] = [];
+  const blocksOfSource = new Int32Array(input.sourceNames.length);
+  let total = 0;
+  for (const fit of input.fits) {
+    if (fit.agreement !== "agreed" || fit.soundSources.length < LEAST_OTHERS) continue;
+    for (const [source, points] of blocksOf(fit)) {
+      const others = fit.soundSources.filter((other) => other !== source);
+      if (others.length < LEAST_OTHERS || points.length < LEAST_POINTS) continue;
+      total++;
+      blocksOfSource[source]!++;
+      const block = testBlock(input, models, suspectsOf, fit, source, points, others);
+      if (block !== undefined) tested.push(block);
+    }
+  }
+  const limit = rejectionLimit(
+    tested.map(({ p }) => p),
+    total,
+    input.settings.false_discovery_rate,
+  );
+  const posteriors = sourceWidePosteriors(tested, blocksOfSource);
+  return tested
+    .map((block, j) => ({ ...block, posterior: posteriors[j]! }))
+    .filter(({ p, material, posterior, readings }) => {
+      const asRead = readings.findIndex(({ key }) => key === AS_READ);
+      return p <= limit && material && (posterior[asRead] ?? 1) < AS_READ_BELOW;
+    });
+}
+
+/** Points of each source of a system, in order of first appearance. */
+export function blocksOf(fit: RobustFit): Map<number, number[]> {
+  const blocks = new Map<number, number[]>();
+  for (let i = 0; i < fit.points.n; i++) {
+    if (!Number.isFinite(fit.deviation[i])) continue;
+    const source = fit.points.source[i]!;
+    const block = blocks.get(source);
+    if (block) block.push(i);
+    else blocks.set(source, [i]);
+  }
+  return blocks;
+}
+
+/** A block compared with the others; undefined where it is plainly within both limits. */
+function testBlock(
+  input: ScreenInput,
+  models: readonly [SystemModel, SystemModel],
+  suspectsOf: (system: number, source: number, rows: readonly number[]) => Suspects,
+  fit: RobustFit,
+  source: number,
+  points: readonly number[],
+  others: readonly number[],
+): Tested | undefined {
+  const threshold = middle(points.map((point) => thresholdOf(input, fit.system, point)));
+  const sound = new Set(others);
+  fitSources(models[0], fit, (other) => sound.has(other));
+  const rows = points.map((point) => fit.points.row[point]!);
+  const bare = { input, models, fit, points, source, threshold };
+  const { median, sd, failing } = blockOffset(bare);
+  const material = Math.abs(median) > threshold || failing > 0.5;
+  const z = median / sd;
+  if (!material || (Math.abs(z) < 2 && failing <= 0.5)) return undefined;
+  const of: BlockCase = { ...bare, suspects: suspectsOf(fit.system, source, rows) };
+  const readings = blockReadings(of);
+  if (readings.length === 0) return undefined;
+  // A block whose points mostly fail to both sides has no offset to test: its typical point speaks for it.
+  const typical = middle(points.map((point) => Math.abs(fit.deviation[point]! / fit.deviationSd[point]!)));
+  const strongest = failing > 0.5 ? Math.max(Math.abs(z), typical) : Math.abs(z);
+  const p = 2 * studentTSurvival(strongest, Math.max(1, fit.degreesOfFreedom));
+  return {
+    system: fit.system,
+    source,
+    points,
+    offset: median,
+    z,
+    otherSources: others.length,
+    threshold,
+    readings,
+    p,
+    material,
+  };
+}

@@ -1,0 +1,57 @@
+import type { Flag, RobustFit } from "../records/fits.ts";
+import { textOf } from "../records/measurements.ts";
+import { type ScreenInput, sourceName } from "./screen-input.ts";
+import { fitSources, predict, type SystemModel } from "./system-model.ts";
+import { counted, inCelsius, listed, offBy, threeDigits } from "./wording.ts";
+
+/** One flag for every system whose sources disagree without a majority: both readings laid out, nothing set aside. */
+export function conflictFlags(input: ScreenInput, model: SystemModel): Flag[] {
+  return input.fits.flatMap((fit) => {
+    if (fit.agreement !== "conflict") return [];
+    return [
+      {
+        scope: "system",
+        code: "sources-disagree",
+        severity: "blocking",
+        system: fit.system,
+        evidence: evidence(input, fit, model),
+        lookAt:
+          "Look at basis, solid form, solvent water and temperature of both sources, or measure one point by a third " +
+          "way. The lower values could be those of a more stable form.",
+      } as const,
+    ];
+  });
+}
+
+function evidence(input: ScreenInput, fit: RobustFit, model: SystemModel): string {
+  const temperatureK = commonTemperature(fit);
+  const row = fit.points.row[0]!;
+  const unit = textOf(input.table, input.table.reportedUnit[row]!);
+  const readings = fit.camps.map((camp) => {
+    const members = new Set(camp);
+    fitSources(model, fit, (source) => members.has(source));
+    const means = camp.map((source) => predict(model, temperatureK, source).mean);
+    const mean = means.reduce((sum, value) => sum + value, 0) / means.length;
+    const points = fit.points.source.filter((source) => members.has(source)).length;
+    return { names: listed(camp.map((source) => sourceName(input, source))), points, mean };
+  });
+  const first = readings[0]!;
+  const told = readings.map(({ names, points, mean }, c) => {
+    const value = input.inReportedUnit(row, mean);
+    const reads = value === undefined ? "" : ` reads ${threeDigits(value)} ${unit}`;
+    const apart = c === 0 ? "" : `, ${offBy(mean - first.mean)} the first`;
+    return `${names} (${counted(points, "point")})${reads}${apart}`;
+  });
+  return `no majority among the sources: at ${inCelsius(temperatureK)} ${told.join("; ")}`;
+}
+
+/** Middle of the range that the first two camps share, or between their ranges, K. */
+function commonTemperature(fit: RobustFit): number {
+  const ranges = fit.camps.slice(0, 2).map((camp) => {
+    const inside = fit.points.temperatureK.filter((_, i) => camp.includes(fit.points.source[i]!));
+    return [inside.reduce((a, b) => Math.min(a, b)), inside.reduce((a, b) => Math.max(a, b))] as const;
+  });
+  const low = Math.max(...ranges.map((range) => range[0]));
+  const high = Math.min(...ranges.map((range) => range[1]));
+  return (low + high) / 2;
+}

@@ -1,0 +1,71 @@
+import type { Flag, RobustFit } from "../records/fits.ts";
+import { blockFlag } from "./block-flags.ts";
+import { screenBlocks } from "./block-screen.ts";
+import { createSuspectFinder } from "./causes/suspects.ts";
+import { conflictFlags } from "./conflicts.ts";
+import { liquidRangeFlags } from "./liquid-range.ts";
+import { pointFlag } from "./point-flags.ts";
+import { screenPoints } from "./point-screen.ts";
+import { repeatFlags } from "./repeats.ts";
+import { type ScreenInput, thresholdOf } from "./screen-input.ts";
+import { createSystemModel, type SystemModel } from "./system-model.ts";
+import { counted } from "./wording.ts";
+
+/**
+ * Everything that is off in an edition, with what was seen and what probably happened: first whole blocks, then points
+ * of the other blocks, then systems without a majority; repeats and temperatures outside the liquid range as notices.
+ * Pure and deterministic; blind to rulings.
+ *
+ * @returns flags, at most one of a code for each target
+ */
+export function screen(input: ScreenInput): Flag[] {
+  const capacity = input.fits.reduce((most, { points }) => Math.max(most, points.n), 1);
+  const models: readonly [SystemModel, SystemModel] = [createSystemModel(capacity), createSystemModel(capacity)];
+  const suspectsOf = createSuspectFinder(input);
+  const blocks = screenBlocks(input, models, suspectsOf);
+  const points = screenPoints(input, new Set(blocks.map(({ system, source }) => `${system}:${source}`)));
+  return [
+    ...conflictFlags(input, models[0]),
+    ...blocks.map((block) => blockFlag(input, block)),
+    ...points.map((off) => {
+      const { row, source } = input.fits[off.system]!.points;
+      return pointFlag(input, models, off, suspectsOf(off.system, source[off.point]!, [row[off.point]!]));
+    }),
+    ...cannotTellFlags(input, new Set(points.map(({ system }) => system))),
+    ...repeatFlags(input),
+    ...liquidRangeFlags(input),
+  ];
+}
+
+/** Deviations that look off in a system too small to say so: one notice a system, none where all looks well. */
+function cannotTellFlags(input: ScreenInput, told: ReadonlySet<number>): Flag[] {
+  return input.fits.flatMap((fit): Flag[] => {
+    if (fit.agreement !== "cannot tell" || told.has(fit.system)) return [];
+    const doubtful = doubtfulPoints(input, fit);
+    if (doubtful === 0) return [];
+    return [
+      {
+        scope: "system",
+        code: "cannot-tell",
+        severity: "notice",
+        system: fit.system,
+        evidence:
+          `${counted(doubtful, "point")} of ${fit.points.n} looks off by more than the material threshold, but too few ` +
+          "points are left to say which is wrong",
+        lookAt: "Look at the values again; more temperatures or another source would decide.",
+      },
+    ];
+  });
+}
+
+/** z from which a point of a small system is worth a notice. */
+const DOUBTFUL_Z = 4;
+
+function doubtfulPoints(input: ScreenInput, { system, points, deviation, deviationSd }: RobustFit): number {
+  let count = 0;
+  for (let i = 0; i < points.n; i++) {
+    const off = Math.abs(deviation[i]!);
+    if (off > DOUBTFUL_Z * deviationSd[i]! && off > thresholdOf(input, system, i)) count++;
+  }
+  return count;
+}

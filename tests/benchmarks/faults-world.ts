@@ -1,0 +1,314 @@
+import { hubConverter } from "../../pipeline/bases/hub-converter.ts";
+import type { Needs } from "../../pipeline/bases/needs.ts";
+import { parseTemperatureUnit } from "../../pipeline/bases/temperature.ts";
+import { parseUnit } from "../../pipeline/bases/units.ts";
+import { type RandomSource, seededRandom } from "../../pipeline/numerics/random.ts";
+import { codeOf, createMeasurementTable, type MeasurementTable } from "../../pipeline/records/measurements.ts";
+import { type System, type SystemPoints, systemPoints } from "../../pipeline/records/systems.ts";
+import type { Change, Reread, RereadRow } from "../../pipeline/screen/reread.ts";
+
+/** Invented worlds of measurements in which every fault is known. */
+export interface WorldOptions {
+  readonly seed: number;
+  readonly solutes: number;
+  /** Between-source standard deviation of ln x. */
+  readonly between: number;
+  readonly singleFaults: number;
+  readonly blockFaults: number;
+  /** Share of systems with a change of the solid phase on heating. */
+  readonly transitions: number;
+  /** Fewest and most temperatures of a block. */
+  readonly temperatures: readonly [least: number, most: number];
+  /** Largest dissolution enthalpy, kJ/mol. */
+  readonly steepest: number;
+  readonly sources: readonly [least: number, most: number];
+}
+
+export const USUAL: WorldOptions = {
+  seed: 1,
+  solutes: 25,
+  between: 0.025,
+  singleFaults: 0.04,
+  blockFaults: 0.05,
+  transitions: 0.1,
+  temperatures: [4, 10],
+  steepest: 45,
+  sources: [1, 4],
+};
+
+/** What is wrong with a row: the name of the cause, "random" for a fault that has none, "" for a clean row. */
+export interface World {
+  readonly table: MeasurementTable;
+  readonly systems: readonly System[];
+  readonly points: readonly SystemPoints[];
+  readonly sourceNames: readonly string[];
+  readonly faultOfRow: readonly string[];
+  /** `SYSTEM:SOURCE` to the fault of the whole block. */
+  readonly faultOfBlock: ReadonlyMap<string, string>;
+  /** How far the row lies from the truth at the temperature it claims, ln x, noise left out. */
+  readonly shiftOfRow: readonly number[];
+  readonly trueReported: readonly number[];
+  readonly transitionSystems: ReadonlySet<number>;
+  readonly reread: Reread;
+  readonly inReportedUnit: (row: number, lnValue: number) => number | undefined;
+}
+
+const SOLVENTS = [
+  { name: "solvent A", M: 46.07, rho: 789, boils: 351 },
+  { name: "solvent B", M: 32.04, rho: 791, boils: 337 },
+  { name: "solvent C", M: 88.11, rho: 900, boils: 350 },
+  { name: "solvent D", M: 92.14, rho: 867, boils: 383 },
+  { name: "solvent E", M: 60.1, rho: 785, boils: 355 },
+  { name: "water", M: 18.015, rho: 998, boils: 373 },
+] as const;
+const HABITS = [
+  { unit: "g/100 g solvent", temperature: "°C", sd: 0.012, u: 0.015 },
+  { unit: "mg/mL solution", temperature: "°C", sd: 0.025, u: 0.03 },
+  { unit: "mole fraction", temperature: "K", sd: 0.012, u: 0.05 },
+  { unit: "g/100 g solution", temperature: "°C", sd: 0.018, u: 0.015 },
+  { unit: "mg/mL solvent", temperature: "°C", sd: 0.03, u: 0.04 },
+  { unit: "mol/kg solvent", temperature: "°F", sd: 0.015, u: 0.05 },
+] as const;
+
+interface Solute {
+  readonly M: number;
+  readonly hydrateRatio: number | undefined;
+}
+
+/** Builds a world. */
+export function makeWorld(options: WorldOptions): World {
+  const random = seededRandom(options.seed);
+  const build = createBuilder(options.solutes * SOLVENTS.length * 60);
+  for (let s = 0; s < options.solutes; s++) {
+    const solute = { M: 120 + 300 * random.uniform(), hydrateRatio: random.uniform() < 0.3 ? 1.1 + 0.7 * random.uniform() : undefined };
+    for (const solvent of SOLVENTS) addSystem(build, options, random, s, solute, solvent);
+  }
+  return finish(build);
+}
+
+function createBuilder(capacity: number) {
+  return {
+    table: createMeasurementTable(capacity),
+    systems: [] as System[],
+    needs: [] as Needs[],
+    faultOfRow: [] as string[],
+    faultOfBlock: new Map<string, string>(),
+    shiftOfRow: [] as number[],
+    trueReported: [] as number[],
+    transitionSystems: new Set<number>(),
+    pending: [] as { row: number; kind: string }[],
+    truths: [] as ((T: number) => number)[],
+  };
+}
+type Builder = ReturnType<typeof createBuilder>;
+
+function addSystem(b: Builder, options: WorldOptions, random: RandomSource, s: number, solute: Solute, solvent: (typeof SOLVENTS)[number]): void {
+  const index = b.systems.length;
+  const slope = -(1000 * (8 + (options.steepest - 8) * random.uniform())) / (8.314 * 303);
+  const curvature = 4 * random.normal();
+  const breakK = random.uniform() < options.transitions ? 298 + 20 * random.uniform() : Number.NaN;
+  if (breakK > 0) b.transitionSystems.add(index);
+  const drop = -slope * (0.4 + 0.5 * random.uniform());
+  const level = Math.log(0.002) + random.uniform() * Math.log(150);
+  const a = level - Math.log((solute.M / solvent.M) * Math.exp(0));
+  const truth = (T: number) => {
+    const u = 303 / T - 1;
+    const bend = T > breakK ? -drop * (303 / breakK - 1 - u) : 0;
+    return Math.min(-0.4, a + slope * u + curvature * (u - Math.log1p(u)) + bend);
+  };
+  b.truths.push(truth);
+  b.needs.push(needsOf(solute, solvent));
+  const rows: number[] = [];
+  const count = options.sources[0] + random.integerBelow(options.sources[1] - options.sources[0] + 1);
+  const first = random.integerBelow(HABITS.length);
+  for (let k = 0; k < count; k++) addBlock(b, options, random, index, (first + k) % HABITS.length, solute, solvent.boils, rows);
+  const soluteName = `invented ${s + 1}`;
+  b.systems.push({
+    index,
+    id: `${soluteName} in ${solvent.name}`,
+    key: `${s} ${solvent.name}`,
+    family: `${s} ${solvent.name}`,
+    fitBasis: "ln x",
+    rows: Int32Array.from(rows),
+    identity: { solute: soluteName, solidForm: "unspecified", solvent: solvent.name, composition: "", medium: "", soluteMolarMass: solute.M, solventMolarMass: solvent.M, aqueousSalt: false },
+  });
+}
+
+function needsOf(solute: Solute, solvent: (typeof SOLVENTS)[number]): Needs {
+  const exactly = (value: number) => ({ value, standardUncertainty: 0 });
+  return {
+    soluteMolarMass: exactly(solute.M),
+    crystalMolarMass: solute.hydrateRatio === undefined ? undefined : exactly(solute.M * solute.hydrateRatio),
+    solventMolarMass: exactly(solvent.M),
+    solventDensityAt20C: exactly(solvent.rho),
+    solutionDensity: { kind: "additive volumes", apparentSoluteDensity: exactly(1200), solventDensity: exactly(solvent.rho) },
+  };
+}
+
+const BLOCK_KINDS = ["power of ten", "basis mix-up", "basis mix-up", "temperature unit", "dilution factor", "hydrate basis", "random"] as const;
+const POINT_KINDS = ["power of ten", "power of ten", "digits transposed", "digits transposed", "dilution factor", "rows shifted", "value of another solvent", "random", "random"] as const;
+const OTHER_UNIT: Readonly<Record<string, readonly string[]>> = {
+  "g/100 g solvent": ["g/100 g solution", "g/100 mL solution"],
+  "g/100 g solution": ["g/100 g solvent", "g/100 mL solution"],
+  "mg/mL solution": ["mg/mL solvent", "g/kg solvent"],
+  "mg/mL solvent": ["mg/mL solution", "g/kg solvent"],
+  "mole fraction": ["mass fraction"],
+  "mol/kg solvent": ["mol/L solution"],
+};
+
+function addBlock(b: Builder, options: WorldOptions, random: RandomSource, system: number, source: number, solute: Solute, boils: number, rows: number[]): void {
+  const habit = HABITS[source]!;
+  const n = options.temperatures[0] + random.integerBelow(options.temperatures[1] - options.temperatures[0] + 1);
+  const [low, high] = [278 + 8 * random.uniform(), Math.min(boils - 5, 313 + 25 * random.uniform())];
+  const offset = options.between * random.normal();
+  const kind = random.uniform() < options.blockFaults ? BLOCK_KINDS[random.integerBelow(BLOCK_KINDS.length)]! : "";
+  const power = [10, 0.1, 1000, 0.001, 0.01, 100][random.integerBelow(6)]!;
+  const dilution = [2, 5, 4, 20][random.integerBelow(4)]!;
+  const away = (0.2 + 0.6 * random.uniform()) * (random.uniform() < 0.5 ? -1 : 1);
+  const units = OTHER_UNIT[habit.unit]!;
+  const written = kind === "basis mix-up" ? units[random.integerBelow(units.length)]! : habit.unit;
+  const scale = habit.temperature === "°F" ? "°C" : "°F";
+  if (kind === "hydrate basis" && solute.hydrateRatio === undefined) return addBlock(b, options, random, system, source, solute, boils, rows);
+  for (let i = 0; i < n; i++) {
+    const T = Math.round(low + ((high - low) * i) / Math.max(1, n - 1)) + 0.15;
+    const claimed = kind === "temperature unit" ? parseTemperatureUnit(habit.temperature)!.toKelvin(parseTemperatureUnit(scale)!.fromKelvin(T)) : T;
+    const truth = b.truths[system]!;
+    const ln = truth(T) + offset + habit.sd * random.normal() + (kind === "random" ? away : 0);
+    const trueValue = write(b, system, habit.unit, ln, "anhydrous");
+    let value = kind === "hydrate basis" ? write(b, system, habit.unit, ln, "hydrate equivalent per total solvent") : write(b, system, written, ln, "anhydrous");
+    if (kind === "power of ten") value *= power;
+    if (kind === "dilution factor") value /= dilution;
+    const row = b.table.count++;
+    rows.push(row);
+    b.table.source[row] = source;
+    b.table.line[row] = row + 2;
+    b.table.identity[row] = system;
+    b.table.temperatureK[row] = Number(claimed.toFixed(2));
+    b.table.temperatureU[row] = 0.1;
+    b.table.reportedUnit[row] = codeOf(b.table.texts, habit.unit);
+    b.table.relativeU[row] = habit.u;
+    b.faultOfRow[row] = kind;
+    b.trueReported[row] = trueValue;
+    setValue(b, row, Number(value.toPrecision(4)));
+    if (kind !== "") b.faultOfBlock.set(`${system}:${source}`, kind);
+    else if (random.uniform() < options.singleFaults) b.pending.push({ row, kind: POINT_KINDS[random.integerBelow(POINT_KINDS.length)]! });
+  }
+}
+
+function write(b: Builder, system: number, unit: string, lnX: number, basis: "anhydrous" | "hydrate equivalent per total solvent"): number {
+  return converter(b, system, unit, basis)!.fromHub(massRatio(b.needs[system]!, Math.exp(lnX)));
+}
+
+function converter(b: Builder, system: number, unit: string, basis: Parameters<typeof hubConverter>[2]) {
+  const parsed = parseUnit(unit);
+  if (parsed.kind !== "unit") return undefined;
+  const found = hubConverter(parsed.unit, b.needs[system]!, basis);
+  return found.kind === "converter" ? found.converter : undefined;
+}
+
+const massRatio = (needs: Needs, x: number) => ((x / (1 - x)) * needs.soluteMolarMass!.value) / needs.solventMolarMass!.value;
+const moleFraction = (needs: Needs, r: number) => {
+  const ratio = (r * needs.solventMolarMass!.value) / needs.soluteMolarMass!.value;
+  return ratio / (1 + ratio);
+};
+
+function setValue(b: Builder, row: number, value: number): void {
+  const { table } = b;
+  const system = table.identity[row]!;
+  const r = converter(b, system, table.texts.texts[table.reportedUnit[row]!]!, "anhydrous")!.toHub(value);
+  table.reportedValue[row] = value;
+  table.massRatio[row] = r;
+  table.moleFraction[row] = moleFraction(b.needs[system]!, r);
+  table.massConcentration[row] = converter(b, system, "mg/mL solution", "anhydrous")!.fromHub(r);
+  if (!(r > 0)) table.state[row] = 2;
+}
+
+/** Puts the single faults in, then closes the world. */
+function finish(b: Builder): World {
+  const random = seededRandom(b.table.count);
+  for (const { row, kind } of b.pending) faultRow(b, random, row, kind);
+  const { table } = b;
+  for (let row = 0; row < table.count; row++) {
+    const x = table.moleFraction[row]!;
+    b.shiftOfRow[row] = x > 0 ? Math.log(x) - b.truths[table.identity[row]!]!(table.temperatureK[row]!) : Number.NaN;
+  }
+  return {
+    ...b,
+    points: b.systems.map((system) => systemPoints(table, system)),
+    sourceNames: HABITS.map((_, h) => `source ${h + 1}`),
+    reread: (row, change) => reread(b, row, change),
+    inReportedUnit: (row, lnValue) => {
+      const system = table.identity[row]!;
+      const unit = table.texts.texts[table.reportedUnit[row]!]!;
+      const value = write(b, system, unit, lnValue, "anhydrous");
+      return Number.isFinite(value) ? value : undefined;
+    },
+  };
+}
+
+function faultRow(b: Builder, random: RandomSource, row: number, kind: string): void {
+  const { table } = b;
+  const value = table.reportedValue[row]!;
+  const system = table.identity[row]!;
+  const put = (next: number | undefined) => {
+    if (next === undefined || !(next > 0) || next === value) return;
+    setValue(b, row, Number(next.toPrecision(4)));
+    b.faultOfRow[row] = kind;
+  };
+  if (kind === "power of ten") put(value * [10, 0.1, 100, 0.01][random.integerBelow(4)]!);
+  else if (kind === "dilution factor") put(value / [2, 5, 4, 20][random.integerBelow(4)]!);
+  else if (kind === "random") put(value * Math.exp((0.2 + 1.3 * random.uniform()) * (random.uniform() < 0.5 ? -1 : 1)));
+  else if (kind === "digits transposed") put(transposed(value));
+  else if (kind === "rows shifted") {
+    const next = row + 1;
+    if (table.identity[next] === system && table.source[next] === table.source[row] && b.faultOfRow[next] === "") {
+      const other = table.reportedValue[next]!;
+      setValue(b, next, value);
+      b.faultOfRow[next] = kind;
+      put(other);
+    }
+  } else {
+    const same = [...b.systems.keys()].filter((other) => other !== system && b.systems[other]!.identity.solute === b.systems[system]!.identity.solute && b.systems[other]!.rows.some((r) => table.source[r] === table.source[row]));
+    const other = same[random.integerBelow(same.length)];
+    if (other !== undefined) {
+      const unit = table.texts.texts[table.reportedUnit[row]!]!;
+      put(write(b, other, unit, b.truths[other]!(table.temperatureK[row]!) + 0.02 * random.normal(), "anhydrous"));
+    }
+  }
+}
+
+/** The first swap of neighbouring digits. */
+function transposed(value: number): number | undefined {
+  const digits = String(value);
+  const match = /([1-9])(\.?)(\d)/.exec(digits);
+  if (match === null || match[1] === match[3]) return undefined;
+  return Number(digits.replace(match[0], `${match[3]}${match[2]}${match[1]}`));
+}
+
+function reread(b: Builder, row: number, change: Change): RereadRow | undefined {
+  const { table } = b;
+  const own = table.identity[row]!;
+  const unit = table.texts.texts[table.reportedUnit[row]!]!;
+  const value = table.reportedValue[row]!;
+  let system = own;
+  let [number, read, T] = [value, unit, table.temperatureK[row]!];
+  let basis: "anhydrous" | "hydrate per added solvent" | "hydrate equivalent per total solvent" = "anhydrous";
+  if (change.kind === "factor") number *= change.factor;
+  else if (change.kind === "value") number = change.value;
+  else if (change.kind === "unit") read = change.unit;
+  else if (change.kind === "temperature") T = change.temperatureK;
+  else if (change.kind === "solute basis") basis = change.basis;
+  else if (change.kind === "solvent") system = change.system;
+  else {
+    const scale = HABITS[table.source[row]!]!.temperature;
+    if (scale === change.scale) return undefined;
+    T = parseTemperatureUnit(change.scale)!.toKelvin(parseTemperatureUnit(scale)!.fromKelvin(T));
+  }
+  if (basis !== "anhydrous" && b.needs[own]!.crystalMolarMass === undefined) return undefined;
+  if (change.kind === "solute basis" && basis === "anhydrous") return undefined;
+  const r = converter(b, system, read, basis)?.toHub(number);
+  if (r === undefined || !(r > 0)) return undefined;
+  const lnValue = Math.log(moleFraction(b.needs[system]!, r));
+  const reportedValue = converter(b, own, unit, "anhydrous")!.fromHub(r);
+  return Number.isFinite(lnValue) && T > 0 ? { lnValue, temperatureK: T, reportedValue } : undefined;
+}
