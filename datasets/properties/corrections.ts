@@ -55,11 +55,14 @@ export const corrections: ReadonlyMap<string, readonly Correction[]> = new Map([
   ["hexane", [drop("liquid_density", "660.6 kg/m3 at 25 °C is wrong; measured 654.9")]],
   ["acetonitrile", [drop("liquid_density", "785.7 kg/m3 at 20 °C is wrong; measured 782.0")]],
   ["dimethyl sulfoxide", [drop("liquid_density", "1101.0 kg/m3 is the value at 20 °C")]],
-  ["N-methyl-2-pyrrolidone", [drop("liquid_density", "1023 kg/m3 circulates; measured 1028.2 at 25 °C")]],
+  [
+    "N-methyl-2-pyrrolidone",
+    [put("liquid_density", 1032.9, "fit to the NIST ThermoML archive (1023 at 25 °C circulates)")],
+  ],
   ["1-hexanol", [drop("liquid_density", "813.6 kg/m3 at 20 °C is wrong")]],
   ["1-octanol", [drop("liquid_density", "826.2 kg/m3 is the value at 20 °C")]],
   ["cumene", [drop("liquid_density", "864.0 kg/m3 at 25 °C is too high; correlations give 859")]],
-  ["cyclohexanol", [drop("liquid_density", "solid at 20 °C")]],
+  ["cyclohexanol", [put("liquid_density", 951, "supercooled liquid, estimated by the correlation; solid at 20 °C")]],
   ["1-methoxy-2-propanol", [put("liquid_density", 922, `${MEMORY} (962 circulates)`)]],
   ["trifluoroacetic acid", [put("liquid_density", 1489, `${MEMORY} (1535 at 25 °C circulates)`)]],
 ]);

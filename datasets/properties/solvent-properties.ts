@@ -60,9 +60,11 @@ function classRows(solvent: ReferenceRow): Row[] {
   const name = solvent("name");
   const q3c = solvent("ich_q3c_class");
   const miscible = solvent("miscible_with_water");
-  const q3cReference = `ICH Q3C(R8), recalled and compared with public copies where possible`;
+  const adequate = q3c.endsWith("(no adequate data)") ? "; listed without adequate data" : "";
+  const q3cReference = `ICH Q3C(R8), recalled and compared with public copies where possible${adequate}`;
+  const q3cClass = q3c.replace(/ \(.*$/, "");
   return [
-    { name, property: "ich_q3c_class", value: q3c, unit: "class", reference: q3cReference },
+    { name, property: "ich_q3c_class", value: q3cClass, unit: "class", reference: q3cReference },
     ...(name === "water"
       ? []
       : [{ name, property: "miscible_with_water", value: miscible, unit: "", reference: MEMORY }]),

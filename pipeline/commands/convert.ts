@@ -38,7 +38,7 @@ function stop(
   found: string,
   more: { expected?: string; mend?: string } = {},
 ): never {
-  throw new InputError(problem(code, { file: "saltern convert", column: argument }, { found, ...more }));
+  throw new InputError(problem(code, { file: `saltern convert, ${argument}` }, { found, ...more }));
 }
 
 /** A number and the text behind it, such as `25 °C` or `31.6 g/100 g solvent`. */
@@ -130,7 +130,7 @@ export async function convert(text: string, options: ConvertOptions, terminal: T
   if (only === undefined || sources.length > 1) {
     for (const from of sources) {
       const { value: result } = convertFrom(from);
-      terminal.print(`${value} ${from.canonical} = ${result} ${target.canonical}`);
+      terminal.print(`${value} ${from.canonical} = ${Number(result.toPrecision(6))} ${target.canonical}`);
     }
     return stop("value", "open-unit", `"${rest}" can be read in ${sources.length} ways, shown above`);
   }

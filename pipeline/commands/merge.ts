@@ -1,6 +1,6 @@
 import { join } from "node:path";
 import { curate } from "../curate.ts";
-import { formatProblem } from "../problems/catalogue.ts";
+import { formatProblem, type Problem } from "../problems/catalogue.ts";
 import { safeText } from "../problems/safe-text.ts";
 import { openOutputFolder } from "../publish/output-folder.ts";
 import { countsOf, noticeOf, sourceCounts } from "../publish/tables/summary.ts";
@@ -45,9 +45,22 @@ function tellProblems(edition: Edition, out: string, terminal: Terminal): void {
   for (const notice of edition.notices.slice(0, SHOWN)) terminal.tell(`notice: ${formatProblem(notice)}`);
   if (edition.notices.length > SHOWN)
     terminal.tell(`${edition.notices.length - SHOWN} more notices in ${join(out, "summary.json")}`);
-  for (const refused of edition.refused.slice(0, SHOWN)) terminal.tell(formatProblem(refused));
-  const rest = edition.refused.length - SHOWN;
-  if (rest > 0) terminal.tell(`${rest} more refused readings in ${join(out, "refused.csv")}`);
+  const alike = new Map<string, Problem[]>();
+  for (const refused of edition.refused) {
+    const same = alike.get(alikeKey(refused));
+    if (same) same.push(refused);
+    else alike.set(alikeKey(refused), [refused]);
+  }
+  for (const [first, ...others] of [...alike.values()].slice(0, SHOWN)) {
+    terminal.tell(formatProblem(first as Problem));
+    if (others.length > 0) terminal.tell(`  and ${others.length} more like it, to line ${others.at(-1)?.place.line}`);
+  }
+  if (alike.size > SHOWN) terminal.tell(`${alike.size - SHOWN} more kinds of refusal in ${join(out, "refused.csv")}`);
+}
+
+/** What refused readings share that are told once: the file, the column and the problem, whatever the number. */
+function alikeKey({ code, place, expected }: Problem): string {
+  return [place.file, place.column, code, expected].join("\u0000");
 }
 
 /** The account for people: sources, systems, what needs a decision first, and at the end the file to open. */

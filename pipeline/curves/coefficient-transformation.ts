@@ -4,15 +4,12 @@
  * @param matrix p x p, row-major
  * @param vector p values
  */
-export function transformCoefficients(matrix: Float64Array, vector: ArrayLike<number>): Float64Array {
-  const p = vector.length;
-  const out = new Float64Array(p);
-  for (let i = 0; i < p; i++) {
+export function transformCoefficients(matrix: ArrayLike<number>, vector: ArrayLike<number>, p: number): number[] {
+  return Array.from({ length: p }, (_, i) => {
     let sum = 0;
-    for (let j = 0; j < p; j++) sum += (matrix[i * p + j] as number) * (vector[j] as number);
-    out[i] = sum;
-  }
-  return out;
+    for (let j = 0; j < p; j++) sum += matrix[i * p + j]! * vector[j]!;
+    return sum;
+  });
 }
 
 /**
@@ -20,18 +17,17 @@ export function transformCoefficients(matrix: Float64Array, vector: ArrayLike<nu
  *
  * @param matrix M, p x p, row-major
  * @param covariance C, p x p, row-major, symmetric
- * @param p number of coefficients
  */
-export function transformCovariance(matrix: Float64Array, covariance: ArrayLike<number>, p: number): Float64Array {
-  const half = new Float64Array(p * p);
+export function transformCovariance(matrix: ArrayLike<number>, covariance: ArrayLike<number>, p: number): number[] {
+  const half = new Array<number>(p * p).fill(0);
   for (let i = 0; i < p; i++)
     for (let j = 0; j < p; j++)
-      for (let k = 0; k < p; k++) half[i * p + j]! += (matrix[i * p + k] as number) * (covariance[k * p + j] as number);
-  const out = new Float64Array(p * p);
+      for (let k = 0; k < p; k++) half[i * p + j]! += matrix[i * p + k]! * covariance[k * p + j]!;
+  const out = new Array<number>(p * p).fill(0);
   for (let i = 0; i < p; i++)
     for (let j = i; j < p; j++) {
       let sum = 0;
-      for (let k = 0; k < p; k++) sum += (half[i * p + k] as number) * (matrix[j * p + k] as number);
+      for (let k = 0; k < p; k++) sum += half[i * p + k]! * matrix[j * p + k]!;
       out[i * p + j] = sum;
       out[j * p + i] = sum;
     }
@@ -44,10 +40,8 @@ export function transformCovariance(matrix: Float64Array, covariance: ArrayLike<
  * @param covariance C, p x p, row-major
  * @param row f, p values
  */
-export function quadraticForm(covariance: Float64Array, row: Float64Array): number {
-  const p = row.length;
+export function quadraticForm(covariance: ArrayLike<number>, row: ArrayLike<number>, p: number): number {
   let sum = 0;
-  for (let i = 0; i < p; i++)
-    for (let j = 0; j < p; j++) sum += (row[i] as number) * (covariance[i * p + j] as number) * (row[j] as number);
+  for (let i = 0; i < p; i++) for (let j = 0; j < p; j++) sum += row[i]! * covariance[i * p + j]! * row[j]!;
   return sum;
 }

@@ -31,44 +31,52 @@ export const MODIFIED_APELBLAT: LinearModel = {
 /** ln x = A + B/T + C/T^2. */
 export const QUADRATIC: LinearModel = { name: "quadratic in 1/T", coefficientNames: ["A", "B", "C"], ...quadratic };
 
-/** The p columns of the centred design, n values each. */
-export function designColumns(model: LinearModel, temperatureK: Float64Array, centreK: number): Float64Array[] {
-  const p = model.parameterCount;
-  const row = new Float64Array(p);
-  const columns = Array.from({ length: p }, () => new Float64Array(temperatureK.length));
-  for (let i = 0; i < temperatureK.length; i++) {
-    model.writeDesignRow(row, 0, temperatureK[i] as number, centreK);
-    for (let j = 0; j < p; j++) (columns[j] as Float64Array)[i] = row[j] as number;
+/** Scratch of the functions below, none of which calls another. */
+const row = new Float64Array(3);
+
+/**
+ * Writes the p columns of the centred design, n values each, over the first values of `columns`.
+ *
+ * @param temperatureK T of at least n points, K
+ * @param centreK T0, K
+ */
+export function setDesignColumns(
+  columns: readonly Float64Array[],
+  model: LinearModel,
+  temperatureK: Float64Array,
+  n: number,
+  centreK: number,
+): void {
+  for (let i = 0; i < n; i++) {
+    model.writeDesignRow(row, 0, temperatureK[i]!, centreK);
+    for (let j = 0; j < model.parameterCount; j++) columns[j]![i] = row[j]!;
   }
-  return columns;
 }
 
 /** ln value at T (K) from centred coefficients: keeps all digits where A, B/T and C ln T nearly cancel. */
 export function centredValue(
   model: LinearModel,
-  coefficients: Float64Array,
+  coefficients: ArrayLike<number>,
   temperatureK: number,
   centreK: number,
 ): number {
-  const row = new Float64Array(model.parameterCount);
   model.writeDesignRow(row, 0, temperatureK, centreK);
-  return product(row, coefficients);
+  return product(coefficients, model.parameterCount);
 }
 
 /** d ln value/dT (1/K) at T (K) from centred coefficients. */
 export function centredSlope(
   model: LinearModel,
-  coefficients: Float64Array,
+  coefficients: ArrayLike<number>,
   temperatureK: number,
   centreK: number,
 ): number {
-  const row = new Float64Array(model.parameterCount);
   model.writeSlopeRow(row, 0, temperatureK, centreK);
-  return product(row, coefficients);
+  return product(coefficients, model.parameterCount);
 }
 
-function product(row: Float64Array, coefficients: Float64Array): number {
+function product(coefficients: ArrayLike<number>, p: number): number {
   let sum = 0;
-  for (let j = 0; j < row.length; j++) sum += (row[j] as number) * (coefficients[j] as number);
+  for (let j = 0; j < p; j++) sum += row[j]! * coefficients[j]!;
   return sum;
 }

@@ -1,4 +1,5 @@
-import type { Candidate, CommonFit, LinearFit } from "./candidate.ts";
+import { centredValue } from "../curves/linear-models.ts";
+import type { Candidate } from "./candidate.ts";
 import { curveVariances, type Variance } from "./curve-variances.ts";
 import { limitFactor } from "./limit-factor.ts";
 import type { CurveContext, FittedModels } from "./system-models.ts";
@@ -18,20 +19,20 @@ export interface CurveLimits {
  * the published curve and that model, which stands for the bias of the choice.
  */
 export function curveLimits(fitted: FittedModels, chosen: Candidate, { scales }: CurveContext): CurveLimits {
-  const { points, common, scale, largest, betweenDegreesOfFreedom } = fitted;
-  const variances = curveVariances(largest, points.centreK, {
+  const { points, scale, largest, betweenDegreesOfFreedom } = fitted;
+  const { model, coefficients, centreK } = largest;
+  const variances = curveVariances(largest, {
     withinDegreesOfFreedom: scale.degreesOfFreedom,
     betweenVariance: scale.betweenVariance,
     betweenDegreesOfFreedom,
-    newSourceVariance: scale.varianceFactor * newSourceVariance(common, scales.within),
+    newSourceVariance: scale.varianceFactor * newSourceVariance(fitted, scales.within),
     oneSource: points.sources.length === 1,
   });
-  const largestValue = lnValueOf(largest, points.centreK);
   const half = (variance: Variance, bias: number): number =>
     limitFactor(variance.degreesOfFreedom) * Math.sqrt(variance.value + bias);
   return {
     halfWidths: (T) => {
-      const bias = (chosen.lnValue(T) - largestValue(T)) ** 2;
+      const bias = (chosen.lnValue(T) - centredValue(model, coefficients, T, centreK)) ** 2;
       return {
         curve: half(variances.ofCurve(T), bias),
         newMeasurement: half(variances.ofNewMeasurement(T), bias),
@@ -41,31 +42,17 @@ export function curveLimits(fitted: FittedModels, chosen: Candidate, { scales }:
   };
 }
 
-function lnValueOf({ model, coefficients }: LinearFit, centreK: number): (temperatureK: number) => number {
-  const row = new Float64Array(model.parameterCount);
-  return (T) => {
-    model.writeDesignRow(row, 0, T, centreK);
-    let sum = 0;
-    for (let j = 0; j < row.length; j++) sum += (row[j] as number) * (coefficients[j] as number);
-    return sum;
-  };
-}
-
 /**
  * Expected variance of a measurement by a source not yet seen: the mean over the edition's sources, raised as those of
  * this system are (a value near a detection limit scatters more for everybody).
  */
-function newSourceVariance({ start, within, points }: CommonFit, pooledWithin: Float64Array): number {
+function newSourceVariance({ points, common, expectedVariance }: FittedModels, pooledWithin: Float64Array): number {
   let edition = 0;
   for (const sd of pooledWithin) edition += (sd * sd) / pooledWithin.length;
   let shape = 0;
-  for (let i = 0; i < points.n; i++) {
-    const pooled = pooledWithin[points.sources[points.block[i] as number] as number] as number;
-    shape += (within[points.block[i] as number] as number) ** 2 / (pooled * pooled) / points.n;
-  }
+  points.sources.forEach((source, b) => {
+    shape += (common.within[b]! / pooledWithin[source]!) ** 2 / points.sources.length;
+  });
   const raised = edition * shape;
-  if (raised > 0 && raised < Number.POSITIVE_INFINITY) return raised;
-  let mean = 0;
-  for (const variance of start.variance) mean += variance / points.n;
-  return mean;
+  return raised > 0 && raised < Number.POSITIVE_INFINITY ? raised : expectedVariance;
 }

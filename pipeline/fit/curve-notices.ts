@@ -44,8 +44,9 @@ function aboutRicherModels({ points }: FittedModels): string[] {
 }
 
 function aboutHeatCapacity(chosen: Candidate): string[] {
-  const C = chosen.published.values[2] as number;
-  if (chosen.model !== "modified Apelblat" || Math.abs(C) <= largestUsualC) return [];
+  if (chosen.model !== "modified Apelblat") return [];
+  const C = chosen.published().values[2]!;
+  if (Math.abs(C) <= largestUsualC) return [];
   return [
     `|C| = ${Math.abs(C).toFixed(1)} is above ${largestUsualC}: a bad point or two solid phases bend a curve like this`,
   ];

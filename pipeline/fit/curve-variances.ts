@@ -1,6 +1,5 @@
 import { quadraticForm } from "../curves/coefficient-transformation.ts";
 import type { LinearFit } from "./candidate.ts";
-import { withinPart } from "./generalised-least-squares.ts";
 
 /** Where the variance of a limit comes from. */
 export interface LimitScales {
@@ -36,34 +35,29 @@ export interface CurveVariances {
   readonly ofSlope: (temperatureK: number) => Variance;
 }
 
-/**
- * @param largest fit of the largest admissible model: the limits rest on it whatever model is published
- * @param centreK T0 of its basis, K
- */
-export function curveVariances(largest: LinearFit, centreK: number, scales: LimitScales): CurveVariances {
-  const { model, covariance, columns, K } = largest;
-  const within = withinPart(K, columns, covariance);
-  const row = new Float64Array(model.parameterCount);
+/** @param largest fit of the model that the limits rest on, whatever model is published */
+export function curveVariances(largest: LinearFit, scales: LimitScales): CurveVariances {
+  const { model, covariance, withinPart, centreK } = largest;
+  const p = model.parameterCount;
+  const row = new Float64Array(p);
   const offset = scales.oneSource ? scales.betweenVariance : 0;
-  const parts = (): { within: number; between: number } => {
-    const ofScatter = quadraticForm(within, row);
-    return { within: ofScatter, between: Math.max(0, quadraticForm(covariance, row) - ofScatter) };
+  const sum = (moreWithin: number, moreBetween: number): Variance => {
+    const within = quadraticForm(withinPart, row, p);
+    const between = Math.max(0, quadraticForm(covariance, row, p) - within);
+    return sumOfParts(within + moreWithin, between + moreBetween, scales);
   };
   return {
     ofCurve: (T) => {
       model.writeDesignRow(row, 0, T, centreK);
-      const { within: w, between: b } = parts();
-      return sumOfParts(w, b + offset, scales);
+      return sum(0, offset);
     },
     ofNewMeasurement: (T) => {
       model.writeDesignRow(row, 0, T, centreK);
-      const { within: w, between: b } = parts();
-      return sumOfParts(w + scales.newSourceVariance, b + offset + scales.betweenVariance, scales);
+      return sum(scales.newSourceVariance, offset + scales.betweenVariance);
     },
     ofSlope: (T) => {
       model.writeSlopeRow(row, 0, T, centreK);
-      const { within: w, between: b } = parts();
-      return sumOfParts(w, b, scales);
+      return sum(0, 0);
     },
   };
 }

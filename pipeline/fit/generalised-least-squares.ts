@@ -1,13 +1,12 @@
-import { leastSquares } from "../numerics/least-squares.ts";
+import { leastSquaresCovariance, leastSquaresInto } from "../numerics/least-squares.ts";
+import type { FitWorkspace } from "./fit-workspace.ts";
 import { inverseDiagonal, type RandomIntercept, solve, whiten } from "./random-intercept.ts";
 
 /** A linear model fitted under the covariance K of a random offset per source. */
 export interface GeneralisedFit {
-  readonly coefficients: Float64Array;
+  readonly coefficients: readonly number[];
   /** (F' K^-1 F)^-1, p x p, row-major: the covariance of the coefficients where K is the true covariance. */
-  readonly covariance: Float64Array;
-  /** y - F b. */
-  readonly residuals: Float64Array;
+  readonly covariance: readonly number[];
   /** r' K^-1 r. */
   readonly residualSumOfSquares: number;
 }
@@ -15,129 +14,106 @@ export interface GeneralisedFit {
 /**
  * Generalised least squares: minimises (y - F b)' K^-1 (y - F b) by QR of the whitened design.
  *
- * @param K covariance of the points
- * @param columns the p columns of F, n values each
- * @param y response, n values
+ * Takes the p columns of F from `ws.columns` and y from `response`; leaves y - F b in `ws.residuals` and K^-1 F in
+ * `ws.solvedDesign`.
  * @param lastSd standard deviation about 0 that the last coefficient is known to have before the data (Infinity: none);
  *   it counts as one more observation, of 0, whose square joins the residual sum of squares
  * @returns undefined where the columns are collinear
  */
 export function generalisedLeastSquares(
+  ws: FitWorkspace,
   K: RandomIntercept,
-  columns: readonly Float64Array[],
-  y: Float64Array,
-  lastSd = Number.POSITIVE_INFINITY,
+  response: Float64Array,
+  p: number,
+  lastSd: number,
 ): GeneralisedFit | undefined {
-  const n = y.length;
-  const p = columns.length;
-  const rows = n + (lastSd < Number.POSITIVE_INFINITY ? 1 : 0);
+  const { columns, design, whitened, residuals, leastSquares: ls } = ws;
+  const n = K.n;
+  const known = lastSd < Number.POSITIVE_INFINITY;
+  const rows = n + (known ? 1 : 0);
   if (rows < p) return undefined;
-  const sums = new Float64Array(K.precision.length);
-  const design = new Float64Array(rows * p);
-  const response = new Float64Array(rows);
-  design[rows * p - 1] = 1 / lastSd;
-  for (let j = 0; j < p; j++) whiten(K, columns[j] as Float64Array, sums, design, j, p);
-  whiten(K, y, sums, response, 0, 1);
-  const fit = leastSquares(design, response, rows, p);
-  if (fit.rank < p) return undefined;
-  return {
-    coefficients: fit.coefficients,
-    covariance: fit.unscaledCovariance,
-    residuals: residualsOf(columns, fit.coefficients, y),
-    residualSumOfSquares: fit.residualSumOfSquares,
-  };
-}
-
-/** y - F b. */
-export function residualsOf(
-  columns: readonly Float64Array[],
-  coefficients: Float64Array,
-  y: Float64Array,
-): Float64Array {
-  const out = Float64Array.from(y);
-  for (let j = 0; j < columns.length; j++) {
-    const column = columns[j] as Float64Array;
-    const b = coefficients[j] as number;
-    for (let i = 0; i < out.length; i++) out[i]! -= b * (column[i] as number);
+  design.fill(0, n * p, rows * p);
+  whitened[n] = 0;
+  for (let j = 0; j < p; j++) whiten(K, columns[j]!, design, j, p);
+  whiten(K, response, whitened, 0, 1);
+  if (known) design[rows * p - 1] = 1 / lastSd;
+  if (leastSquaresInto(ls, design, whitened, rows, p) < p) return undefined;
+  let residualSumOfSquares = 0;
+  for (let i = 0; i < rows; i++) residualSumOfSquares += ls.residuals[i]! * ls.residuals[i]!;
+  const coefficients = firstOf(ls.coefficients, p);
+  const covariance = firstOf(leastSquaresCovariance(ls), p * p);
+  for (let i = 0; i < n; i++) {
+    let residual = response[i]!;
+    for (let j = 0; j < p; j++) residual -= columns[j]![i]! * coefficients[j]!;
+    residuals[i] = residual;
   }
-  return out;
+  for (let j = 0; j < p; j++) solve(K, columns[j]!, ws.solvedDesign, j, p);
+  return { coefficients, covariance, residualSumOfSquares };
 }
 
-/** Rows of K^-1 F, n x p, row-major. */
-export function solvedDesign(K: RandomIntercept, columns: readonly Float64Array[]): Float64Array {
-  const p = columns.length;
-  const sums = new Float64Array(K.precision.length);
-  const out = new Float64Array(K.variance.length * p);
-  for (let j = 0; j < p; j++) solve(K, columns[j] as Float64Array, sums, out, j, p);
-  return out;
+/** The first values of a buffer as a list of their own, short enough for a plain array to be the faster choice. */
+function firstOf(buffer: Float64Array, count: number): number[] {
+  const values: number[] = [];
+  for (let i = 0; i < count; i++) values.push(buffer[i]!);
+  return values;
 }
 
 /**
- * Root mean square leave-one-out residual, in closed form: (P y)_i / P_ii with P = K^-1 - K^-1 F C F' K^-1.
+ * Root mean square leave-one-out residual of the fit just made, in closed form: (P y)_i / P_ii with
+ * P = K^-1 - K^-1 F C F' K^-1.
  *
  * Points without offsets reduce it to the usual e_i / (1 - h_ii).
- * @param residuals y - F b
  * @returns Infinity where a point alone decides a coefficient, so that leaving it out leaves no fit
  */
-export function leaveOneOut(
-  K: RandomIntercept,
-  columns: readonly Float64Array[],
-  covariance: Float64Array,
-  residuals: Float64Array,
-): number {
-  const n = residuals.length;
-  const p = columns.length;
-  const rows = solvedDesign(K, columns);
-  const solvedResiduals = new Float64Array(n);
-  solve(K, residuals, new Float64Array(K.precision.length), solvedResiduals, 0, 1);
+export function leaveOneOut(ws: FitWorkspace, K: RandomIntercept, covariance: readonly number[], p: number): number {
+  const { solvedDesign, solvedResiduals } = ws;
+  const n = K.n;
+  solve(K, ws.residuals, solvedResiduals, 0, 1);
   let sum = 0;
   for (let i = 0; i < n; i++) {
     const own = inverseDiagonal(K, i);
-    const left = own - rowForm(covariance, rows, i * p, p);
+    const left = own - rowForm(covariance, solvedDesign, i * p, p);
     if (!(left > 1e-10 * own)) return Number.POSITIVE_INFINITY;
-    sum += ((solvedResiduals[i] as number) / left) ** 2;
+    sum += (solvedResiduals[i]! / left) ** 2;
   }
   return Math.sqrt(sum / n);
 }
 
 /**
- * Part of the covariance of the coefficients that comes from scatter within sources: C F' K^-1 diag(v) K^-1 F C.
+ * Part of the covariance of the fit just made that comes from scatter within sources: C F' K^-1 diag(v) K^-1 F C.
  *
- * The remainder, covariance less this, comes from the offsets between sources.
+ * The remainder, covariance less this, comes from the offsets between sources and from what was known before the data.
  */
-export function withinPart(K: RandomIntercept, columns: readonly Float64Array[], covariance: Float64Array) {
-  const p = columns.length;
-  const rows = solvedDesign(K, columns);
-  const middle = new Float64Array(p * p);
-  for (let i = 0; i < K.variance.length; i++)
+export function withinPart(ws: FitWorkspace, K: RandomIntercept, C: readonly number[], p: number): number[] {
+  const rows = ws.solvedDesign;
+  const middle = zeros(p * p);
+  for (let i = 0; i < K.n; i++)
     for (let j = 0; j < p; j++) {
-      const scaled = (K.variance[i] as number) * (rows[i * p + j] as number);
-      for (let k = 0; k < p; k++) middle[j * p + k]! += scaled * (rows[i * p + k] as number);
+      const scaled = K.variance[i]! * rows[i * p + j]!;
+      for (let k = 0; k < p; k++) middle[j * p + k]! += scaled * rows[i * p + k]!;
     }
-  return sandwich(covariance, middle, p);
+  return product(product(C, middle, p), C, p);
 }
 
-/** C M C for symmetric p x p matrices, row-major. */
-function sandwich(C: Float64Array, M: Float64Array, p: number): Float64Array {
-  const half = new Float64Array(p * p);
-  const out = new Float64Array(p * p);
-  multiply(C, M, half, p);
-  multiply(half, C, out, p);
+function zeros(count: number): number[] {
+  const values: number[] = [];
+  for (let i = 0; i < count; i++) values.push(0);
+  return values;
+}
+
+function product(left: readonly number[], right: readonly number[], p: number): number[] {
+  const out = zeros(p * p);
+  for (let i = 0; i < p; i++)
+    for (let j = 0; j < p; j++) for (let k = 0; k < p; k++) out[i * p + j]! += left[i * p + k]! * right[k * p + j]!;
   return out;
 }
 
-function multiply(left: Float64Array, right: Float64Array, out: Float64Array, p: number): void {
-  for (let i = 0; i < p; i++)
-    for (let j = 0; j < p; j++) {
-      let sum = 0;
-      for (let k = 0; k < p; k++) sum += (left[i * p + k] as number) * (right[k * p + j] as number);
-      out[i * p + j] = sum;
-    }
-}
-
-function rowForm(C: Float64Array, rows: Float64Array, at: number, p: number): number {
+function rowForm(C: readonly number[], rows: Float64Array, at: number, p: number): number {
   let sum = 0;
-  for (let j = 0; j < p; j++)
-    for (let k = 0; k < p; k++) sum += (rows[at + j] as number) * (C[j * p + k] as number) * (rows[at + k] as number);
+  for (let j = 0; j < p; j++) {
+    let product = 0;
+    for (let k = 0; k < p; k++) product += C[j * p + k]! * rows[at + k]!;
+    sum += rows[at + j]! * product;
+  }
   return sum;
 }

@@ -1,18 +1,12 @@
 import type { SystemPoints } from "../records/systems.ts";
+import type { FitWorkspace } from "./fit-workspace.ts";
 
-/** The points a curve is fitted to: parallel arrays, in row order, sources numbered 0 to nBlocks - 1. */
+/**
+ * What the kept points of a system cover. The points themselves stand in the workspace: T, u(T), ln value, u(ln value),
+ * noise and source of n points, in row order, sources numbered 0 and up.
+ */
 export interface KeptPoints {
   readonly n: number;
-  /** T, K, and its standard uncertainty, K. */
-  readonly temperatureK: Float64Array;
-  readonly temperatureU: Float64Array;
-  /** ln x or ln r, and its standard uncertainty without the part from T. */
-  readonly lnValue: Float64Array;
-  readonly lnU: Float64Array;
-  /** Scatter within its source that the screening fit assumed, SD of ln value; NaN where not stated. */
-  readonly noiseSd: Float64Array;
-  /** Which source: position in `sources`. */
-  readonly block: Int32Array;
   /** Positions of the sources in the edition's list, in order of first row. */
   readonly sources: readonly number[];
   /** Temperatures more than {@link sameTemperatureK} apart; 1 where all lie within {@link oneTemperatureSpanK}. */
@@ -21,7 +15,7 @@ export interface KeptPoints {
   readonly highK: number;
   /** Harmonic mean temperature T0, K: centre of the basis. */
   readonly centreK: number;
-  /** Points left out because T or ln value is no finite number, or their uncertainty is infinite. */
+  /** Points left out because T or ln value is no finite number, or an uncertainty is infinite. */
   readonly unusable: number;
 }
 
@@ -35,85 +29,76 @@ export const oneTemperatureSpanK = 2;
 const UNSTATED_U = 0.05;
 
 /**
- * Collects the kept points of a system. Never throws: points that no fit can use are counted in `unusable`.
+ * Loads the kept points of a system into the workspace. Never throws: points that no fit can use are counted.
  *
  * @param points the system's points
  * @param kept 1 = stays in the published curve, by point
  * @param noiseSd scatter within its source that the screening fit assumed for each point, SD of ln value
  */
-export function keptPoints(points: SystemPoints, kept: Uint8Array, noiseSd?: Float64Array): KeptPoints {
-  const chosen: number[] = [];
+export function loadKeptPoints(
+  ws: FitWorkspace,
+  points: SystemPoints,
+  kept: Uint8Array,
+  noiseSd: Float64Array | undefined,
+): KeptPoints {
+  const sources: number[] = [];
+  let n = 0;
   let unusable = 0;
+  let reciprocals = 0;
   for (let i = 0; i < points.n; i++) {
     if (kept[i] !== 1) continue;
-    if (usable(points, i)) chosen.push(i);
-    else unusable++;
+    if (!usable(points, i)) {
+      unusable++;
+      continue;
+    }
+    const uT = points.temperatureU[i]!;
+    const u = points.lnU[i]!;
+    ws.temperatureK[n] = points.temperatureK[i]!;
+    ws.temperatureU[n] = Math.max(0, Number.isNaN(uT) ? 0 : uT);
+    ws.lnValue[n] = points.lnValue[i]!;
+    ws.lnU[n] = u > 0 ? u : UNSTATED_U;
+    ws.noiseSd[n] = noiseSd === undefined ? Number.NaN : noiseSd[i]!;
+    ws.block[n] = numberOf(sources, points.source[i]!);
+    reciprocals += 1 / points.temperatureK[i]!;
+    n++;
   }
-  const n = chosen.length;
-  const take = (column: Float64Array): Float64Array => {
-    const out = new Float64Array(n);
-    for (let i = 0; i < n; i++) out[i] = column[chosen[i] as number] as number;
-    return out;
-  };
-  const temperatureK = take(points.temperatureK);
-  const temperatureU = take(points.temperatureU);
-  const lnU = take(points.lnU);
-  for (let i = 0; i < n; i++) {
-    if (!((temperatureU[i] as number) > 0)) temperatureU[i] = 0;
-    if (!((lnU[i] as number) > 0)) lnU[i] = UNSTATED_U;
-  }
-  const { block, sources } = numberSources(points.source, chosen);
-  return {
-    ...{ n, temperatureK, temperatureU, lnU, block, sources, unusable },
-    lnValue: take(points.lnValue),
-    noiseSd: noiseSd === undefined ? new Float64Array(n).fill(Number.NaN) : take(noiseSd),
-    ...temperatureCover(temperatureK),
-  };
+  const cover = temperatureCover(ws, n);
+  // Rounding must not carry the mean of equal temperatures past them.
+  const centreK = Math.min(cover.highK, Math.max(cover.lowK, n / reciprocals));
+  const { distinctTemperatures, lowK, highK } = cover;
+  return { n, sources, distinctTemperatures, lowK, highK, centreK, unusable };
 }
 
 function usable(points: SystemPoints, i: number): boolean {
-  const T = points.temperatureK[i] as number;
+  const T = points.temperatureK[i]!;
   return (
     T > 0 &&
     T < Number.POSITIVE_INFINITY &&
-    Number.isFinite(points.lnValue[i]) &&
-    points.lnU[i] !== Number.POSITIVE_INFINITY &&
-    points.temperatureU[i] !== Number.POSITIVE_INFINITY
+    Number.isFinite(points.lnValue[i]!) &&
+    points.lnU[i]! !== Number.POSITIVE_INFINITY &&
+    points.temperatureU[i]! !== Number.POSITIVE_INFINITY
   );
 }
 
-function numberSources(source: Int32Array, chosen: readonly number[]): { block: Int32Array; sources: number[] } {
-  const block = new Int32Array(chosen.length);
-  const sources: number[] = [];
-  const numbers = new Map<number, number>();
-  for (let i = 0; i < chosen.length; i++) {
-    const position = source[chosen[i] as number] as number;
-    let number = numbers.get(position);
-    if (number === undefined) {
-      number = sources.length;
-      sources.push(position);
-      numbers.set(position, number);
-    }
-    block[i] = number;
-  }
-  return { block, sources };
+/** Number of a source among those met so far; rows of one source mostly follow each other. */
+function numberOf(sources: number[], source: number): number {
+  const known = sources.lastIndexOf(source);
+  return known >= 0 ? known : sources.push(source) - 1;
 }
 
-function temperatureCover(temperatureK: Float64Array) {
-  const sorted = Float64Array.from(temperatureK).sort();
+function temperatureCover({ temperatureK, fitted: sorted }: FitWorkspace, n: number) {
+  if (n === 0) return { distinctTemperatures: 0, lowK: Number.NaN, highK: Number.NaN };
+  for (let i = 0; i < n; i++) sorted[i] = temperatureK[i]!;
+  sorted.subarray(0, n).sort();
+  const lowK = sorted[0]!;
+  const highK = sorted[n - 1]!;
+  if (highK - lowK < oneTemperatureSpanK) return { distinctTemperatures: 1, lowK, highK };
   let distinctTemperatures = 0;
   let last = Number.NEGATIVE_INFINITY;
-  let reciprocals = 0;
-  for (const T of sorted) {
-    reciprocals += 1 / T;
-    if (T - last <= sameTemperatureK) continue;
+  for (let i = 0; i < n; i++) {
+    if (sorted[i]! - last <= sameTemperatureK) continue;
     distinctTemperatures++;
-    last = T;
+    last = sorted[i]!;
   }
-  const lowK = sorted[0] ?? Number.NaN;
-  const highK = sorted.at(-1) ?? Number.NaN;
-  if (highK - lowK < oneTemperatureSpanK) distinctTemperatures = 1;
-  // Rounding must not carry the mean of equal temperatures past them.
-  const centreK = Math.min(highK, Math.max(lowK, sorted.length / reciprocals));
-  return { distinctTemperatures, lowK, highK, centreK };
+  return { distinctTemperatures, lowK, highK };
 }

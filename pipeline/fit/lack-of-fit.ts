@@ -1,12 +1,12 @@
 import type { RobustWorkspace } from "./robust-workspace.ts";
 
-/** How near in temperature another source's point must be to bear witness, K. */
-const NEAR_K = 5;
+/** How near in temperature another source's point must be to bear witness, and to speak against, K. */
+const [WITNESS_K, CONTRADICTION_K] = [15, 5];
 
 /**
- * Agreement is lack of fit: where the nearest point of every other sound source near the temperature deviates to the
- * same side by at least half as much, the curve is wrong and not the point. Returns the deviation they share (ln
- * value), or 0 where nobody is near or anybody disagrees.
+ * Agreement is lack of fit: where the nearest points of the other sound sources deviate to the same side by at least
+ * half as much, the curve is wrong and not the point. A source with a point close by that does not deviate speaks
+ * against it. Returns the deviation they share (ln value), or 0 where nobody is near or anybody disagrees.
  */
 export function sharedDeviation(ws: RobustWorkspace, k: number): number {
   const own = ws.deviation[k]!;
@@ -16,15 +16,15 @@ export function sharedDeviation(ws: RobustWorkspace, k: number): number {
     const j = nearest(ws, g, ws.temperatureK[k]!);
     if (j < 0) continue;
     const other = ws.deviation[j]!;
-    if (other * own <= 0 || Math.abs(other) < Math.abs(own) / 2) return 0;
-    shared = Math.min(shared, Math.abs(other));
+    if (other * own > 0 && Math.abs(other) >= Math.abs(own) / 2) shared = Math.min(shared, Math.abs(other));
+    else if (Math.abs(ws.temperatureK[j]! - ws.temperatureK[k]!) <= CONTRADICTION_K) return 0;
   }
   return shared === Number.POSITIVE_INFINITY ? 0 : shared;
 }
 
 function nearest(ws: RobustWorkspace, g: number, temperatureK: number): number {
   let best = -1;
-  let bestGap = NEAR_K;
+  let bestGap = WITNESS_K;
   for (let j = ws.groupStart[g]!; j < ws.groupStart[g + 1]!; j++) {
     const gap = Math.abs(ws.temperatureK[j]! - temperatureK);
     if (ws.usable[j] === 0 || gap > bestGap) continue;

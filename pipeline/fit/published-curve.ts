@@ -3,7 +3,8 @@ import type { Curve, NoCurve } from "../records/fits.ts";
 import type { Candidate } from "./candidate.ts";
 import { curveLimits } from "./curve-limits.ts";
 import { curveNotices } from "./curve-notices.ts";
-import { type KeptPoints, keptPoints } from "./kept-points.ts";
+import { type FitWorkspace, fitWorkspace } from "./fit-workspace.ts";
+import { type KeptPoints, loadKeptPoints } from "./kept-points.ts";
 import { finiteOrBlank } from "./model-choice.ts";
 import {
   type CurveContext,
@@ -32,14 +33,15 @@ export function publishedCurve(
   const system = subject.system.index;
   if (screened.agreement === "conflict")
     return { system, reason: "the sources disagree and none of the readings has a majority" };
-  const points = keptPoints(screened.points, screened.kept, screened.noiseSd);
+  const ws = fitWorkspace(screened.points.n);
+  const points = loadKeptPoints(ws, screened.points, screened.kept, screened.noiseSd);
   if (points.n === 0) return { system, reason: noPoints(screened, points.unusable) };
-  const fitted = fitModels(points, screened, subject, context);
+  const fitted = fitModels(ws, points, screened, subject, context);
   if (fitted === undefined)
     return { system, reason: `${points.n} kept points do not determine a curve: the fit is collinear` };
   const { chosen, runnersUp } = fitted.choice;
   if (chosen === undefined) return { system, reason: runnersUp.map(({ model, why }) => `${model} ${why}`).join("; ") };
-  return curveOf(fitted, chosen, subject, context);
+  return curveOf(ws, fitted, chosen, subject, context);
 }
 
 /** True if the outcome is a curve. */
@@ -54,13 +56,20 @@ function noPoints(screened: ScreenedPoints, unusable: number): string {
   return `none of the ${screened.points.n} points is kept`;
 }
 
-function curveOf(fitted: FittedModels, chosen: Candidate, subject: CurveSubject, context: CurveContext): Curve {
+function curveOf(
+  ws: FitWorkspace,
+  fitted: FittedModels,
+  chosen: Candidate,
+  subject: CurveSubject,
+  context: CurveContext,
+): Curve {
   const { points, scale, choice } = fitted;
   const { system, branch } = subject;
   const limits = curveLimits(fitted, chosen, context);
   const range = [points.lowK, points.highK] as const;
-  const { names, values, covariance } = chosen.published;
+  const { names, values, covariance } = chosen.published();
   const p = names.length;
+  const { rmsd, ardPercent } = deviations(ws, chosen, points.n);
   return {
     curveId: `${system.id}-${branch}`,
     system: system.index,
@@ -72,13 +81,13 @@ function curveOf(fitted: FittedModels, chosen: Candidate, subject: CurveSubject,
       value: values[j] as number,
       standardUncertainty: Math.sqrt(covariance[j * p + j] as number),
     })),
-    covariance: Array.from(covariance),
+    covariance,
     temperatureRangeK: range,
     n: points.n,
     nSources: points.sources.length,
     nLaboratories: countLaboratories(points, context.laboratories),
-    rmsd: rootMeanSquare(chosen.residuals),
-    ardPercent: averageRelativeDeviation(chosen.residuals),
+    rmsd,
+    ardPercent,
     withinSd: ownWithinSd(fitted, chosen.parameterCount),
     betweenSd: Math.sqrt(scale.betweenVariance),
     betweenDegreesOfFreedom: fitted.betweenDegreesOfFreedom,
@@ -109,27 +118,26 @@ function countLaboratories(points: KeptPoints, laboratories: readonly string[]):
   return stated.size + unstated;
 }
 
-function rootMeanSquare(residuals: Float64Array): number {
-  let sum = 0;
-  for (const residual of residuals) sum += residual * residual;
-  return Math.sqrt(sum / residuals.length);
-}
-
-/** 100/n times the sum of |x - x_calc|/x, percent. */
-function averageRelativeDeviation(residuals: Float64Array): number {
-  let sum = 0;
-  for (const residual of residuals) sum += Math.abs(Math.expm1(-residual));
-  return (100 * sum) / residuals.length;
+/**
+ * How far the kept points lie from the curve: root mean square deviation of ln value, and average relative deviation,
+ * 100/n times the sum of |x - x_calc|/x, percent.
+ */
+function deviations({ temperatureK, lnValue }: FitWorkspace, chosen: Candidate, n: number) {
+  let [squares, relative] = [0, 0];
+  for (let i = 0; i < n; i++) {
+    const residual = lnValue[i]! - chosen.lnValue(temperatureK[i]!);
+    squares += residual * residual;
+    relative += Math.abs(Math.expm1(-residual));
+  }
+  return { rmsd: Math.sqrt(squares / n), ardPercent: (100 * relative) / n };
 }
 
 /** Fewest degrees of freedom from which a system's own scatter is told. */
 const FEWEST_FOR_OWN_SCALE = 5;
 
 /** Residual SD of ln value within sources, the expected variances' mean scaled by the system's own residuals. */
-function ownWithinSd({ points, common, scale }: FittedModels, parameterCount: number): number | undefined {
+function ownWithinSd({ points, expectedVariance, scale }: FittedModels, parameterCount: number): number | undefined {
   const { degreesOfFreedom, sumOfSquares } = scale.own;
   if (points.n - parameterCount < FEWEST_FOR_OWN_SCALE || degreesOfFreedom < FEWEST_FOR_OWN_SCALE) return undefined;
-  let mean = 0;
-  for (const variance of common.start.variance) mean += variance / points.n;
-  return Math.sqrt((mean * sumOfSquares) / degreesOfFreedom);
+  return Math.sqrt((expectedVariance * sumOfSquares) / degreesOfFreedom);
 }

@@ -9,7 +9,7 @@ const SIDE = 3;
 /** Scale of the bounded loss that decides on a break, ln value. */
 const BREAK_SD = 0.03;
 /** Fall of the bounded loss that a break must bring: its chance is far below 1 in 1000 under Gaussian noise. */
-const LEAST_FALL = 20;
+const LEAST_FALL = 14;
 /** Deviation from the smooth curve, ln value, that two points must pass before a break is tried; half of it in water. */
 const NOTICEABLE = 0.1;
 

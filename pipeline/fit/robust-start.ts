@@ -11,6 +11,9 @@ const START_BETWEEN_SD = 0.09;
 const LOSS_BOUND = 9;
 /** Points of a source beyond this many add no weight: ten bad points must not outvote two sources of five good ones. */
 const FULL_VOTE = 4;
+/** Slopes b1 of ordinary dissolution, 20 +- 30 kJ/mol; breaks ties among few points. Common practice. */
+const USUAL_SLOPE = -8;
+const USUAL_SLOPE_SD = 12;
 const MOST_SLOPES = 48;
 /** Variance of an offset that is as good as free, ln units squared. */
 export const FREE_OFFSET_VARIANCE = 25;
@@ -97,7 +100,7 @@ function forPairs(
 function slopeLoss(ws: RobustWorkspace, slope: number, giveUpAt: number): number {
   const { scratch, location } = ws;
   const { design, response } = ws.rows;
-  let total = 0;
+  let total = ((slope - USUAL_SLOPE) / USUAL_SLOPE_SD) ** 2;
   let voters = 0;
   for (let g = 0; g < ws.groups; g++) {
     let m = 0;

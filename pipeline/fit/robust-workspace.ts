@@ -35,6 +35,9 @@ export interface RobustWorkspace {
   readonly groupOfSource: Int32Array;
 }
 
+/** ln of the ratio to the median temperature beyond which a temperature takes no part: K read as °C, say. */
+const FAR_K = Math.log(1.5);
+
 /** A workspace for systems of up to `capacity` points from `nSources` sources. */
 export function createRobustWorkspace(capacity: number, nSources: number): RobustWorkspace {
   const reals = () => new Float64Array(capacity);
@@ -106,6 +109,7 @@ export function loadSystem(ws: RobustWorkspace, points: SystemPoints, excluded: 
   groupStart[0] = 0;
   let finite = 0;
   let sumT = 0;
+  const middleK = medianTemperature(points, scratch);
   for (let g = 0; g < ws.groups; g++) {
     groupOfSource[sourceOf[g]!] = -1;
     for (let k = groupStart[g]!; k < groupStart[g + 1]!; k++) {
@@ -115,7 +119,7 @@ export function loadSystem(ws: RobustWorkspace, points: SystemPoints, excluded: 
       rows.group[k] = g;
       ws.temperatureK[k] = T;
       rows.response[k] = y;
-      const ok = T > 0 && T < 1e5 && Math.abs(y) < 1e3 && excluded?.[i] !== 1;
+      const ok = Math.abs(Math.log(T / middleK)) < FAR_K && Math.abs(y) < 1e3 && excluded?.[i] !== 1;
       usable[k] = ok ? 1 : 0;
       if (!ok) continue;
       scratch[finite++] = y;
@@ -125,6 +129,13 @@ export function loadSystem(ws: RobustWorkspace, points: SystemPoints, excluded: 
   ws.centreK = finite > 0 ? sumT / finite : 298.15;
   ws.shift = finite > 0 ? medianInPlace(scratch, finite) : 0;
   for (let k = 0; k < n; k++) rows.response[k]! -= ws.shift;
+}
+
+/** Median of the temperatures above 0 K; NaN where there are none. */
+function medianTemperature({ n, temperatureK }: SystemPoints, scratch: Float64Array): number {
+  let count = 0;
+  for (let i = 0; i < n; i++) if (temperatureK[i]! > 0 && temperatureK[i]! < 1e5) scratch[count++] = temperatureK[i]!;
+  return count === 0 ? Number.NaN : medianInPlace(scratch, count);
 }
 
 /** Fills the basis for the system's temperatures, with the break at `breakK` (NaN = none). */

@@ -1,26 +1,26 @@
 import {
   CONSTANT,
-  designColumns,
   type LinearModel,
   MODIFIED_APELBLAT,
   QUADRATIC,
+  setDesignColumns,
   VAN_T_HOFF,
 } from "../curves/linear-models.ts";
 import { fewestTemperatures, smallestSpanK } from "../curves/modified-apelblat.ts";
 import type { PooledScales, RobustFit } from "../records/fits.ts";
 import type { System } from "../records/systems.ts";
-import { type Candidate, type CommonFit, fitLinear, type LinearFit, linearCandidate } from "./candidate.ts";
+import { type CommonFit, fitLinear, type LinearFit, linearCandidate } from "./candidate.ts";
+import type { FitWorkspace } from "./fit-workspace.ts";
 import type { KeptPoints } from "./kept-points.ts";
 import { fitLambdaH } from "./lambda-h-fit.ts";
 import { type Choice, chooseModel } from "./model-choice.ts";
 import { physicalVeto } from "./physical-veto.ts";
 import { ONE_TEMPERATURE_SPAN_K } from "./robust-prepare.ts";
 import {
-  absoluteWeighted,
   type FitWeighting,
   firstFit,
-  relativeVariances,
-  type Weighted,
+  setAbsoluteVariances,
+  setRelativeVariances,
   withinBySource,
 } from "./row-variances.ts";
 import { type SystemScale, systemScale } from "./system-scale.ts";
@@ -51,6 +51,8 @@ export interface FittedModels {
   readonly points: KeptPoints;
   readonly common: CommonFit;
   readonly scale: SystemScale;
+  /** Mean expected variance of a point within its source. */
+  readonly expectedVariance: number;
   /** Of the pooled between-source SD; 0 = default setting. */
   readonly betweenDegreesOfFreedom: number;
   /** Fit of {@link limitModel}: what the limits rest on. */
@@ -59,7 +61,7 @@ export interface FittedModels {
 }
 
 /** Linear models admissible for the points, simplest first. */
-export function admissibleModels(points: KeptPoints): LinearModel[] {
+export function admissibleModels(points: KeptPoints): readonly LinearModel[] {
   if (points.distinctTemperatures < 2) return [CONSTANT];
   const enough = points.distinctTemperatures >= fewestTemperatures && points.highK - points.lowK >= smallestSpanK;
   return enough ? [VAN_T_HOFF, MODIFIED_APELBLAT, QUADRATIC] : [VAN_T_HOFF];
@@ -84,48 +86,75 @@ export function limitModel(points: KeptPoints): { readonly model: LinearModel; r
   return { model: MODIFIED_APELBLAT, lastSd: free ? Number.POSITIVE_INFINITY : usualC };
 }
 
-/** Fits and compares all admissible models. @returns undefined where none can be fitted */
+/**
+ * Fits and compares all admissible models to the points loaded in the workspace.
+ *
+ * @returns undefined where none can be fitted
+ */
 export function fitModels(
+  ws: FitWorkspace,
   points: KeptPoints,
   screened: ScreenedPoints,
   subject: CurveSubject,
   context: CurveContext,
 ): FittedModels | undefined {
   const models = admissibleModels(points);
-  const richest = models[1] ?? (models[0] as LinearModel);
-  const first = firstFit(points, richest);
-  if (first === undefined) return undefined;
-  const within = withinBySource(points, context.scales.within);
-  const start: Weighted =
-    context.weighting === "absolute"
-      ? absoluteWeighted(points, first.fitted, within)
-      : { response: points.lnValue, variance: relativeVariances(points, first.slopes, within) };
+  if (!firstFit(ws, points, models[1] ?? models[0]!)) return undefined;
+  const within = withinBySource(ws, points, context.scales.within);
+  setStart(ws, points, within, context.weighting);
   const between = betweenScale(screened, subject, context);
-  const { model, lastSd } = limitModel(points);
-  const columns = designColumns(model, points.temperatureK, points.centreK);
-  const scale = systemScale(points, columns, start.response, start.variance, lastSd, between.sd ** 2);
-  const common: CommonFit = {
-    ...{ points, weighting: context.weighting, start, startFitted: first.fitted, within },
-    varianceFactor: scale.varianceFactor,
-    betweenVariance: scale.betweenVariance,
-  };
-  const fits = models.map((model) => fitLinear(common, model)).filter((fit) => fit !== undefined);
-  const largest = fits.find((fit) => fit.model === model) ?? fitLinear(common, model, lastSd);
+  const limiting = limitModel(points);
+  setDesignColumns(ws.columns, limiting.model, ws.temperatureK, points.n, points.centreK);
+  const { model: limitingModel, lastSd } = limiting;
+  const basis = { n: points.n, nSources: points.sources.length, p: limitingModel.parameterCount, lastSd };
+  const response = context.weighting === "absolute" ? ws.response : ws.lnValue;
+  const scale = systemScale(ws, basis, response, ws.startVariance, between.sd ** 2);
+  const { varianceFactor, betweenVariance } = scale;
+  const common: CommonFit = { points, weighting: context.weighting, within, varianceFactor, betweenVariance };
+  const fits = models.map((model) => fitLinear(ws, common, model)).filter((fit) => fit !== undefined);
+  const freeFit = limiting.lastSd === Number.POSITIVE_INFINITY;
+  const largest = freeFit
+    ? fits.find((fit) => fit.model === limiting.model)
+    : fitLinear(ws, common, limiting.model, limiting.lastSd);
   if (fits.length === 0 || largest === undefined) return undefined;
-  const candidates: Candidate[] = fits.map((fit) => linearCandidate(common, fit));
-  const lambdaH = lambdaHCandidate(common, subject);
+  const candidates = fits.map((fit) => linearCandidate(common, fit));
+  const lambdaH = lambdaHCandidate(ws, common, subject);
   if (lambdaH !== undefined) candidates.splice(1, 0, lambdaH);
   const choice = chooseModel(candidates, (candidate) => physicalVeto(candidate, points, subject.system.fitBasis));
-  return { points, common, scale, betweenDegreesOfFreedom: between.degreesOfFreedom, largest, choice };
+  const { degreesOfFreedom: betweenDegreesOfFreedom } = between;
+  return {
+    points,
+    common,
+    scale,
+    expectedVariance: mean(ws.startVariance, points.n),
+    betweenDegreesOfFreedom,
+    largest,
+    choice,
+  };
+}
+
+/** Expected variances and, in the weighting by value, the response of the common start. */
+function setStart(ws: FitWorkspace, { n }: KeptPoints, within: readonly number[], weighting: FitWeighting): void {
+  if (weighting === "relative") {
+    setRelativeVariances(ws, n, within);
+    return;
+  }
+  setAbsoluteVariances(ws, n, within, ws.startFitted);
+  for (let i = 0; i < n; i++) ws.startVariance[i] = ws.variance[i]!;
+}
+
+function mean(values: Float64Array, n: number): number {
+  let sum = 0;
+  for (let i = 0; i < n; i++) sum += values[i]!;
+  return sum / n;
 }
 
 /** The lambda-h fit where it applies: mole fractions below 1, at least two temperatures, all below the melting point. */
-function lambdaHCandidate(common: CommonFit, { system, meltingPointK }: CurveSubject): Candidate | undefined {
-  const { points } = common;
-  if (system.fitBasis !== "ln x" || points.distinctTemperatures < 2 || !(meltingPointK > points.highK))
-    return undefined;
-  if (points.lnValue.some((value) => value >= 0)) return undefined;
-  return fitLambdaH(common, meltingPointK);
+function lambdaHCandidate(ws: FitWorkspace, common: CommonFit, { system, meltingPointK }: CurveSubject) {
+  const { n, distinctTemperatures, highK } = common.points;
+  if (system.fitBasis !== "ln x" || distinctTemperatures < 2 || !(meltingPointK > highK)) return undefined;
+  for (let i = 0; i < n; i++) if (ws.lnValue[i]! >= 0) return undefined;
+  return fitLambdaH(ws, common, meltingPointK);
 }
 
 /** Pooled between-source SD of the system's class: salts in water, one temperature, all others. */

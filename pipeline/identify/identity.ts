@@ -1,5 +1,6 @@
 import type { Substance, SubstanceIndex } from "../properties/substances.ts";
 import type { CellFault } from "../records/cells.ts";
+import type { DecimalMark } from "../records/number-text.ts";
 import type { Identity } from "../records/systems.ts";
 import { type ResolvedForm, resolveForm } from "./solid-form.ts";
 import { type KnownSolute, resolveSolute, type SmilesMass } from "./solute.ts";
@@ -30,6 +31,7 @@ export function resolveIdentity(
   cells: (field: string) => string,
   index: SubstanceIndex,
   smilesMass: SmilesMass,
+  decimal: DecimalMark = ".",
 ): ResolvedIdentity | CellFault {
   const soluteCells = {
     solute: cells("solute"),
@@ -38,10 +40,17 @@ export function resolveIdentity(
     smiles: cells("smiles"),
     formula: cells("formula"),
     molarMass: cells("molar_mass"),
+    decimal,
   };
   const solute = resolveSolute(soluteCells, index, smilesMass);
   if ("code" in solute) return solute;
-  const solvent = resolveSolvent(cells("solvent"), cells("composition"), cells("solvent_water_wt_percent"), index);
+  const solvent = resolveSolvent(
+    cells("solvent"),
+    cells("composition"),
+    cells("solvent_water_wt_percent"),
+    decimal,
+    index,
+  );
   if ("code" in solvent) return solvent;
   const form = resolveForm(solute, cells("solid_form"), solvent, index);
   if ("code" in form) return form;

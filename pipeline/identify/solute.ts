@@ -3,6 +3,7 @@ import { molarMass as massOfFormula } from "../properties/molar-mass.ts";
 import { isRegistryNumber } from "../properties/registry-number.ts";
 import type { ResolvedName, SolidForm, Substance, SubstanceIndex } from "../properties/substances.ts";
 import type { CellFault } from "../records/cells.ts";
+import { type DecimalMark, parseNumber } from "../records/number-text.ts";
 
 /** What a row says of its solute; "" where it says nothing. */
 export interface SoluteCells {
@@ -12,6 +13,8 @@ export interface SoluteCells {
   readonly smiles: string;
   readonly formula: string;
   readonly molarMass: string;
+  /** Decimal mark of the row's source. */
+  readonly decimal: DecimalMark;
 }
 
 /** A solute that was told apart from all others. */
@@ -76,8 +79,9 @@ function molarMassOf(cells: SoluteCells, substance: Substance | undefined, smile
   }
   if (Number.isNaN(known) && cells.smiles !== "") known = smilesMass(cells.smiles) ?? Number.NaN;
   if (cells.molarMass === "") return known;
-  const stated = Number(cells.molarMass);
-  if (!(stated > 0) || !Number.isFinite(stated)) {
+  const read = parseNumber(cells.molarMass, cells.decimal);
+  const stated = read.ok ? read.value : Number.NaN;
+  if (!(stated > 0)) {
     return { field: "molar_mass", code: "not-a-number", found: `"${cells.molarMass}" is not a molar mass in g/mol` };
   }
   if (Number.isNaN(known) || Math.abs(stated / known - 1) <= MASS_TOLERANCE)

@@ -1,5 +1,6 @@
 import type { Substance, SubstanceIndex } from "../properties/substances.ts";
 import type { CellFault } from "../records/cells.ts";
+import { type DecimalMark, parseNumber } from "../records/number-text.ts";
 
 /** Marks of a mixture in a solvent's name. */
 const MIXTURE = /[/+:%]|\bv\/v\b|\band\b|\bwith\b|\d\s*(?:wt|vol|mol)\b/i;
@@ -15,6 +16,7 @@ export function resolveSolvent(
   text: string,
   composition: string,
   waterWtPercent: string,
+  decimal: DecimalMark,
   index: SubstanceIndex,
 ): Substance | CellFault {
   if (text === "") return { field: "solvent", code: "missing-solvent", found: "the cell is empty" };
@@ -44,8 +46,12 @@ export function resolveSolvent(
       found: `composition "${composition}" of ${substance.name}`,
     };
   }
-  const water = Number(waterWtPercent);
-  if (waterWtPercent !== "" && substance.name !== "water" && !(water <= WET_WT_PERCENT)) {
+  const water = waterWtPercent === "" || substance.name === "water" ? undefined : parseNumber(waterWtPercent, decimal);
+  if (water !== undefined && (!water.ok || water.value < 0)) {
+    const found = `"${waterWtPercent}" is not a water content in percent by mass`;
+    return { field: "solvent_water_wt_percent", code: water.ok ? "value-not-positive" : water.code, found };
+  }
+  if (water?.ok && water.value > WET_WT_PERCENT) {
     const found = `${substance.name} with ${waterWtPercent} wt % water is a mixture`;
     return { field: "solvent_water_wt_percent", code: "unsupported-composition", found };
   }

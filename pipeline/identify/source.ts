@@ -67,7 +67,7 @@ export function identifySource(
     (field) => source.places[field]?.kind === "column" || source.readings.some((reading) => reading.own?.[field]),
   ).map((field) => get[field] as (reading: Reading) => string);
   const resolve = (reading: Reading): Identified | CellFault => {
-    const found = resolveIdentity((field) => text(field, reading), index, smilesMass);
+    const found = resolveIdentity((field) => text(field, reading), index, smilesMass, source.decimal);
     if ("code" in found) return found;
     const { contradiction } = found.solute;
     if (contradiction !== undefined) {

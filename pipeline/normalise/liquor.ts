@@ -1,6 +1,7 @@
 import type { Needs, Quantity } from "../bases/needs.ts";
 import { apparentDensityFromSolid, massConcentration, type SolutionDensity } from "../bases/solution-density.ts";
 import { liquidDensity } from "../properties/liquid-density.ts";
+import { ATOMIC_WEIGHTS_REFERENCE } from "../properties/molar-mass.ts";
 import { solutionDensityModel } from "../properties/solution-density-model.ts";
 import type { Substance } from "../properties/substances.ts";
 import type { Identified } from "../records/identified.ts";
@@ -12,7 +13,6 @@ const ELECTROLYTE_U = 0.04;
 const DISPENSED_K = 293.15;
 /** Relative uncertainty of a measured density of a solution that states none (common practice). */
 const MEASURED_DENSITY_U = 0.001;
-const WATER_MOLAR_MASS_U = 0.0005;
 
 /** Properties of one liquor, kept for all rows of its system; the densities follow the conditions set last. */
 export interface LiquorModel {
@@ -50,6 +50,11 @@ function solutionDensity(
   return published;
 }
 
+/** Where a molar mass comes from: the formula where there is one, else what the tables or the row state. */
+function massReference(substance: Substance | undefined): string {
+  return substance?.formula === undefined ? "as stated" : ATOMIC_WEIGHTS_REFERENCE;
+}
+
 /** Largest number of temperatures whose densities are kept. */
 const KEPT = 4096;
 
@@ -66,9 +71,13 @@ export function liquorModel(who: Identified, identity: Identity): LiquorModel {
   const solventAt20 = liquidDensity(solvent, DISPENSED_K);
   const solventMass = solvent.molarMass ?? identity.solventMolarMass;
   const needs: { -readonly [K in keyof Needs]: Needs[K] } = {
-    soluteMolarMass: quantity(identity.soluteMolarMass, (solute?.molarMassUncertainty ?? 0) / identity.soluteMolarMass),
+    soluteMolarMass: quantity(
+      identity.soluteMolarMass,
+      (solute?.molarMassUncertainty ?? 0) / identity.soluteMolarMass,
+      massReference(solute),
+    ),
     crystalMolarMass: quantity(crystalMassFactor * identity.soluteMolarMass, 0, form?.reference),
-    solventMolarMass: quantity(solventMass, (solvent.molarMassUncertainty ?? WATER_MOLAR_MASS_U) / solventMass),
+    solventMolarMass: quantity(solventMass, (solvent.molarMassUncertainty ?? 0) / solventMass, massReference(solvent)),
     solventDensityAt20C: solventAt20,
   };
   let conditions = "";

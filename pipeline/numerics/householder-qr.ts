@@ -91,66 +91,6 @@ export function factorise(ws: QrWorkspace, design: Float64Array, n: number, p: n
   return k;
 }
 
-/**
- * Least-squares coefficients of `response` for the factorised design, written to `coefficients` in design order;
- * columns left out by the rank test get 0.
- * @throws RangeError if the response (where its weight is not 0) holds a number that is not finite.
- */
-export function solve(ws: QrWorkspace, response: Float64Array, coefficients: Float64Array): void {
-  const { rows: n, rank, columns, rotated, factor, diagonal, pivot, columnScale } = ws;
-  rotate(ws, response);
-  for (let k = rank - 1; k >= 0; k--) {
-    let sum = rotated[k]!;
-    for (let j = k + 1; j < rank; j++) sum -= factor[j * n + k]! * rotated[j]!;
-    rotated[k] = sum / diagonal[k]!;
-  }
-  for (let k = 0; k < columns; k++) {
-    const column = pivot[k]!;
-    coefficients[column] = k < rank ? rotated[k]! / columnScale[column]! : 0;
-  }
-}
-
-/** Leverages h_i of the weighted rows (diagonal of Q Q'), each in [0, 1] and summing to the rank. */
-export function leverages(ws: QrWorkspace, result: Float64Array): void {
-  const { rows: n, rank, rotated } = ws;
-  result.fill(0, 0, n);
-  for (let column = 0; column < rank; column++) {
-    formColumnOfQ(ws, column);
-    for (let i = 0; i < n; i++) result[i]! += rotated[i]! * rotated[i]!;
-  }
-  for (let i = 0; i < n; i++) if (result[i]! > 1) result[i] = 1;
-}
-
-/** Q without its last n - rank columns, row-major n x rank: an orthonormal basis of the weighted design's columns. */
-export function orthonormalBasis(ws: QrWorkspace, result: Float64Array): void {
-  const { rows: n, rank, rotated } = ws;
-  for (let column = 0; column < rank; column++) {
-    formColumnOfQ(ws, column);
-    for (let i = 0; i < n; i++) result[i * rank + column] = rotated[i]!;
-  }
-}
-
-/**
- * (X'WX)^-1, row-major p x p in design order. Rows and columns of design columns that were left out hold NaN:
- * their coefficients are not determined.
- */
-export function unscaledCovariance(ws: QrWorkspace, result: Float64Array): void {
-  const { columns: p, rank, pivot, columnScale, inverse } = ws;
-  invertTriangle(ws);
-  result.fill(Number.NaN, 0, p * p);
-  for (let a = 0; a < rank; a++) {
-    for (let b = 0; b <= a; b++) {
-      let sum = 0;
-      for (let k = a; k < rank; k++) sum += inverse[k * p + a]! * inverse[k * p + b]!;
-      const row = pivot[a]!;
-      const column = pivot[b]!;
-      const value = sum / columnScale[row]! / columnScale[column]!;
-      result[row * p + column] = value;
-      result[column * p + row] = value;
-    }
-  }
-}
-
 function checkSizes(ws: QrWorkspace, design: Float64Array, n: number, p: number, weights?: Float64Array): void {
   if (!(n >= 1 && p >= 1 && n <= ws.maxRows && p <= ws.maxColumns)) {
     throw new RangeError(`least squares: ${n} rows and ${p} columns do not fit ${ws.maxRows} x ${ws.maxColumns}`);
@@ -230,8 +170,8 @@ function reflect(ws: QrWorkspace, k: number, norm: number): void {
   for (let j = k + 1; j < p; j++) applyReflection(factor, offset, k, n, beta[k]!, factor, j * n);
 }
 
-/** target <- (I - beta v v') target, with v in rows k to n of the column at `offset`. */
-function applyReflection(
+/** target <- (I - beta v v') target, with v in rows k to n of the column at `offset`, target from `start`. */
+export function applyReflection(
   factor: Float64Array,
   offset: number,
   k: number,
@@ -244,38 +184,4 @@ function applyReflection(
   for (let i = k; i < n; i++) dot += factor[offset + i]! * target[start + i]!;
   dot *= beta;
   for (let i = k; i < n; i++) target[start + i]! -= dot * factor[offset + i]!;
-}
-
-/** Writes a column of Q to the scratch `rotated`. */
-function formColumnOfQ(ws: QrWorkspace, column: number): void {
-  const { rows: n, rotated, factor, beta } = ws;
-  rotated.fill(0, 0, n);
-  rotated[column] = 1;
-  for (let k = column; k >= 0; k--) applyReflection(factor, k * n, k, n, beta[k]!, rotated, 0);
-}
-
-function rotate(ws: QrWorkspace, response: Float64Array): void {
-  const { rows: n, rank, rotated, factor, beta, rootWeights, weighted } = ws;
-  let sum = 0;
-  for (let i = 0; i < n; i++) {
-    const weight = weighted ? rootWeights[i]! : 1;
-    const value = weight === 0 ? 0 : weight * response[i]!;
-    rotated[i] = value;
-    sum += value;
-  }
-  if (!(sum > -Infinity && sum < Infinity)) throw new RangeError("least squares: the response is not finite");
-  for (let k = 0; k < rank; k++) applyReflection(factor, k * n, k, n, beta[k]!, rotated, 0);
-}
-
-/** Inverse of the leading rank x rank triangle of R, column-major with leading dimension p. */
-function invertTriangle(ws: QrWorkspace): void {
-  const { rows: n, columns: p, rank, factor, diagonal, inverse } = ws;
-  for (let j = 0; j < rank; j++) {
-    inverse[j * p + j] = 1 / diagonal[j]!;
-    for (let i = j - 1; i >= 0; i--) {
-      let sum = 0;
-      for (let k = i + 1; k <= j; k++) sum += factor[k * n + i]! * inverse[j * p + k]!;
-      inverse[j * p + i] = -sum / diagonal[i]!;
-    }
-  }
 }

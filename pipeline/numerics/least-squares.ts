@@ -1,11 +1,6 @@
-import {
-  createQrWorkspace,
-  factorise,
-  leverages,
-  type QrWorkspace,
-  solve,
-  unscaledCovariance,
-} from "./householder-qr.ts";
+import { createQrWorkspace, factorise, type QrWorkspace } from "./householder-qr.ts";
+import { refineLeastSquares } from "./iterative-refinement.ts";
+import { leverages, solve, unscaledCovariance } from "./qr-solve.ts";
 
 /** Result of {@link leastSquares}; arrays are in the order of the design's rows and columns. */
 export interface LeastSquaresFit {
@@ -33,14 +28,15 @@ export interface LeastSquaresWorkspace {
 }
 
 /**
- * Weighted linear least squares, min over b of sum w_i (y_i - x_i b)^2, by Householder QR.
+ * Weighted linear least squares, min over b of sum w_i (y_i - x_i b)^2, by Householder QR with iterative refinement.
  *
  * - design  X, row-major n x p          - response  y, length n
  * - weights  length n, at least 0 (1 where absent); a weight acts as the number of equal rows it stands for
  *
  * Test `rank === p` before using coefficients or covariance: with fewer than p independent columns (n < p, all
  * x equal, collinear terms, too many weights of 0) columns explained by earlier ones get coefficient 0 and
- * covariance NaN. For better digits centre the terms: one double has 16 digits, and the condition number eats them.
+ * covariance NaN. Coefficients are refined to rounding error of the exact solution for the design as given; centre the
+ * terms all the same, so that the design itself loses nothing.
  * @throws RangeError if sizes do not agree, a weight is negative or not finite, or a number is not finite.
  * @see Golub and Van Loan, Matrix Computations, 4th ed. (2013), section 5.3.
  */
@@ -53,6 +49,7 @@ export function leastSquares(
 ): LeastSquaresFit {
   const ws = createLeastSquaresWorkspace(n, p);
   const rank = leastSquaresInto(ws, design, response, n, p, weights);
+  if (rank === p) refineLeastSquares(ws.qr, design, response, ws.coefficients, ws.residuals);
   leverages(ws.qr, ws.leverages);
   unscaledCovariance(ws.qr, ws.unscaledCovariance);
   return {
@@ -78,7 +75,7 @@ export function createLeastSquaresWorkspace(maxRows: number, maxColumns: number)
 
 /**
  * The same fit as {@link leastSquares} without allocation: coefficients and residuals are written to the workspace,
- * the rank is returned. Leverages and covariance are left to {@link leastSquaresLeverages} and
+ * the rank is returned. Nothing is refined. Leverages and covariance are left to {@link leastSquaresLeverages} and
  * {@link leastSquaresCovariance}, as most loops need neither.
  * @throws RangeError as {@link leastSquares}.
  */

@@ -1,6 +1,6 @@
 import { BREAKDOWN_TUNING, bisquareCurvatures, bisquareWeights, EFFICIENCY_TUNING, sumOfRho } from "./bisquare.ts";
-import { orthonormalBasis } from "./householder-qr.ts";
 import { createLeastSquaresWorkspace, type LeastSquaresWorkspace, leastSquaresInto } from "./least-squares.ts";
+import { orthonormalBasis } from "./qr-solve.ts";
 import { seededRandom } from "./random.ts";
 import { reweightedStep, type StepState, takeStepBack } from "./reweighted-step.ts";
 import { createSEstimateWorkspace, type RobustData, type SEstimateWorkspace, sEstimate } from "./s-estimate.ts";

@@ -12,7 +12,7 @@ import {
 } from "./reweighted-step.ts";
 
 /** How many of the best elemental fits are improved before one is chosen, and by how many steps. */
-const CANDIDATES = 10;
+const CANDIDATES = 8;
 const IMPROVING_STEPS = 2;
 const MAX_STEPS = 200;
 

@@ -29,6 +29,7 @@ export function liquidDensityModels(
   molarMass: number | undefined,
   incomplete: Incomplete,
 ): LiquidDensityModel[] {
+  if (properties.size === 0) return [];
   const correlations = [
     dipprModel(properties, molarMass, incomplete),
     ppdsModel(properties, incomplete),
@@ -110,6 +111,7 @@ export function apparentDensityCoefficients(
   properties: Properties,
   incomplete: Incomplete,
 ): ApparentDensityCoefficients | undefined {
+  if (properties.size === 0) return undefined;
   const found = correlation(properties, "apparent_density", ["c0", "c1", "c2", "c3", "c4", "w_max"], incomplete);
   if (found === undefined) return undefined;
   const [c0 = 0, c1 = 0, c2 = 0, c3 = 0, c4 = 0, highestMassFraction = 0] = found.c;

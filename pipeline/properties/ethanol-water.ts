@@ -48,8 +48,8 @@ export function ethanolWaterDensity(massFraction: number, t: number): number {
   return rho;
 }
 
-/** Density of ethanol at 20 °C [kg/m3] by which the alcoholic strength by volume is defined. */
-const ETHANOL_20 = 789.24;
+/** Density of ethanol at 20 °C [kg/m3] by which the alcoholic strength by volume is defined: 789.239 by the formula. */
+const ETHANOL_20 = ethanolWaterDensity(1, 20);
 
 /**
  * Alcoholic strength by volume at 20 °C [1] of a mass fraction p of ethanol: q = p rho(p, 20 °C) / rho(1, 20 °C).
@@ -58,7 +58,7 @@ const ETHANOL_20 = 789.24;
  * @see OIML R 22.
  */
 export function alcoholByVolume(massFraction: number): number {
-  return Math.min(1, (massFraction * ethanolWaterDensity(massFraction, 20)) / ETHANOL_20);
+  return (massFraction * ethanolWaterDensity(massFraction, 20)) / ETHANOL_20;
 }
 
 /**

@@ -65,8 +65,10 @@ function addSubstance(given: PlacedRow, layer: number, known: Known): void {
 
 function addNames(draft: Draft, row: PlacedRow, name: string): void {
   for (const role of listCell(row, "role")) draft.roles.add(role);
+  const main = nameKey(draft.row.cells.name ?? "");
   for (const synonym of [...listCell(row, "synonyms"), name]) {
-    if (nameKey(synonym) !== nameKey(draft.row.cells.name ?? "")) draft.synonyms.set(nameKey(synonym), synonym);
+    const key = nameKey(synonym);
+    if (key !== main) draft.synonyms.set(key, synonym);
   }
   const reference = textCell(row, "reference");
   if (reference !== undefined) draft.references.add(reference);

@@ -1,4 +1,6 @@
+import { parseFormula } from "./formula.ts";
 import type { Draft } from "./layered-tables.ts";
+import { hillFormula } from "./molar-mass.ts";
 import { nameKey } from "./name-key.ts";
 import type { BareSubstance } from "./substance-from-draft.ts";
 
@@ -39,13 +41,23 @@ export function nameTable(substances: readonly BareSubstance[], drafts: readonly
   }
   const all = (text: string): readonly number[] => {
     const asGiven = best(exact.get(text.trim()));
-    return asGiven.length > 0 ? asGiven : best(folded.get(nameKey(text)));
+    return asGiven.length > 0
+      ? asGiven
+      : best(folded.get(nameKey(text))?.filter((entry) => !otherFormula(text, entry)));
   };
   const only = (text: string) => {
     const places = all(text);
     return places.length === 1 ? places[0] : undefined;
   };
   return { only, all, ambiguous: ambiguousOf(exact), spellings: () => spellings(folded, substances) };
+}
+
+/** Two formulas that differ only in case are different substances: `CoCl2` and `COCl2`. */
+function otherFormula(text: string, entry: Entry): boolean {
+  const given = parseFormula(text);
+  const known = parseFormula(entry.text);
+  if ("fault" in given || "fault" in known) return false;
+  return hillFormula(given.elements) !== hillFormula(known.elements);
 }
 
 function namesOf({ name, synonyms, formula, salt }: BareSubstance): { text: string; rank: number }[] {

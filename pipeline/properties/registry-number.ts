@@ -83,10 +83,13 @@ function originalsOfDate(text: string): string[] | undefined {
         ];
   const possible = readings.filter((r) => r.year.length === 4 && isMonth(r.month) && r.day >= 1 && r.day <= 31);
   if (possible.length === 0) return undefined;
-  const candidates = possible.flatMap(({ year, month: number, day }) =>
-    firstBlocks(year).map((block) => `${block}-${String(number).padStart(2, "0")}-${day}`),
-  );
-  return [...new Set(candidates.filter(isRegistryNumber))];
+  // The day was the check digit, so that it is one digit.
+  const candidates = possible.flatMap(({ year, month: number, day }) => {
+    const second = String(number).padStart(2, "0");
+    const blocks = firstBlocks(year).filter((block) => checkDigit(block + second) === day);
+    return blocks.map((block) => `${block}-${second}-${day}`);
+  });
+  return [...new Set(candidates)];
 }
 
 const isMonth = (month: number): boolean => month >= 1 && month <= 12;

@@ -20,6 +20,7 @@ export interface SaltMarks {
   /** Formula as written: `NH4NO3` shows its ammonium, a Hill formula does not. */
   readonly formula: string | undefined;
   readonly smiles: string | undefined;
+  /** Elements without crystal water. */
   readonly elements: ElementCounts | undefined;
 }
 
@@ -33,13 +34,13 @@ export function saltKind({ name, formula, smiles, elements }: SaltMarks): SaltKi
   const metallic = symbols.length > 1 && symbols.some((symbol) => METALS.has(symbol));
   const ionic = smiles?.includes(".") === true && /[+-]\d*\]/.test(smiles);
   if (!(metallic || ionic || (formula !== undefined && /NH4/.test(formula)) || SALT_NAME.test(name))) return undefined;
-  return elements !== undefined && isInorganic(elements) ? "inorganic" : "organic";
+  return elements !== undefined && isInorganic(elements, formula ?? "") ? "inorganic" : "organic";
 }
 
-function isInorganic(elements: ElementCounts): boolean {
+/** No carbon, or carbon whose only hydrogens are those of ammonium or of a hydrogen carbonate. */
+function isInorganic(elements: ElementCounts, formula: string): boolean {
   const carbon = elements.get("C") ?? 0;
-  if (carbon === 0) return true;
-  const hydrogen = elements.get("H") ?? 0;
-  const nitrogen = elements.get("N") ?? 0;
-  return hydrogen === 0 || (carbon === 1 && elements.get("O") === 3 && hydrogen <= 1 + 4 * nitrogen);
+  const ammonium = formula.includes("NH4") ? 4 * (elements.get("N") ?? 0) : 0;
+  const hydrogen = Math.max(0, (elements.get("H") ?? 0) - ammonium);
+  return carbon === 0 || hydrogen === 0 || (carbon === 1 && hydrogen === 1 && elements.get("O") === 3);
 }

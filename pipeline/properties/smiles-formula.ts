@@ -40,6 +40,7 @@ export async function loadSmilesReader(): Promise<SmilesReader> {
     const text = smiles.trim();
     if (text === "") return { ok: false, message: "an empty SMILES" };
     if (text.length > LONGEST) return { ok: false, message: `a SMILES longer than ${LONGEST} characters` };
+    if (!bracketsClose(text)) return { ok: false, message: "a bracket of the SMILES is not closed" };
     const tokens = atomTokens(text);
     const refused = tokens.find(({ symbol, isotope }) => symbol === "*" || (isotope !== undefined && symbol !== "H"));
     if (refused !== undefined) return { ok: false, message: `the atom ${refused.text} has no atomic weight` };
@@ -50,6 +51,16 @@ export async function loadSmilesReader(): Promise<SmilesReader> {
       return { ok: false, message: "not a SMILES that can be read" };
     }
   };
+}
+
+/** The library overlooks brackets that are never closed. */
+function bracketsClose(smiles: string): boolean {
+  let depth = 0;
+  for (const character of smiles) {
+    if (character === "(") depth++;
+    if (character === ")" && --depth < 0) return false;
+  }
+  return depth === 0;
 }
 
 interface AtomToken {

@@ -1,5 +1,6 @@
 import { apparentDensityCoefficients, liquidDensityModels, type Properties } from "./density-rows.ts";
 import { type Formula, parseFormula } from "./formula.ts";
+import { hydrateParts } from "./hydrate-parts.ts";
 import { readInchikey } from "./inchikey.ts";
 import type { Draft } from "./layered-tables.ts";
 import { molarMass as molarMassOf } from "./molar-mass.ts";
@@ -7,7 +8,16 @@ import { readRegistryNumber } from "./registry-number.ts";
 import { saltKind } from "./salt-kind.ts";
 import { MOLAR_MASS_TOLERANCE } from "./solid-form-rows.ts";
 import type { Property, Substance, SubstanceRole } from "./substances.ts";
-import { faultAt, listCell, numberCell, type PlacedRow, positiveCell, type Report, textCell } from "./table-cells.ts";
+import {
+  faultAt,
+  isNumberText,
+  listCell,
+  numberCell,
+  type PlacedRow,
+  positiveCell,
+  type Report,
+  textCell,
+} from "./table-cells.ts";
 
 /** Relative standard uncertainty of a stated molar mass without a formula: its last digit, as a rule. */
 const STATED_MOLAR_MASS_UNCERTAINTY = 5e-4;
@@ -23,7 +33,7 @@ export function substanceFromDraft(draft: Draft, report: Report): BareSubstance 
   const mass = molarMassFrom(row, formula, report);
   const properties = propertiesOf(draft, report);
   const smiles = textCell(row, "smiles");
-  const elements = formula?.elements;
+  const elements = formula === undefined ? undefined : (hydrateParts(formula)?.anhydrousElements ?? formula.elements);
   const stated = properties.get("electrolyte")?.value;
   const salt = stated === 0 ? undefined : saltKind({ name, formula: formula?.text, smiles, elements });
   const fusion = positiveCell(row, "fusion_enthalpy_kJ_per_mol", report);
@@ -139,7 +149,7 @@ function propertiesOf({ properties }: Draft, report: Report): Map<string, Proper
   const read = new Map<string, Property>();
   for (const [key, row] of properties) {
     const text = textCell(row, "value") ?? "";
-    const value = /^[+-]?[\d.]/.test(text) ? numberCell(row, "value", report) : undefined;
+    const value = isNumberText(text) ? Number(text) : undefined;
     read.set(key, {
       text,
       value,

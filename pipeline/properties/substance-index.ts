@@ -87,10 +87,12 @@ function lookups(substances: readonly Substance[], names: NameTable): Omit<Subst
     const at = names.only(text);
     return at === undefined ? undefined : substances[at];
   };
-  const formNames = formNameTable(substances);
+  let formNames: ReadonlyMap<string, ResolvedName> | undefined;
   const resolve = (text: string): ResolvedName | undefined => {
     const named = byName(text);
     if (named !== undefined) return unsolvated(named, byName);
+    // Few texts name a form: the table of form names is made when the first one does.
+    formNames ??= formNameTable(substances);
     return formNames.get(nameKey(text)) ?? resolveHydrateFormula(text, byName);
   };
   return {

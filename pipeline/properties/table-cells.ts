@@ -64,10 +64,14 @@ export function listCell(row: PlacedRow, column: string): string[] {
 export function numberCell(row: PlacedRow, column: string, report: Report): number | undefined {
   const text = textCell(row, column);
   if (text === undefined) return undefined;
-  const number = /^[+-]?(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?$/.test(text) ? Number(text) : Number.NaN;
-  if (Number.isFinite(number)) return number;
+  if (isNumberText(text)) return Number(text);
   report(faultAt(row, column, "not a number", `"${text}" is not a number`));
   return undefined;
+}
+
+/** True for a finite number in plain or exponent digits, and nothing else. */
+export function isNumberText(text: string): boolean {
+  return /^[+-]?(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?$/.test(text) && Number.isFinite(Number(text));
 }
 
 /** A number that must be above zero. */

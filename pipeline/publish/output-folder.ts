@@ -105,9 +105,7 @@ function hasOurSummary(folder: string): boolean {
   try {
     const summary = JSON.parse(readFileSync(join(folder, "summary.json"), "utf8")) as Record<string, unknown>;
     return (
-      typeof summary["format"] === "number" &&
-      typeof summary["program_version"] === "string" &&
-      Array.isArray(summary["files"])
+      typeof summary.format === "number" && typeof summary.program_version === "string" && Array.isArray(summary.files)
     );
   } catch {
     return false;

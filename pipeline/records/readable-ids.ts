@@ -8,7 +8,12 @@ const SLUG_LENGTH = 60;
  * @example slug("Copper sulfate, pentahydrate") // "copper-sulfate-pentahydrate"
  */
 export function slug(text: string): string {
-  const plain = text.normalize("NFKD").toLowerCase().replaceAll("α", "alpha").replaceAll("β", "beta");
+  const plain = text
+    .normalize("NFKD")
+    .replace(/\p{M}/gu, "")
+    .toLowerCase()
+    .replaceAll("α", "alpha")
+    .replaceAll("β", "beta");
   return plain
     .replaceAll("γ", "gamma")
     .replace(/[^a-z0-9]+/g, "-")

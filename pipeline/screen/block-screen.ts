@@ -12,7 +12,7 @@ import {
 import { rejectionLimit } from "./false-discovery.ts";
 import { type ScreenInput, thresholdOf } from "./screen-input.ts";
 import { sourceWidePosteriors } from "./source-wide.ts";
-import { fitSources, type SystemModel } from "./system-model.ts";
+import { deletedOffset, fitSources, type SystemModel } from "./system-model.ts";
 
 /** A block that is off as a whole. */
 export interface OffBlock {
@@ -36,8 +36,10 @@ interface Tested extends Omit<OffBlock, "posterior"> {
 
 /** Points of a block from which it is judged as a whole; one point alone is a point. */
 const LEAST_POINTS = 2;
-/** Other sound sources needed. */
+/** Other sound sources needed; one for a source that no vote could count, its temperatures being impossible. */
 const LEAST_OTHERS = 2;
+/** Part of the least threshold of a system from which an offset is worth the full test. */
+const NEAR_SHARE = 0.7;
 /** A block is off where `as read` is less likely than this. */
 const AS_READ_BELOW = 0.5;
 
@@ -55,13 +57,16 @@ export function screenBlocks(
   const blocksOfSource = new Int32Array(input.sourceNames.length);
   let total = 0;
   for (const fit of input.fits) {
-    if (fit.agreement !== "agreed" || fit.soundSources.length < LEAST_OTHERS) continue;
-    for (const [source, points] of blocksOf(fit)) {
+    if (fit.agreement !== "agreed") continue;
+    const judged = judgedSources(fit);
+    total += judged.length;
+    for (const source of judged) blocksOfSource[source]!++;
+    const suspicious = suspiciousSources(input, models[0], fit, judged);
+    if (suspicious.length === 0) continue;
+    const blocks = blocksOf(fit);
+    for (const source of suspicious) {
       const others = fit.soundSources.filter((other) => other !== source);
-      if (others.length < LEAST_OTHERS || points.length < LEAST_POINTS) continue;
-      total++;
-      blocksOfSource[source]!++;
-      const block = testBlock(input, models, suspectsOf, fit, source, points, others);
+      const block = testBlock(input, models, suspectsOf, fit, source, blocks.get(source)!, others);
       if (block !== undefined) tested.push(block);
     }
   }
@@ -77,6 +82,35 @@ export function screenBlocks(
       const asRead = readings.findIndex(({ key }) => key === AS_READ);
       return p <= limit && material && (posterior[asRead] ?? 1) < AS_READ_BELOW;
     });
+}
+
+/** Sources whose block can be compared with enough others. */
+function judgedSources({ soundSources, apartSources, points }: RobustFit): number[] {
+  const sound = soundSources.length > LEAST_OTHERS ? soundSources : [];
+  const apart = soundSources.length > 0 ? apartSources : [];
+  return [...sound, ...apart].filter((source) => {
+    let count = 0;
+    for (let i = 0; i < points.n && count < LEAST_POINTS; i++) if (points.source[i] === source) count++;
+    return count >= LEAST_POINTS;
+  });
+}
+
+/** Judged sources that are set apart, or whose offset or points come near a threshold: a cheap look before the test. */
+function suspiciousSources(
+  input: ScreenInput,
+  model: SystemModel,
+  fit: RobustFit,
+  judged: readonly number[],
+): readonly number[] {
+  if (judged.length === 0) return judged;
+  let least = Number.POSITIVE_INFINITY;
+  const dropped = new Set<number>();
+  for (let i = 0; i < fit.points.n; i++) {
+    least = Math.min(least, thresholdOf(input, fit.system, i));
+    if (fit.kept[i] === 0) dropped.add(fit.points.source[i]!);
+  }
+  fitSources(model, fit, () => true);
+  return judged.filter((source) => dropped.has(source) || Math.abs(deletedOffset(model, source)) > NEAR_SHARE * least);
 }
 
 /** Points of each source of a system, in order of first appearance. */
@@ -107,8 +141,8 @@ function testBlock(
   fitSources(models[0], fit, (other) => sound.has(other));
   const rows = points.map((point) => fit.points.row[point]!);
   const bare = { input, models, fit, points, source, threshold };
-  const { median, sd, failing } = blockOffset(bare);
-  const material = Math.abs(median) > threshold || failing > 0.5;
+  const { median, sd, failing, alike } = blockOffset(bare);
+  const material = (Math.abs(median) > threshold && alike > 0.5) || failing > 0.5;
   const z = median / sd;
   if (!material || (Math.abs(z) < 2 && failing <= 0.5)) return undefined;
   const of: BlockCase = { ...bare, suspects: suspectsOf(fit.system, source, rows) };

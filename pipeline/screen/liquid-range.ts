@@ -16,7 +16,7 @@ const MARGIN_K = 1;
 export function liquidRangeFlags(input: ScreenInput): Flag[] {
   return input.fits.flatMap((fit) => {
     const about = input.about[fit.system];
-    if (about === undefined) return [];
+    if (about === undefined || !mayBeOutside(about, fit.points.temperatureK)) return [];
     return [...blocksOf(fit)].flatMap(([source, points]): Flag[] => {
       const outside = points.filter((i) =>
         isOutside(about, fit.points.temperatureK[i]!, input.table.moleFraction[fit.points.row[i]!]!),
@@ -36,6 +36,10 @@ export function liquidRangeFlags(input: ScreenInput): Flag[] {
         : [{ ...flag, scope: "block" }];
     });
   });
+}
+
+function mayBeOutside({ boilingPointK, freezingPointK }: ScreenedSystem, temperatureK: Float64Array): boolean {
+  return temperatureK.some((T) => T > boilingPointK || T < freezingPointK);
 }
 
 function isOutside(about: ScreenedSystem, temperatureK: number, moleFraction: number): boolean {

@@ -2,7 +2,7 @@ import type { Flag } from "../records/fits.ts";
 import type { MeasurementTable } from "../records/measurements.ts";
 import type { System } from "../records/systems.ts";
 import { type ScreenInput, sourceName } from "./screen-input.ts";
-import { counted, inCelsius } from "./wording.ts";
+import { counted } from "./wording.ts";
 
 /** Values that agree to this part are the same number, whatever units they were written in. */
 const SAME_VALUE = 2e-4;
@@ -17,16 +17,12 @@ export function repeatFlags(input: ScreenInput): Flag[] {
 }
 
 function sameReadingTwice({ table }: ScreenInput, system: System): Flag[] {
-  const first = new Map<string, number>();
   const flags: Flag[] = [];
-  for (const row of system.rows) {
-    if (Number.isNaN(table.reportedValue[row])) continue;
-    const key = `${table.source[row]} ${table.temperatureK[row]} ${table.reportedValue[row]} ${table.reportedUnit[row]}`;
-    const earlier = first.get(key);
-    if (earlier === undefined) {
-      first.set(key, row);
-      continue;
-    }
+  const { rows } = system;
+  for (let i = 1; i < rows.length; i++) {
+    const row = rows[i]!;
+    const earlier = earlierTwin(table, rows, i);
+    if (earlier === undefined) continue;
     flags.push({
       scope: "measurement",
       code: "exact-repeat",
@@ -41,54 +37,58 @@ function sameReadingTwice({ table }: ScreenInput, system: System): Flag[] {
   return flags;
 }
 
+/** First row before the i-th that holds the same reading of the same source. */
+function earlierTwin(table: MeasurementTable, rows: Int32Array, i: number): number | undefined {
+  const row = rows[i]!;
+  const { source, temperatureK, reportedValue, reportedUnit } = table;
+  for (let j = 0; j < i; j++) {
+    const other = rows[j]!;
+    if (reportedValue[other] !== reportedValue[row] || temperatureK[other] !== temperatureK[row]) continue;
+    if (source[other] === source[row] && reportedUnit[other] === reportedUnit[row]) return other;
+  }
+  return undefined;
+}
+
 /** Blocks of one system that share most of their temperatures and, there, their values. */
 function reReported(input: ScreenInput, system: System): Flag[] {
   const { table } = input;
-  const blocks = new Map<number, number[]>();
-  for (const row of system.rows) {
-    if (!(table.massRatio[row]! > 0)) continue;
-    const source = table.source[row]!;
-    const block = blocks.get(source);
-    if (block) block.push(row);
-    else blocks.set(source, [row]);
-  }
-  const sources = [...blocks.keys()].sort((a, b) => a - b);
-  return sources.flatMap((later, l): Flag[] => {
-    for (const earlier of sources.slice(0, l)) {
-      const { same, shared, example } = compare(table, blocks.get(earlier)!, blocks.get(later)!);
-      if (same < LEAST_PAIRS || same * 2 < shared) continue;
-      return [
-        {
-          scope: "block",
-          code: "re-reported",
-          severity: "notice",
-          source: later,
-          system: system.index,
-          evidence:
-            `${counted(same, "value")} of ${shared} at shared temperatures are those of ${sourceName(input, earlier)}, ` +
-            `for one at ${inCelsius(example)}`,
-          lookAt: "Look at whether both report one measurement: then it counts once, not twice.",
-        },
-      ];
+  const { rows } = system;
+  const twins = new Map<number, Map<number, number>>();
+  for (let i = 1; i < rows.length; i++) {
+    for (let j = 0; j < i; j++) {
+      if (!sameMeasurement(table, rows[i]!, rows[j]!)) continue;
+      const [later, earlier] = [table.source[rows[i]!]!, table.source[rows[j]!]!];
+      const counts = twins.get(later) ?? new Map<number, number>();
+      twins.set(later, counts.set(earlier, (counts.get(earlier) ?? 0) + 1));
     }
-    return [];
-  });
+  }
+  return [...twins].flatMap(([later, counts]) => repeatsOf(input, system, later, counts));
 }
 
-function compare(table: MeasurementTable, one: readonly number[], other: readonly number[]) {
-  const sorted = [...one].sort((a, b) => table.temperatureK[a]! - table.temperatureK[b]! || a - b);
-  let same = 0;
-  let shared = 0;
-  let example = Number.NaN;
-  for (const row of other) {
-    const T = table.temperatureK[row]!;
-    const twins = sorted.filter((candidate) => Math.abs(table.temperatureK[candidate]! - T) < SAME_TEMPERATURE_K);
-    if (twins.length === 0) continue;
-    shared++;
-    const r = table.massRatio[row]!;
-    if (!twins.some((twin) => Math.abs(table.massRatio[twin]! / r - 1) < SAME_VALUE)) continue;
-    same++;
-    if (Number.isNaN(example)) example = T;
+/** Two rows of different sources with one temperature and one value, whatever the unit. */
+function sameMeasurement({ massRatio, temperatureK, source }: MeasurementTable, a: number, b: number): boolean {
+  const ratio = massRatio[a]! / massRatio[b]!;
+  if (!(ratio > 1 - SAME_VALUE && ratio < 1 + SAME_VALUE) || source[a] === source[b]) return false;
+  return Math.abs(temperatureK[a]! - temperatureK[b]!) < SAME_TEMPERATURE_K;
+}
+
+/** The notice for the source that most of a block's values repeat, if there is one. */
+function repeatsOf(input: ScreenInput, system: System, later: number, counts: ReadonlyMap<number, number>): Flag[] {
+  const { table } = input;
+  const own = [...system.rows].filter((row) => table.source[row] === later).length;
+  for (const [earlier, same] of [...counts].sort((a, b) => b[1] - a[1] || a[0] - b[0])) {
+    if (same < LEAST_PAIRS || same * 2 < own) continue;
+    return [
+      {
+        scope: "block",
+        code: "re-reported",
+        severity: "notice",
+        source: later,
+        system: system.index,
+        evidence: `${same} of its ${counted(own, "value")} are those of ${sourceName(input, earlier)} at the same temperatures`,
+        lookAt: "Look at whether both report one measurement: then it counts once, not twice.",
+      },
+    ];
   }
-  return { same, shared, example };
+  return [];
 }

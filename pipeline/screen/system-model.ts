@@ -124,6 +124,19 @@ export function predict(of: SystemModel, temperatureK: number, source: number): 
   };
 }
 
+/**
+ * Offset of a fitted source as its own points, taken out together, would deviate from the others: b / (1 - v/tau^2),
+ * with v the variance of the offset b given the data. Closed form of leaving the source out, for a common offset.
+ */
+export function deletedOffset(of: SystemModel, source: number): number {
+  const { model } = of;
+  const group = of.groupOfSource.get(source);
+  if (group === undefined) return Number.NaN;
+  of.point.fill(0);
+  const freedom = 1 - groupVariance(model, of.point, 0, group) / model.offsetVariance[group]!;
+  return model.offsets[group]! / Math.max(freedom, 1e-6);
+}
+
 /** ln value expected of sources in general, and the variance of that. */
 export function predictCurve(of: SystemModel, temperatureK: number): Prediction {
   writeScreeningBasis(temperatureK, of.centreK, of.breakK, of.point, 0);

@@ -80,7 +80,10 @@ export function makeWorld(options: WorldOptions): World {
   const random = seededRandom(options.seed);
   const build = createBuilder(options.solutes * SOLVENTS.length * 60);
   for (let s = 0; s < options.solutes; s++) {
-    const solute = { M: 120 + 300 * random.uniform(), hydrateRatio: random.uniform() < 0.3 ? 1.1 + 0.7 * random.uniform() : undefined };
+    const solute = {
+      M: 120 + 300 * random.uniform(),
+      hydrateRatio: random.uniform() < 0.3 ? 1.1 + 0.7 * random.uniform() : undefined,
+    };
     for (const solvent of SOLVENTS) addSystem(build, options, random, s, solute, solvent);
   }
   return finish(build);
@@ -102,26 +105,34 @@ function createBuilder(capacity: number) {
 }
 type Builder = ReturnType<typeof createBuilder>;
 
-function addSystem(b: Builder, options: WorldOptions, random: RandomSource, s: number, solute: Solute, solvent: (typeof SOLVENTS)[number]): void {
+function addSystem(
+  b: Builder,
+  options: WorldOptions,
+  random: RandomSource,
+  s: number,
+  solute: Solute,
+  solvent: (typeof SOLVENTS)[number],
+): void {
   const index = b.systems.length;
   const slope = -(1000 * (8 + (options.steepest - 8) * random.uniform())) / (8.314 * 303);
   const curvature = 4 * random.normal();
   const breakK = random.uniform() < options.transitions ? 298 + 20 * random.uniform() : Number.NaN;
   if (breakK > 0) b.transitionSystems.add(index);
   const drop = -slope * (0.4 + 0.5 * random.uniform());
-  const level = Math.log(0.002) + random.uniform() * Math.log(150);
+  const level = Math.log(0.002) + random.uniform() * Math.log(100);
   const a = level - Math.log((solute.M / solvent.M) * Math.exp(0));
   const truth = (T: number) => {
     const u = 303 / T - 1;
     const bend = T > breakK ? -drop * (303 / breakK - 1 - u) : 0;
-    return Math.min(-0.4, a + slope * u + curvature * (u - Math.log1p(u)) + bend);
+    return a + slope * u + curvature * (u - Math.log1p(u)) + bend;
   };
   b.truths.push(truth);
   b.needs.push(needsOf(solute, solvent));
   const rows: number[] = [];
   const count = options.sources[0] + random.integerBelow(options.sources[1] - options.sources[0] + 1);
   const first = random.integerBelow(HABITS.length);
-  for (let k = 0; k < count; k++) addBlock(b, options, random, index, (first + k) % HABITS.length, solute, solvent.boils, rows);
+  for (let k = 0; k < count; k++)
+    addBlock(b, options, random, index, (first + k) % HABITS.length, solute, solvent.boils, rows);
   const soluteName = `invented ${s + 1}`;
   b.systems.push({
     index,
@@ -130,7 +141,16 @@ function addSystem(b: Builder, options: WorldOptions, random: RandomSource, s: n
     family: `${s} ${solvent.name}`,
     fitBasis: "ln x",
     rows: Int32Array.from(rows),
-    identity: { solute: soluteName, solidForm: "unspecified", solvent: solvent.name, composition: "", medium: "", soluteMolarMass: solute.M, solventMolarMass: solvent.M, aqueousSalt: false },
+    identity: {
+      solute: soluteName,
+      solidForm: "unspecified",
+      solvent: solvent.name,
+      composition: "",
+      medium: "",
+      soluteMolarMass: solute.M,
+      solventMolarMass: solvent.M,
+      aqueousSalt: false,
+    },
   });
 }
 
@@ -141,12 +161,34 @@ function needsOf(solute: Solute, solvent: (typeof SOLVENTS)[number]): Needs {
     crystalMolarMass: solute.hydrateRatio === undefined ? undefined : exactly(solute.M * solute.hydrateRatio),
     solventMolarMass: exactly(solvent.M),
     solventDensityAt20C: exactly(solvent.rho),
-    solutionDensity: { kind: "additive volumes", apparentSoluteDensity: exactly(1200), solventDensity: exactly(solvent.rho) },
+    solutionDensity: {
+      kind: "additive volumes",
+      apparentSoluteDensity: exactly(1200),
+      solventDensity: exactly(solvent.rho),
+    },
   };
 }
 
-const BLOCK_KINDS = ["power of ten", "basis mix-up", "basis mix-up", "temperature unit", "dilution factor", "hydrate basis", "random"] as const;
-const POINT_KINDS = ["power of ten", "power of ten", "digits transposed", "digits transposed", "dilution factor", "rows shifted", "value of another solvent", "random", "random"] as const;
+const BLOCK_KINDS = [
+  "power of ten",
+  "basis mix-up",
+  "basis mix-up",
+  "temperature unit",
+  "dilution factor",
+  "hydrate basis",
+  "random",
+] as const;
+const POINT_KINDS = [
+  "power of ten",
+  "power of ten",
+  "digits transposed",
+  "digits transposed",
+  "dilution factor",
+  "rows shifted",
+  "value of another solvent",
+  "random",
+  "random",
+] as const;
 const OTHER_UNIT: Readonly<Record<string, readonly string[]>> = {
   "g/100 g solvent": ["g/100 g solution", "g/100 mL solution"],
   "g/100 g solution": ["g/100 g solvent", "g/100 mL solution"],
@@ -156,7 +198,16 @@ const OTHER_UNIT: Readonly<Record<string, readonly string[]>> = {
   "mol/kg solvent": ["mol/L solution"],
 };
 
-function addBlock(b: Builder, options: WorldOptions, random: RandomSource, system: number, source: number, solute: Solute, boils: number, rows: number[]): void {
+function addBlock(
+  b: Builder,
+  options: WorldOptions,
+  random: RandomSource,
+  system: number,
+  source: number,
+  solute: Solute,
+  boils: number,
+  rows: number[],
+): void {
   const habit = HABITS[source]!;
   const n = options.temperatures[0] + random.integerBelow(options.temperatures[1] - options.temperatures[0] + 1);
   const [low, high] = [278 + 8 * random.uniform(), Math.min(boils - 5, 313 + 25 * random.uniform())];
@@ -168,14 +219,21 @@ function addBlock(b: Builder, options: WorldOptions, random: RandomSource, syste
   const units = OTHER_UNIT[habit.unit]!;
   const written = kind === "basis mix-up" ? units[random.integerBelow(units.length)]! : habit.unit;
   const scale = habit.temperature === "°F" ? "°C" : "°F";
-  if (kind === "hydrate basis" && solute.hydrateRatio === undefined) return addBlock(b, options, random, system, source, solute, boils, rows);
+  if (kind === "hydrate basis" && solute.hydrateRatio === undefined)
+    return addBlock(b, options, random, system, source, solute, boils, rows);
   for (let i = 0; i < n; i++) {
     const T = Math.round(low + ((high - low) * i) / Math.max(1, n - 1)) + 0.15;
-    const claimed = kind === "temperature unit" ? parseTemperatureUnit(habit.temperature)!.toKelvin(parseTemperatureUnit(scale)!.fromKelvin(T)) : T;
+    const claimed =
+      kind === "temperature unit"
+        ? parseTemperatureUnit(habit.temperature)!.toKelvin(parseTemperatureUnit(scale)!.fromKelvin(T))
+        : T;
     const truth = b.truths[system]!;
     const ln = truth(T) + offset + habit.sd * random.normal() + (kind === "random" ? away : 0);
     const trueValue = write(b, system, habit.unit, ln, "anhydrous");
-    let value = kind === "hydrate basis" ? write(b, system, habit.unit, ln, "hydrate equivalent per total solvent") : write(b, system, written, ln, "anhydrous");
+    let value =
+      kind === "hydrate basis"
+        ? write(b, system, habit.unit, ln, "hydrate equivalent per total solvent")
+        : write(b, system, written, ln, "anhydrous");
     if (kind === "power of ten") value *= power;
     if (kind === "dilution factor") value /= dilution;
     const row = b.table.count++;
@@ -191,22 +249,33 @@ function addBlock(b: Builder, options: WorldOptions, random: RandomSource, syste
     b.trueReported[row] = trueValue;
     setValue(b, row, Number(value.toPrecision(4)));
     if (kind !== "") b.faultOfBlock.set(`${system}:${source}`, kind);
-    else if (random.uniform() < options.singleFaults) b.pending.push({ row, kind: POINT_KINDS[random.integerBelow(POINT_KINDS.length)]! });
+    else if (random.uniform() < options.singleFaults)
+      b.pending.push({ row, kind: POINT_KINDS[random.integerBelow(POINT_KINDS.length)]! });
   }
 }
 
-function write(b: Builder, system: number, unit: string, lnX: number, basis: "anhydrous" | "hydrate equivalent per total solvent"): number {
+function write(
+  b: Builder,
+  system: number,
+  unit: string,
+  lnX: number,
+  basis: "anhydrous" | "hydrate equivalent per total solvent",
+): number {
   return converter(b, system, unit, basis)!.fromHub(massRatio(b.needs[system]!, Math.exp(lnX)));
 }
 
+const units = new Map<string, ReturnType<typeof parseUnit>>();
+
 function converter(b: Builder, system: number, unit: string, basis: Parameters<typeof hubConverter>[2]) {
-  const parsed = parseUnit(unit);
+  const parsed = units.get(unit) ?? parseUnit(unit);
+  units.set(unit, parsed);
   if (parsed.kind !== "unit") return undefined;
   const found = hubConverter(parsed.unit, b.needs[system]!, basis);
   return found.kind === "converter" ? found.converter : undefined;
 }
 
-const massRatio = (needs: Needs, x: number) => ((x / (1 - x)) * needs.soluteMolarMass!.value) / needs.solventMolarMass!.value;
+const massRatio = (needs: Needs, x: number) =>
+  ((x / (1 - x)) * needs.soluteMolarMass!.value) / needs.solventMolarMass!.value;
 const moleFraction = (needs: Needs, r: number) => {
   const ratio = (r * needs.solventMolarMass!.value) / needs.soluteMolarMass!.value;
   return ratio / (1 + ratio);
@@ -256,7 +325,7 @@ function faultRow(b: Builder, random: RandomSource, row: number, kind: string): 
     b.faultOfRow[row] = kind;
   };
   if (kind === "power of ten") put(value * [10, 0.1, 100, 0.01][random.integerBelow(4)]!);
-  else if (kind === "dilution factor") put(value / [2, 5, 4, 20][random.integerBelow(4)]!);
+  else if (kind === "dilution factor") put(value / [2, 2, 5, 5, 4, 20][random.integerBelow(6)]!);
   else if (kind === "random") put(value * Math.exp((0.2 + 1.3 * random.uniform()) * (random.uniform() < 0.5 ? -1 : 1)));
   else if (kind === "digits transposed") put(transposed(value));
   else if (kind === "rows shifted") {
@@ -268,7 +337,12 @@ function faultRow(b: Builder, random: RandomSource, row: number, kind: string): 
       put(other);
     }
   } else {
-    const same = [...b.systems.keys()].filter((other) => other !== system && b.systems[other]!.identity.solute === b.systems[system]!.identity.solute && b.systems[other]!.rows.some((r) => table.source[r] === table.source[row]));
+    const same = [...b.systems.keys()].filter(
+      (other) =>
+        other !== system &&
+        b.systems[other]!.identity.solute === b.systems[system]!.identity.solute &&
+        b.systems[other]!.rows.some((r) => table.source[r] === table.source[row]),
+    );
     const other = same[random.integerBelow(same.length)];
     if (other !== undefined) {
       const unit = table.texts.texts[table.reportedUnit[row]!]!;

@@ -1,7 +1,7 @@
 import { mkdirSync, writeFileSync } from "node:fs";
 import { join } from "node:path";
-import { xoroshiro128plus } from "pure-rand/generator/xoroshiro128plus";
 import { uniformFloat64 } from "pure-rand/distribution/uniformFloat64";
+import { xoroshiro128plus } from "pure-rand/generator/xoroshiro128plus";
 
 /** Size of a made-up collection. */
 export interface CollectionSize {
@@ -24,15 +24,78 @@ interface Habit {
 const moleFraction = (r: number, soluteMass: number, solventMass: number) =>
   r / soluteMass / (r / soluteMass + 1 / solventMass);
 const HABITS: readonly Habit[] = [
-  { name: "north-gravimetry", unit: "g/100 g solvent", temperatureUnit: "°C", delimiter: ",", method: "gravimetric", report: (r) => 100 * r },
-  { name: "south-gravimetry", unit: "g/kg solvent", temperatureUnit: "K", delimiter: ";", method: "gravimetric", report: (r) => 1000 * r },
-  { name: "east-fractions", unit: "mole fraction", temperatureUnit: "K", delimiter: ",", method: "isothermal-synthetic", report: moleFraction },
-  { name: "west-percent", unit: "% w/w", temperatureUnit: "°C", delimiter: "\t", method: "titration", report: (r) => (100 * r) / (1 + r) },
-  { name: "pilot-molal", unit: "mol/kg solvent", temperatureUnit: "°F", delimiter: ",", method: "titration", report: (r, m) => (1000 * r) / m },
-  { name: "quality-volume", unit: "mg/mL solvent", temperatureUnit: "°C", delimiter: ",", method: "uv", report: (r, _m, _s, d) => 1000 * r * d },
-  { name: "archive-thousandths", unit: "1000 x", temperatureUnit: "K", delimiter: ",", method: "unspecified", report: (r, m, s) => 1000 * moleFraction(r, m, s) },
-  { name: "screening-logs", unit: "ln x", temperatureUnit: "K", delimiter: ";", method: "hplc", report: (r, m, s) => Math.log(moleFraction(r, m, s)) },
-  { name: "clear-points", unit: "g/100 g solution", temperatureUnit: "°C", delimiter: ",", method: "clear-point", report: (r) => (100 * r) / (1 + r) },
+  {
+    name: "north-gravimetry",
+    unit: "g/100 g solvent",
+    temperatureUnit: "°C",
+    delimiter: ",",
+    method: "gravimetric",
+    report: (r) => 100 * r,
+  },
+  {
+    name: "south-gravimetry",
+    unit: "g/kg solvent",
+    temperatureUnit: "K",
+    delimiter: ";",
+    method: "gravimetric",
+    report: (r) => 1000 * r,
+  },
+  {
+    name: "east-fractions",
+    unit: "mole fraction",
+    temperatureUnit: "K",
+    delimiter: ",",
+    method: "isothermal-synthetic",
+    report: moleFraction,
+  },
+  {
+    name: "west-percent",
+    unit: "% w/w",
+    temperatureUnit: "°C",
+    delimiter: "\t",
+    method: "titration",
+    report: (r) => (100 * r) / (1 + r),
+  },
+  {
+    name: "pilot-molal",
+    unit: "mol/kg solvent",
+    temperatureUnit: "°F",
+    delimiter: ",",
+    method: "titration",
+    report: (r, m) => (1000 * r) / m,
+  },
+  {
+    name: "quality-volume",
+    unit: "mg/mL solvent",
+    temperatureUnit: "°C",
+    delimiter: ",",
+    method: "uv",
+    report: (r, _m, _s, d) => 1000 * r * d,
+  },
+  {
+    name: "archive-thousandths",
+    unit: "1000 x",
+    temperatureUnit: "K",
+    delimiter: ",",
+    method: "unspecified",
+    report: (r, m, s) => 1000 * moleFraction(r, m, s),
+  },
+  {
+    name: "screening-logs",
+    unit: "ln x",
+    temperatureUnit: "K",
+    delimiter: ";",
+    method: "hplc",
+    report: (r, m, s) => Math.log(moleFraction(r, m, s)),
+  },
+  {
+    name: "clear-points",
+    unit: "g/100 g solution",
+    temperatureUnit: "°C",
+    delimiter: ",",
+    method: "clear-point",
+    report: (r) => (100 * r) / (1 + r),
+  },
 ];
 
 /** Solvents with molar mass (g/mol) and density at 20 °C (g/mL), rounded: good enough to invent numbers with. */
@@ -55,8 +118,11 @@ export function makeCollection(folder: string, { measurements, systems, seed }: 
   mkdirSync(join(folder, "sources"), { recursive: true });
   const solutes = Math.ceil(systems / SOLVENTS.length);
   const molarMass = Array.from({ length: solutes }, () => 120 + Math.round(30000 * uniform()) / 100);
-  const rows = molarMass.map((mass, i) => `invented compound ${i + 1},solute,,,,,,${mass},,,1300,,invented for the benchmark`);
-  const header = "name,role,synonyms,cas,inchikey,smiles,formula,molar_mass,melting_point_K,fusion_enthalpy_kJ_per_mol,density_kg_per_m3,hazards,reference";
+  const rows = molarMass.map(
+    (mass, i) => `invented compound ${i + 1},solute,,,,,,${mass},,,1300,,invented for the benchmark`,
+  );
+  const header =
+    "name,role,synonyms,cas,inchikey,smiles,formula,molar_mass,melting_point_K,fusion_enthalpy_kJ_per_mol,density_kg_per_m3,hazards,reference";
   writeFileSync(join(folder, "substances.csv"), `${[header, ...rows].join("\n")}\n`);
   writeFileSync(
     join(folder, "collection.json"),
@@ -76,12 +142,27 @@ export function makeCollection(folder: string, { measurements, systems, seed }: 
       const temperature = 278.15 + (50 * Math.floor(i / sources.length)) / Math.ceil(perSystem / sources.length);
       const r = Math.exp(level + slope * (1 / temperature - 1 / 298.15) + 0.02 * normal());
       const value = habit.report(r, molarMass[solute] as number, solventMass, density);
-      const t = { K: temperature, "°C": temperature - 273.15, "°F": (temperature * 9) / 5 - 459.67 }[habit.temperatureUnit];
-      const cells = [`invented compound ${solute + 1}`, solvent, t.toFixed(2), value.toPrecision(5), "", `run ${i}`, "bench", "2026-01-15", "none", "x", String(i), "ok"];
+      const t = { K: temperature, "°C": temperature - 273.15, "°F": (temperature * 9) / 5 - 459.67 }[
+        habit.temperatureUnit
+      ];
+      const cells = [
+        `invented compound ${solute + 1}`,
+        solvent,
+        t.toFixed(2),
+        value.toPrecision(5),
+        "",
+        `run ${i}`,
+        "bench",
+        "2026-01-15",
+        "none",
+        "x",
+        String(i),
+        "ok",
+      ];
       lines[source]?.push(cells.join(habit.delimiter));
     }
   }
-  HABITS.forEach((habit, i) => writeSource(folder, habit, lines[i] as string[]));
+  for (const [i, habit] of HABITS.entries()) writeSource(folder, habit, lines[i] as string[]);
 }
 
 /** Writes one source and its card. */

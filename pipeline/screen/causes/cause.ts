@@ -34,6 +34,10 @@ export interface Explanation {
   readonly weight: number;
   /** What undoes it for a row; undefined where it does not apply to that row. */
   readonly change: (row: number) => Change | undefined;
+  /** Another row that the same mistake must have touched, with what undoes it there; it must fit its curve then too. */
+  readonly partner?: (row: number) => { readonly row: number; readonly change: Change } | undefined;
+  /** Number in the reported unit that would be right, where `change` alone does not say it. */
+  readonly proposes?: (row: number) => number | undefined;
   /** System whose curve the re-read value must fit, where not the row's own. */
   readonly system?: number;
 }

@@ -42,6 +42,8 @@ const STRAY_Z = 5;
 const STRAY_LOG_DENSITY = Math.log(0.03 / 3);
 /** At most this share of a block may be stray. */
 const STRAY_SHARE = 0.25;
+/** Part of the material threshold from which a point sides with the offset of its block. */
+const ALIKE_SHARE = 0.7;
 const [LOWEST_K, HIGHEST_K] = [150, 650];
 
 /**
@@ -155,8 +157,16 @@ export function middle(values: readonly number[]): number {
   return sorted.length % 2 === 1 ? sorted[half]! : (sorted[half - 1]! + sorted[half]!) / 2;
 }
 
-/** Offset of a block from the curve of the others: median, its standard deviation, share of points beyond both limits. */
-export function blockOffset(of: Omit<BlockCase, "suspects">): { median: number; sd: number; failing: number } {
+/**
+ * Offset of a block from the curve of the others: median, its standard deviation, the share of points that are off
+ * (either way), and the share that deviates to the side of the median by most of the threshold.
+ */
+export function blockOffset(of: Omit<BlockCase, "suspects">): {
+  median: number;
+  sd: number;
+  failing: number;
+  alike: number;
+} {
   const { fit, points, models, source } = of;
   const deviations: number[] = [];
   const variances: number[] = [];
@@ -172,5 +182,7 @@ export function blockOffset(of: Omit<BlockCase, "suspects">): { median: number; 
   const noise = middle(points.map((point) => fit.noiseSd[point]! ** 2));
   // 1.57: variance of a median relative to that of a mean under Gaussian noise.
   const sd = Math.sqrt(middle(variances) + (1.57 * noise) / points.length);
-  return { median: middle(deviations), sd, failing: failing / points.length };
+  const median = middle(deviations);
+  const alike = deviations.filter((d) => d * median > 0 && Math.abs(d) > ALIKE_SHARE * of.threshold).length;
+  return { median, sd, failing: failing / points.length, alike: alike / points.length };
 }

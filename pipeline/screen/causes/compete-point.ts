@@ -1,4 +1,5 @@
 import type { RobustFit } from "../../records/fits.ts";
+import type { Change } from "../reread.ts";
 import type { ScreenInput } from "../screen-input.ts";
 import { fitSources, predict, type SystemModel } from "../system-model.ts";
 import type { CauseName, Explanation, Suspects } from "./cause.ts";
@@ -23,9 +24,11 @@ export const LOOK_AGAIN =
   "Look the value and its temperature up in the notebook or the original table; if they stand, measure again.";
 
 /** Prior probability of a random error, and how its size in ln value is spread. Common practice. */
-const NONE_PRIOR = 0.3;
-const NONE_SCALE = 0.5;
+const NONE_PRIOR = 0.55;
+const NONE_SCALE = 0.9;
 const NONE_WIDEST = 10;
+/** Share of random errors of any size at all. */
+const NONE_WIDE_SHARE = 0.25;
 /** A re-read value must come this near, in standard deviations. */
 const NEAR_Z = 3;
 /** Temperatures a re-reading may lead to, K. */
@@ -85,28 +88,40 @@ interface Evaluated {
 }
 
 /** Likelihood of one explanation times its share; undefined where it is impossible or leaves the point off. */
-function evaluate(
-  { input, models, fit, point, suspects, threshold }: PointCase,
-  how: Explanation,
-): Evaluated | undefined {
+function evaluate(of: PointCase, how: Explanation): Evaluated | undefined {
+  const { input, models, suspects } = of;
   const row = suspects.rows[0]!;
-  const source = fit.points.source[point]!;
   const change = how.change(row);
-  const reread = change === undefined ? undefined : input.reread(row, change);
-  if (change === undefined || reread === undefined) return undefined;
-  if (!(reread.temperatureK > LOWEST_K && reread.temperatureK < HIGHEST_K)) return undefined;
-  if (how.system !== undefined) fitSources(models[1], input.fits[how.system]!, () => true);
-  const expected = predict(models[how.system === undefined ? 0 : 1], reread.temperatureK, source);
+  if (change === undefined) return undefined;
+  const model = models[how.system === undefined ? 0 : 1];
+  if (how.system !== undefined) fitSources(model, input.fits[how.system]!, () => true);
+  const fitting = fits(of, model, row, change);
+  if (fitting === undefined) return undefined;
+  const partner = how.partner?.(row);
+  const partnerFits = partner === undefined ? undefined : fits(of, model, partner.row, partner.change);
+  if (partner !== undefined && partnerFits === undefined) return undefined;
+  // That the partner fits too would be chance if the error were random.
+  const ofPartner = partnerFits === undefined ? 1 : oddsOfFit(partnerFits.deviation, partnerFits.variance);
+  const says = SAYS_VALUE.has(change.kind) ? fitting.reportedValue : how.proposes?.(row);
+  return {
+    detail: how.detail,
+    density: how.weight * ofPartner * normalDensity(fitting.deviation, fitting.variance),
+    proposedValue: says,
+  };
+}
+
+/** Changes after which the re-read value is the one to propose; the others leave the value and change something else. */
+const SAYS_VALUE: ReadonlySet<Change["kind"]> = new Set(["factor", "value", "unit", "solute basis"]);
+
+/** Deviation of a row under a change, where it is possible and within the limits. */
+function fits({ input, fit, point, threshold }: PointCase, model: SystemModel, row: number, change: Change) {
+  const reread = input.reread(row, change);
+  if (reread === undefined || !(reread.temperatureK > LOWEST_K && reread.temperatureK < HIGHEST_K)) return undefined;
+  const expected = predict(model, reread.temperatureK, fit.points.source[point]!);
   const deviation = reread.lnValue - expected.mean;
   const variance = expected.variance + fit.noiseSd[point]! ** 2;
   if (!(Math.abs(deviation) < Math.min(threshold, NEAR_Z * Math.sqrt(variance)))) return undefined;
-  const changesValue =
-    change.kind !== "temperature scale" && change.kind !== "temperature" && change.kind !== "solvent";
-  return {
-    detail: how.detail,
-    density: how.weight * normalDensity(deviation, variance),
-    proposedValue: changesValue ? reread.reportedValue : undefined,
-  };
+  return { deviation, variance, reportedValue: reread.reportedValue };
 }
 
 /** Names the best cause above 0.5, keeps its value above 0.9. */
@@ -120,7 +135,13 @@ function normalDensity(deviation: number, variance: number): number {
   return Math.exp((-0.5 * deviation * deviation) / variance) / Math.sqrt(2 * Math.PI * variance);
 }
 
+/** How much likelier a deviation is as noise than as a random error. */
+function oddsOfFit(deviation: number, variance: number): number {
+  return normalDensity(deviation, variance) / noneDensity(deviation);
+}
+
 /** Density of the deviation of a random error: mostly moderate, sometimes anything. */
 function noneDensity(deviation: number): number {
-  return 0.5 * (Math.exp(-Math.abs(deviation) / NONE_SCALE) / (2 * NONE_SCALE)) + 0.5 / NONE_WIDEST;
+  const moderate = Math.exp(-Math.abs(deviation) / NONE_SCALE) / (2 * NONE_SCALE);
+  return (1 - NONE_WIDE_SHARE) * moderate + NONE_WIDE_SHARE / NONE_WIDEST;
 }

@@ -1,5 +1,11 @@
 import type { Cause } from "./cause.ts";
 
+/** A swap that changes the number by more than this factor (ln) moved a leading zero: rarer than the others. */
+const WITH_ZERO = 1.5;
+const WITH_ZERO_SHARE = 0.4;
+/** Swaps that change the number by less cannot be what is seen. */
+const LEAST_CHANGE = 0.04;
+
 /** Numbers that a swap of two neighbouring, different digits makes of a number as written; the sign and the decimal point stay. */
 export function transpositions(value: number): number[] {
   const text = String(Math.abs(value));
@@ -24,17 +30,17 @@ export function transpositions(value: number): number[] {
  */
 export const digitsTransposed: Cause = {
   name: "digits transposed",
-  pointPrior: 0.1,
+  pointPrior: 0.13,
   blockPrior: 0,
   lookAt: "Look at the digits of this value in the notebook or the original table.",
   explanations: ({ rows, reportedValue }) => {
     const row = rows[0];
     if (rows.length !== 1 || row === undefined) return [];
     const reported = reportedValue(row);
-    const candidates = transpositions(reported);
+    const candidates = transpositions(reported).filter((value) => Math.abs(value / reported - 1) > LEAST_CHANGE);
     return candidates.map((value) => ({
       detail: `${reported} should read ${value}`,
-      weight: 1 / candidates.length,
+      weight: (Math.abs(Math.log(value / reported)) > WITH_ZERO ? WITH_ZERO_SHARE : 1) / candidates.length,
       change: () => ({ kind: "value", value }),
     }));
   },

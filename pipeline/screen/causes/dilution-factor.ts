@@ -2,12 +2,12 @@ import type { Cause } from "./cause.ts";
 
 /** Usual dilutions of a saturated solution before analysis that are no powers of ten, with their shares. */
 const FACTORS: readonly (readonly [factor: number, share: number])[] = [
-  [2, 0.26],
-  [4, 0.12],
-  [5, 0.3],
-  [20, 0.14],
-  [25, 0.09],
-  [50, 0.09],
+  [2, 0.3],
+  [4, 0.1],
+  [5, 0.35],
+  [20, 0.12],
+  [25, 0.06],
+  [50, 0.07],
 ];
 /** Forgetting a dilution is commoner than counting it twice. */
 const FORGOTTEN = 0.8;

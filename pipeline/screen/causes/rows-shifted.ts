@@ -1,10 +1,12 @@
-import type { Cause } from "./cause.ts";
+import type { Cause, Explanation, Suspects } from "./cause.ts";
+
+const STEPS = [-1, 1] as const;
 
 /**
- * A value stands beside the temperature of its neighbour: rows swapped or shifted, a cell copied from the row above.
+ * A value stands beside the temperature of its neighbour: two rows swapped, or a cell copied from the row beside it.
  *
- * Computes each row with the number of the row before or behind it in the same block; where both hold the same number,
- * with the temperature of that row.
+ * Computes the number at the temperature of the row before or behind it in the same block. Where the two rows hold
+ * different numbers, the neighbour's must fit here in turn; one that fits where it stands speaks against it.
  * Known limitation: a whole block shifted on an even temperature grid looks like a temperature offset of one step.
  */
 export const rowsShifted: Cause = {
@@ -12,16 +14,43 @@ export const rowsShifted: Cause = {
   pointPrior: 0.08,
   blockPrior: 0.05,
   lookAt: "Look at whether the values stand beside their own temperatures in the original table.",
-  explanations: ({ neighbour, reportedValue, temperatureK }) =>
-    ([-1, 1] as const).map((step) => ({
-      detail: `value and temperature of the row ${step === -1 ? "before" : "behind"} mixed up with this one`,
+  explanations: (suspects) => (suspects.rows.length === 1 ? swaps(suspects) : shifts(suspects)),
+};
+
+function swaps({ neighbour, reportedValue, temperatureK }: Suspects): Explanation[] {
+  return STEPS.map((step) => {
+    const different = (row: number) => {
+      const other = neighbour(row, step);
+      return other !== undefined && reportedValue(other) !== reportedValue(row) ? other : undefined;
+    };
+    return {
+      detail: `belongs to the temperature of the row ${step === -1 ? "before" : "behind"}`,
       weight: 1 / 2,
       change: (row) => {
         const other = neighbour(row, step);
-        if (other === undefined) return undefined;
-        return reportedValue(other) === reportedValue(row)
-          ? { kind: "temperature", temperatureK: temperatureK(other) }
-          : { kind: "value", value: reportedValue(other) };
+        return other === undefined ? undefined : { kind: "temperature", temperatureK: temperatureK(other) };
       },
-    })),
-};
+      partner: (row) => {
+        const other = different(row);
+        return other === undefined
+          ? undefined
+          : { row: other, change: { kind: "temperature", temperatureK: temperatureK(row) } };
+      },
+      proposes: (row) => {
+        const other = different(row);
+        return other === undefined ? undefined : reportedValue(other);
+      },
+    };
+  });
+}
+
+function shifts({ neighbour, reportedValue }: Suspects): Explanation[] {
+  return STEPS.map((step) => ({
+    detail: `every value stands one row too ${step === -1 ? "early" : "late"}`,
+    weight: 1 / 2,
+    change: (row) => {
+      const other = neighbour(row, step);
+      return other === undefined ? undefined : { kind: "value", value: reportedValue(other) };
+    },
+  }));
+}
