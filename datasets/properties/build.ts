@@ -1,6 +1,8 @@
 import { writeFileSync } from "node:fs";
 import { fileURLToPath } from "node:url";
+import { azeotropeRows } from "./azeotropes.ts";
 import { electrolyteProperties } from "./electrolyte-properties.ts";
+import { excessVolumeRows } from "./excess-volumes.ts";
 import { formRows } from "./form-rows.ts";
 import { haveReferenceFiles, readReferenceFile, referenceFolder } from "./reference-files.ts";
 import { additionalSoluteRows, soluteRow } from "./solute-rows.ts";
@@ -35,10 +37,12 @@ export function buildTables(): ReadonlyMap<string, string> {
     // Sucrose has a formula of its own over a wider range.
     return name === undefined || name === "sucrose" ? [] : electrolyteProperties(salt, name, checks);
   });
+  const excessVolumes = excessVolumeRows(readReferenceFile("excess_volume_redlich_kister.csv"));
+  const propertyRows = [...[...properties.values()].flat(), ...electrolytes, ...excessVolumes, ...azeotropeRows()];
   return new Map([
     ["substances.csv", tableText(SUBSTANCE_COLUMNS, substances)],
     ["solid_forms.csv", tableText(FORM_COLUMNS, formRows(substances))],
-    ["property-values.csv", tableText(PROPERTY_COLUMNS, [...[...properties.values()].flat(), ...electrolytes])],
+    ["property-values.csv", tableText(PROPERTY_COLUMNS, propertyRows)],
   ]);
 }
 

@@ -28,6 +28,9 @@ const UNITS: ReadonlyMap<string, readonly string[]> = new Map([
 /** Fits with a larger scatter than this [kg/m3] mix incompatible publications and are left out. */
 const LARGEST_SCATTER = 1.5;
 
+/** Wide correlations are used up to this share of the critical temperature: nearer to it they are less certain. */
+const HIGHEST_REDUCED = 0.8;
+
 /** Rows of property-values.csv for one solvent, and its density at 20 °C as the program will see it. */
 export function solventProperties(solvent: ReferenceRow, correlations: readonly ReferenceRow[]): readonly Row[] {
   const name = solvent("name");
@@ -82,7 +85,7 @@ function correlationRows(solvent: ReferenceRow, row: ReferenceRow): Row[] {
   const reference = scatter?.reference ?? printed;
   const range = {
     T_min_K: row("Tmin_K") || solvent("melting_point_K"),
-    T_max_K: row("Tmax_K") || row("Tc_K"),
+    T_max_K: isFit ? row("Tmax_K") : significant(HIGHEST_REDUCED * Number(row("Tc_K") || row("c3")), 4),
     reference,
   };
   const prefix = `liquid_density_${equation}`;

@@ -26,6 +26,8 @@ export interface Candidate {
   readonly lnValue: (temperatureK: number) => number;
   /** d ln value/dT, 1/K. */
   readonly slope: (temperatureK: number) => number;
+  /** r' K^-1 r under the common covariance. */
+  readonly residualSumOfSquares: number;
   /** Infinity where there are fewer than p + 3 points. */
   readonly aicc: number;
   readonly leaveOneOut: number;
@@ -47,6 +49,7 @@ export interface LinearFit {
   readonly covariance: readonly number[];
   /** Part of the covariance that comes from scatter within sources. */
   readonly withinPart: readonly number[];
+  readonly residualSumOfSquares: number;
   readonly aicc: number;
   readonly leaveOneOut: number;
 }
@@ -101,6 +104,7 @@ export function fitLinear(
       coefficients: fit.coefficients,
       covariance: fit.covariance,
       withinPart: withinPart(ws, ws.common, fit.covariance, p),
+      residualSumOfSquares: fit.residualSumOfSquares,
       aicc: correctedAkaike(ws, common, fit.residualSumOfSquares, p),
       leaveOneOut: leaveOneOut(ws, ws.common, fit.covariance, p),
     };
@@ -115,6 +119,7 @@ export function linearCandidate(common: CommonFit, fit: LinearFit): Candidate {
   return {
     model: model.name,
     parameterCount: p,
+    residualSumOfSquares: fit.residualSumOfSquares,
     aicc,
     leaveOneOut,
     lnValue: (T) => centredValue(model, coefficients, T, centreK),

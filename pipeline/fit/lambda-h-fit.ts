@@ -146,6 +146,7 @@ function candidateAt(ws: FitWorkspace, common: CommonFit, best: Trial, meltingPo
     parameterCount,
     lnValue: (T) => lnMoleFraction(lambda, vAt(T)),
     slope: (T) => g / T ** 2 / (1 + (lambda - 1) * Math.exp(-vAt(T))),
+    residualSumOfSquares: best.residualSumOfSquares,
     aicc: correctedAkaike(ws, common, best.residualSumOfSquares, parameterCount),
     leaveOneOut: leaveOneOut(ws, ws.common, covariance, parameterCount),
     standardErrorOfRise: () => 0,

@@ -30,6 +30,7 @@ export function startWithBranches(ws: RobustWorkspace, water: boolean): void {
   let bestLoss = refineStart(ws, BREAK_SD, 3) - LEAST_FALL;
   for (let j = SIDE; j <= temperatures.length - SIDE; j++) {
     const breakK = (temperatures[j - 1]! + temperatures[j]!) / 2;
+    if (!seenWithinSources(ws, breakK)) continue;
     const loss = lossWithBreak(ws, breakK);
     if (loss >= bestLoss) continue;
     bestBreak = breakK;
@@ -56,6 +57,24 @@ function lossWithBreak(ws: RobustWorkspace, breakK: number): number {
   refineStart(ws, 4 * BREAK_SD, 2);
   const loss = refineStart(ws, BREAK_SD, 3);
   return modelOf(ws).coefficients[SCREENING_STRIDE - 1]! < 0 ? loss : Number.POSITIVE_INFINITY;
+}
+
+/**
+ * Whether sources that cross the break, each with two points on either side, have three temperatures a side between
+ * them: sources that lie wholly on one side differ in slope for other reasons too.
+ */
+function seenWithinSources(ws: RobustWorkspace, breakK: number): boolean {
+  const sides: readonly [Set<number>, Set<number>] = [new Set(), new Set()];
+  for (let g = 0; g < ws.groups; g++) {
+    const own: readonly [number[], number[]] = [[], []];
+    for (let k = ws.groupStart[g]!; k < ws.groupStart[g + 1]!; k++) {
+      const T = ws.temperatureK[k]!;
+      if (ws.usable[k] === 1) own[T < breakK ? 0 : 1].push(Math.round(T / SAME_TEMPERATURE_K));
+    }
+    if (own[0].length < 2 || own[1].length < 2) continue;
+    for (const side of [0, 1] as const) for (const T of own[side]) sides[side].add(T);
+  }
+  return sides[0].size >= SIDE && sides[1].size >= SIDE;
 }
 
 function distinctTemperatures(ws: RobustWorkspace): number[] {

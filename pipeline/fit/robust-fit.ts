@@ -17,6 +17,7 @@ import {
 import { failure, settleSources } from "./robust-keep.ts";
 import { type PreparedEdition, prepareEdition, type RobustSystem, spanK } from "./robust-prepare.ts";
 import { createRobustWorkspace, fillBasis, loadSystem, modelOf, type RobustWorkspace } from "./robust-workspace.ts";
+import { scaleSample } from "./scale-sample.ts";
 
 export type { RobustSystem } from "./robust-prepare.ts";
 
@@ -25,7 +26,7 @@ export interface RobustOptions {
   readonly defaults?: Partial<DefaultScales>;
   /** Material threshold of a point: the smallest |deviation| in ln value worth a person's time. Default 0.12. */
   readonly threshold?: (system: number, point: number) => number;
-  /** Passes over the edition; the scales are re-estimated between them. Default 3. */
+  /** Passes over the edition; the scales are re-estimated between them. Default 4. */
   readonly passes?: number;
 }
 
@@ -69,15 +70,16 @@ export function robustFits(
   const capacity = points.reduce((most, { n }) => Math.max(most, n), 1);
   const ws = createRobustWorkspace(capacity, nSources);
   const prepared = prepareEdition(ws, points, perSystem, nSources);
+  const sample = scaleSample(points, prepared.betweenClass, nSources);
   let scales = startScales(prepared.typicalU, defaults);
   let sums = createScaleSums(nSources);
-  for (let pass = 1; pass < (options.passes ?? 3); pass++) {
+  for (let pass = 1; pass < (options.passes ?? 4); pass++) {
     sums = createScaleSums(nSources);
-    points.forEach((system, s) => {
+    for (const s of sample) {
       const between = betweenOf(scales, prepared.betweenClass[s]!);
-      const camps = settle(ws, system, s, perSystem[s], prepared, scales, threshold);
+      const camps = settle(ws, points[s]!, s, perSystem[s], prepared, scales, threshold);
       gather(ws, sums, prepared.betweenClass[s]!, between, camps !== undefined);
-    });
+    }
     scales = nextScales(sums, scales, defaults);
   }
   const room = fitRoom(prepared.first[points.length]!);

@@ -9,9 +9,10 @@ import {
 import { fewestTemperatures, smallestSpanK } from "../curves/modified-apelblat.ts";
 import type { PooledScales, RobustFit } from "../records/fits.ts";
 import type { System } from "../records/systems.ts";
-import { type CommonFit, fitLinear, type LinearFit, linearCandidate } from "./candidate.ts";
+import { type Candidate, type CommonFit, fitLinear, type LinearFit, linearCandidate } from "./candidate.ts";
 import type { FitWorkspace } from "./fit-workspace.ts";
 import type { KeptPoints } from "./kept-points.ts";
+import { lackOfCurvature } from "./lack-of-curvature.ts";
 import { fitLambdaH } from "./lambda-h-fit.ts";
 import { type Choice, chooseModel } from "./model-choice.ts";
 import { physicalVeto } from "./physical-veto.ts";
@@ -120,7 +121,8 @@ export function fitModels(
   const candidates = fits.map((fit) => linearCandidate(common, fit));
   const lambdaH = lambdaHCandidate(ws, common, subject);
   if (lambdaH !== undefined) candidates.splice(1, 0, lambdaH);
-  const choice = chooseModel(candidates, (candidate) => physicalVeto(candidate, points, subject.system.fitBasis));
+  const richest = candidates.find(({ model }) => freeFit && model === limitingModel.name);
+  const choice = chooseModel(candidates, vetoes(points, subject, scale, richest));
   const { degreesOfFreedom: betweenDegreesOfFreedom } = between;
   return {
     points,
@@ -131,6 +133,14 @@ export function fitModels(
     largest,
     choice,
   };
+}
+
+/** The physical veto, and that of a line where the points bend and a richer model is possible. */
+function vetoes(points: KeptPoints, { system }: CurveSubject, scale: SystemScale, richest: Candidate | undefined) {
+  const possible = richest !== undefined && physicalVeto(richest, points, system.fitBasis) === undefined;
+  return (candidate: Candidate): string | undefined =>
+    physicalVeto(candidate, points, system.fitBasis) ??
+    (possible ? lackOfCurvature(candidate, richest, scale.degreesOfFreedom) : undefined);
 }
 
 /** Expected variances and, in the weighting by value, the response of the common start. */

@@ -80,7 +80,7 @@ export function liquorModel(who: Identified, identity: Identity): LiquorModel {
     solventMolarMass: quantity(solventMass, (solvent.molarMassUncertainty ?? 0) / solventMass, massReference(solvent)),
     solventDensityAt20C: solventAt20,
   };
-  let conditions = "";
+  let volumeAtK = Number.NaN;
   const modelAt = (temperatureK: number) => {
     if (known.has(temperatureK)) return known.get(temperatureK);
     const model = solutionDensity(solute, solvent, apparent, temperatureK);
@@ -90,18 +90,19 @@ export function liquorModel(who: Identified, identity: Identity): LiquorModel {
   return {
     needs,
     setConditions: (temperatureK, volumeTemperatureK, measuredDensity) => {
-      const volumeAt = Number.isNaN(volumeTemperatureK) ? temperatureK : volumeTemperatureK;
-      conditions = `at ${(volumeAt - 273.15).toFixed(1)} °C`;
+      volumeAtK = Number.isNaN(volumeTemperatureK) ? temperatureK : volumeTemperatureK;
       needs.solventDensityAtVolumeTemperature = Number.isNaN(volumeTemperatureK)
         ? undefined
         : liquidDensity(solvent, volumeTemperatureK);
       needs.solutionDensity = Number.isNaN(measuredDensity)
-        ? modelAt(volumeAt)
+        ? modelAt(volumeAtK)
         : { kind: "measured", density: quantity(measuredDensity, MEASURED_DENSITY_U, "measured") as Quantity };
     },
     massConcentration: (massRatio) =>
       needs.solutionDensity === undefined ? Number.NaN : massConcentration(needs.solutionDensity, massRatio),
     missingDensity: () =>
-      needs.solutionDensity === undefined ? `no density of ${solvent.name} is known ${conditions}` : undefined,
+      needs.solutionDensity === undefined
+        ? `no density of ${solvent.name} is known at ${(volumeAtK - 273.15).toFixed(1)} °C`
+        : undefined,
   };
 }

@@ -1,3 +1,4 @@
+import { parseTemperatureUnit, type TemperatureUnit } from "../bases/temperature.ts";
 import { type CellFault, type CellGetter, cellGetter, unitGetter } from "../records/cells.ts";
 import { type DecimalMark, parseNumber } from "../records/number-text.ts";
 import type { Reading, SourceTable } from "../records/readings.ts";
@@ -25,16 +26,32 @@ export interface SourceCells {
       CellGetter
     >
   >;
+  /** The scale a unit text names, each text looked up once. */
+  readonly temperatureScale: (unit: string) => TemperatureUnit | CellFault;
   /** How the source reports its uncertainties. */
   readonly uncertaintyKind: UncertaintyKind;
   readonly uncertaintyRelative: boolean;
 }
 
+/** The scale a unit text names, or the fault that says it is open or unknown. */
+function temperatureScale(unit: string): TemperatureUnit | CellFault {
+  const scale = parseTemperatureUnit(unit);
+  if (scale !== undefined) return scale;
+  const found = unit === "" ? "no unit of temperature is stated" : `"${unit}" is not a unit of temperature`;
+  return { field: "temperature", code: "unknown-temperature-unit", found };
+}
+
 /** Prepares the getters of a source. */
 export function sourceCells({ places, card, decimal }: SourceTable): SourceCells {
   const stated = card.columns.uncertainty ?? card.constants?.uncertainty;
+  const scales = new Map<string, TemperatureUnit | CellFault>();
   return {
     decimal,
+    temperatureScale: (unit) => {
+      const known = scales.get(unit) ?? temperatureScale(unit);
+      scales.set(unit, known);
+      return known;
+    },
     text: Object.fromEntries(FIELDS.map((field) => [field, cellGetter(places, field)])) as SourceCells["text"],
     unitOf: Object.fromEntries(
       [

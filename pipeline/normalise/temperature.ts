@@ -15,14 +15,6 @@ export interface ReadTemperature {
 
 const ROOM = /^(?:room temperature|room temp\.?|r\.?\s?t\.?|ambient(?: temperature)?)$/i;
 
-/** The scale a unit text names, or the fault that says it is open or unknown. */
-export function temperatureScale(unit: string): TemperatureUnit | CellFault {
-  const scale = parseTemperatureUnit(unit);
-  if (scale !== undefined) return scale;
-  const found = unit === "" ? "no unit of temperature is stated" : `"${unit}" is not a unit of temperature`;
-  return { field: "temperature", code: "unknown-temperature-unit", found };
-}
-
 /**
  * Reads a temperature cell as K. `room temperature` is the interval of the settings: its middle, with the standard
  * uncertainty of a uniform distribution.
@@ -59,7 +51,7 @@ export function readRowTemperature(
   clearPoint: boolean,
   settings: Settings,
 ): RowTemperature | CellFault {
-  const scale = temperatureScale(cells.unitOf.temperature(reading));
+  const scale = cells.temperatureScale(cells.unitOf.temperature(reading));
   const read = readTemperature(cells.text.temperature(reading), scale, cells.decimal, settings);
   if ("code" in read) return read;
   if (!Number.isNaN(read.u)) return { ...read, assumption: "room temperature taken as the middle of its range" };

@@ -53,6 +53,8 @@ const STEP_TOLERANCE = 1e-11;
 /** Offset that rounding of the residuals may leave. */
 const ATTAINABLE_OFFSET = 1e-6;
 const ROUNDING = 1e-12;
+/** Cautious: from far away a first long step may end where the model no longer depends on its parameters. */
+const FIRST_DAMPING = 300;
 const LARGEST_DAMPING = 1e16;
 
 interface Search {
@@ -131,7 +133,7 @@ function begin(problem: NonlinearProblem): Search {
     columnSize: new Float64Array(p),
     linear: createLeastSquaresWorkspace(n + p, p),
     sumOfSquares: 0,
-    damping: 100,
+    damping: FIRST_DAMPING,
     growth: 2,
     relativeOffset: Number.NaN,
     rank: 0,

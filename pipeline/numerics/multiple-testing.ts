@@ -14,7 +14,7 @@ export function benjaminiHochberg(pValues: ArrayLike<number>): Float64Array {
   let smallest = 1;
   for (let rank = m; rank >= 1; rank--) {
     const i = order[rank - 1]!;
-    smallest = Math.min(smallest, (pValues[i]! * m) / rank);
+    smallest = Math.min(smallest, pValues[i]! * (m / rank));
     adjusted[i] = smallest;
   }
   return adjusted;
@@ -31,8 +31,8 @@ export function benjaminiHochbergThreshold(pValues: ArrayLike<number>, q: number
   const sorted = Float64Array.from(pValues).sort();
   const m = sorted.length;
   for (let rank = m; rank >= 1; rank--) {
-    // The product on the left is that of the adjusted p-value, so that both functions agree at the limit itself.
-    if ((sorted[rank - 1]! * m) / rank <= q) return sorted[rank - 1]!;
+    // The product is that of the adjusted p-value, so that both functions agree at the limit itself.
+    if (sorted[rank - 1]! * (m / rank) <= q) return sorted[rank - 1]!;
   }
   return -1;
 }

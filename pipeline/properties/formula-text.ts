@@ -45,6 +45,8 @@ const FRACTIONS: ReadonlyMap<string, string> = new Map([
   ["¾", "3/4"],
 ]);
 
+const PLAIN = /^[A-Za-wyz\d()[\]{}·.+^-]{1,400}$/;
+
 /** Longest text read as a formula: anything longer is not one, and a hostile cell may have a million characters. */
 const LONGEST = 400;
 
@@ -54,6 +56,9 @@ const LONGEST = 400;
  * closing it up would make `SO4 5H2O` into forty-five oxygens.
  */
 export function legibleFormula(original: string): LegibleFormula | FormulaFault {
+  // Most formulas are plain: the long way round would only cost time.
+  if (PLAIN.test(original))
+    return { text: original, places: Array.from({ length: original.length + 1 }, (_, i) => i + 1) };
   const source = [...original.trimEnd()];
   if (source.length > LONGEST) return formulaFault("too long", LONGEST + 1, `longer than ${LONGEST} characters`);
   let text = "";

@@ -105,6 +105,7 @@ function lookups(substances: readonly Substance[], names: NameTable): Omit<Subst
     byInchikey: (inchikey) => byInchikey.get(inchikey.trim()),
     bySmiles: (smiles) => bySmiles.get(smiles.trim()),
     resolve,
+    unsolvated: (substance) => unsolvated(substance, byName),
     formOf,
     nearNames: (text) => nearNames(text, names.spellings()),
   };

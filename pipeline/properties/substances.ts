@@ -105,6 +105,8 @@ export interface SubstanceIndex {
   readonly bySmiles: (smiles: string) => Substance | undefined;
   /** Substance and form by a name that may include a form: "blue vitriol", "CuSO4·5H2O", "paracetamol form II". */
   readonly resolve: (text: string) => ResolvedName | undefined;
+  /** The unsolvated substance, and the form, of a substance that is itself listed as a form (a hydrate found by its CAS). */
+  readonly unsolvated: (substance: Substance) => ResolvedName;
   /** A form of a substance by its name ("pentahydrate", "form II", "II"). */
   readonly formOf: (substance: Substance, form: string) => SolidForm | undefined;
   /** Close spellings for a message: never to be assumed. */

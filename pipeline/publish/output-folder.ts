@@ -28,7 +28,7 @@ export class OutputError extends Error {
 }
 
 /** Text is written in pieces of about this many characters. */
-const PIECE = 1 << 20;
+const PIECE = 1 << 16;
 
 /** An output folder being built beside its final place. */
 export interface OutputFolder {

@@ -12,7 +12,7 @@ import { type Cell, csvRecord, csvTable } from "./csv.ts";
 import type { OutputFolder } from "./output-folder.ts";
 import { reportPages } from "./report/report.ts";
 import { sourceRows, substanceRows, systemRows } from "./tables/account.ts";
-import { curveRows, curvesFile } from "./tables/curves.ts";
+import { curveRows, curvesJson } from "./tables/curves.ts";
 import { flagRows, refusedRows } from "./tables/flags.ts";
 import { gridRows } from "./tables/grid.ts";
 import { measurementRecords } from "./tables/measurements.ts";
@@ -42,8 +42,8 @@ export function writeWorkingTables(edition: Edition, folder: OutputFolder, withR
   write("substances.csv", csvTable(SUBSTANCES_OUT_COLUMNS, inOrder(SUBSTANCES_OUT_COLUMNS, substanceRows(edition))));
   write("systems.csv", csvTable(SYSTEMS_COLUMNS, inOrder(SYSTEMS_COLUMNS, systemRows(edition))));
   write("curves.csv", csvTable(CURVES_COLUMNS, inOrder(CURVES_COLUMNS, curveRows(edition))));
-  write("curves.json", json(curvesFile(edition)));
-  write("grid.csv", csvTable(GRID_COLUMNS, inOrder(GRID_COLUMNS, gridRows(edition))));
+  write("curves.json", curvesJson(edition));
+  write("grid.csv", csvTable(GRID_COLUMNS, gridRows(edition)));
   write(
     "planning-cooling.csv",
     csvTable(PLANNING_COOLING_COLUMNS, inOrder(PLANNING_COOLING_COLUMNS, coolingRows(edition))),

@@ -58,9 +58,9 @@ export type CurveModel =
 /** A model that was tried and not chosen. */
 export interface RunnerUp {
   readonly model: CurveModel;
-  /** AICc by least squares on the common set of kept points. */
+  /** AICc by least squares on the common set of kept points; NaN where points are fewer than p + 3. */
   readonly aicc: number;
-  /** Root mean square leave-one-out residual of ln value. */
+  /** Root mean square leave-one-out residual of ln value; NaN where a point alone decides a coefficient. */
   readonly leaveOneOut: number;
   /** Why it was passed over. */
   readonly why: string;
@@ -73,7 +73,10 @@ export interface Curve {
   readonly branch: number;
   readonly model: CurveModel;
   readonly fitBasis: FitBasis;
-  /** Coefficients in the usual published form, with their standard uncertainties; names by model (A, B, C; lambda, h). */
+  /**
+   * Coefficients in the usual published form, with their standard uncertainties. Names by model: A, B, C; lambda, h and
+   * the melting point Tm, which is given and has no uncertainty here.
+   */
   readonly coefficients: readonly {
     readonly name: string;
     readonly value: number;
@@ -95,6 +98,7 @@ export interface Curve {
   /** Between-source standard deviation used in the limits, and its degrees of freedom (0 = default setting). */
   readonly betweenSd: number;
   readonly betweenDegreesOfFreedom: number;
+  /** NaN where points are fewer than p + 3. */
   readonly aicc: number;
   readonly runnersUp: readonly RunnerUp[];
   /** Remarks: few points, large |C|, why no richer model. */

@@ -1,14 +1,7 @@
 import { studentTSurvival } from "../numerics/distributions.ts";
 import type { RobustFit } from "../records/fits.ts";
 import type { Suspects } from "./causes/cause.ts";
-import {
-  AS_READ,
-  type BlockCase,
-  type BlockReading,
-  blockOffset,
-  blockReadings,
-  middle,
-} from "./causes/compete-block.ts";
+import { AS_READ, type BlockReading, blockOffset, blockReadings, IMPOSSIBLE, middle } from "./causes/compete-block.ts";
 import { rejectionLimit } from "./false-discovery.ts";
 import { type ScreenInput, thresholdOf } from "./screen-input.ts";
 import { sourceWidePosteriors } from "./source-wide.ts";
@@ -31,7 +24,6 @@ export interface OffBlock {
 
 interface Tested extends Omit<OffBlock, "posterior"> {
   readonly p: number;
-  readonly material: boolean;
 }
 
 /** Points of a block from which it is judged as a whole; one point alone is a point. */
@@ -78,9 +70,9 @@ export function screenBlocks(
   const posteriors = sourceWidePosteriors(tested, blocksOfSource);
   return tested
     .map((block, j) => ({ ...block, posterior: posteriors[j]! }))
-    .filter(({ p, material, posterior, readings }) => {
+    .filter(({ p, posterior, readings }) => {
       const asRead = readings.findIndex(({ key }) => key === AS_READ);
-      return p <= limit && material && (posterior[asRead] ?? 1) < AS_READ_BELOW;
+      return p <= limit && (posterior[asRead] ?? 1) < AS_READ_BELOW;
     });
 }
 
@@ -142,16 +134,16 @@ function testBlock(
   const rows = points.map((point) => fit.points.row[point]!);
   const bare = { input, models, fit, points, source, threshold };
   const { median, sd, failing, alike } = blockOffset(bare);
-  const material = (Math.abs(median) > threshold && alike > 0.5) || failing > 0.5;
   const z = median / sd;
-  if (!material || (Math.abs(z) < 2 && failing <= 0.5)) return undefined;
-  const of: BlockCase = { ...bare, suspects: suspectsOf(fit.system, source, rows) };
-  const readings = blockReadings(of);
-  if (readings.length === 0) return undefined;
+  const clearlyOff = Math.abs(median) > threshold && alike > 0.5 && Math.abs(z) >= 2;
+  if (!clearlyOff && failing <= 0.5 && !points.every((point) => fit.kept[point] === 0)) return undefined;
+  const readings = blockReadings({ ...bare, suspects: suspectsOf(fit.system, source, rows) });
+  const impossible = readings.some(({ key, logDensity }) => key === AS_READ && logDensity === IMPOSSIBLE);
+  if (!clearlyOff && failing <= 0.5 && !impossible) return undefined;
   // A block whose points mostly fail to both sides has no offset to test: its typical point speaks for it.
   const typical = middle(points.map((point) => Math.abs(fit.deviation[point]! / fit.deviationSd[point]!)));
   const strongest = failing > 0.5 ? Math.max(Math.abs(z), typical) : Math.abs(z);
-  const p = 2 * studentTSurvival(strongest, Math.max(1, fit.degreesOfFreedom));
+  const p = impossible ? 0 : 2 * studentTSurvival(strongest, Math.max(1, fit.degreesOfFreedom));
   return {
     system: fit.system,
     source,
@@ -162,6 +154,5 @@ function testBlock(
     threshold,
     readings,
     p,
-    material,
   };
 }

@@ -1,11 +1,10 @@
-import { hubConverter } from "../../pipeline/bases/hub-converter.ts";
 import type { Needs } from "../../pipeline/bases/needs.ts";
 import { parseTemperatureUnit } from "../../pipeline/bases/temperature.ts";
-import { parseUnit } from "../../pipeline/bases/units.ts";
 import { type RandomSource, seededRandom } from "../../pipeline/numerics/random.ts";
 import { codeOf, createMeasurementTable, type MeasurementTable } from "../../pipeline/records/measurements.ts";
 import { type System, type SystemPoints, systemPoints } from "../../pipeline/records/systems.ts";
-import type { Change, Reread, RereadRow } from "../../pipeline/screen/reread.ts";
+import type { Reread } from "../../pipeline/screen/reread.ts";
+import { reread, setValue, write } from "./faults-conversions.ts";
 
 /** Invented worlds of measurements in which every fault is known. */
 export interface WorldOptions {
@@ -29,7 +28,7 @@ export const USUAL: WorldOptions = {
   solutes: 25,
   between: 0.025,
   singleFaults: 0.04,
-  blockFaults: 0.05,
+  blockFaults: 0.08,
   transitions: 0.1,
   temperatures: [4, 10],
   steepest: 45,
@@ -94,6 +93,7 @@ function createBuilder(capacity: number) {
     table: createMeasurementTable(capacity),
     systems: [] as System[],
     needs: [] as Needs[],
+    temperatureUnits: HABITS.map(({ temperature }) => temperature),
     faultOfRow: [] as string[],
     faultOfBlock: new Map<string, string>(),
     shiftOfRow: [] as number[],
@@ -169,15 +169,7 @@ function needsOf(solute: Solute, solvent: (typeof SOLVENTS)[number]): Needs {
   };
 }
 
-const BLOCK_KINDS = [
-  "power of ten",
-  "basis mix-up",
-  "basis mix-up",
-  "temperature unit",
-  "dilution factor",
-  "hydrate basis",
-  "random",
-] as const;
+const BLOCK_KINDS = ["power of ten", "basis mix-up", "basis mix-up", "temperature unit", "dilution factor", "random"];
 const POINT_KINDS = [
   "power of ten",
   "power of ten",
@@ -212,15 +204,14 @@ function addBlock(
   const n = options.temperatures[0] + random.integerBelow(options.temperatures[1] - options.temperatures[0] + 1);
   const [low, high] = [278 + 8 * random.uniform(), Math.min(boils - 5, 313 + 25 * random.uniform())];
   const offset = options.between * random.normal();
-  const kind = random.uniform() < options.blockFaults ? BLOCK_KINDS[random.integerBelow(BLOCK_KINDS.length)]! : "";
+  const kinds = solute.hydrateRatio === undefined ? BLOCK_KINDS : [...BLOCK_KINDS, "hydrate basis", "hydrate basis"];
+  const kind = random.uniform() < options.blockFaults ? kinds[random.integerBelow(kinds.length)]! : "";
   const power = [10, 0.1, 1000, 0.001, 0.01, 100][random.integerBelow(6)]!;
   const dilution = [2, 5, 4, 20][random.integerBelow(4)]!;
   const away = (0.2 + 0.6 * random.uniform()) * (random.uniform() < 0.5 ? -1 : 1);
   const units = OTHER_UNIT[habit.unit]!;
   const written = kind === "basis mix-up" ? units[random.integerBelow(units.length)]! : habit.unit;
   const scale = habit.temperature === "°F" ? "°C" : "°F";
-  if (kind === "hydrate basis" && solute.hydrateRatio === undefined)
-    return addBlock(b, options, random, system, source, solute, boils, rows);
   for (let i = 0; i < n; i++) {
     const T = Math.round(low + ((high - low) * i) / Math.max(1, n - 1)) + 0.15;
     const claimed =
@@ -252,44 +243,6 @@ function addBlock(
     else if (random.uniform() < options.singleFaults)
       b.pending.push({ row, kind: POINT_KINDS[random.integerBelow(POINT_KINDS.length)]! });
   }
-}
-
-function write(
-  b: Builder,
-  system: number,
-  unit: string,
-  lnX: number,
-  basis: "anhydrous" | "hydrate equivalent per total solvent",
-): number {
-  return converter(b, system, unit, basis)!.fromHub(massRatio(b.needs[system]!, Math.exp(lnX)));
-}
-
-const units = new Map<string, ReturnType<typeof parseUnit>>();
-
-function converter(b: Builder, system: number, unit: string, basis: Parameters<typeof hubConverter>[2]) {
-  const parsed = units.get(unit) ?? parseUnit(unit);
-  units.set(unit, parsed);
-  if (parsed.kind !== "unit") return undefined;
-  const found = hubConverter(parsed.unit, b.needs[system]!, basis);
-  return found.kind === "converter" ? found.converter : undefined;
-}
-
-const massRatio = (needs: Needs, x: number) =>
-  ((x / (1 - x)) * needs.soluteMolarMass!.value) / needs.solventMolarMass!.value;
-const moleFraction = (needs: Needs, r: number) => {
-  const ratio = (r * needs.solventMolarMass!.value) / needs.soluteMolarMass!.value;
-  return ratio / (1 + ratio);
-};
-
-function setValue(b: Builder, row: number, value: number): void {
-  const { table } = b;
-  const system = table.identity[row]!;
-  const r = converter(b, system, table.texts.texts[table.reportedUnit[row]!]!, "anhydrous")!.toHub(value);
-  table.reportedValue[row] = value;
-  table.massRatio[row] = r;
-  table.moleFraction[row] = moleFraction(b.needs[system]!, r);
-  table.massConcentration[row] = converter(b, system, "mg/mL solution", "anhydrous")!.fromHub(r);
-  if (!(r > 0)) table.state[row] = 2;
 }
 
 /** Puts the single faults in, then closes the world. */
@@ -357,32 +310,4 @@ function transposed(value: number): number | undefined {
   const match = /([1-9])(\.?)(\d)/.exec(digits);
   if (match === null || match[1] === match[3]) return undefined;
   return Number(digits.replace(match[0], `${match[3]}${match[2]}${match[1]}`));
-}
-
-function reread(b: Builder, row: number, change: Change): RereadRow | undefined {
-  const { table } = b;
-  const own = table.identity[row]!;
-  const unit = table.texts.texts[table.reportedUnit[row]!]!;
-  const value = table.reportedValue[row]!;
-  let system = own;
-  let [number, read, T] = [value, unit, table.temperatureK[row]!];
-  let basis: "anhydrous" | "hydrate per added solvent" | "hydrate equivalent per total solvent" = "anhydrous";
-  if (change.kind === "factor") number *= change.factor;
-  else if (change.kind === "value") number = change.value;
-  else if (change.kind === "unit") read = change.unit;
-  else if (change.kind === "temperature") T = change.temperatureK;
-  else if (change.kind === "solute basis") basis = change.basis;
-  else if (change.kind === "solvent") system = change.system;
-  else {
-    const scale = HABITS[table.source[row]!]!.temperature;
-    if (scale === change.scale) return undefined;
-    T = parseTemperatureUnit(change.scale)!.toKelvin(parseTemperatureUnit(scale)!.fromKelvin(T));
-  }
-  if (basis !== "anhydrous" && b.needs[own]!.crystalMolarMass === undefined) return undefined;
-  if (change.kind === "solute basis" && basis === "anhydrous") return undefined;
-  const r = converter(b, system, read, basis)?.toHub(number);
-  if (r === undefined || !(r > 0)) return undefined;
-  const lnValue = Math.log(moleFraction(b.needs[system]!, r));
-  const reportedValue = converter(b, own, unit, "anhydrous")!.fromHub(r);
-  return Number.isFinite(lnValue) && T > 0 ? { lnValue, temperatureK: T, reportedValue } : undefined;
 }

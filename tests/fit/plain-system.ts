@@ -1,3 +1,5 @@
+import { type CurveContext, isCurve, publishedCurve } from "../../pipeline/fit/published-curve.ts";
+import type { Curve, NoCurve } from "../../pipeline/records/fits.ts";
 import type { FitBasis, System, SystemPoints } from "../../pipeline/records/systems.ts";
 
 /** An invented system that a fit needs for its id, basis and class only. */
@@ -37,4 +39,39 @@ export function plainPoints(
     source: Int32Array.from({ length: n }, (_, i) => source[i] ?? 0),
     level: new Float64Array(n).fill(50),
   };
+}
+
+/** Context of an edition that knows nothing yet: default between-source scatter of 4 % (salts in water 1 %). */
+export const defaultContext: CurveContext = {
+  scales: {
+    within: new Float64Array(8).fill(0.02),
+    between: 0.04,
+    betweenAqueousSalt: 0.01,
+    betweenOneTemperature: 0.04,
+    betweenDegreesOfFreedom: 0,
+    betweenAqueousSaltDegreesOfFreedom: 0,
+    betweenOneTemperatureDegreesOfFreedom: 0,
+  },
+  laboratories: [],
+  weighting: "relative",
+};
+
+/** The published curve of points that are all kept. */
+export function curveThrough(
+  points: SystemPoints,
+  context: Partial<CurveContext> = {},
+  meltingPointK = Number.NaN,
+  system: System = plainSystem(),
+): Curve | NoCurve {
+  return publishedCurve(
+    { points, kept: new Uint8Array(points.n).fill(1), agreement: "agreed" },
+    { system, branch: 1, meltingPointK },
+    { ...defaultContext, ...context },
+  );
+}
+
+/** The same where a curve is expected. @throws Error with the reason where there is none. */
+export function expectCurve(outcome: Curve | NoCurve): Curve {
+  if (!isCurve(outcome)) throw new Error(`no curve: ${outcome.reason}`);
+  return outcome;
 }

@@ -81,6 +81,14 @@ describe("Forms are resolved to their unsolvated substance", () => {
     expect(resolved?.form?.molarMass).toBeCloseTo(molarMass, 3);
   });
 
+  test("a hydrate found by its registry number leads to its unsolvated substance", () => {
+    // 7758-99-8 is copper(II) sulfate pentahydrate, 7758-98-7 the anhydrous salt.
+    const pentahydrate = programIndex.byCas("7758-99-8");
+    const resolved = pentahydrate === undefined ? undefined : programIndex.unsolvated(pentahydrate);
+    expect(resolved?.substance.cas).toBe("7758-98-7");
+    expect(resolved?.form?.guestPerSolute).toBe(5);
+  });
+
   test("a hydrate that is not listed is not made up", () => {
     expect(programIndex.resolve("NaCl·7H2O")).toBeUndefined();
   });

@@ -1,7 +1,12 @@
+import { safeText } from "../../problems/safe-text.ts";
+
 /** Text that is already safe HTML. Only {@link html} and {@link raw} make it. */
 export interface Html {
   readonly html: string;
 }
+
+/** Longest text shown whole anywhere on a page; cells and headings have tighter bounds of their own. */
+const LONGEST = 1000;
 
 const ENTITIES: Readonly<Record<string, string>> = {
   "&": "&amp;",
@@ -11,14 +16,18 @@ const ENTITIES: Readonly<Record<string, string>> = {
   "'": "&#39;",
 };
 
-/** Control, escape and bidirectional characters, shown as a code instead of being sent to a browser. */
-// biome-ignore lint/suspicious/noControlCharactersInRegex: these are the characters to find
-const UNSAFE = /[\u0000-\u0008\u000b-\u001f\u007f-\u009f\u200e\u200f\u202a-\u202e\u2066-\u2069\ufeff]/g;
+/** Printable ASCII without markup: nearly every text, passed on as it is. */
+const PLAIN = /^[ !#-%(-;=?-~°±−×·–]*$/;
 
-/** Text with markup and control characters made harmless. */
-export function escapeText(text: string): string {
-  const visible = text.replace(UNSAFE, (c) => `\\u${(c.codePointAt(0) as number).toString(16).padStart(4, "0")}`);
-  return visible.replace(/[&<>"']/g, (c) => ENTITIES[c] as string);
+/** Text with markup, control and bidirectional characters made harmless; a text over `longest` is cut and says so. */
+export function escapeText(text: string, longest = LONGEST): string {
+  if (text.length <= longest && PLAIN.test(text)) return text;
+  return safeText(text, longest).replace(/[&<>"']/g, (c) => ENTITIES[c] as string);
+}
+
+/** Text from data, cut to `longest` characters with its whole length told. */
+export function short(text: string, longest: number): Html {
+  return { html: escapeText(text, longest) };
 }
 
 /** Marks a text as HTML without escaping it: for markup made by this program only. */

@@ -13,7 +13,9 @@ const numberOrNothing = (value: number | undefined): number | undefined =>
 /** An object without its undefined members, as the row types want it. */
 type Known<T> = { [K in keyof T]: Exclude<T[K], undefined> };
 export function known<T extends object>(row: T): Known<T> {
-  return Object.fromEntries(Object.entries(row).filter(([, value]) => value !== undefined)) as Known<T>;
+  const out: Partial<T> = {};
+  for (const key in row) if (row[key] !== undefined) out[key] = row[key];
+  return out as Known<T>;
 }
 
 /** One row of `sources.csv`. */

@@ -1,7 +1,7 @@
 import { curvesOf, type Edition, measurementId } from "../../records/edition.ts";
 import type { Curve, CurveModel } from "../../records/fits.ts";
 import type { CurveRow } from "../../records/generated/curves.ts";
-import type { CurveDocument, CurvesFile } from "../../records/generated/curves-json.ts";
+import type { CurveDocument } from "../../records/generated/curves-json.ts";
 import { known } from "./account.ts";
 
 /** Equations with the coefficients named a, b, c in the order of the columns; y is x or r. */
@@ -111,11 +111,13 @@ function curveDocument(curve: Curve, edition: Edition): CurveDocument {
   }) as CurveDocument;
 }
 
-/** The document `curves.json`. */
-export function curvesFile(edition: Edition): CurvesFile {
-  return {
-    format: 1,
-    program_version: edition.programVersion,
-    curves: curvesOf(edition).map((curve) => curveDocument(curve, edition)),
-  };
+/** The document `curves.json` as text, one curve a line: it never stands in memory as a whole. */
+export function* curvesJson(edition: Edition): Generator<string> {
+  yield `{"format":1,"program_version":${JSON.stringify(edition.programVersion)},"curves":[`;
+  let mark = "\n";
+  for (const curve of curvesOf(edition)) {
+    yield mark + JSON.stringify(curveDocument(curve, edition));
+    mark = ",\n";
+  }
+  yield "\n]}\n";
 }

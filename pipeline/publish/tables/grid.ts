@@ -1,9 +1,8 @@
 import { curvesOf, type Edition, type Liquor } from "../../records/edition.ts";
 import type { Curve } from "../../records/fits.ts";
-import type { GridRow } from "../../records/generated/grid.ts";
 import type { System } from "../../records/systems.ts";
+import type { Cell } from "../csv.ts";
 import { massRatioFromLn } from "../mass-ratio.ts";
-import { known } from "./account.ts";
 
 /** A gap between measured temperatures wider than this is marked, K. */
 const WIDE_GAP_K = 25;
@@ -25,48 +24,35 @@ function gapAround(temperatureK: number, measured: readonly number[]): number {
   return above - below;
 }
 
-/** One row of `grid.csv`. */
-function gridRow(
+/** Cells of one row of `grid.csv`, in the order of its columns; an empty cell is undefined or NaN. */
+function gridCells(
   curve: Curve,
   system: System,
   liquor: Liquor,
   temperatureK: number,
   measured: readonly number[],
-): GridRow {
+): Cell[] {
   const ln = curve.evaluate(temperatureK);
-  const limits = curve.limits(temperatureK);
-  const r = massRatioFromLn(ln, system);
+  const { curve: ofCurve, newMeasurement } = curve.limits(temperatureK);
   const inX = system.fitBasis === "ln x";
-  const x = (shift: number) => (inX ? Math.min(1, Math.exp(ln + shift)) : undefined);
-  // A limit of x may reach 1 where the solution is rich: then it sets no limit of r.
-  const g = (shift: number) => {
-    const value =
-      inX && Math.exp(ln + shift) >= 1 ? Number.POSITIVE_INFINITY : 100 * massRatioFromLn(ln + shift, system);
-    return Number.isFinite(value) ? value : undefined;
-  };
+  // A limit of x may reach 1 where the solution is rich: there it sets no limit of r.
+  const shifts = [0, -ofCurve, ofCurve, -newMeasurement, newMeasurement];
+  const fractions = shifts.map((shift) => (inX ? Math.min(1, Math.exp(ln + shift)) : Number.NaN));
+  const ratios = shifts.map((shift, i) => (fractions[i] === 1 ? Number.NaN : massRatioFromLn(ln + shift, system)));
   const gap = gapAround(temperatureK, measured);
-  const c = liquor.massConcentration(r, temperatureK);
-  return known({
-    curve_id: curve.curveId,
-    system: system.id,
-    temperature_K: temperatureK,
-    mole_fraction: x(0),
-    mole_fraction_curve_low: x(-limits.curve),
-    mole_fraction_curve_high: x(limits.curve),
-    mole_fraction_new_low: x(-limits.newMeasurement),
-    mole_fraction_new_high: x(limits.newMeasurement),
-    g_per_100g_solvent: 100 * r,
-    g_per_100g_solvent_curve_low: g(-limits.curve),
-    g_per_100g_solvent_curve_high: g(limits.curve),
-    g_per_100g_solvent_new_low: g(-limits.newMeasurement),
-    g_per_100g_solvent_new_high: g(limits.newMeasurement),
-    mg_per_mL_solution: Number.isNaN(c) ? undefined : c,
-    data_gap_K: gap > WIDE_GAP_K ? gap : undefined,
-  }) as GridRow;
+  return [
+    curve.curveId,
+    system.id,
+    temperatureK,
+    ...fractions,
+    ...ratios.map((r) => 100 * r),
+    liquor.massConcentration(ratios[0] as number, temperatureK),
+    gap > WIDE_GAP_K ? gap : undefined,
+  ];
 }
 
 /** Rows of `grid.csv`: each curve at round temperatures in °C inside its range; nothing is extrapolated. */
-export function* gridRows(edition: Edition): Generator<GridRow> {
+export function* gridRows(edition: Edition): Generator<Cell[]> {
   for (const curve of curvesOf(edition)) {
     const system = edition.systems[curve.system] as System;
     const liquor = edition.liquors[curve.system] as Liquor;
@@ -74,7 +60,7 @@ export function* gridRows(edition: Edition): Generator<GridRow> {
     const kept = Array.from(robust?.points.temperatureK ?? []).filter((_, i) => robust?.kept[i] === 1);
     const measured = [...new Set(kept)].sort((a, b) => a - b);
     for (const temperatureK of roundTemperatures(curve.temperatureRangeK, edition.settings.grid_step_K)) {
-      yield gridRow(curve, system, liquor, temperatureK, measured);
+      yield gridCells(curve, system, liquor, temperatureK, measured);
     }
   }
 }

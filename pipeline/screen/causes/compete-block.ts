@@ -40,6 +40,8 @@ const FREE_VARIANCE = 0.64;
 const STRAY_Z = 5;
 /** ln of the density given to a stray point: a chance of 0.03, spread over about 3 ln units. */
 const STRAY_LOG_DENSITY = Math.log(0.03 / 3);
+/** ln density of what cannot be. */
+export const IMPOSSIBLE = -1e6;
 /** At most this share of a block may be stray. */
 const STRAY_SHARE = 0.25;
 /** Part of the material threshold from which a point sides with the offset of its block. */
@@ -53,21 +55,18 @@ const [LOWEST_K, HIGHEST_K] = [150, 650];
 export function blockReadings(of: BlockCase): BlockReading[] {
   const between = of.fit.betweenSd ** 2;
   const asRead = seriesOf(of, undefined);
-  if (asRead === undefined) return [];
   const offPrior = Math.log(1 - AS_READ_PRIOR);
   const none = { cause: undefined, detail: "", lookAt: "" };
+  const density = (offsetVariance: number) => asRead && densityOf(of, of.models[0], asRead, offsetVariance);
+  const strayDensity = of.points.length * STRAY_LOG_DENSITY;
   const readings: BlockReading[] = [
-    {
-      ...none,
-      key: AS_READ,
-      logPrior: Math.log(AS_READ_PRIOR),
-      logDensity: densityOf(of, of.models[0], asRead, between),
-    },
+    // Temperatures at which nothing dissolves cannot be meant as read.
+    { ...none, key: AS_READ, logPrior: Math.log(AS_READ_PRIOR), logDensity: density(between) ?? IMPOSSIBLE },
     {
       ...none,
       key: FREE_OFFSET,
       logPrior: offPrior + Math.log(NONE_PRIOR),
-      logDensity: densityOf(of, of.models[0], asRead, FREE_VARIANCE + between),
+      logDensity: density(FREE_VARIANCE + between) ?? strayDensity,
     },
   ];
   for (const cause of EVERY_CAUSE) {

@@ -93,8 +93,8 @@ describe("the figures of a cooling plan", () => {
   test("carry the limits of both ends: 2 % each in ln S, independent, are 0.707 % of the recovery", () => {
     // d(1 - c/h) = (c/h) x sqrt(0.02^2 + 0.02^2) = 0.25 x 0.02828.
     const { value = 0, low = 0, high = 0 } = found.maxRecovery ?? {};
-    expect(value - low).toBeCloseTo(0.7071, 3);
-    expect(high - value).toBeCloseTo(0.7071, 3);
+    expect(value - low).toBeCloseTo(100 * 0.25 * 0.02 * Math.SQRT2, 3);
+    expect(high - value).toBeCloseTo(100 * 0.25 * 0.02 * Math.SQRT2, 3);
   });
 
   test("give the recovery at 10 % excess solvent, and what is lost to the liquor", () => {

@@ -1,0 +1,63 @@
+import { type Edition, flagId, measurementId } from "../../records/edition.ts";
+import type { Flag } from "../../records/fits.ts";
+import { significant } from "./figures.ts";
+import { type Html, html, short } from "./html.ts";
+import type { SystemView } from "./system-view.ts";
+
+/** `off-curve` as people say it: `Off the curve`; a code without words of its own loses its hyphens. */
+const WORDS: Readonly<Record<string, string>> = {
+  "off-curve": "Point off the curve",
+  "block-off-curve": "Series off the curve",
+  "possible-more-stable-form": "Possible more stable form",
+  "sources-disagree": "Sources disagree",
+  "outside-liquid-range": "Outside the liquid range",
+  "exact-repeat": "Exact repeat",
+  "re-reported": "Reported again",
+  "cannot-tell": "Cannot tell",
+};
+
+/** A flag's code in words. */
+export function flagWords({ code }: Flag): string {
+  const plain = code.replaceAll("-", " ");
+  return WORDS[code] ?? plain.charAt(0).toUpperCase() + plain.slice(1);
+}
+
+/** What a flag stands on: a measurement with its file and line, a source, or the whole system. */
+export function flagTarget(edition: Edition, flag: Flag): Html {
+  const { table, sources } = edition;
+  if (flag.row !== undefined) {
+    const source = sources[table.source[flag.row] as number];
+    return html`${short(measurementId(edition, flag.row), 120)} (${short(source?.file ?? "", 120)}, line ${table.line[flag.row]})`;
+  }
+  return flag.source === undefined ? html`the system` : html`${sources[flag.source]?.name ?? ""}`;
+}
+
+/** Suspected cause with detail, probability and proposed value; nothing where none was sought. */
+export function causeLine({ suspectedCause, causeDetail, causeProbability, proposedValue }: Flag): Html | undefined {
+  if (suspectedCause === undefined) return undefined;
+  if (suspectedCause === "no simple cause") {
+    return html`<p>Suspected cause: no simple cause; every cause that was tried explains it worse than a random error.</p>`;
+  }
+  const detail = causeDetail ? html` (${short(causeDetail, 300)})` : "";
+  const probability = causeProbability === undefined ? "" : `, probability ${causeProbability.toFixed(2)}`;
+  const value = proposedValue === undefined ? "" : `; the value would then be ${significant(proposedValue)}, in the unit reported`;
+  return html`<p>Suspected cause: <b>${suspectedCause}</b>${detail}${probability}${value}.</p>`;
+}
+
+function flagBox(edition: Edition, flag: Flag): Html {
+  const needs = flag.severity === "blocking";
+  const kind = needs ? html`<span class="need">Needs a person.</span>` : html`<span class="soft">Notice.</span>`;
+  return html`<div class="flag${needs ? "" : " notice"}"><p>${kind} <b>${flagWords(flag)}</b>: ${flagTarget(edition, flag)}</p>
+<p>${short(flag.evidence, 1200)}</p>${causeLine(flag) ?? ""}<p>What to look at: ${short(flag.lookAt, 600)}</p>
+<p class="soft">Ruling target: <code>${short(flagId(edition, flag), 240)}</code></p></div>`;
+}
+
+/** Most flags of one system shown in full. */
+const MOST_FLAGS = 200;
+
+/** Every flag of a system with evidence, suspected cause and what to look at; those that need a person first. */
+export function flagSection({ edition, flags }: SystemView): Html {
+  if (flags.length === 0) return html`<h2 id="flags">Flags</h2><p>None.</p>`;
+  const rest = flags.length - MOST_FLAGS;
+  return html`<h2 id="flags">Flags</h2>${flags.slice(0, MOST_FLAGS).map((flag) => flagBox(edition, flag))}${rest > 0 ? html`<p>${rest} more in flags.csv.</p>` : ""}`;
+}

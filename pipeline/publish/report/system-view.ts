@@ -1,0 +1,142 @@
+import { type Edition, type Grade, statusOf } from "../../records/edition.ts";
+import type { Curve, Flag, SystemFit } from "../../records/fits.ts";
+import type { Identity, System } from "../../records/systems.ts";
+import { massRatioFromLn } from "../mass-ratio.ts";
+
+/** What became of a measurement, in the words of the page. */
+export type PointState = "kept" | "left out by the fit" | "interval" | "not fitted" | "set aside";
+
+/** One measurement as it is drawn and listed; NaN where a quantity is unknown or a limit is open. */
+export interface DrawnPoint {
+  readonly row: number;
+  /** Position of its source in {@link SystemView.sources}. */
+  readonly source: number;
+  readonly state: PointState;
+  /** True if a flag that needs a person concerns it, by itself or with its block. */
+  readonly flagged: boolean;
+  readonly temperatureK: number;
+  /** ln x or ln r, by the system's fit basis; of an interval its limits. */
+  readonly ln: number;
+  readonly lnLow: number;
+  readonly lnHigh: number;
+  /** g per 100 g solvent; of an interval its limits. */
+  readonly percent: number;
+  readonly percentLow: number;
+  readonly percentHigh: number;
+  /** 100 (value / expected - 1), expected with the point left out. */
+  readonly deviationPercent: number;
+}
+
+/** A curve at evenly spaced temperatures: ln value with both half-widths, and the same in g per 100 g solvent. */
+export interface DrawnCurve {
+  readonly temperatureK: readonly number[];
+  readonly ln: readonly number[];
+  readonly halfCurve: readonly number[];
+  readonly halfNew: readonly number[];
+}
+
+/** Everything a page of one system shows. */
+export interface SystemView {
+  readonly edition: Edition;
+  readonly system: System;
+  readonly fit: SystemFit | undefined;
+  readonly grade: Grade | undefined;
+  /** Flags of this system, those that need a person first. */
+  readonly flags: readonly Flag[];
+  /** Positions of its sources in the edition's list, ascending; letters A, B, ... follow this order. */
+  readonly sources: readonly number[];
+  readonly points: readonly DrawnPoint[];
+  readonly curves: readonly DrawnCurve[];
+}
+
+/** Points at which a curve is drawn. */
+const STEPS = 48;
+
+/** `benzoic acid in ethanol + water (0.500)`: solute and solvent of a system, each part bounded by the page. */
+export function titleOf({ solute, solvent, composition, medium }: Identity): string {
+  return `${solute} in ${[solvent, composition, medium].filter((part) => part !== "").join(", ")}`;
+}
+
+/** What is fitted, as ln x or ln r, from a mass ratio r; -Infinity for 0, NaN for what is unknown. */
+function lnFromMassRatio(r: number, { fitBasis, identity }: System): number {
+  if (fitBasis === "ln r") return Math.log(r);
+  const { soluteMolarMass, solventMolarMass } = identity;
+  return Math.log(r / soluteMolarMass / (r / soluteMolarMass + 1 / solventMolarMass));
+}
+
+/** g per 100 g solvent from ln x or ln r; NaN where the mole fraction would reach 1. */
+export function percentFromLn(ln: number, system: System): number {
+  if (system.fitBasis === "ln x" && ln >= 0) return Number.NaN;
+  return 100 * massRatioFromLn(ln, system);
+}
+
+function drawnCurve(curve: Curve): DrawnCurve {
+  const [low, high] = curve.temperatureRangeK;
+  const steps = high > low ? STEPS : 0;
+  const temperatureK = Array.from({ length: steps + 1 }, (_, i) =>
+    Math.min(high, low + ((high - low) * i) / Math.max(1, steps)),
+  );
+  const limits = temperatureK.map((t) => curve.limits(t));
+  return {
+    temperatureK,
+    ln: temperatureK.map((t) => curve.evaluate(t)),
+    halfCurve: limits.map((limit) => limit.curve),
+    halfNew: limits.map((limit) => limit.newMeasurement),
+  };
+}
+
+/** Rows that a flag which needs a person concerns, by themselves or with their block. */
+function flaggedRows({ table }: Edition, system: System, flags: readonly Flag[]): Set<number> {
+  const rows = new Set<number>();
+  for (const flag of flags) {
+    if (flag.severity !== "blocking") continue;
+    if (flag.scope === "measurement" && flag.row !== undefined) rows.add(flag.row);
+    if (flag.scope !== "block") continue;
+    for (const row of system.rows) if (table.source[row] === flag.source) rows.add(row);
+  }
+  return rows;
+}
+
+function stateOf(edition: Edition, row: number): PointState {
+  const status = statusOf(edition, row);
+  return status === "kept" && edition.rowResults.weight[row] === 0 ? "left out by the fit" : status;
+}
+
+/** Gathers what the page of a system shows; curves are evaluated once for all plots. */
+export function systemView(edition: Edition, system: System, flags: readonly Flag[]): SystemView {
+  const { table, rowResults } = edition;
+  const fit = edition.fits[system.index];
+  const sources = [...new Set(Array.from(system.rows, (row) => table.source[row] as number))].sort((a, b) => a - b);
+  const position = new Map(sources.map((source, i) => [source, i]));
+  const flagged = flaggedRows(edition, system, flags);
+  const ofRow = (row: number): DrawnPoint => {
+    const at = (column: Float64Array) => column[row] as number;
+    const state = stateOf(edition, row);
+    const known = state === "interval" ? Number.NaN : at(table.massRatio);
+    return {
+      row,
+      source: position.get(table.source[row] as number) as number,
+      state,
+      flagged: flagged.has(row),
+      temperatureK: at(table.temperatureK),
+      ln: lnFromMassRatio(known, system),
+      lnLow: lnFromMassRatio(at(table.massRatioLow), system),
+      lnHigh: lnFromMassRatio(at(table.massRatioHigh), system),
+      percent: 100 * known,
+      percentLow: 100 * at(table.massRatioLow),
+      percentHigh: 100 * at(table.massRatioHigh),
+      deviationPercent: at(rowResults.deviationPercent),
+    };
+  };
+  const blockingFirst = (flag: Flag) => (flag.severity === "blocking" ? 0 : 1);
+  return {
+    edition,
+    system,
+    fit,
+    grade: edition.grades[system.index],
+    flags: [...flags].sort((a, b) => blockingFirst(a) - blockingFirst(b)),
+    sources,
+    points: Array.from(system.rows, ofRow),
+    curves: fit?.curves.map(drawnCurve) ?? [],
+  };
+}
