@@ -1,7 +1,7 @@
 // Builds the command: clean, compile, make it executable. With --when-stale it does nothing while build/ is newer than
 // every source, so that `npm run demo` and `npm test` never run yesterday's program.
 import { execFileSync } from "node:child_process";
-import { chmodSync, existsSync, readdirSync, rmSync, statSync } from "node:fs";
+import { chmodSync, existsSync, mkdtempSync, readdirSync, renameSync, rmSync, statSync } from "node:fs";
 import { dirname, join } from "node:path";
 import { fileURLToPath } from "node:url";
 
@@ -19,14 +19,19 @@ function newestSource() {
 
 const stale = !existsSync(command) || statSync(command).mtimeMs < newestSource();
 if (stale || !process.argv.includes("--when-stale")) {
-  rmSync(join(root, "build"), { recursive: true, force: true });
-  execFileSync(
-    process.execPath,
-    [join(root, "node_modules", "typescript", "bin", "tsc"), "-p", "tsconfig.build.json"],
-    {
+  // Compiled beside its place and swapped in, so that a command running meanwhile never finds half a program.
+  const fresh = mkdtempSync(join(root, ".build-"));
+  try {
+    const tsc = join(root, "node_modules", "typescript", "bin", "tsc");
+    execFileSync(process.execPath, [tsc, "-p", "tsconfig.build.json", "--outDir", fresh], {
       cwd: root,
       stdio: "inherit",
-    },
-  );
-  chmodSync(command, 0o755);
+    });
+    chmodSync(join(fresh, "main.js"), 0o755);
+    chmodSync(fresh, 0o755);
+    rmSync(join(root, "build"), { recursive: true, force: true });
+    renameSync(fresh, join(root, "build"));
+  } finally {
+    rmSync(fresh, { recursive: true, force: true });
+  }
 }

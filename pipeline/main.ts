@@ -77,6 +77,10 @@ for (const stream of [process.stdout, process.stderr]) {
   });
 }
 
+const EXIT_CODES = `
+Exit codes: 0 done; 1 done, and something needs you; 2 not done: usage or unreadable input;
+3 not done: output could not be written, or a fault of ours; 130 interrupted.`;
+
 /** Adds a command with the options that every command has. */
 function addCommand(program: Command, usage: string, summary: string): Command {
   return program
@@ -84,7 +88,8 @@ function addCommand(program: Command, usage: string, summary: string): Command {
     .description(summary)
     .option("--json", "print the result as JSON on standard output")
     .option("--quiet", "no messages on standard error")
-    .option("--log <file>", "append messages to a file as well");
+    .option("--log <file>", "append messages to a file as well")
+    .addHelpText("after", EXIT_CODES);
 }
 
 const program = new Command("saltern")
@@ -100,9 +105,7 @@ Start here:
   saltern new my-collection                       a collection with a worked example
   saltern merge my-collection --out my-tables     read, check, fit, write tables and a report
   saltern check new.csv --collection my-collection --like example-2026-gravimetry
-
-Exit codes: 0 done; 1 done, and something needs you; 2 not done: usage or unreadable input;
-3 not done: output could not be written, or a fault of ours; 130 interrupted.`,
+${EXIT_CODES}`,
   );
 
 addCommand(program, "new <dir>", "start a collection with a worked example").action(

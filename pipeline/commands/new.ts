@@ -1,4 +1,4 @@
-import { cpSync, existsSync, mkdirSync, readdirSync, writeFileSync } from "node:fs";
+import { cpSync, existsSync, mkdirSync, readdirSync, statSync, writeFileSync } from "node:fs";
 import { basename, join } from "node:path";
 import { fileURLToPath } from "node:url";
 import { problem } from "../problems/catalogue.ts";
@@ -11,8 +11,10 @@ const schemas = fileURLToPath(new URL("../../schemas/", import.meta.url));
 
 /** `saltern new DIR`: starts a collection with a worked example and a copy of the schemas. Never writes into a folder in use. */
 export async function newCollection(dir: string, options: CommonOptions, terminal: Terminal): Promise<ExitCode> {
-  if (existsSync(dir) && readdirSync(dir).length > 0) {
-    throw new OutputError(problem("output-not-ours", { file: dir }, { found: `${dir} exists and is not empty` }));
+  if (existsSync(dir) && !(statSync(dir).isDirectory() && readdirSync(dir).length === 0)) {
+    throw new OutputError(
+      problem("output-not-ours", { file: dir }, { found: `${dir} exists and is not an empty folder` }),
+    );
   }
   mkdirSync(dir, { recursive: true });
   cpSync(starter, dir, { recursive: true });

@@ -54,7 +54,9 @@ export interface LinearFit {
   readonly leaveOneOut: number;
 }
 
-const MOST_ITERATIONS = 50;
+const MOST_ITERATIONS = 100;
+/** Longest step of a fitted ln value in the Gauss-Newton iteration: a factor e in the value. */
+const LONGEST_STEP = 1;
 
 /** Least residual variance, as a share of the expected one, that a criterion distinguishes from an exact fit. */
 const LEAST_SHARE = 1e-12;
@@ -86,17 +88,11 @@ export function fitLinear(
   setDesignColumns(ws.columns, model, ws.temperatureK, n, centreK);
   for (let i = 0; i < n; i++) ws.fitted[i] = ws.startFitted[i]!;
   for (let iteration = 0; iteration < MOST_ITERATIONS; iteration++) {
-    if (!relative) setAbsoluteVariances(ws, n, within, ws.fitted);
+    if (!relative && !setAbsoluteVariances(ws, n, within, ws.fitted)) return undefined;
     setPointCovariance(ws, common, relative ? ws.startVariance : ws.variance);
     const fit = generalisedLeastSquares(ws, ws.common, response, p, lastSd);
     if (fit === undefined) return undefined;
-    let change = 0;
-    for (let i = 0; i < n; i++) {
-      const fitted = response[i]! - ws.residuals[i]!;
-      change = Math.max(change, Math.abs(fitted - ws.fitted[i]!));
-      ws.fitted[i] = fitted;
-    }
-    if (!Number.isFinite(change)) return undefined;
+    const change = moveFitted(ws, response, n, relative ? Number.POSITIVE_INFINITY : LONGEST_STEP);
     if (!relative && change > 1e-11) continue;
     return {
       model,
@@ -110,6 +106,22 @@ export function fitLinear(
     };
   }
   return undefined;
+}
+
+/**
+ * Moves `ws.fitted` to the fit just made, no point further than `longest`, and returns the largest change asked for.
+ *
+ * Far from the minimum a full Gauss-Newton step in the value itself may overshoot by orders of magnitude.
+ */
+function moveFitted(ws: FitWorkspace, response: Float64Array, n: number, longest: number): number {
+  let change = 0;
+  for (let i = 0; i < n; i++) change = Math.max(change, Math.abs(response[i]! - ws.residuals[i]! - ws.fitted[i]!));
+  const share = Math.min(1, longest / change);
+  for (let i = 0; i < n; i++) {
+    const fitted = response[i]! - ws.residuals[i]!;
+    ws.fitted[i] = share < 1 ? ws.fitted[i]! + share * (fitted - ws.fitted[i]!) : fitted;
+  }
+  return change;
 }
 
 /** What the choice needs to know of a linear fit. */

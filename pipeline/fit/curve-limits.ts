@@ -33,10 +33,9 @@ export function curveLimits(fitted: FittedModels, chosen: Candidate, { scales }:
   return {
     halfWidths: (T) => {
       const bias = (chosen.lnValue(T) - centredValue(model, coefficients, T, centreK)) ** 2;
-      return {
-        curve: half(variances.ofCurve(T), bias),
-        newMeasurement: half(variances.ofNewMeasurement(T), bias),
-      };
+      const curve = half(variances.ofCurve(T), bias);
+      // More variance means more degrees of freedom too: at very few points the factor could fall faster than it grows.
+      return { curve, newMeasurement: Math.max(curve, half(variances.ofNewMeasurement(T), bias)) };
     },
     slopeHalfWidth: (T) => half(variances.ofSlope(T), 0),
   };

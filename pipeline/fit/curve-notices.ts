@@ -11,6 +11,7 @@ export function curveNotices(fitted: FittedModels, chosen: Candidate): string[] 
     ...aboutPoints(fitted, chosen),
     ...aboutRicherModels(fitted),
     ...aboutHeatCapacity(chosen),
+    ...aboutBreak(fitted),
     ...aboutSources(fitted),
   ];
 }
@@ -52,11 +53,20 @@ function aboutHeatCapacity(chosen: Candidate): string[] {
   ];
 }
 
+function aboutBreak({ points, breakTemperatureK }: FittedModels): string[] {
+  if (!(breakTemperatureK > points.lowK && breakTemperatureK < points.highK)) return [];
+  return [
+    `the points seem to break at ${breakTemperatureK.toFixed(1)} K, as where the solid changes: one smooth curve spans both sides`,
+  ];
+}
+
 function aboutSources({ points, scale, betweenDegreesOfFreedom }: FittedModels): string[] {
   const sd = `${(100 * Math.sqrt(scale.betweenVariance)).toFixed(2)} %`;
   if (scale.widened)
     return [`the ${points.sources.length} sources lie further apart than usual: between-source SD raised to ${sd}`];
   const origin =
-    betweenDegreesOfFreedom > 0 ? `pooled, ${betweenDegreesOfFreedom} degrees of freedom` : "default setting";
+    betweenDegreesOfFreedom > 0
+      ? `pooled, ${betweenDegreesOfFreedom.toFixed(0)} degrees of freedom`
+      : "default setting";
   return points.sources.length > 1 ? [] : [`one source: the limits contain a between-source SD of ${sd} (${origin})`];
 }

@@ -42,9 +42,10 @@ export function curveVariances(largest: LinearFit, scales: LimitScales): CurveVa
   const row = new Float64Array(p);
   const offset = scales.oneSource ? scales.betweenVariance : 0;
   const sum = (moreWithin: number, moreBetween: number): Variance => {
-    const within = quadraticForm(withinPart, row, p);
-    const between = Math.max(0, quadraticForm(covariance, row, p) - within);
-    return sumOfParts(within + moreWithin, between + moreBetween, scales);
+    // Where weights differ by many orders of magnitude the forms cancel; neither part may leave 0 to the whole.
+    const whole = Math.max(0, quadraticForm(covariance, row, p));
+    const within = Math.min(whole, Math.max(0, quadraticForm(withinPart, row, p)));
+    return sumOfParts(within + moreWithin, whole - within + moreBetween, scales);
   };
   return {
     ofCurve: (T) => {
@@ -66,5 +67,6 @@ function sumOfParts(within: number, between: number, scales: LimitScales): Varia
   const value = within + between;
   const ofWithin = within ** 2 / scales.withinDegreesOfFreedom;
   const ofBetween = scales.betweenDegreesOfFreedom > 0 ? between ** 2 / scales.betweenDegreesOfFreedom : 0;
-  return { value, degreesOfFreedom: value ** 2 / (ofWithin + ofBetween) };
+  const inverse = ofWithin + ofBetween;
+  return { value, degreesOfFreedom: inverse > 0 ? value ** 2 / inverse : Number.POSITIVE_INFINITY };
 }

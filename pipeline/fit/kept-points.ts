@@ -25,6 +25,10 @@ export const sameTemperatureK = 0.5;
 /** A span (K) below this determines no slope: at 3 % per kelvin the scatter of the points is as large. */
 export const oneTemperatureSpanK = 2;
 
+/** No solution is this hot (K), and no ratio of amounts this far from 1 (ln): such numbers are no measurements. */
+const BEYOND_MATTER_K = 1e5;
+const BEYOND_COUNTING = 1e3;
+
 /** Standard uncertainty of ln value taken where a point states none or zero (5 %, the default of an unstated method). */
 const UNSTATED_U = 0.05;
 
@@ -73,8 +77,8 @@ function usable(points: SystemPoints, i: number): boolean {
   const T = points.temperatureK[i]!;
   return (
     T > 0 &&
-    T < Number.POSITIVE_INFINITY &&
-    Number.isFinite(points.lnValue[i]!) &&
+    T < BEYOND_MATTER_K &&
+    Math.abs(points.lnValue[i]!) < BEYOND_COUNTING &&
     points.lnU[i]! !== Number.POSITIVE_INFINITY &&
     points.temperatureU[i]! !== Number.POSITIVE_INFINITY
   );

@@ -94,7 +94,7 @@ function evaluateAt(ws: FitWorkspace, common: CommonFit, lnLambda: number, lnG: 
     second[i] = row[1]!;
   }
   const absolute = weighting === "absolute";
-  if (absolute) setAbsoluteVariances(ws, points.n, within, fitted);
+  if (absolute && !setAbsoluteVariances(ws, points.n, within, fitted)) return undefined;
   setPointCovariance(ws, common, absolute ? ws.variance : ws.startVariance);
   const response = absolute ? ws.response : ws.lnValue;
   for (let i = 0; i < points.n; i++) residuals[i] = response[i]! - fitted[i]!;

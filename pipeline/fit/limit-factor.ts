@@ -13,7 +13,7 @@ let filled = false;
 /**
  * Two-sided 95 % factor of Student's t for any degrees of freedom, whole or not: 1.959964 for Infinity, 2.776445 for 4.
  *
- * Interpolated by a cubic in 1/df from 2 degrees of freedom up, to 1e-7; computed directly below. Limits are asked for
+ * Interpolated by a cubic in 1/df from 2 degrees of freedom up, to 1e-6; computed directly below. Limits are asked for
  * at every grid temperature of every curve, with other degrees of freedom each time.
  * @throws RangeError unless degreesOfFreedom is above 0.
  */
@@ -24,7 +24,10 @@ export function limitFactor(degreesOfFreedom: number): number {
   const k = Math.max(1, Math.floor(position));
   const s = position - k;
   const [a, b, c, d] = [table[k - 1] as number, table[k] as number, table[k + 1] as number, table[k + 2] as number];
-  return b + s * ((c - a) / 2 + s * (a - 2.5 * b + 2 * c - d / 2 + s * (1.5 * (b - c) + (d - a) / 2)));
+  return (
+    (a * s * (s - 1) * (2 - s) + d * (s + 1) * s * (s - 1)) / 6 +
+    (b * (s + 1) * (s - 1) * (s - 2) + c * (s + 1) * s * (2 - s)) / 2
+  );
 }
 
 function fillTable(): void {

@@ -25,11 +25,13 @@ export function physicalVeto(candidate: Candidate, points: KeptPoints, basis: Fi
   if (basis === "ln x" && highest > ROUNDING)
     return `reaches a mole fraction of ${Math.exp(highest).toPrecision(4)}, above 1, inside the data`;
   if (turnK === undefined) return undefined;
-  for (const end of [lowK, highK]) {
-    const rise = Math.abs(candidate.lnValue(end) - candidate.lnValue(turnK));
-    if (rise < BELIEVED_RISE * candidate.standardErrorOfRise(turnK, end))
-      return `turns at ${turnK.toFixed(1)} K inside the data, a change of ${(100 * rise).toFixed(1)} % that the scatter explains`;
-  }
+  const rises = [lowK, highK].map((endK) => {
+    const rise = Math.abs(candidate.lnValue(endK) - candidate.lnValue(turnK));
+    return { rise, believed: rise >= BELIEVED_RISE * candidate.standardErrorOfRise(turnK, endK) };
+  });
+  const doubted = rises.filter(({ believed }) => !believed).sort((a, b) => a.rise - b.rise)[0];
+  if (doubted !== undefined)
+    return `turns at ${turnK.toFixed(1)} K inside the data, a change of ${(100 * doubted.rise).toFixed(1)} % that the scatter explains`;
   return undefined;
 }
 

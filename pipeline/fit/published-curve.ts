@@ -38,7 +38,10 @@ export function publishedCurve(
   if (points.n === 0) return { system, reason: noPoints(screened, points.unusable) };
   const fitted = fitModels(ws, points, screened, subject, context);
   if (fitted === undefined)
-    return { system, reason: `${points.n} kept points do not determine a curve: the fit is collinear` };
+    return {
+      system,
+      reason: `no model can be fitted to the ${points.n} kept points: they do not determine its coefficients`,
+    };
   const { chosen, runnersUp } = fitted.choice;
   if (chosen === undefined) return { system, reason: runnersUp.map(({ model, why }) => `${model} ${why}`).join("; ") };
   return curveOf(ws, fitted, chosen, subject, context);

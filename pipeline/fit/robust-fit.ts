@@ -40,7 +40,9 @@ const LEAVE_OUT = 0.12;
 const WIDEST_SHAPE = 4;
 /** Sources agree within this many between-source standard deviations, or within this many material thresholds. */
 const VOTE_SDS = 4.5;
-const VOTE_THRESHOLDS = 1.5;
+const VOTE_THRESHOLDS = 1.15;
+/** Standardised deviation from which the other sources are asked whether the curve is wrong there. */
+const DOUBTFUL_Z = 2;
 /** Spans below these (K) determine no slope, or no curvature. */
 const SLOPE_SPAN_K = 2;
 const CURVATURE_SPAN_K = 30;
@@ -182,7 +184,7 @@ function toFit(
   let kept = 0;
   for (let k = 0; k < n; k++) {
     const i = ws.order[k]!;
-    const failed = ws.usable[k] === 1 && ws.use[k] === 0 && ws.sound[ws.rows.group[k]!] === 1 && failure(ws, k) > 0;
+    const failed = ws.usable[k] === 1 && ws.sound[ws.rows.group[k]!] === 1 && failure(ws, k) > DOUBTFUL_Z;
     const shared = failed && camps === undefined ? sharedDeviation(ws, k) : 0;
     fit.kept[i] = ws.use[k] === 1 || shared > 0 ? 1 : 0;
     kept += ws.use[k]!;

@@ -115,9 +115,10 @@ export function settleSources(
   voteTolerance: number,
 ): readonly (readonly number[])[] | undefined {
   const { sound } = ws;
-  sound.fill(1, 0, ws.groups);
   const started = ws.use.slice(0, ws.rows.n);
   const voters = locateSources(ws);
+  sound.fill(0, 0, ws.groups);
+  for (const g of voters) sound[g] = 1;
   if (voters.length > 1) {
     const vote = voteBySource(voters, ws.location, ws.locationVariance, voteTolerance);
     if (!vote.majority) return conflictOf(ws, betweenVariance, vote.camps);

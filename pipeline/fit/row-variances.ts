@@ -58,13 +58,14 @@ export function setRelativeVariances(ws: FitWorkspace, n: number, within: readon
  * With fitted values m = exp(eta), the response eta + (x - m)/m with variance c^2/m^2 makes the weighted residual
  * (x - m)/c exactly; c^2 is the mean of (within-source SD times value)^2.
  * @param fitted eta at each point, from the step before
+ * @returns false where values or fitted values are so far apart that doubles cannot hold the weights
  */
 export function setAbsoluteVariances(
   ws: FitWorkspace,
   n: number,
   within: readonly number[],
   fitted: Float64Array,
-): void {
+): boolean {
   const { lnValue, block, response, variance } = ws;
   let c2 = 0;
   for (let i = 0; i < n; i++) c2 += (within[block[i]!]! * Math.exp(lnValue[i]!)) ** 2 / n;
@@ -72,7 +73,9 @@ export function setAbsoluteVariances(
     const eta = fitted[i]!;
     response[i] = eta + Math.expm1(lnValue[i]! - eta);
     variance[i] = c2 * Math.exp(-2 * eta);
+    if (!(variance[i]! > 0 && variance[i]! < Number.MAX_VALUE && Number.isFinite(response[i]!))) return false;
   }
+  return true;
 }
 
 /**

@@ -27,7 +27,8 @@ import {
 import { type SystemScale, systemScale } from "./system-scale.ts";
 
 /** What the screening fit hands on: the points, which of them stay, and the scatter it assumed. */
-export type ScreenedPoints = Pick<RobustFit, "points" | "kept" | "agreement"> & Partial<Pick<RobustFit, "noiseSd">>;
+export type ScreenedPoints = Pick<RobustFit, "points" | "kept" | "agreement"> &
+  Partial<Pick<RobustFit, "noiseSd" | "breakTemperatureK">>;
 
 /** What the fits of an edition share. */
 export interface CurveContext {
@@ -59,6 +60,8 @@ export interface FittedModels {
   /** Fit of {@link limitModel}: what the limits rest on. */
   readonly largest: LinearFit;
   readonly choice: Choice;
+  /** Where the screening fit found the points to break, K; NaN = nowhere. */
+  readonly breakTemperatureK: number;
 }
 
 /** Linear models admissible for the points, simplest first. */
@@ -70,9 +73,9 @@ export function admissibleModels(points: KeptPoints): readonly LinearModel[] {
 
 /**
  * SD of the coefficient C of the modified Apelblat equation where the points do not let it be fitted. Dissolution heat
- * capacities are mostly below 150 J/(mol K) in size: from memory, not verified; common practice.
+ * capacities are mostly below 150 J/(mol K) in size, two of these SD: from memory, not verified; common practice.
  */
-const usualC = 12;
+const usualC = 9;
 
 /** SD of d ln value/d(T0/T) where all points lie at one temperature: enthalpies up to about 50 kJ/mol. Common practice. */
 const usualB = 10;
@@ -102,7 +105,7 @@ export function fitModels(
   const models = admissibleModels(points);
   if (!firstFit(ws, points, models[1] ?? models[0]!)) return undefined;
   const within = withinBySource(ws, points, context.scales.within);
-  setStart(ws, points, within, context.weighting);
+  if (!setStart(ws, points, within, context.weighting)) return undefined;
   const between = betweenScale(screened, subject, context);
   const limiting = limitModel(points);
   setDesignColumns(ws.columns, limiting.model, ws.temperatureK, points.n, points.centreK);
@@ -132,6 +135,7 @@ export function fitModels(
     betweenDegreesOfFreedom,
     largest,
     choice,
+    breakTemperatureK: screened.breakTemperatureK ?? Number.NaN,
   };
 }
 
@@ -143,14 +147,15 @@ function vetoes(points: KeptPoints, { system }: CurveSubject, scale: SystemScale
     (possible ? lackOfCurvature(candidate, richest, scale.degreesOfFreedom) : undefined);
 }
 
-/** Expected variances and, in the weighting by value, the response of the common start. */
-function setStart(ws: FitWorkspace, { n }: KeptPoints, within: readonly number[], weighting: FitWeighting): void {
+/** Expected variances and, in the weighting by value, the response of the common start; false where there are none. */
+function setStart(ws: FitWorkspace, { n }: KeptPoints, within: readonly number[], weighting: FitWeighting): boolean {
   if (weighting === "relative") {
     setRelativeVariances(ws, n, within);
-    return;
+    return true;
   }
-  setAbsoluteVariances(ws, n, within, ws.startFitted);
+  const possible = setAbsoluteVariances(ws, n, within, ws.startFitted);
   for (let i = 0; i < n; i++) ws.startVariance[i] = ws.variance[i]!;
+  return possible;
 }
 
 function mean(values: Float64Array, n: number): number {

@@ -94,7 +94,9 @@ export function normaliseSource(
       known = new Map();
       contexts.set(who, known);
     }
-    const key = `${unitText}\u0000${basisText}`;
+    // What a conversion assumes follows from which densities it has, so those are part of the key.
+    const { solutionDensity: model, solventDensityAtVolumeTemperature: atVolume } = liquorOf(who).needs;
+    const key = `${unitText}\u0000${basisText}\u0000${model?.kind}\u0000${atVolume === undefined}`;
     const found = known.get(key);
     if (found !== undefined) return found;
     const unit = unitOf(unitText);
@@ -106,6 +108,7 @@ export function normaliseSource(
     if (typeof basis !== "string") return basis;
     const context = bindUnit(unit, basis, liquorOf(who));
     if (!isFault(context)) known.set(key, context);
+    else if (context.code === "no-density") return { ...context, found: liquorOf(who).missingDensity() ?? context.found };
     return context;
   };
 

@@ -33,22 +33,37 @@ export function nextSubset(rows: Int32Array, n: number, p: number): boolean {
   return true;
 }
 
-/** p distinct rows at random, each draw in proportion to the votes (largest vote `largestVote`; equal where absent). */
+/**
+ * p distinct rows at random, in proportion to their votes where `cumulativeVotes` gives the running sum of these.
+ * A row that cannot be drawn anew in 50 tries, as few rows hold nearly all votes, is drawn with equal chances.
+ */
 export function drawSubset(
   rows: Int32Array,
   n: number,
   p: number,
   random: RandomSource,
-  votes?: Float64Array,
-  largestVote = 1,
+  cumulativeVotes: Float64Array | undefined,
 ): void {
   for (let k = 0; k < p; k++) {
-    let row = random.integerBelow(n);
-    // Rejection ends: the caller makes sure that at least p rows have a vote.
-    while (isTaken(rows, k, row) || (votes && random.uniform() * largestVote >= votes[row]!))
-      row = random.integerBelow(n);
+    let row = drawRow(n, random, cumulativeVotes);
+    for (let tries = 1; isTaken(rows, k, row); tries++) {
+      row = drawRow(n, random, tries < 50 ? cumulativeVotes : undefined);
+    }
     rows[k] = row;
   }
+}
+
+function drawRow(n: number, random: RandomSource, cumulativeVotes: Float64Array | undefined): number {
+  if (!cumulativeVotes) return random.integerBelow(n);
+  const mark = random.uniform() * cumulativeVotes[n - 1]!;
+  let low = 0;
+  let high = n - 1;
+  while (low < high) {
+    const middle = (low + high) >> 1;
+    if (cumulativeVotes[middle]! > mark) high = middle;
+    else low = middle + 1;
+  }
+  return low;
 }
 
 /**

@@ -7,7 +7,7 @@
 
 const LOG_SQRT_TWO_PI = 0.9189385332046727;
 
-/** Coefficients of Lanczos' approximation for g = 7 and nine terms (Godfrey's set; checked against mpmath in tests). */
+/** Coefficients of Lanczos' approximation for g = 7 and nine terms (from memory; the tests hold them to factorials and half-integer values). */
 const LANCZOS_G = 7;
 const LANCZOS = [
   0.99999999999980993, 676.5203681218851, -1259.1392167224028, 771.32342877765313, -176.61502916214059,

@@ -34,6 +34,7 @@ export interface RobustWorkspace {
   readonly leastSquares: LeastSquaresWorkspace;
   readonly start: SEstimateWorkspace;
   readonly basis: Float64Array;
+  readonly cumulativeVotes: Float64Array;
   readonly startCoefficients: Float64Array;
   readonly coefficients: Float64Array;
   readonly residuals: Float64Array;
@@ -72,6 +73,7 @@ export function createRobustWorkspace(maxRows: number, maxColumns: number): Robu
     leastSquares: createLeastSquaresWorkspace(maxRows, maxColumns),
     start: createSEstimateWorkspace(maxRows, maxColumns),
     basis: new Float64Array(maxRows * maxColumns),
+    cumulativeVotes: new Float64Array(maxRows),
     startCoefficients: new Float64Array(maxColumns),
     coefficients: new Float64Array(maxColumns),
     residuals: new Float64Array(maxRows),
@@ -134,7 +136,7 @@ export function robustRegressionInto(
     return ws.rank < p ? "rank-deficient" : "exact-fit";
   }
   orthonormalBasis(ws.leastSquares.qr, ws.basis);
-  const data = describe(ws.basis, response, n, p, options.votes);
+  const data = describe(ws, response, n, p, options.votes);
   ws.scale = sEstimate(ws.start, data, () => seededRandom(options.seed ?? 1), options.maxSubsets);
   return ws.scale === 0 ? exactFit(ws, design, data) : mStep(ws, design, data);
 }
@@ -210,7 +212,7 @@ function keep(ws: RobustWorkspace, n: number, p: number): void {
 }
 
 function describe(
-  basis: Float64Array,
+  ws: RobustWorkspace,
   response: Float64Array,
   n: number,
   p: number,
@@ -218,25 +220,24 @@ function describe(
 ): RobustData {
   let sum = 0;
   let voters = 0;
-  let largestVote = 0;
   let largestResponse = 0;
   for (let i = 0; i < n; i++) {
     const vote = votes ? votes[i]! : 1;
     if (!(vote >= 0 && vote < Infinity)) throw new RangeError(`robust regression: vote ${i} is ${vote}`);
     sum += vote;
+    ws.cumulativeVotes[i] = sum;
     if (vote > 0) voters += 1;
-    largestVote = Math.max(largestVote, vote);
     largestResponse = Math.max(largestResponse, Math.abs(response[i]!));
   }
   if (voters <= p) throw new RangeError(`robust regression: ${voters} rows with a vote, more than ${p} needed`);
   return {
-    basis,
+    basis: ws.basis,
     response,
     n,
     p,
     votes,
     votesInAll: sum * (1 - p / voters),
-    largestVote,
-    smallestScale: Math.max(1e-14 * largestResponse, Number.MIN_VALUE * 1e10),
+    cumulativeVotes: votes ? ws.cumulativeVotes : undefined,
+    smallestScale: Math.max(1e-14 * largestResponse, 1e-290),
   };
 }

@@ -29,7 +29,8 @@ export interface RobustData {
   readonly p: number;
   /** Votes of the rows, at least 0; one each where absent. */
   readonly votes: Float64Array | undefined;
-  readonly largestVote: number;
+  /** Running sum of the votes, where there are votes. */
+  readonly cumulativeVotes: Float64Array | undefined;
   /** (1 - p / n') times the sum of votes, n' the rows with a vote; n - p without votes. */
   readonly votesInAll: number;
   /** Scales below this are rounding error of an exact fit. */
@@ -111,7 +112,7 @@ function offerAllSubsets(ws: SEstimateWorkspace, data: RobustData): void {
 function offerRandomSubsets(ws: SEstimateWorkspace, data: RobustData, random: RandomSource, wanted: number): void {
   let found = 0;
   for (let draws = 0; found < wanted && draws < 10 * wanted; draws++) {
-    drawSubset(ws.rows, data.n, data.p, random, data.votes, data.largestVote);
+    drawSubset(ws.rows, data.n, data.p, random, data.cumulativeVotes);
     if (offerSubset(ws, data)) found += 1;
   }
 }

@@ -76,12 +76,22 @@ export async function readCollection(dir: string): Promise<Collection> {
     else refused.push(read.refused);
   }
   return {
-    ...{ dir, card, sources: sources.sort(byName), refusedSources: refused.sort(byName) },
+    ...{ dir, card, sources: sources.sort(byName), refusedSources: uniquelyNamed(refused, sources).sort(byName) },
     program: await readProgramTables(),
     own: await readCollectionTables(dir),
     rulings: await readOwnTable(dir, "rulings.csv"),
     notices: folderNotices(dir, names, cards),
   };
+}
+
+/** Refused sources with names of their own: one that bears the name of a source that was read goes by its file. */
+function uniquelyNamed(refused: readonly RefusedSource[], sources: readonly SourceTable[]): RefusedSource[] {
+  const taken = new Set(sources.map(({ name }) => name));
+  return refused.map((source) => {
+    const name = taken.has(source.name) ? source.file : source.name;
+    taken.add(name);
+    return { ...source, name };
+  });
 }
 
 /** Card of one source of a collection by its name. @throws InputError `unknown-source` or what its card has */

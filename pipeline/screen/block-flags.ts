@@ -14,7 +14,7 @@ const MORE_STABLE_FORM =
 export function blockFlag(input: ScreenInput, block: OffBlock): Flag {
   const fit = input.fits[block.system]!;
   const verdict = verdictOf(block);
-  const lower = couldBeStableForm(fit, block);
+  const lower = couldBeStableForm(block);
   const flag = {
     scope: "block",
     code: lower ? "possible-more-stable-form" : "block-off-curve",
@@ -51,17 +51,16 @@ function verdictOf({ readings, posterior }: OffBlock): Verdict {
 }
 
 /** A coherent lower block: every deviation alike, below by less than an order of magnitude. */
-function couldBeStableForm(fit: RobustFit, { points, offset, threshold }: OffBlock): boolean {
+function couldBeStableForm({ deviations, offset, threshold }: OffBlock): boolean {
   if (offset >= 0 || offset < -LARGEST_FORM_RATIO) return false;
-  return middle(points.map((point) => Math.abs(fit.deviation[point]! - offset))) < threshold;
+  return middle(deviations.map((deviation) => Math.abs(deviation - offset))) < threshold;
 }
 
 function evidence(input: ScreenInput, fit: RobustFit, block: OffBlock, lower: boolean): string {
-  const deviations = block.points.map((point) => fit.points.lnValue[point]! - fit.predicted[point]!);
   const temperatures = block.points.map((point) => fit.points.temperatureK[point]!);
   const [low, high] = [Math.min(...temperatures), Math.max(...temperatures)];
   const where = low === high ? `at ${inCelsius(low)}` : `from ${inCelsius(low)} to ${inCelsius(high)}`;
-  const [least, most] = [Math.min(...deviations), Math.max(...deviations)];
+  const [least, most] = [Math.min(...block.deviations), Math.max(...block.deviations)];
   const name = sourceName(input, block.source);
   const seen =
     `the ${counted(block.points.length, "point")} of ${name} ${where} lie, in the middle, ${offBy(block.offset)} ` +

@@ -15,6 +15,8 @@ export interface OffBlock {
   /** Median deviation from the curve of the other sources, ln value, and its z. */
   readonly offset: number;
   readonly z: number;
+  /** Deviations of the points from that curve, in the order of `points`. */
+  readonly deviations: readonly number[];
   readonly otherSources: number;
   readonly threshold: number;
   readonly readings: readonly BlockReading[];
@@ -133,7 +135,7 @@ function testBlock(
   fitSources(models[0], fit, (other) => sound.has(other));
   const rows = points.map((point) => fit.points.row[point]!);
   const bare = { input, models, fit, points, source, threshold };
-  const { median, sd, failing, alike } = blockOffset(bare);
+  const { median, sd, failing, alike, deviations } = blockOffset(bare);
   const z = median / sd;
   const clearlyOff = Math.abs(median) > threshold && alike > 0.5 && Math.abs(z) >= 2;
   if (!clearlyOff && failing <= 0.5 && !points.every((point) => fit.kept[point] === 0)) return undefined;
@@ -149,6 +151,7 @@ function testBlock(
     source,
     points,
     offset: median,
+    deviations,
     z,
     otherSources: others.length,
     threshold,

@@ -8,6 +8,9 @@ import type { ScreenInput } from "./screen-input.ts";
 import type { SystemModel } from "./system-model.ts";
 import { counted, inCelsius, offBy, threeDigits } from "./wording.ts";
 
+/** Digits of a proposed value: more than any measurement has. */
+const PROPOSED_DIGITS = 8;
+
 /** The flag of one off point: what was seen, what probably happened, what to look at. */
 export function pointFlag(
   input: ScreenInput,
@@ -30,10 +33,13 @@ export function pointFlag(
   } as const;
   if (verdict.cause === undefined) return flag;
   const named = { ...flag, causeDetail: verdict.detail, causeProbability: verdict.probability };
-  return verdict.proposedValue === undefined ? named : { ...named, proposedValue: verdict.proposedValue };
+  if (verdict.proposedValue === undefined) return named;
+  // Conversions leave noise in the last digits of a number that people will copy.
+  return { ...named, proposedValue: Number(verdict.proposedValue.toPrecision(PROPOSED_DIGITS)) };
 }
 
-function evidence(input: ScreenInput, fit: RobustFit, { point, z, unsure }: OffPoint): string {
+function evidence(input: ScreenInput, fit: RobustFit, { point, z, unsure, impossible }: OffPoint): string {
+  if (impossible) return `no solubility is measured at ${inCelsius(fit.points.temperatureK[point]!)}`;
   const seen = `${offBy(fit.deviation[point]!)} ${comparison(fit, point)} (z = ${z.toFixed(1)})`;
   const expected = expectation(input, fit, point);
   const few = unsure ? "; few points are left to judge by, told because it is more than a factor 2" : "";

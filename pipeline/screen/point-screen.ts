@@ -1,6 +1,7 @@
 import { normalQuantile, studentTSurvival } from "../numerics/distributions.ts";
 import type { RobustFit } from "../records/fits.ts";
 import { rejectionLimit } from "./false-discovery.ts";
+import { isPossibleTemperature } from "./possible-temperature.ts";
 import { type ScreenInput, thresholdOf } from "./screen-input.ts";
 
 /** A point that is off its curve. */
@@ -9,6 +10,8 @@ export interface OffPoint {
   readonly point: number;
   readonly z: number;
   readonly threshold: number;
+  /** The temperature cannot be meant: what the curve says there is beside the point. */
+  readonly impossible: boolean;
   /** True where too few points are left to be sure: told only because it is off by more than a factor 2. */
   readonly unsure: boolean;
 }
@@ -37,16 +40,21 @@ export function screenPoints(input: ScreenInput, blocked: ReadonlySet<string>): 
       const z = fit.deviation[point]! / fit.deviationSd[point]!;
       if (Number.isNaN(z)) continue;
       total++;
+      if (!isPossibleTemperature(fit.points.temperatureK[point]!)) {
+        pValues.push(0);
+        candidates.push({ system: fit.system, point, z, ...limitsOf(input, fit, point), impossible: true });
+        continue;
+      }
       if (!(Math.abs(z) > worthTesting)) continue;
       const p = 2 * studentTSurvival(Math.abs(z), Math.max(1, fit.degreesOfFreedom));
       if (p > q) continue;
       pValues.push(p);
-      candidates.push({ system: fit.system, point, z, ...limitsOf(input, fit, point) });
+      candidates.push({ system: fit.system, point, z, ...limitsOf(input, fit, point), impossible: false });
     }
   }
   const limit = rejectionLimit(pValues, total, q);
-  return candidates.filter(({ system, point, threshold }, j) => {
-    return pValues[j]! <= limit && Math.abs(input.fits[system]!.deviation[point]!) >= threshold;
+  return candidates.filter(({ system, point, threshold, impossible }, j) => {
+    return impossible || (pValues[j]! <= limit && Math.abs(input.fits[system]!.deviation[point]!) >= threshold);
   });
 }
 

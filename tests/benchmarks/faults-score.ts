@@ -71,6 +71,10 @@ export function scoreWorld(world: World, score: Score, misses: string[] = []): v
       system: index,
       sources: sources.length,
     };
+    if (sources.length >= 2 && sound.length === sources.length) {
+      add("conflicts without a faulty block", of.conflict);
+      if (of.conflict) of.miss(`false conflict in ${index}`);
+    }
     for (const source of sources) {
       const block = points.filter((row) => world.table.source[row] === source);
       const kind = world.faultOfBlock.get(`${index}:${source}`);
@@ -83,7 +87,11 @@ export function scoreWorld(world: World, score: Score, misses: string[] = []): v
 function scoreBlock(of: Scored, source: number, block: readonly number[], kind: string): void {
   const { world, add, miss, ofRow } = of;
   if (block.length < 2 || block.filter((row) => isVisible(world, row)).length * 2 <= block.length) return;
-  if (of.sources === 2) add("two-source conflicts reported", of.conflict);
+  if (of.sources === 2) {
+    add("two-source conflicts reported", of.conflict);
+    if (!of.conflict)
+      miss(`conflict ${kind} ${of.system}:${source}, ${block.map((r) => world.shiftOfRow[r]!.toFixed(2))}`);
+  }
   if (!of.majority) return;
   const key = `${of.system}:${source}`;
   const flag = of.ofBlock.get(key);

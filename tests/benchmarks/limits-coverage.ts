@@ -148,12 +148,15 @@ function printTable(): void {
   console.log("coverage of the 95 % limits, percent (mean over temperature / lowest of 11 temperatures)");
   console.log("points sources  systems no curve   curve         new measurement   half-width %   models chosen");
   let [curveSum, newSum] = [0, 0];
+  let missed = 0;
   kinds.forEach((kind, i) => {
     const counted = kind.systems - kind.withoutCurve;
     const share = (hits: Int32Array) => {
       const percents = Array.from(hits, (hit) => (100 * hit) / counted);
       const mean = percents.reduce((sum, p) => sum + p, 0) / PLACES;
-      return { mean, text: `${mean.toFixed(2)} / ${Math.min(...percents).toFixed(2)}` };
+      const lowest = Math.min(...percents);
+      if (mean < 93 || mean > 97 || lowest < 91) missed++;
+      return { mean, text: `${mean.toFixed(2)} / ${lowest.toFixed(2)}` };
     };
     const [ofCurve, ofNew] = [share(kind.curve), share(kind.newMeasurement)];
     curveSum += ofCurve.mean / kinds.length;
@@ -174,5 +177,11 @@ function printTable(): void {
     ];
     console.log(cells.join(" "));
   });
+  console.log(
+    missed === 0
+      ? "every mean lies in 93 to 97, no lowest below 91"
+      : `${missed} of ${2 * kinds.length} coverages miss 93 to 97 in the mean or 91 at the lowest`,
+  );
+  if (missed > 0) process.exitCode = 1;
   console.log(`mean of all kinds: curve ${curveSum.toFixed(2)}, new measurement ${newSum.toFixed(2)}`);
 }

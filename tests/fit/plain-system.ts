@@ -56,15 +56,16 @@ export const defaultContext: CurveContext = {
   weighting: "relative",
 };
 
-/** The published curve of points that are all kept. */
+/** The published curve of points, all of them kept unless told otherwise. */
 export function curveThrough(
   points: SystemPoints,
   context: Partial<CurveContext> = {},
   meltingPointK = Number.NaN,
   system: System = plainSystem(),
+  kept = new Uint8Array(points.n).fill(1),
 ): Curve | NoCurve {
   return publishedCurve(
-    { points, kept: new Uint8Array(points.n).fill(1), agreement: "agreed" },
+    { points, kept, agreement: "agreed" },
     { system, branch: 1, meltingPointK },
     { ...defaultContext, ...context },
   );

@@ -106,7 +106,7 @@ test.skipIf(!present)("Published correlations are followed inside their ranges (
     ["sucrose-water-vavrinecz1962", 0.005],
     ["nacl-water-sterner1988", 0.002],
     ["kno3-water-miller-rawlings1994", 0.025],
-    ["k2so4-water-mullin-gaska1969", 0.002],
+    ["k2so4-water-mullin-gaska1969", 0.004],
   ] as const;
   for (const [id, tolerance] of tried) {
     const { coefficients, valid_T_C } = all.find((correlation) => correlation.id === id) as Correlation;

@@ -229,6 +229,20 @@ describe("input that leaves no choice", () => {
     expect(fit.coefficients[0]).toBeCloseTo(2, 14);
   });
 
+  test("all values 0 give coefficients of 0, not NaN", () => {
+    const fit = robust({ response: [0, 0, 0, 0, 0], predictors: [u] });
+    expect([fit.status, fit.scale, ...fit.coefficients.map(Math.abs)]).toEqual(["exact-fit", 0, 0, 0]);
+  });
+
+  test("one row with nearly all votes among thousands ends the drawing of subsets", () => {
+    const random = seededRandom(9);
+    const x = Array.from({ length: 4000 }, (_, i) => i / 2000 - 1);
+    const response = x.map((v) => 1 + v + 0.01 * random.normal());
+    const votes = Float64Array.from(x, (_, i) => (i === 7 ? 1 : 1e-9));
+    const { coefficients } = robust({ response, predictors: [x] }, { votes });
+    expect(worstRelativeError(coefficients, [1, 1])).toBeLessThan(0.05);
+  });
+
   test("all temperatures equal, or fewer points than parameters, are rank deficient", () => {
     const equal = robust({ response: [1, 2, 3, 4, 50], predictors: [[7, 7, 7, 7, 7]] });
     expect([equal.status, equal.rank, equal.scale]).toEqual(["rank-deficient", 1, Number.NaN]);

@@ -1,6 +1,6 @@
 import { area, line } from "d3-shape";
 import type { Frame } from "./frame.ts";
-import { type Html, html } from "./html.ts";
+import { type Html, html, raw } from "./html.ts";
 import { px } from "./marks.ts";
 
 /** A curve in the units of a plot, with both kinds of 95 % limits. */
@@ -26,7 +26,9 @@ function overRange(curve: CurveLine, { x, y }: Frame): Html {
   const path = (values: readonly number[]) =>
     line<number>(across, up(values)).defined(known(values)).digits(1)(index) ?? "";
   const band = area<number>(across, up(curve.low), up(curve.high)).defined(known(curve.high)).digits(1)(index) ?? "";
-  return html`<path class="band" d="${band}"/><path class="new" d="${path(curve.newLow)}"/><path class="new" d="${path(curve.newHigh)}"/><path class="curve" d="${path(curve.y)}"/>`;
+  return raw(
+    `<path class="band" d="${band}"/><path class="new" d="${path(curve.newLow)}"/><path class="new" d="${path(curve.newHigh)}"/><path class="curve" d="${path(curve.y)}"/>`,
+  );
 }
 
 /** A constant at one temperature: a dash with its limits as a bar and a broken bar. */

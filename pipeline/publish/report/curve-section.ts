@@ -1,6 +1,6 @@
-import type { GridRow } from "../../records/generated/grid.ts";
 import type { Curve, CurveModel } from "../../records/fits.ts";
-import { celsius, counted, fixed, plainNumber, significant } from "./figures.ts";
+import type { GridRow } from "../../records/generated/grid.ts";
+import { celsius, fixed, plainNumber, significant } from "./figures.ts";
 import { type Html, html, raw } from "./html.ts";
 import { wideTable } from "./page.ts";
 import type { SystemView } from "./system-view.ts";
@@ -54,7 +54,7 @@ function runnersUp({ runnersUp: others, aicc }: Curve): Html {
   if (others.length === 0) return html`<p>No other model was admissible.</p>`;
   const rows = others.map(
     ({ model, aicc: other, leaveOneOut, why }) =>
-      html`<tr><th scope="row">${model}</th><td class="n">${Number.isFinite(other - aicc) ? fixed(other - aicc, 1) : ""}</td><td class="n">${Number.isFinite(leaveOneOut) ? significant(100 * leaveOneOut, 3) : ""}</td><td>${why}</td></tr>`,
+      html`<tr><th scope="row">${model}</th><td class="n">${Number.isFinite(other - aicc) ? fixed(other - aicc, 1) : ""}</td><td class="n">${Number.isFinite(leaveOneOut) ? significant(100 * leaveOneOut, 3) : ""}</td><td class="w">${why}</td></tr>`,
   );
   return html`<table><caption>Runners-up, on the same kept points</caption><thead><tr><th scope="col">Model</th><th scope="col" class="n">AICc above the chosen</th><th scope="col" class="n">Leave-one-out, %</th><th scope="col">Why it was passed over</th></tr></thead><tbody>${rows}</tbody></table>`;
 }
@@ -85,15 +85,18 @@ const MOST_VALUES = 40;
 
 function valueTable(grid: readonly GridRow[]): Html {
   const step = Math.ceil(grid.length / MOST_VALUES);
-  const limits = (low: number | undefined, high: number | undefined) =>
-    low === undefined && high === undefined ? "" : `${significant(low, 3)} to ${significant(high, 3) || "no limit"}`;
+  const limits = (low: number | undefined, high: number | undefined) => {
+    const [from, to] = [significant(low, 3), significant(high, 3)];
+    return from === "" ? "" : `${from} to ${to || "no limit"}`;
+  };
+  const gaps = grid.some((row) => row.data_gap_K !== undefined);
   const rows = grid
     .filter((_, i) => i % step === 0)
     .map(
       (row) =>
-        html`<tr><th scope="row" class="n">${celsius(row.temperature_K)}</th><td class="n">${significant(row.mole_fraction, 4)}</td><td class="n">${significant(row.g_per_100g_solvent, 4)}</td><td class="n">${limits(row.g_per_100g_solvent_curve_low, row.g_per_100g_solvent_curve_high)}</td><td class="n">${limits(row.g_per_100g_solvent_new_low, row.g_per_100g_solvent_new_high)}</td><td class="n">${significant(row.mg_per_mL_solution, 4)}</td><td>${row.data_gap_K === undefined ? "" : `between data ${fixed(row.data_gap_K, 0)} K apart`}</td></tr>`,
+        html`<tr><th scope="row" class="n">${celsius(row.temperature_K)}</th><td class="n">${significant(row.mole_fraction, 4)}</td><td class="n">${significant(row.g_per_100g_solvent, 4)}</td><td class="n">${limits(row.g_per_100g_solvent_curve_low, row.g_per_100g_solvent_curve_high)}</td><td class="n">${limits(row.g_per_100g_solvent_new_low, row.g_per_100g_solvent_new_high)}</td><td class="n">${significant(row.mg_per_mL_solution, 4)}</td>${gaps ? html`<td>${row.data_gap_K === undefined ? "" : `between data ${fixed(row.data_gap_K, 0)} K apart`}</td>` : ""}</tr>`,
     );
-  return html`<table><caption>The curve at round temperatures inside its range; nothing is extrapolated${step > 1 ? `; every ${step}th row of grid.csv` : ""}</caption><thead><tr><th scope="col" class="n">°C</th><th scope="col" class="n">x</th><th scope="col" class="n">g/100 g solvent</th><th scope="col" class="n">95 % limits, curve</th><th scope="col" class="n">95 % limits, new measurement</th><th scope="col" class="n">mg/mL solution</th><th scope="col">Gap</th></tr></thead><tbody>${rows}</tbody></table>`;
+  return html`<table><caption>The curve at round temperatures inside its range; nothing is extrapolated${step > 1 ? `; every ${step}th row of grid.csv` : ""}</caption><thead><tr><th scope="col" class="n">°C</th><th scope="col" class="n">x</th><th scope="col" class="n">g/100 g solvent</th><th scope="col" class="n">95 % limits, curve</th><th scope="col" class="n">95 % limits, new measurement</th><th scope="col" class="n">mg/mL solution</th>${gaps ? html`<th scope="col">Gap</th>` : ""}</tr></thead><tbody>${rows}</tbody></table>`;
 }
 
 /** Curve with equation, coefficients, quality, runners-up, and values at round temperatures; or why there is none. */

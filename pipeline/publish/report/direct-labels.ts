@@ -7,6 +7,8 @@ export interface Spot {
   readonly source: number;
   readonly x: number;
   readonly y: number;
+  /** True if the curve uses it: the letter goes to such a point where there is one. */
+  readonly usual: boolean;
 }
 
 /** Offsets tried for a letter around an end point of its source. */
@@ -40,7 +42,8 @@ export function directLabels(
   }
   const labels: Html[] = [];
   for (const [source, own] of [...bySource].sort(([a], [b]) => a - b)) {
-    const byX = [...own].sort((a, b) => a.x - b.x);
+    const kept = own.filter(({ usual }) => usual);
+    const byX = (kept.length > 0 ? kept : [...own]).sort((a, b) => a.x - b.x);
     const ends = byX.length > 1 ? [byX.at(-1) as Spot, byX[0] as Spot] : byX;
     const best = clearest(ends, taken, edges);
     if (best === undefined) continue;

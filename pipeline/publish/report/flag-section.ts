@@ -19,11 +19,16 @@ const WORDS: Readonly<Record<string, string>> = {
 /** A flag's code in words. */
 export function flagWords({ code }: Flag): string {
   const plain = code.replaceAll("-", " ");
-  return WORDS[code] ?? plain.charAt(0).toUpperCase() + plain.slice(1);
+  return WORDS[code] ?? sentence(plain);
+}
+
+/** A sentence that starts as one. */
+export function sentence(text: string): string {
+  return text.charAt(0).toUpperCase() + text.slice(1);
 }
 
 /** What a flag stands on: a measurement with its file and line, a source, or the whole system. */
-export function flagTarget(edition: Edition, flag: Flag): Html {
+function flagTarget(edition: Edition, flag: Flag): Html {
   const { table, sources } = edition;
   if (flag.row !== undefined) {
     const source = sources[table.source[flag.row] as number];
@@ -39,8 +44,12 @@ export function causeLine({ suspectedCause, causeDetail, causeProbability, propo
     return html`<p>Suspected cause: no simple cause; every cause that was tried explains it worse than a random error.</p>`;
   }
   const detail = causeDetail ? html` (${short(causeDetail, 300)})` : "";
-  const probability = causeProbability === undefined ? "" : `, probability ${causeProbability.toFixed(2)}`;
-  const value = proposedValue === undefined ? "" : `; the value would then be ${significant(proposedValue)}, in the unit reported`;
+  const probability =
+    causeProbability === undefined
+      ? ""
+      : `, probability ${causeProbability > 0.99 ? "above 0.99" : causeProbability.toFixed(2)}`;
+  const value =
+    proposedValue === undefined ? "" : `; the value would then be ${significant(proposedValue)}, in the unit reported`;
   return html`<p>Suspected cause: <b>${suspectedCause}</b>${detail}${probability}${value}.</p>`;
 }
 
@@ -48,7 +57,7 @@ function flagBox(edition: Edition, flag: Flag): Html {
   const needs = flag.severity === "blocking";
   const kind = needs ? html`<span class="need">Needs a person.</span>` : html`<span class="soft">Notice.</span>`;
   return html`<div class="flag${needs ? "" : " notice"}"><p>${kind} <b>${flagWords(flag)}</b>: ${flagTarget(edition, flag)}</p>
-<p>${short(flag.evidence, 1200)}</p>${causeLine(flag) ?? ""}<p>What to look at: ${short(flag.lookAt, 600)}</p>
+<p>${short(sentence(flag.evidence), 1200)}.</p>${causeLine(flag) ?? ""}<p>${short(flag.lookAt, 600)}</p>
 <p class="soft">Ruling target: <code>${short(flagId(edition, flag), 240)}</code></p></div>`;
 }
 

@@ -29,8 +29,7 @@ export function legend(view: SystemView): Html {
     return html`<li>${markPicture(i, "kept")}<span><b>${sourceLetter(i)}</b> <a href="../sources.html#${account?.name ?? ""}">${account?.name ?? ""}</a>, ${counted(own, "measurement")}${account?.card?.title ? html`: ${short(account.card.title, 160)}` : ""}</span></li>`;
   });
   const states = STATES.filter(([state]) => points.some((point) => point.state === state)).map(
-    ([state, text]) =>
-      html`<li>${state === "interval" ? intervalKey : markPicture(0, state)}<span>${text}</span></li>`,
+    ([state, text]) => html`<li>${state === "interval" ? intervalKey : markPicture(0, state)}<span>${text}</span></li>`,
   );
   const ringed = points.some(({ flagged }) => flagged)
     ? html`<li>${markPicture(0, "kept", true)}<span>ringed: a flag that needs a person concerns it</span></li>`

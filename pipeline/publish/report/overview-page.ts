@@ -1,64 +1,146 @@
-import { type Edition, flagId } from "../../records/edition.ts";
+import { type Edition, statusOf } from "../../records/edition.ts";
 import type { Flag } from "../../records/fits.ts";
 import type { System } from "../../records/systems.ts";
-import { celsius } from "./figures.ts";
-import { type Html, html } from "./html.ts";
-import { page } from "./page.ts";
+import { massRatioFromLn } from "../mass-ratio.ts";
+import { celsius, counted, fixed, significant } from "./figures.ts";
+import { byUrgency, flagItem } from "./flags-page.ts";
+import { type Html, html, raw, short } from "./html.ts";
+import { OVERVIEW_SCRIPT } from "./overview-script.ts";
+import { page, wideTable } from "./page.ts";
 
-/** Flags listed on the overview before it refers to `flags.csv`. */
-const FLAGS_SHOWN = 50;
+/** Flags told on the overview before it refers to the page of flags. */
+const FLAGS_SHOWN = 12;
+/** Ends of the small picture of a temperature range, °C. */
+const BAR = [-20, 120] as const;
+/** Temperature at which the overview tells a solubility, K. */
+const ROOM_K = 298.15;
 
 /** Path of a system's page, from the report's root. */
 export function systemFile(system: System): string {
   return `systems/${system.id}.html`;
 }
 
-function facts(entries: readonly (readonly [string, number])[]): Html {
-  return html`<ul class="facts">${entries.map(([name, count]) => html`<li><b>${count}</b>${name}</li>`)}</ul>`;
+function tally(entries: readonly (readonly [number, Html])[]): Html {
+  return html`<ul class="tally">${entries.map(([count, words]) => html`<li><b>${count}</b>${words}</li>`)}</ul>`;
 }
 
-function flagLine(edition: Edition, flag: Flag): Html {
-  const system = flag.system === undefined ? undefined : edition.systems[flag.system];
-  const id = flagId(edition, flag);
-  const link = system === undefined ? html`${id}` : html`<a href="${systemFile(system)}">${id}</a>`;
-  return html`<li>${link}: ${flag.evidence}${flag.suspectedCause ? ` Suspected cause: ${flag.suspectedCause}.` : ""}</li>`;
-}
-
-function systemRow(edition: Edition, system: System, flagged: number): Html {
-  const { solute, solidForm, solvent, composition, medium } = system.identity;
-  const points = edition.fits[system.index]?.robust.points.temperatureK ?? new Float64Array();
-  const range = points.length > 0 ? `${celsius(Math.min(...points))} to ${celsius(Math.max(...points))}` : "";
-  const models = edition.fits[system.index]?.curves.map((curve) => curve.model).join(", ");
-  return html`<tr><td><a href="${systemFile(system)}">${solute}</a></td><td>${solidForm}</td><td>${[solvent, composition, medium].filter((part) => part !== "").join(", ")}</td><td class="n">${system.rows.length}</td><td class="n">${range}</td><td>${models || "none"}</td><td>${edition.grades[system.index]?.grade}</td><td class="n">${flagged}</td></tr>`;
-}
-
-/** The first page: the account, what needs a person first, then every system by solute. */
-export function overviewPage(edition: Edition, flagsOfSystem: ReadonlyMap<number, readonly Flag[]>): string {
+/** The account as the sum it is, then what came of the measurements. */
+function accountOf(edition: Edition): Html {
   const sum = (of: "readings" | "accepted" | "refused" | "missing") =>
-    edition.sources.reduce((total, s) => total + s[of], 0);
-  const blocking = edition.flags.filter((flag) => flag.severity === "blocking");
-  const bySolute = [...edition.systems].sort((a, b) => (a.key < b.key ? -1 : 1));
-  return page(
-    edition.collection.title,
-    edition.collection,
-    0,
-    html`<h1>${edition.collection.title}</h1>
-${facts([
-  ["readings", sum("readings")],
-  ["accepted", sum("accepted")],
-  ["refused", sum("refused")],
-  ["cells marked missing", sum("missing")],
-  ["sources", edition.sources.length],
-  ["systems", edition.systems.length],
-  ["flags that need a person", blocking.length],
+    edition.sources.reduce((total, source) => total + source[of], 0);
+  const status = { kept: 0, "set aside": 0, interval: 0, "not fitted": 0 };
+  for (let row = 0; row < edition.table.count; row++) status[statusOf(edition, row)]++;
+  const curves = edition.fits.reduce((total, fit) => total + fit.curves.length, 0);
+  const grades = new Map<string, number>();
+  for (const { grade } of edition.grades) grades.set(grade, (grades.get(grade) ?? 0) + 1);
+  const gradeWords = ["recommended", "tentative", "doubtful", "rejected"]
+    .filter((grade) => grades.has(grade))
+    .map((grade) => `${grades.get(grade)} ${grade}`)
+    .join(", ");
+  return html`<p class="lead">${counted(sum("readings"), "reading")} = ${sum("accepted")} accepted + <a href="refused.html">${sum("refused")} refused</a>; ${counted(sum("missing"), "cell")} marked as missing.</p>
+${tally([
+  [edition.sources.length, html`<a href="sources.html">sources</a>`],
+  [edition.systems.length, html`systems`],
+  [curves, html`curves`],
+  [
+    edition.flags.filter(({ severity }) => severity === "blocking").length,
+    html`<a href="flags.html">flags that need a person</a>`,
+  ],
 ])}
-<h2>What needs a person first</h2>
-${blocking.length === 0 ? html`<p>Nothing: no flag needs a decision.</p>` : html`<ul>${blocking.slice(0, FLAGS_SHOWN).map((flag) => flagLine(edition, flag))}</ul>`}
-${blocking.length > FLAGS_SHOWN ? html`<p>${blocking.length - FLAGS_SHOWN} more in flags.csv.</p>` : ""}
-${sum("refused") > 0 ? html`<p><a href="refused.html">${sum("refused")} refused readings</a>, each with the way to mend it.</p>` : ""}
-<h2>Systems</h2>
-<div class="wide" tabindex="0" role="region" aria-label="Systems"><table>
-<thead><tr><th>Solute</th><th>Solid form</th><th>Solvent</th><th class="n">Rows</th><th class="n">°C</th><th>Curve</th><th>Proposed grade</th><th class="n">Flags</th></tr></thead>
-<tbody>${bySolute.map((system) => systemRow(edition, system, flagsOfSystem.get(system.index)?.length ?? 0))}</tbody></table></div>`,
+<p>Measurements: ${status.kept} kept, ${status["set aside"]} set aside, ${status.interval} known as a range, ${status["not fitted"]} shown and not fitted. Proposed grades: ${gradeWords || "none"}.</p>`;
+}
+
+function urgent(edition: Edition): Html {
+  const flags = byUrgency(edition);
+  const refused = edition.refused.length;
+  const lost =
+    refused === 0
+      ? ""
+      : html`<p><a href="refused.html">${counted(refused, "refused entry").replace("entrys", "entries")}</a>, each with the way to mend it.</p>`;
+  if (flags.length === 0) return html`<p>No flag needs a decision.</p>${lost}`;
+  const rest = flags.length - FLAGS_SHOWN;
+  return html`<ol class="todo">${flags.slice(0, FLAGS_SHOWN).map((flag) => flagItem(edition, flag))}</ol>
+${rest > 0 ? html`<p><a href="flags.html">${rest} more flags that need a person</a>.</p>` : ""}${lost}`;
+}
+
+/** Temperatures of a range as a bar between -20 °C and 120 °C; the words beside it say the same. */
+function rangeBar(lowK: number, highK: number): Html {
+  const [from, to] = BAR;
+  const at = (kelvin: number) =>
+    Math.round((90 * Math.min(Math.max(kelvin - 273.15 - from, 0), to - from)) / (to - from));
+  const [low, high] = [at(lowK), at(highK)];
+  return raw(
+    `<svg class="rangebar" viewBox="0 0 90 10" aria-hidden="true"><path class="track" d="M0,4H90V6H0Z"/><path class="reach" d="M${low},2H${Math.max(high, low + 2)}V8H${low}Z"/></svg>`,
   );
+}
+
+/** Solubility at 25 °C from the curve, g/100 g solvent; "" where no curve reaches it. */
+function atRoom(edition: Edition, system: System): string {
+  const curve = edition.fits[system.index]?.curves.find(
+    ({ temperatureRangeK: [low, high] }) => ROOM_K >= low - 1e-9 && ROOM_K <= high + 1e-9,
+  );
+  if (curve === undefined) return "";
+  const [low, high] = curve.temperatureRangeK;
+  return significant(100 * massRatioFromLn(curve.evaluate(Math.min(high, Math.max(low, ROOM_K))), system), 3);
+}
+
+function systemRow(edition: Edition, system: System, flags: readonly Flag[]): Html {
+  const { solidForm, solvent, composition, medium } = system.identity;
+  const { table } = edition;
+  let [low, high] = [Number.POSITIVE_INFINITY, Number.NEGATIVE_INFINITY];
+  const sources = new Set<number>();
+  for (const row of system.rows) {
+    low = Math.min(low, table.temperatureK[row] as number);
+    high = Math.max(high, table.temperatureK[row] as number);
+    sources.add(table.source[row] as number);
+  }
+  const models = edition.fits[system.index]?.curves.map(({ model }) => model).join(", ");
+  const blocking = flags.filter(({ severity }) => severity === "blocking").length;
+  const liquid = [solvent, composition, medium].filter((part) => part !== "").join(", ");
+  const flagged =
+    blocking === 0 ? (flags.length === 0 ? "" : counted(flags.length, "notice")) : `${blocking} to decide`;
+  return html`<tr class="system"><th scope="row"><a href="${systemFile(system)}">${short(liquid, 90)}</a></th><td>${short(solidForm, 60)}</td><td class="n">${system.rows.length}</td><td class="n">${sources.size}</td><td class="n">${low === high ? celsius(low) : `${fixed(low - 273.15, 0)} to ${fixed(high - 273.15, 0)}`}</td><td>${rangeBar(low, high)}</td><td class="n">${atRoom(edition, system)}</td><td>${models || "none"}</td><td>${edition.grades[system.index]?.grade ?? ""}</td><td>${flagged}</td></tr>`;
+}
+
+/** Systems by solute, each solute a group of rows under its name. */
+function systemTable(
+  edition: Edition,
+  ordered: readonly System[],
+  flagsOf: ReadonlyMap<number, readonly Flag[]>,
+): Html {
+  const groups: { solute: string; rows: Html[] }[] = [];
+  for (const system of ordered) {
+    const row = systemRow(edition, system, flagsOf.get(system.index) ?? []);
+    const last = groups.at(-1);
+    if (last?.solute === system.identity.solute) last.rows.push(row);
+    else groups.push({ solute: system.identity.solute, rows: [row] });
+  }
+  const bodies = groups.map(
+    ({ solute, rows }) =>
+      html`<tbody class="group"><tr><th colspan="10" scope="rowgroup">${short(solute, 120)}</th></tr>${rows}</tbody>\n`,
+  );
+  return html`<table><caption>Systems by solute. Range: lowest and highest temperature measured (bar: −20 to 120 °C). Solubility in g/100 g solvent, from the curve.</caption>
+<thead><tr><th scope="col">Solvent</th><th scope="col">Solid form</th><th scope="col" class="n">Measured</th><th scope="col" class="n">Sources</th><th scope="col" class="n">Range, °C</th><td></td><th scope="col" class="n">At 25 °C</th><th scope="col">Curve</th><th scope="col">Proposed grade</th><th scope="col">Flags</th></tr></thead>${bodies}</table>`;
+}
+
+/** The first page: the account, what needs a person first, then every system by solute. `ordered`: by solute. */
+export function overviewPage(
+  edition: Edition,
+  ordered: readonly System[],
+  flagsOf: ReadonlyMap<number, readonly Flag[]>,
+): string {
+  const { title, steward } = edition.collection;
+  return page(edition, {
+    title,
+    name: "index.html",
+    script: OVERVIEW_SCRIPT,
+    body: html`<h1>${short(title, 240)}</h1>
+${steward === "" ? "" : html`<p class="soft">Looked after by ${short(steward, 160)}.</p>`}
+${accountOf(edition)}
+<h2>What needs a person first</h2>
+${urgent(edition)}
+<h2 id="systems">Systems</h2>
+<div class="search" id="search" hidden><label for="filter">Show systems with</label><input id="filter" type="search" autocomplete="off" spellcheck="false" aria-describedby="told"><span id="told" role="status"></span></div>
+${ordered.length === 0 ? html`<p>None: no reading became a measurement.</p>` : wideTable("Systems by solute", systemTable(edition, ordered, flagsOf))}`,
+  });
 }

@@ -64,7 +64,7 @@ export function pointLayer(view: SystemView, frame: Frame, place: (point: DrawnP
       beyond++;
       return html`<g class="${kind} beyond" transform="translate(${px(x)},${frame.top + 9})">${raw(name)}${pointMark(point.source, point.state, point.flagged, small)}<path class="arrow" d="M-5,-4L0,-9L5,-4"/></g>`;
     }
-    spots.push({ source: point.source, x, y });
+    spots.push({ source: point.source, x, y, usual: point.state === "kept" });
     return html`<g class="${kind}" transform="translate(${px(x)},${px(y)})">${raw(name)}${pointMark(point.source, point.state, point.flagged, small)}</g>`;
   });
   const labels = directLabels(spots, { left: LEFT, right: RIGHT, top: frame.top, bottom: frame.bottom });

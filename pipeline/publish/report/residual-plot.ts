@@ -1,5 +1,5 @@
 import { scaleLinear } from "d3-scale";
-import { percentOff, sourceLetter } from "./figures.ts";
+import { median, percentOff, sourceLetter } from "./figures.ts";
 import { bottomAxis, drawing, frameOf, LEFT, RIGHT } from "./frame.ts";
 import { type Html, html, raw } from "./html.ts";
 import { pointClass, pointMark, px } from "./marks.ts";
@@ -7,9 +7,11 @@ import { celsiusDomain } from "./plots.ts";
 import type { DrawnPoint, SystemView } from "./system-view.ts";
 
 /** Height of the lane of one source, and most lanes drawn. */
-const LANE = 46;
+const LANE = 60;
 const MOST_LANES = 12;
 const TOP = 10;
+/** Room kept at the edges of a lane for points beyond it. */
+const EDGE = 14;
 /** Least half-height of a lane, percent. */
 const LEAST_PERCENT = 5;
 
@@ -39,11 +41,15 @@ export function residualPlot(view: SystemView): Html {
   const frame = frameOf(celsiusDomain(view), [0, 1], TOP, bottom);
   const parts = shown.map((source, lane) => {
     const middle = TOP + LANE * (lane + 0.5);
-    const y = scaleLinear([-percent, percent], [middle + LANE / 2 - 6, middle - LANE / 2 + 6]);
-    const marks = drawn
-      .filter((point) => point.source === source)
-      .map((point) => residualMark(point, px(frame.x(point.temperatureK - 273.15)), y, percent, middle));
-    return html`<path class="zero" d="M${LEFT},${middle}H${RIGHT}"/><path class="grid" d="M${LEFT},${middle + LANE / 2}H${RIGHT}"/><text class="letter s${source % 6}" x="14" y="${middle + 5}">${sourceLetter(source)}</text><text class="tick ly" x="${LEFT - 7}" y="${middle - LANE / 2 + 12}">+${percent}</text><text class="tick ly" x="${LEFT - 7}" y="${middle + LANE / 2 - 3}">−${percent}</text>${marks}`;
+    const y = scaleLinear([-percent, percent], [middle + LANE / 2 - EDGE, middle - LANE / 2 + EDGE]);
+    const own = drawn.filter((point) => point.source === source);
+    const scale =
+      lane > 0
+        ? ""
+        : html`<text class="tick ly" x="${LEFT - 7}" y="${px(y(percent)) + 4}">+${percent}</text><text class="tick ly" x="${LEFT - 7}" y="${px(y(-percent)) + 4}">−${percent}</text>`;
+    const middleValue = percentOff(median(own.map(({ deviationPercent }) => deviationPercent)));
+    const marks = own.map((point) => residualMark(point, px(frame.x(point.temperatureK - 273.15)), y, percent, middle));
+    return html`<path class="zero" d="M${LEFT},${middle}H${RIGHT}"/><path class="grid" d="M${LEFT},${middle + LANE / 2}H${RIGHT}"/><text class="letter s${source % 6}" x="18" y="${middle}">${sourceLetter(source)}</text><text class="fine" x="18" y="${middle + 16}">${middleValue}</text>${scale}${marks}`;
   });
   const about = `One lane for each of ${shown.length} sources; the middle line is no deviation, the edges are plus and minus ${percent} percent.`;
   return drawing("plot-residuals", bottom + 48, "Deviations by source, percent, against temperature", about, [
@@ -67,6 +73,6 @@ function residualMark(
     const at = px(y(value));
     return html`<g class="${kind}">${raw(name)}<path class="stem" d="M${x},${middle}V${at}"/><g transform="translate(${x},${at})">${pointMark(source, state, flagged, true)}</g></g>`;
   }
-  const [edge, tip] = value > 0 ? [px(y(percent)), -7] : [px(y(-percent)), 7];
-  return html`<g class="${kind} beyond">${raw(name)}<path class="stem" d="M${x},${middle}V${edge}"/><path class="arrow" d="M${x - 4},${edge + tip / 2}L${x},${edge + tip}L${x + 4},${edge + tip / 2}"/><g transform="translate(${x},${edge})">${pointMark(source, state, flagged, true)}</g></g>`;
+  const [edge, tip] = value > 0 ? [px(y(percent)), -12] : [px(y(-percent)), 12];
+  return html`<g class="${kind} beyond">${raw(name)}<path class="stem" d="M${x},${middle}V${edge}"/><path class="arrow" d="M${x - 4},${edge + tip * 0.67}L${x},${edge + tip}L${x + 4},${edge + tip * 0.67}"/><g transform="translate(${x},${edge})">${pointMark(source, state, flagged, true)}</g></g>`;
 }

@@ -44,19 +44,23 @@ footer p{max-width:100ch}
 const TABLES = `
 table{border-collapse:collapse;font:.82rem/1.4 system-ui,"Segoe UI","DejaVu Sans",sans-serif;font-variant-numeric:tabular-nums}
 caption{text-align:left;padding:0 0 .35rem;font:italic .95rem/1.4 Georgia,"DejaVu Serif",serif;max-width:74ch}
-th,td{padding:.22rem .8rem .22rem 0;text-align:left;vertical-align:top;border-bottom:1px solid var(--hair);max-width:26rem;overflow-wrap:anywhere}
-thead th{border-bottom:1px solid var(--soft);vertical-align:bottom;font-weight:600}
+th,td{padding:.22rem .8rem .22rem 0;text-align:left;vertical-align:top;border-bottom:1px solid var(--hair);max-width:26rem;overflow-wrap:break-word}
+.measurements{font-size:.78rem}.measurements th,.measurements td{padding-right:.6rem}
+.measurements tbody th[scope=rowgroup]{padding-top:.7rem;max-width:60rem}
+.w{min-width:12rem;overflow-wrap:anywhere}
+thead th,thead td{border-bottom:1px solid var(--soft);vertical-align:bottom;font-weight:600}
 tbody th{font-weight:400}
 tbody.group th[scope=rowgroup]{font:600 1rem/1.4 "Iowan Old Style","Palatino Linotype",Palatino,Georgia,"DejaVu Serif",serif;padding-top:.9rem;max-width:60rem}
 .n{text-align:right;white-space:nowrap}
+thead .n{white-space:normal}
 .t{white-space:nowrap}
 .wide{overflow-x:auto;max-width:100%;margin:.5rem 0}
 .rangebar{display:block;width:90px;height:10px}
 .rangebar .track{fill:var(--hair)}.rangebar .reach{fill:var(--s0)}
 .tally{display:flex;flex-wrap:wrap;gap:.2rem 2.2rem;list-style:none;padding:0;margin:.6rem 0}
 .tally b{font-size:1.5rem;font-weight:600;margin-right:.35rem}
-.todo{padding-left:0;list-style:none;counter-reset:todo}
-.todo>li,.flag{border-left:3px solid var(--mark);padding:.1rem 0 .1rem .9rem;margin:.7rem 0;max-width:90ch}
+.todo{padding-left:0;list-style:none;display:grid;gap:.8rem 2rem;grid-template-columns:repeat(auto-fit,minmax(min(100%,30rem),1fr));margin:.6rem 0;align-items:start}
+.todo>li,.flag{border-left:3px solid var(--mark);padding:0 0 .1rem .9rem;max-width:90ch;min-width:0}.flag{margin:.8rem 0}.todo>li{font-size:.93rem;line-height:1.42}
 .flag.notice{border-left:3px double var(--rule)}
 .todo p,.flag p{margin:.1rem 0;max-width:90ch}
 .cols{display:grid;gap:0 2.5rem;grid-template-columns:repeat(auto-fit,minmax(min(100%,24rem),1fr))}
@@ -74,17 +78,17 @@ figure{margin:0;min-width:0}
 figcaption{font-size:.9rem;line-height:1.4}
 .plot{display:block;width:100%;height:auto}
 svg text{fill:var(--ink);font:13px system-ui,"Segoe UI","DejaVu Sans",sans-serif}
-svg .tick{fill:var(--soft)}svg .bx,svg .tx,svg .label{text-anchor:middle}svg .ly{text-anchor:end}
+svg .tick{fill:var(--soft)}svg .fine{font-size:11px;fill:var(--soft);text-anchor:middle}svg .bx,svg .tx,svg .label{text-anchor:middle}svg .ly{text-anchor:end}
 svg .letter{font-weight:700;font-size:14px;text-anchor:middle;paint-order:stroke;stroke:var(--paper);stroke-width:3px}
 svg .axis{fill:none;stroke:var(--soft)}svg .grid{fill:none;stroke:var(--hair)}svg .zero{stroke:var(--rule)}
 svg .curve{fill:none;stroke:var(--ink);stroke-width:1.5}
 svg .band{fill:var(--band);fill-opacity:.17}svg .new{fill:none;stroke:var(--ink);stroke-width:1;stroke-dasharray:5 4;stroke-opacity:.75}
-svg .pt,svg .rs,svg .key g{stroke-width:1.4;stroke:currentColor;fill:var(--paper)}
+svg .pt,svg .rs,.key g{stroke-width:1.4;stroke:currentColor;fill:var(--paper)}
 svg .kept{fill:currentColor}
 svg .notfitted{stroke-dasharray:2 1.6}
 svg .interval{fill:none;stroke-width:1.8}
 svg .over{fill:none;stroke:currentColor;stroke-width:1.6}
-svg .ring{fill:none;stroke:var(--mark);stroke-width:1.8;stroke-dasharray:none}
+svg .ring{fill:none;stroke:var(--mark);stroke-width:1.5;stroke-dasharray:none}
 svg .hole{fill:var(--paper);stroke:none}
 svg .stem{fill:none;stroke-width:1}svg .arrow{fill:none}
 svg .s0{color:var(--s0)}svg .s1{color:var(--s1)}svg .s2{color:var(--s2)}svg .s3{color:var(--s3)}svg .s4{color:var(--s4)}svg .s5{color:var(--s5)}
@@ -98,7 +102,7 @@ svg text.s0{fill:var(--s0)}svg text.s1{fill:var(--s1)}svg text.s2{fill:var(--s2)
 
 const NARROW = `
 @media (max-width:40rem){body{font-size:16px}main,.head,footer{padding:0 .9rem}.head{padding-top:.6rem;padding-bottom:.4rem}h1{font-size:1.4rem}
-svg text{font-size:17px}svg .letter{font-size:18px}dl.facts{grid-template-columns:1fr}dl.facts dd{margin:0 0 .3rem .8rem}.eq{margin-left:0}}
+svg text{font-size:17px}svg .letter{font-size:18px}svg .fine{font-size:14px}dl.facts{grid-template-columns:1fr}dl.facts dd{margin:0 0 .3rem .8rem}.eq{margin-left:0}}
 `;
 
 const PRINT = `
@@ -106,7 +110,7 @@ const PRINT = `
 @media print{:root{--paper:#fff;--panel:#fff;--ink:#000;--soft:#444;--rule:#999;--hair:#ccc;--link:#000;--mark:#6d1546;--band:#1b4f72;--s0:#1b4f72;--s1:#8a4414;--s2:#5b3a8c;--s3:#0f6b6b;--s4:#6b5200;--s5:#4d5561}
 body{font-size:10pt}nav,.skip,.search,.pager{display:none}main,.head,footer{max-width:none;padding-left:0;padding-right:0}
 h1{font-size:15pt}h2{font-size:12pt;margin-top:1.2rem;break-after:avoid}h3{break-after:avoid}
-.wide{overflow:visible}table{font-size:7pt;width:100%}caption{font-size:9pt;break-after:avoid}th,td{padding-right:.35rem}.wide .t{white-space:normal}
+.wide{overflow:visible}table{font-size:7pt;width:100%}caption{font-size:9pt;break-after:avoid}th,td{padding-right:.35rem}.measurements{font-size:6.4pt}.measurements th,.measurements td{padding-right:.3rem}.w{min-width:0}
 thead{display:table-header-group}tr,.flag,.todo>li,figure{break-inside:avoid}
 .plots{grid-template-columns:1fr 1fr;gap:.5rem 1rem}.cols{grid-template-columns:1fr 1fr}
 a{text-decoration:none}footer{font-size:8pt}}

@@ -1,129 +1,103 @@
-import { type Edition, flagId, measurementId, type SourceAccount, statusOf } from "../../records/edition.ts";
-import type { Curve, Flag } from "../../records/fits.ts";
-import { textOf } from "../../records/measurements.ts";
+import type { GridRow } from "../../records/generated/grid.ts";
+import type { PlanningCoolingRow } from "../../records/generated/planning-cooling.ts";
 import type { System } from "../../records/systems.ts";
-import { celsius, significant } from "./figures.ts";
-import { type Html, html } from "./html.ts";
+import { curveSection } from "./curve-section.ts";
+import { counted, fixed } from "./figures.ts";
+import { flagSection, flagWords } from "./flag-section.ts";
+import { type Html, html, short } from "./html.ts";
+import { legend } from "./legend.ts";
+import { measurementSection } from "./measurement-section.ts";
 import { page } from "./page.ts";
-import { type Plot, type PlotCurve, plotSvg } from "./plot.ts";
+import { planningSection } from "./planning-section.ts";
+import { type PlotPicture, solubilityPlot, vantHoffPlot } from "./plots.ts";
+import { residualPlot } from "./residual-plot.ts";
+import { type SystemView, titleOf } from "./system-view.ts";
+import { rowBudgets, uncertaintySection } from "./uncertainty-section.ts";
 
-/** Points at which a curve is drawn. */
-const STEPS = 60;
+/** Longest name of a solute, form or solvent in running text. */
+const NAME = 160;
 
-/** A curve as drawn: ln value against 1000/T with the 95 % limits of the curve and of a new measurement. */
-function drawnCurve(curve: Curve): PlotCurve {
-  const [low, high] = curve.temperatureRangeK;
-  const temperatures = Array.from({ length: STEPS + 1 }, (_, i) => low + ((high - low) * i) / STEPS);
-  const y = temperatures.map((t) => curve.evaluate(t));
-  const limits = temperatures.map((t) => curve.limits(t));
-  const shifted = (by: (i: number) => number) => y.map((value, i) => value + by(i));
-  return {
-    x: temperatures.map((t) => 1000 / t),
-    y,
-    low: shifted((i) => -(limits[i]?.curve ?? 0)),
-    high: shifted((i) => limits[i]?.curve ?? 0),
-    outerLow: shifted((i) => -(limits[i]?.newMeasurement ?? 0)),
-    outerHigh: shifted((i) => limits[i]?.newMeasurement ?? 0),
-  };
+/** Systems beside this one: the neighbours in the overview's order, and the other solid forms of its family. */
+export interface Neighbours {
+  readonly previous: System | undefined;
+  readonly next: System | undefined;
+  readonly family: readonly System[];
 }
 
-/** Positions of the sources that measured a system, ascending. */
-function sourcesOf(edition: Edition, system: System): number[] {
-  return [...new Set(Array.from(system.rows, (row) => edition.table.source[row] as number))].sort((a, b) => a - b);
+/** What the tables say of a system: its rows of `grid.csv` and of the planning tables. */
+export interface SystemTables {
+  readonly grid: readonly GridRow[];
+  readonly cooling: readonly PlanningCoolingRow[];
 }
 
-/** Rows with a flag of their own or in a flagged block. */
-function offRows(edition: Edition, system: System, flags: readonly Flag[]): Set<number> {
-  const off = new Set<number>();
-  for (const flag of flags) {
-    if (flag.severity !== "blocking") continue;
-    if (flag.scope === "measurement" && flag.row !== undefined) off.add(flag.row);
-    if (flag.scope === "block") {
-      for (const row of system.rows) if (edition.table.source[row] === flag.source) off.add(row);
-    }
-  }
-  return off;
+/** A link to the page of a system, from the page of another. */
+const systemLink = (system: System, text: Html): Html => html`<a href="${system.id}.html">${text}</a>`;
+
+function facts({ system, grade }: SystemView, { family }: Neighbours): Html {
+  const { identity } = system;
+  const mass = (value: number) => (Number.isNaN(value) ? "unknown" : `${fixed(value, 3)} g/mol`);
+  const others = family.filter(({ index }) => index !== system.index);
+  const forms = others
+    .slice(0, 20)
+    .map((other, i) => html`${i > 0 ? "; " : ""}${systemLink(other, short(other.identity.solidForm, 80))}`);
+  return html`<dl class="facts">
+<dt>Solid form</dt><dd>${short(identity.solidForm, NAME)}${others.length > 0 ? html` (of this family also: ${forms}${others.length > 20 ? ` and ${others.length - 20} more` : ""})` : ""}</dd>
+${identity.composition === "" ? "" : html`<dt>Composition</dt><dd>${short(identity.composition, NAME)} (mass fractions)</dd>`}
+${identity.medium === "" ? "" : html`<dt>Medium</dt><dd>${short(identity.medium, NAME)}</dd>`}
+<dt>Molar masses</dt><dd>solute ${mass(identity.soluteMolarMass)}, solvent ${mass(identity.solventMolarMass)}</dd>
+<dt>Proposed grade</dt><dd><b>${grade?.grade ?? "none"}</b>: ${grade?.reasons.join("; ") ?? ""}</dd></dl>`;
 }
 
-/** ln value against 1000/T: a straight line here is a van 't Hoff line. */
-function vantHoffPlot(edition: Edition, system: System, flags: readonly Flag[]): Plot {
-  const fit = edition.fits[system.index];
-  const sources = sourcesOf(edition, system);
-  const points = fit?.robust.points;
-  const off = offRows(edition, system, flags);
-  const what = system.fitBasis === "ln x" ? "mole fraction x" : "mass ratio r";
-  return {
-    title: `ln of ${what} against 1000/T for ${system.identity.solute} in ${system.identity.solvent}`,
-    xLabel: "1000 K / T  (warm on the left)",
-    yLabel: system.fitBasis,
-    sources: sources.map((source) => edition.sources[source]?.name ?? ""),
-    curves:
-      fit?.curves.filter((curve) => curve.temperatureRangeK[0] < curve.temperatureRangeK[1]).map(drawnCurve) ?? [],
-    points: Array.from({ length: points?.n ?? 0 }, (_, i) => {
-      const row = points?.row[i] as number;
-      return {
-        x: 1000 / (points?.temperatureK[i] as number),
-        y: points?.lnValue[i] as number,
-        source: sources.indexOf(points?.source[i] as number),
-        off: off.has(row),
-        label: `${measurementId(edition, row)}, ${celsius(points?.temperatureK[i] as number)} °C`,
-      };
-    }),
-  };
+/** One sentence that leads to the flags, where a person is needed. */
+function summons({ flags }: SystemView): Html {
+  const blocking = flags.filter(({ severity }) => severity === "blocking");
+  if (blocking.length === 0) return html``;
+  const words = [...new Set(blocking.map((flag) => flagWords(flag).toLowerCase()))].join(", ");
+  return html`<p class="lead"><span class="need">Needs a person:</span> <a href="#flags">${counted(blocking.length, "flag")}</a> (${words}).</p>`;
 }
 
-/** The equation of a curve with its coefficients. */
-function curveLines(curve: Curve): Html {
-  const symbol = curve.fitBasis === "ln x" ? "x" : "r";
-  const [low, high] = curve.temperatureRangeK;
-  const coefficients = curve.coefficients.map(
-    (c) => html`<li>${c.name} = ${significant(c.value, 8)} ± ${significant(c.standardUncertainty, 2)}</li>`,
-  );
-  const enthalpy = curve.dissolutionEnthalpy;
-  return html`<h3>${curve.model}, ${celsius(low)} to ${celsius(high)} °C</h3>
-<ul>${coefficients}</ul>
-<p>ln ${symbol} from ${curve.n} points of ${curve.nSources} source${curve.nSources === 1 ? "" : "s"}; root mean square deviation of ln ${symbol} ${significant(curve.rmsd, 3)}, average relative deviation ${significant(curve.ardPercent, 3)} %. The 95 % limits hold a between-source standard deviation of ${significant(100 * curve.betweenSd, 2)} % (${curve.betweenDegreesOfFreedom > 0 ? `${significant(curve.betweenDegreesOfFreedom, 2)} degrees of freedom` : "a default: too few sources to estimate it"}).</p>
-${enthalpy ? html`<p>Apparent dissolution enthalpy at ${celsius(enthalpy.temperatureK)} °C: ${significant(enthalpy.value / 1000, 3)} kJ/mol, 95 % limits ${significant(enthalpy.low / 1000, 3)} to ${significant(enthalpy.high / 1000, 3)}.</p>` : ""}
-${curve.runnersUp.length > 0 ? html`<p>Also tried: ${curve.runnersUp.map((r) => `${r.model} (${r.why})`).join("; ")}.</p>` : ""}
-${curve.notices.map((notice) => html`<p>Note: ${notice}.</p>`)}`;
-}
-
-function flagBox(edition: Edition, flag: Flag): Html {
-  const cause =
-    flag.suspectedCause === undefined
+function figure({ svg, beyond, thinned }: PlotPicture, caption: Html): Html {
+  const far =
+    beyond === 0
       ? ""
-      : html`<p>Suspected cause: <b>${flag.suspectedCause}</b>${flag.causeDetail ? ` (${flag.causeDetail})` : ""}${flag.causeProbability === undefined ? "" : `, probability ${flag.causeProbability.toFixed(2)}`}${flag.proposedValue === undefined ? "" : `; the value would be ${significant(flag.proposedValue)}`}.</p>`;
-  return html`<div class="flag"><p><b>${flag.severity === "blocking" ? "Needs a person" : "Notice"}</b>: ${flagId(edition, flag)}</p><p>${flag.evidence}</p>${cause}<p>Look at: ${flag.lookAt}</p></div>`;
+      : ` ${counted(beyond, "point")} beyond the upper edge ${beyond === 1 ? "stands" : "stand"} on it, with an arrow.`;
+  const many = thinned === 0 ? "" : ` ${thinned} kept points are not drawn, for clarity.`;
+  return html`<figure>${svg}<figcaption>${caption}${far}${many}</figcaption></figure>`;
 }
 
-function measurementRow(edition: Edition, row: number): Html {
-  const { table, rowResults } = edition;
-  const source = edition.sources[table.source[row] as number] as SourceAccount;
-  const reported = textOf(table, table.reportedText[row] as number) || significant(table.reportedValue[row], 6);
-  return html`<tr><td>${source.file}:${table.line[row]}</td><td class="n">${celsius(table.temperatureK[row] as number)}</td><td class="n">${reported}</td><td>${textOf(table, table.reportedUnit[row] as number)}</td><td class="n">${significant(table.moleFraction[row])}</td><td class="n">${significant(100 * (table.massRatio[row] as number))}</td><td class="n">${significant(table.massConcentration[row])}</td><td class="n">${significant(100 * (table.relativeU[row] as number), 2)}</td><td class="n">${significant(rowResults.deviationPercent[row], 2)}</td><td class="n">${significant(rowResults.z[row], 2)}</td><td>${statusOf(edition, row)}</td><td>${textOf(table, table.assumptions[row] as number)}</td></tr>`;
+function pictures(view: SystemView): Html {
+  const letter = view.system.fitBasis === "ln x" ? "x" : "r";
+  return html`<div class="plots">
+${figure(vantHoffPlot(view), html`ln <var>${letter}</var> against 1000/<var>T</var>, warm on the left; a van ’t Hoff line is straight here.`)}
+${figure(solubilityPlot(view), html`Grams of unsolvated solute per 100 g of solvent against temperature.`)}
+<figure>${residualPlot(view)}<figcaption>Deviation by source, percent, from what the other points say; under each letter the median. A point beyond its lane stands at the edge, with an arrow.</figcaption></figure>
+<div>${legend(view)}</div>
+</div>`;
 }
 
-/** The page of one system: plot, curve, flags with evidence, every measurement with the file and line it came from. */
-export function systemPage(edition: Edition, system: System, flags: readonly Flag[]): string {
-  const { solute, solidForm, solvent, composition, medium } = system.identity;
-  const fit = edition.fits[system.index];
-  const grade = edition.grades[system.index];
-  const title = `${solute} in ${[solvent, composition, medium].filter((part) => part !== "").join(", ")}`;
-  return page(
+function pager({ previous, next }: Neighbours): Html {
+  const link = (system: System | undefined, word: string) =>
+    system === undefined
+      ? html`<span></span>`
+      : html`<span>${word}: ${systemLink(system, short(titleOf(system.identity), 80))}</span>`;
+  return html`<nav class="pager" aria-label="Neighbouring systems">${link(previous, "Previous")}${link(next, "Next")}</nav>`;
+}
+
+/** The page of one system: plots, flags with evidence, curve, planning figures, and every measurement with its origin. */
+export function systemPage(view: SystemView, neighbours: Neighbours, tables: SystemTables): string {
+  const title = titleOf(view.system.identity);
+  const budgets = rowBudgets(view);
+  return page(view.edition, {
     title,
-    edition.collection,
-    1,
-    html`<h1>${title}</h1>
-<p>Solid form: ${solidForm}. Proposed grade: <b>${grade?.grade}</b> (${grade?.reasons.join("; ")}).</p>
-<figure>${plotSvg(vantHoffPlot(edition, system, flags))}
-<figcaption>Points by source (shape). A crossed-out point or series lies off the curve. Line: curve; shaded: its 95 % limits; broken: 95 % limits of one new measurement from a new source.</figcaption></figure>
-<h2>Curve</h2>
-${fit?.curves.length ? fit.curves.map(curveLines) : html`<p>No curve: ${fit?.noCurve}.</p>`}
-<h2>Flags</h2>
-${flags.length === 0 ? html`<p>None.</p>` : flags.map((flag) => flagBox(edition, flag))}
-<h2>Measurements</h2>
-<div class="wide" tabindex="0" role="region" aria-label="Measurements"><table>
-<thead><tr><th>File and line</th><th class="n">°C</th><th class="n">Reported</th><th>Unit</th><th class="n">x</th><th class="n">g/100 g solvent</th><th class="n">mg/mL solution</th><th class="n">u, %</th><th class="n">Off, %</th><th class="n">z</th><th>Status</th><th>Assumptions</th></tr></thead>
-<tbody>${Array.from(system.rows, (row) => measurementRow(edition, row))}</tbody></table></div>`,
-  );
+    depth: 1,
+    body: html`<h1>${short(title, 2 * NAME)}</h1>
+${summons(view)}${facts(view, neighbours)}
+${pictures(view)}
+${flagSection(view)}
+${curveSection(view, tables.grid)}
+${planningSection(tables.cooling)}
+${measurementSection(view, budgets)}
+${uncertaintySection(view, budgets)}
+${pager(neighbours)}`,
+  });
 }

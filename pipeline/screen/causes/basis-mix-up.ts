@@ -30,6 +30,9 @@ const MISTAKEN: readonly (readonly string[])[] = [
   ["g/100 mL solvent", "g/100 mL solution", "g/100 g solvent", "g/100 g solution"],
 ];
 
+/** Share of the unit that is listed first, the likeliest one to be mistaken. */
+const FIRST_SHARE = 0.5;
+
 const byUnit: ReadonlyMap<string, readonly string[]> = new Map(
   MISTAKEN.map(([unit = "", ...others]) => [unit, others]),
 );
@@ -48,9 +51,9 @@ export const basisMixUp: Cause = {
   lookAt: "Look at what the values are per in the heading of the original table: solvent or solution, mass or volume.",
   explanations: ({ unit }) => {
     const others = byUnit.get(unit) ?? [];
-    return others.map((other) => ({
+    return others.map((other, i) => ({
       detail: `${unit} should read ${other}`,
-      weight: 1 / others.length,
+      weight: i === 0 ? FIRST_SHARE : (1 - FIRST_SHARE) / (others.length - 1),
       change: () => ({ kind: "unit", unit: other }),
     }));
   },

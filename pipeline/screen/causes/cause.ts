@@ -22,8 +22,12 @@ export interface Suspects {
   readonly reportedValue: (row: number) => number;
   /** Row of the same block before or behind a row in its file; undefined at the ends. */
   readonly neighbour: (row: number, step: 1 | -1) => number | undefined;
-  /** Other systems with the same solute and solid form in another solvent, for which this source has values too. */
-  readonly otherSolvents: readonly { readonly system: number; readonly name: string }[];
+  /** Other systems with the same solute and solid form in another solvent; whether this source has values there too. */
+  readonly otherSolvents: readonly {
+    readonly system: number;
+    readonly name: string;
+    readonly sameSource: boolean;
+  }[];
 }
 
 /** One way a cause may have worked. */

@@ -1,4 +1,5 @@
 import type { RobustFit } from "../../records/fits.ts";
+import { isPossibleTemperature } from "../possible-temperature.ts";
 import type { ScreenInput } from "../screen-input.ts";
 import { fitSources, predict, predictCurve, type Series, type SystemModel, seriesLogDensity } from "../system-model.ts";
 import type { CauseName, Explanation, Suspects } from "./cause.ts";
@@ -44,9 +45,10 @@ const STRAY_LOG_DENSITY = Math.log(0.03 / 3);
 export const IMPOSSIBLE = -1e6;
 /** At most this share of a block may be stray. */
 const STRAY_SHARE = 0.25;
+/** Scatter about its own median, in standard deviations, that a re-read block may have in its middle (0.67 expected). */
+const LEFT_OVER = 1.5;
 /** Part of the material threshold from which a point sides with the offset of its block. */
 const ALIKE_SHARE = 0.7;
-const [LOWEST_K, HIGHEST_K] = [150, 650];
 
 /**
  * All readings of a block with the log-likelihood of the whole re-read series under the prediction for a new source:
@@ -94,7 +96,15 @@ function explained(of: BlockCase, how: Explanation, between: number): number | u
   if (how.system !== undefined) fitSources(of.models[1], of.input.fits[how.system]!, (s) => s !== of.source);
   const model = of.models[how.system === undefined ? 0 : 1];
   const residuals = series.lnValue.map((y, i) => y - predictCurve(model, series.temperatureK[i]!).mean);
-  if (Math.abs(middle(residuals)) > Math.max(of.threshold, 3 * Math.sqrt(between))) return undefined;
+  const centre = middle(residuals);
+  if (Math.abs(centre) > Math.max(of.threshold, 3 * Math.sqrt(between))) return undefined;
+  // A mistake that explains the block leaves a curve of the right shape, single stray points apart.
+  const away = residuals.map((r) => Math.abs(r - centre));
+  if (away.filter((r) => r > of.threshold).length > STRAY_SHARE * of.points.length) return undefined;
+  const noise = series.noiseVariance.map((v, i) =>
+    Math.sqrt(v + predictCurve(model, series.temperatureK[i]!).variance),
+  );
+  if (middle(away) > LEFT_OVER * middle(noise)) return undefined;
   return densityOf(of, model, series, between);
 }
 
@@ -111,7 +121,7 @@ function seriesOf({ input, fit, points, suspects }: BlockCase, how: Explanation 
         : change === undefined
           ? undefined
           : input.reread(row, change);
-    if (read === undefined || !(read.temperatureK > LOWEST_K && read.temperatureK < HIGHEST_K)) {
+    if (read === undefined || !isPossibleTemperature(read.temperatureK)) {
       if (++left > 1) return undefined;
       continue;
     }
@@ -165,6 +175,7 @@ export function blockOffset(of: Omit<BlockCase, "suspects">): {
   sd: number;
   failing: number;
   alike: number;
+  deviations: readonly number[];
 } {
   const { fit, points, models, source } = of;
   const deviations: number[] = [];
@@ -183,5 +194,5 @@ export function blockOffset(of: Omit<BlockCase, "suspects">): {
   const sd = Math.sqrt(middle(variances) + (1.57 * noise) / points.length);
   const median = middle(deviations);
   const alike = deviations.filter((d) => d * median > 0 && Math.abs(d) > ALIKE_SHARE * of.threshold).length;
-  return { median, sd, failing: failing / points.length, alike: alike / points.length };
+  return { median, sd, failing: failing / points.length, alike: alike / points.length, deviations };
 }

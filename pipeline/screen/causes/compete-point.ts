@@ -1,4 +1,5 @@
 import type { RobustFit } from "../../records/fits.ts";
+import { isPossibleTemperature } from "../possible-temperature.ts";
 import type { Change } from "../reread.ts";
 import type { ScreenInput } from "../screen-input.ts";
 import { fitSources, predict, type SystemModel } from "../system-model.ts";
@@ -31,8 +32,6 @@ const NONE_WIDEST = 10;
 const NONE_WIDE_SHARE = 0.25;
 /** A re-read value must come this near, in standard deviations. */
 const NEAR_Z = 3;
-/** Temperatures a re-reading may lead to, K. */
-const [LOWEST_K, HIGHEST_K] = [150, 650];
 
 /** A point to be explained, with what is expected of it. */
 export interface PointCase {
@@ -116,7 +115,7 @@ const SAYS_VALUE: ReadonlySet<Change["kind"]> = new Set(["factor", "value", "uni
 /** Deviation of a row under a change, where it is possible and within the limits. */
 function fits({ input, fit, point, threshold }: PointCase, model: SystemModel, row: number, change: Change) {
   const reread = input.reread(row, change);
-  if (reread === undefined || !(reread.temperatureK > LOWEST_K && reread.temperatureK < HIGHEST_K)) return undefined;
+  if (reread === undefined || !isPossibleTemperature(reread.temperatureK)) return undefined;
   const expected = predict(model, reread.temperatureK, fit.points.source[point]!);
   const deviation = reread.lnValue - expected.mean;
   const variance = expected.variance + fit.noiseSd[point]! ** 2;

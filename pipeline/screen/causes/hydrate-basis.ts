@@ -16,14 +16,14 @@ const READINGS: readonly SoluteBasisReading[] = [
  */
 export const hydrateBasis: Cause = {
   name: "hydrate basis",
-  pointPrior: 0.015,
-  blockPrior: 0.15,
+  pointPrior: 0.02,
+  blockPrior: 0.2,
   lookAt:
     "Look at what was weighed in or dried out: the hydrate or the anhydrous solute, and which water it was counted with.",
   explanations: () =>
     READINGS.map((basis) => ({
       detail: basis === "anhydrous" ? "mass is that of the anhydrous solute" : `mass is ${basis}`,
-      weight: 1 / 2,
+      weight: 1 / READINGS.length,
       change: () => ({ kind: "solute basis", basis }),
     })),
 };

@@ -1,6 +1,10 @@
+import type { Change } from "../reread.ts";
 import type { Cause, Explanation, Suspects } from "./cause.ts";
 
 const STEPS = [-1, 1] as const;
+/** A shift of fewer rows than this at the end of a block is no shift of the block. */
+const LEAST_SHIFTED = 3;
+const AS_REPORTED: Change = { kind: "factor", factor: 1 };
 
 /**
  * A value stands beside the temperature of its neighbour: two rows swapped, or a cell copied from the row beside it.
@@ -44,13 +48,20 @@ function swaps({ neighbour, reportedValue, temperatureK }: Suspects): Explanatio
   });
 }
 
-function shifts({ neighbour, reportedValue }: Suspects): Explanation[] {
-  return STEPS.map((step) => ({
-    detail: `every value stands one row too ${step === -1 ? "early" : "late"}`,
-    weight: 1 / 2,
-    change: (row) => {
-      const other = neighbour(row, step);
-      return other === undefined ? undefined : { kind: "value", value: reportedValue(other) };
-    },
-  }));
+/** Every row from a certain one on holds the number of the row before it (or behind it). */
+function shifts({ rows, neighbour, reportedValue }: Suspects): Explanation[] {
+  const starts = rows.slice(0, Math.max(1, rows.length - LEAST_SHIFTED));
+  return STEPS.flatMap((step) =>
+    starts.map((start, s) => ({
+      detail: `every value${s === 0 ? "" : ` from row ${s + 1} of the block on`} stands one row too ${step === -1 ? "early" : "late"}`,
+      weight: (s === 0 ? 1 / 2 : 1 / (2 * (starts.length - 1))) / 2,
+      change: (row) => {
+        if (rows.indexOf(row) < s) return AS_REPORTED;
+        const other = neighbour(row, step);
+        return other === undefined || (row === start && s > 0 && step === -1)
+          ? undefined
+          : { kind: "value", value: reportedValue(other) };
+      },
+    })),
+  );
 }

@@ -35,8 +35,12 @@ export function createSuspectFinder(input: ScreenInput) {
     const { solute, solidForm, solvent } = input.systems[system]!.identity;
     const otherSolvents = (bySolute.get(JSON.stringify([solute, solidForm])) ?? [])
       .filter((other) => other.index !== system && other.identity.solvent !== solvent)
-      .filter((other) => fits[other.index]?.agreement === "agreed" && fits[other.index]?.points.source.includes(source))
-      .map((other) => ({ system: other.index, name: other.identity.solvent }));
+      .filter((other) => fits[other.index]?.agreement === "agreed")
+      .map((other) => ({
+        system: other.index,
+        name: other.identity.solvent,
+        sameSource: fits[other.index]?.points.source.includes(source) === true,
+      }));
     return {
       rows,
       unit: units.size === 1 ? ([...units][0] ?? "") : "",

@@ -10,13 +10,13 @@ const SCALES = ["°C", "K", "°F"] as const;
  */
 export const temperatureUnit: Cause = {
   name: "temperature unit",
-  pointPrior: 0.02,
-  blockPrior: 0.1,
+  pointPrior: 0.03,
+  blockPrior: 0.15,
   lookAt: "Look at the scale of the temperature column: °C, K or °F.",
   explanations: () =>
     SCALES.map((scale) => ({
       detail: `temperature is in ${scale}`,
-      weight: 1 / 2,
+      weight: 1 / SCALES.length,
       change: () => ({ kind: "temperature scale", scale }),
     })),
 };
