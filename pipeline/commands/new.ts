@@ -16,6 +16,23 @@ export async function newCollection(dir: string, options: CommonOptions, termina
       problem("output-not-ours", { file: dir }, { found: `${dir} exists and is not an empty folder` }),
     );
   }
+  try {
+    writeStarter(dir);
+  } catch (error) {
+    throw new OutputError(problem("output-not-writable", { file: dir }, { found: (error as Error).message }));
+  }
+  if (options.json) terminal.print(JSON.stringify({ format: 1, collection: dir }));
+  else {
+    terminal.print(`A collection with a worked example (invented data) stands in ${dir}.`);
+    terminal.print(
+      `Put your tables and their cards in ${join(dir, "sources")}, then: saltern merge ${dir} --out ${dir}-tables`,
+    );
+  }
+  return Exit.done;
+}
+
+/** Copies the worked example and the schemas, and gives the collection the folder's name. */
+function writeStarter(dir: string): void {
   mkdirSync(dir, { recursive: true });
   cpSync(starter, dir, { recursive: true });
   cpSync(schemas, join(dir, "schemas"), { recursive: true, filter: (path) => !path.endsWith(".ts") });
@@ -27,12 +44,4 @@ export async function newCollection(dir: string, options: CommonOptions, termina
     steward: "your role here",
   };
   writeFileSync(join(dir, "collection.json"), `${JSON.stringify(card, null, 2)}\n`);
-  if (options.json) terminal.print(JSON.stringify({ format: 1, collection: dir }));
-  else {
-    terminal.print(`A collection with a worked example (invented data) stands in ${dir}.`);
-    terminal.print(
-      `Put your tables and their cards in ${join(dir, "sources")}, then: saltern merge ${dir} --out ${dir}-tables`,
-    );
-  }
-  return Exit.done;
 }

@@ -23,7 +23,7 @@ export type { CurveContext, CurveSubject, ScreenedPoints } from "./system-models
  * Models are fitted by generalised least squares with a random offset per source, so that laboratories carry the weight
  * and not points; the choice follows {@link chooseModel}; the limits follow {@link curveLimits}.
  * @param screened points and kept mask; a conflict between sources gives no curve
- * @returns a curve, or the reason why there is none; never a number that is not finite
+ * @returns a curve of finite numbers (NaN only for an AICc that is not defined), or the reason why there is none
  */
 export function publishedCurve(
   screened: ScreenedPoints,

@@ -107,36 +107,48 @@ export function fitModels(
   const within = withinBySource(ws, points, context.scales.within);
   if (!setStart(ws, points, within, context.weighting)) return undefined;
   const between = betweenScale(screened, subject, context);
-  const limiting = limitModel(points);
-  setDesignColumns(ws.columns, limiting.model, ws.temperatureK, points.n, points.centreK);
-  const { model: limitingModel, lastSd } = limiting;
-  const basis = { n: points.n, nSources: points.sources.length, p: limitingModel.parameterCount, lastSd };
-  const response = context.weighting === "absolute" ? ws.response : ws.lnValue;
-  const scale = systemScale(ws, basis, response, ws.startVariance, between.sd ** 2);
+  const scale = scaleAboutLimitModel(ws, points, context.weighting, between.sd ** 2);
   const { varianceFactor, betweenVariance } = scale;
   const common: CommonFit = { points, weighting: context.weighting, within, varianceFactor, betweenVariance };
-  const fits = models.map((model) => fitLinear(ws, common, model)).filter((fit) => fit !== undefined);
-  const freeFit = limiting.lastSd === Number.POSITIVE_INFINITY;
-  const largest = freeFit
-    ? fits.find((fit) => fit.model === limiting.model)
-    : fitLinear(ws, common, limiting.model, limiting.lastSd);
-  if (fits.length === 0 || largest === undefined) return undefined;
-  const candidates = fits.map((fit) => linearCandidate(common, fit));
-  const lambdaH = lambdaHCandidate(ws, common, subject);
-  if (lambdaH !== undefined) candidates.splice(1, 0, lambdaH);
-  const richest = candidates.find(({ model }) => freeFit && model === limitingModel.name);
-  const choice = chooseModel(candidates, vetoes(points, subject, scale, richest));
-  const { degreesOfFreedom: betweenDegreesOfFreedom } = between;
+  const compared = compareModels(ws, common, subject, scale);
+  if (compared === undefined) return undefined;
   return {
     points,
     common,
     scale,
     expectedVariance: mean(ws.startVariance, points.n),
-    betweenDegreesOfFreedom,
-    largest,
-    choice,
+    betweenDegreesOfFreedom: between.degreesOfFreedom,
+    largest: compared.largest,
+    choice: compared.choice,
     breakTemperatureK: screened.breakTemperatureK ?? Number.NaN,
   };
+}
+
+/** Scales of the system from its residuals about the model that limits rest on. */
+function scaleAboutLimitModel(ws: FitWorkspace, points: KeptPoints, weighting: FitWeighting, pooledBetween: number) {
+  const { model, lastSd } = limitModel(points);
+  setDesignColumns(ws.columns, model, ws.temperatureK, points.n, points.centreK);
+  const basis = { n: points.n, nSources: points.sources.length, p: model.parameterCount, lastSd };
+  return systemScale(ws, basis, weighting === "absolute" ? ws.response : ws.lnValue, ws.startVariance, pooledBetween);
+}
+
+/** Fits of all admissible models under the common covariance, the choice among them, and the fit that limits rest on. */
+function compareModels(ws: FitWorkspace, common: CommonFit, subject: CurveSubject, scale: SystemScale) {
+  const { points } = common;
+  const { model: limiting, lastSd } = limitModel(points);
+  const free = lastSd === Number.POSITIVE_INFINITY;
+  const fits: LinearFit[] = [];
+  for (const model of admissibleModels(points)) {
+    const fit = fitLinear(ws, common, model);
+    if (fit !== undefined) fits.push(fit);
+  }
+  const largest = free ? fits.find(({ model }) => model === limiting) : fitLinear(ws, common, limiting, lastSd);
+  if (fits.length === 0 || largest === undefined) return undefined;
+  const candidates = fits.map((fit) => linearCandidate(common, fit));
+  const richest = free ? candidates.find(({ model }) => model === limiting.name) : undefined;
+  const lambdaH = lambdaHCandidate(ws, common, subject);
+  if (lambdaH !== undefined) candidates.splice(1, 0, lambdaH);
+  return { largest, choice: chooseModel(candidates, vetoes(points, subject, scale, richest)) };
 }
 
 /** The physical veto, and that of a line where the points bend and a richer model is possible. */

@@ -1,9 +1,9 @@
 import type { PooledScales, RobustFit } from "../records/fits.ts";
 import type { MeasurementTable } from "../records/measurements.ts";
+import type { InReportedUnit, Reread } from "../records/reread.ts";
 import type { Settings } from "../records/settings.ts";
 import type { System } from "../records/systems.ts";
 import { materialThreshold, type ThresholdKind, type ThresholdSettings } from "./material-threshold.ts";
-import type { InReportedUnit, Reread } from "./reread.ts";
 
 /** What screening must know of a system beyond its fit. */
 export interface ScreenedSystem {

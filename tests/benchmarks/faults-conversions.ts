@@ -3,7 +3,7 @@ import type { Needs } from "../../pipeline/bases/needs.ts";
 import { parseTemperatureUnit } from "../../pipeline/bases/temperature.ts";
 import { parseUnit } from "../../pipeline/bases/units.ts";
 import type { MeasurementTable } from "../../pipeline/records/measurements.ts";
-import type { Change, RereadRow } from "../../pipeline/screen/reread.ts";
+import type { Change, RereadRow } from "../../pipeline/records/reread.ts";
 
 /** What conversions need to know of an invented world. */
 export interface Converting {

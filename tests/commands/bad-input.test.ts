@@ -212,7 +212,7 @@ beforeAll(async () => {
   run = await saltern(["merge", collection, "--out", out]);
   summary = readJson<Summary>(out, "summary.json");
   refused = readTable(out, "refused.csv").rows;
-});
+}, 60_000);
 
 const accountOf = (source: string) => summary.sources.filter((account) => account.source === source);
 

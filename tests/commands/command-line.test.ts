@@ -201,7 +201,7 @@ describe("saltern check", () => {
     writeFiles(join(folder, "new-rows"), { "new.csv": `${table.join("\n")}\n` });
     run = await saltern(["check", file, "--collection", demo, "--like", "harbour-2026-gravimetry", "--json"]);
     result = JSON.parse(run.stdout) as CheckResult;
-  });
+  }, 60_000);
 
   test("gives a verdict on every row, and ends with 1 where a row is off or refused", () => {
     ended(run, 1);

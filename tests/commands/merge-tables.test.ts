@@ -38,7 +38,7 @@ describe.each(["demo", "handbook"])("merging datasets/%s", (collection) => {
     run = await saltern(["merge", copy, "--out", out, "--json"]);
     summary = readJson<Summary>(out, "summary.json");
     for (const name of Object.keys(SCHEMA_OF)) tables[name] = readTable(out, name);
-  });
+  }, 60_000);
 
   test("ends with 1, for some readings need a person, and prints a result that a script can read", () => {
     expect(run.code).toBe(1);

@@ -23,7 +23,7 @@ beforeAll(async () => {
   refused = readTable(out, "refused.csv").rows;
   measurements = readTable(out, "measurements.csv").rows;
   flags = new Map(readTable(out, "flags.csv").rows.map((row) => [row.flag_id as string, row]));
-});
+}, 60_000);
 
 /** Flags that need a person and concern a line of a source, its own or those of its block. */
 function blockingFlags(where: string) {

@@ -22,7 +22,7 @@ beforeAll(async () => {
   copyOf("demo", join(folder, "demo"));
   await saltern(["merge", join(folder, "demo"), "--out", out("first")], { env: { TZ: "UTC", LC_ALL: "C" } });
   reference = fingerprint(out("first"));
-});
+}, 60_000);
 
 describe("the same collection gives the same bytes", () => {
   test("when it is merged again, over the tables of the first time", async () => {

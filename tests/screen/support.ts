@@ -2,9 +2,9 @@ import { robustFits } from "../../pipeline/fit/robust-fit.ts";
 import type { Flag } from "../../pipeline/records/fits.ts";
 import { DEFAULT_SETTINGS } from "../../pipeline/records/generated/collection.ts";
 import { codeOf, createMeasurementTable } from "../../pipeline/records/measurements.ts";
+import type { Change, RereadRow } from "../../pipeline/records/reread.ts";
 import { type System, systemPoints } from "../../pipeline/records/systems.ts";
 import { materialThreshold } from "../../pipeline/screen/material-threshold.ts";
-import type { Change, RereadRow } from "../../pipeline/screen/reread.ts";
 import { screen } from "../../pipeline/screen/screen.ts";
 import type { ScreenedSystem, ScreenInput } from "../../pipeline/screen/screen-input.ts";
 

@@ -138,14 +138,16 @@ export function planCooling(curve: Curve, conditions: CoolingConditions): Coolin
   if (crystal === undefined)
     return blank("which solid crystallises at the cold end cannot be told: name the solid form");
   const [hot, cold, R] = [massRatioAt(hotK), massRatioAt(coldK), crystal.massFactor];
-  if (equilibriumRecovery(hot, cold, R) === undefined) return blank("melts in its crystal solvent");
+  // A liquor as rich as the crystal itself, 1/(R - 1), needs no solvent added: the crystal dissolves in its own.
+  if (equilibriumRecovery(hot, cold, R) === undefined || hot * (R - 1) >= 1) {
+    return blank("melts in its crystal solvent below the hot end");
+  }
 
   const loading = hot / (1 + excessSolventPercent / 100);
   const working = Math.max(0, equilibriumRecovery(loading, cold, R) ?? 0);
   const added = 1 / R / loading - (1 - 1 / R);
-  const solids = (100 * working) / (1 + Math.max(0, added));
+  const solids = (100 * working) / (1 + added);
   const cautions: string[] = [];
-  if (added <= 0) cautions.push("melts in its crystal solvent");
   if (solids > SOLIDS_MAY_NOT_STIR) cautions.push("slurry may not stir (over 35 % solids, common practice)");
   else if (solids > SOLIDS_CAUTION) cautions.push("thick slurry (over 25 % solids, common practice)");
   return {
@@ -156,7 +158,7 @@ export function planCooling(curve: Curve, conditions: CoolingConditions): Coolin
     coldMassRatio: cold,
     maxRecovery: recoveryLimits(hot, cold, R, halfWidthAt(hotK), halfWidthAt(coldK)),
     workingRecovery: 100 * working,
-    ...(added > 0 && !Number.isNaN(solventDensity20C) ? { solventMLPerG: (1000 * added) / solventDensity20C } : {}),
+    ...(!Number.isNaN(solventDensity20C) ? { solventMLPerG: (1000 * added) / solventDensity20C } : {}),
     solidsPercent: solids,
     lossPercent: 100 * (1 - working),
     ...(loading > cold ? { saturationK: saturationTemperature(massRatioAt, loading, coldK, hotK) } : {}),

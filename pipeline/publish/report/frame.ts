@@ -58,13 +58,20 @@ export function leftAxis({ y, top, bottom }: Frame, label: Html): Html {
   return html`${ticks}<path class="axis" d="M${LEFT},${top}V${bottom}"/><text class="label" transform="translate(15,${(top + bottom) / 2}) rotate(-90)">${label}</text>`;
 }
 
+/** Least room between two labels of the upper axis. */
+const LEAST_GAP = 30;
+
 /** Axis above a plot against 1000/T that tells the temperature in °C at round values. */
 export function celsiusAxisOnTop({ x, top }: Frame): Html {
   const [low = 0, high = 1] = x.domain();
   const toCelsius = (inverse: number) => 1000 / inverse - 273.15;
   const ticks = scaleLinear([toCelsius(high), toCelsius(low)], [0, 1]).ticks(6);
+  let before = Number.POSITIVE_INFINITY;
   const marks = ticks.map((t) => {
     const at = px(x(1000 / (t + 273.15)));
+    // Ticks crowd at the warm end, where 1000/T runs slowly.
+    if (before - at < LEAST_GAP) return raw("");
+    before = at;
     return html`<path class="axis" d="M${at},${top}v-5"/><text class="tick tx" x="${at}" y="${top - 10}">${String(t).replace("-", "−")}</text>`;
   });
   return html`<path class="axis" d="M${LEFT},${top}H${RIGHT}"/>${marks}<text class="label" x="${(LEFT + RIGHT) / 2}" y="${top - 28}">temperature, °C</text>`;

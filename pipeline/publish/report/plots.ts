@@ -13,7 +13,24 @@ export interface PlotPicture {
 }
 
 const inverse = (temperatureK: number): number => 1000 / temperatureK;
-const inCelsius = (temperatureK: number): number => temperatureK - 273.15;
+export const inCelsius = (temperatureK: number): number => temperatureK - 273.15;
+
+/** Least span, K, and how many spans beyond what the curve needs other points may stretch an axis of temperature. */
+const [LEAST_SPAN_K, STRETCH] = [30, 0.6];
+
+/**
+ * Range of temperatures shown, K: that of the curve and the kept points, stretched for other points that are not far
+ * away. A temperature read in the wrong unit must not press a system into a corner of its plot.
+ */
+export function temperaturesShown({ points, curves }: SystemView): readonly number[] {
+  const temperature = (point: DrawnPoint) => point.temperatureK;
+  const kept = points.filter(({ state }) => state === "kept").map(temperature);
+  const needed = [...kept, ...curves.flatMap(({ temperatureK }) => temperatureK)];
+  if (needed.length === 0) return points.map(temperature);
+  const [low, high] = [Math.min(...needed), Math.max(...needed)];
+  const room = STRETCH * Math.max(high - low, LEAST_SPAN_K);
+  return [...needed, ...points.map(temperature).filter((t) => t >= low - room && t <= high + room)];
+}
 
 /** The limits of a curve as values: `of` turns ln value into the units of the plot. */
 function curveLine(curve: DrawnCurve, across: (temperatureK: number) => number, of: (ln: number) => number): CurveLine {
@@ -42,7 +59,7 @@ export function vantHoffPlot(view: SystemView): PlotPicture {
   const { system, points } = view;
   const curves = view.curves.map((curve) => curveLine(curve, inverse, (ln) => ln));
   const frame = frameOf(
-    domainOf([...points.map((point) => inverse(point.temperatureK)), ...curves.flatMap(({ x }) => x)], 0.04),
+    domainOf(temperaturesShown(view).map(inverse), 0.04),
     domainOf(
       [...points.flatMap((p) => [p.ln, p.lnLow, p.lnHigh]), ...curves.flatMap((c) => [...c.newLow, ...c.newHigh])],
       0.15,
@@ -89,20 +106,16 @@ function upperEnd(points: readonly DrawnPoint[], curves: readonly CurveLine[]): 
   return needed > 0 && all > HEADROOM * needed ? HEADROOM * needed : Math.max(all, limits) || 1;
 }
 
-/** Range of temperatures shown in °C. */
-export function celsiusDomain(view: SystemView): [number, number] {
-  const curveEnds = view.curves.flatMap(({ temperatureK }) => temperatureK);
-  return domainOf(
-    [...view.points.map(({ temperatureK }) => temperatureK), ...curveEnds].map((t) => inCelsius(t)),
-    5,
-  );
-}
-
 /** g of unsolvated solute per 100 g of solvent against °C: the curve as it is planned with. */
 export function solubilityPlot(view: SystemView): PlotPicture {
   const { system, points } = view;
   const curves = view.curves.map((curve) => curveLine(curve, inCelsius, (ln) => percentFromLn(ln, system)));
-  const frame = frameOf(celsiusDomain(view), [0, 1.05 * upperEnd(points, curves)], 52, 352);
+  const frame = frameOf(
+    domainOf(temperaturesShown(view).map(inCelsius), 5),
+    [0, 1.05 * upperEnd(points, curves)],
+    52,
+    352,
+  );
   const layer = pointLayer(view, frame, (point) => ({
     x: inCelsius(point.temperatureK),
     y: point.percent,

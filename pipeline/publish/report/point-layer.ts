@@ -24,7 +24,7 @@ export interface Placed {
 /** Marks of the points with their tooltips, and the letters of the sources. */
 export interface PointLayer {
   readonly marks: Html;
-  /** Points beyond the upper edge, drawn on it as an arrow. */
+  /** Points beyond an edge, drawn on it with an arrow. */
   readonly beyond: number;
   /** Points that are not drawn because there are too many. */
   readonly thinned: number;
@@ -39,6 +39,25 @@ function chosenPoints(points: readonly DrawnPoint[]): readonly DrawnPoint[] {
   const step = usual.length / Math.max(1, Math.min(room, usual.length));
   const even = Array.from({ length: Math.min(room, usual.length) }, (_, i) => usual[Math.floor(i * step)]);
   return [...even.filter((point) => point !== undefined), ...special];
+}
+
+/** Room between an edge and the mark of a point that lies beyond it. */
+const INSET = 17;
+
+/** Where a point beyond the frame stands instead, and the way its arrow turns; undefined for a point inside. */
+function beyondEdge(
+  { top, bottom }: Frame,
+  x: number,
+  y: number,
+): { x: number; y: number; degrees: number } | undefined {
+  const [dx, dy] = [x < LEFT - 1 ? -1 : x > RIGHT + 1 ? 1 : 0, y < top - 1 ? -1 : y > bottom + 1 ? 1 : 0];
+  if (dx === 0 && dy === 0) return undefined;
+  const inside = (value: number, low: number, high: number) => Math.min(high, Math.max(low, value));
+  return {
+    x: dx === 0 ? x : inside(x, LEFT + INSET, RIGHT - INSET),
+    y: dy === 0 ? y : inside(y, top + INSET, bottom - INSET),
+    degrees: Math.round((Math.atan2(dx, -dy) * 180) / Math.PI),
+  };
 }
 
 /** Draws the points of a system into a frame. `place` gives the position of a point in data units. */
@@ -56,16 +75,19 @@ export function pointLayer(view: SystemView, frame: Frame, place: (point: DrawnP
       const [low, high] = [frame.y(at.low), frame.y(at.high)];
       const open = (height: number) => (Number.isFinite(height) ? height : Number.NaN);
       if (Number.isNaN(open(low)) && Number.isNaN(open(high))) return raw("");
+      if (x < LEFT || x > RIGHT) return raw("");
       return html`<g class="${kind}">${raw(name)}${intervalMark(x, open(low), open(high))}</g>`;
     }
     const y = frame.y(at.y);
     if (!Number.isFinite(x) || !Number.isFinite(y)) return raw("");
-    if (y < frame.top - 0.5) {
-      beyond++;
-      return html`<g class="${kind} beyond" transform="translate(${px(x)},${frame.top + 9})">${raw(name)}${pointMark(point.source, point.state, point.flagged, small)}<path class="arrow" d="M-5,-4L0,-9L5,-4"/></g>`;
+    const mark = pointMark(point.source, point.state, point.flagged, small);
+    const edge = beyondEdge(frame, x, y);
+    if (edge === undefined) {
+      spots.push({ source: point.source, x, y, usual: point.state === "kept" });
+      return html`<g class="${kind}" transform="translate(${px(x)},${px(y)})">${raw(name)}${mark}</g>`;
     }
-    spots.push({ source: point.source, x, y, usual: point.state === "kept" });
-    return html`<g class="${kind}" transform="translate(${px(x)},${px(y)})">${raw(name)}${pointMark(point.source, point.state, point.flagged, small)}</g>`;
+    beyond++;
+    return html`<g class="${kind} beyond" transform="translate(${px(edge.x)},${px(edge.y)})">${raw(name)}${mark}<path class="arrow" transform="rotate(${edge.degrees})" d="M-4,-11L0,-16L4,-11"/></g>`;
   });
   const labels = directLabels(spots, { left: LEFT, right: RIGHT, top: frame.top, bottom: frame.bottom });
   return { marks: html`${marks}${labels}`, beyond, thinned: view.points.length - chosen.length };

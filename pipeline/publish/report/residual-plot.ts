@@ -1,9 +1,9 @@
 import { scaleLinear } from "d3-scale";
 import { median, percentOff, sourceLetter } from "./figures.ts";
-import { bottomAxis, drawing, frameOf, LEFT, RIGHT } from "./frame.ts";
+import { bottomAxis, domainOf, drawing, frameOf, LEFT, RIGHT } from "./frame.ts";
 import { type Html, html, raw } from "./html.ts";
 import { pointClass, pointMark, px } from "./marks.ts";
-import { celsiusDomain } from "./plots.ts";
+import { inCelsius, temperaturesShown } from "./plots.ts";
 import type { DrawnPoint, SystemView } from "./system-view.ts";
 
 /** Height of the lane of one source, and most lanes drawn. */
@@ -30,15 +30,17 @@ function reach(points: readonly DrawnPoint[]): number {
 
 /**
  * Deviation of each point from what the others say, against °C, one lane a source: an offset of a source, a trend and a
- * single slip look different here. Points beyond the lane stand at its edge as an arrow.
+ * single slip look different here. Points beyond the lane stand at its edge with an arrow. Undefined where nothing is
+ * known of any point.
  */
-export function residualPlot(view: SystemView): Html {
+export function residualPlot(view: SystemView): Html | undefined {
   const drawn = view.points.filter(({ deviationPercent }) => Number.isFinite(deviationPercent));
   const lanes = view.sources.map((_, i) => i).filter((i) => drawn.some(({ source }) => source === i));
+  if (lanes.length === 0) return undefined;
   const shown = lanes.slice(0, MOST_LANES);
   const percent = reach(drawn);
   const bottom = TOP + LANE * shown.length;
-  const frame = frameOf(celsiusDomain(view), [0, 1], TOP, bottom);
+  const frame = frameOf(domainOf(temperaturesShown(view).map(inCelsius), 5), [0, 1], TOP, bottom);
   const parts = shown.map((source, lane) => {
     const middle = TOP + LANE * (lane + 0.5);
     const y = scaleLinear([-percent, percent], [middle + LANE / 2 - EDGE, middle - LANE / 2 + EDGE]);
@@ -48,7 +50,15 @@ export function residualPlot(view: SystemView): Html {
         ? ""
         : html`<text class="tick ly" x="${LEFT - 7}" y="${px(y(percent)) + 4}">+${percent}</text><text class="tick ly" x="${LEFT - 7}" y="${px(y(-percent)) + 4}">−${percent}</text>`;
     const middleValue = percentOff(median(own.map(({ deviationPercent }) => deviationPercent)));
-    const marks = own.map((point) => residualMark(point, px(frame.x(point.temperatureK - 273.15)), y, percent, middle));
+    const marks = own.map((point) =>
+      residualMark(
+        point,
+        px(Math.min(RIGHT, Math.max(LEFT, frame.x(inCelsius(point.temperatureK))))),
+        y,
+        percent,
+        middle,
+      ),
+    );
     return html`<path class="zero" d="M${LEFT},${middle}H${RIGHT}"/><path class="grid" d="M${LEFT},${middle + LANE / 2}H${RIGHT}"/><text class="letter s${source % 6}" x="18" y="${middle}">${sourceLetter(source)}</text><text class="fine" x="18" y="${middle + 16}">${middleValue}</text>${scale}${marks}`;
   });
   const about = `One lane for each of ${shown.length} sources; the middle line is no deviation, the edges are plus and minus ${percent} percent.`;

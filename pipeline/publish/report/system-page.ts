@@ -60,17 +60,18 @@ function figure({ svg, beyond, thinned }: PlotPicture, caption: Html): Html {
   const far =
     beyond === 0
       ? ""
-      : ` ${counted(beyond, "point")} beyond the upper edge ${beyond === 1 ? "stands" : "stand"} on it, with an arrow.`;
+      : ` ${counted(beyond, "point")} beyond an edge ${beyond === 1 ? "stands" : "stand"} on it, with an arrow.`;
   const many = thinned === 0 ? "" : ` ${thinned} kept points are not drawn, for clarity.`;
   return html`<figure>${svg}<figcaption>${caption}${far}${many}</figcaption></figure>`;
 }
 
 function pictures(view: SystemView): Html {
   const letter = view.system.fitBasis === "ln x" ? "x" : "r";
+  const residuals = residualPlot(view);
   return html`<div class="plots">
 ${figure(vantHoffPlot(view), html`ln <var>${letter}</var> against 1000/<var>T</var>, warm on the left; a van ’t Hoff line is straight here.`)}
 ${figure(solubilityPlot(view), html`Grams of unsolvated solute per 100 g of solvent against temperature.`)}
-<figure>${residualPlot(view)}<figcaption>Deviation by source, percent, from what the other points say; under each letter the median. A point beyond its lane stands at the edge, with an arrow.</figcaption></figure>
+${residuals === undefined ? "" : html`<figure>${residuals}<figcaption>Deviation by source, percent, from what the other points say; under each letter the median. A point beyond its lane stands at the edge, with an arrow.</figcaption></figure>`}
 <div>${legend(view)}</div>
 </div>`;
 }

@@ -1,4 +1,4 @@
-import type { Change } from "../reread.ts";
+import type { Change } from "../../records/reread.ts";
 
 /** The causes a flag may name. */
 export type CauseName =

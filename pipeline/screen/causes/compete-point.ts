@@ -1,6 +1,6 @@
 import type { RobustFit } from "../../records/fits.ts";
+import type { Change } from "../../records/reread.ts";
 import { isPossibleTemperature } from "../possible-temperature.ts";
-import type { Change } from "../reread.ts";
 import type { ScreenInput } from "../screen-input.ts";
 import { fitSources, predict, type SystemModel } from "../system-model.ts";
 import type { CauseName, Explanation, Suspects } from "./cause.ts";

@@ -1,4 +1,4 @@
-import type { SoluteBasisReading } from "../reread.ts";
+import type { SoluteBasisReading } from "../../records/reread.ts";
 import type { Cause } from "./cause.ts";
 
 const READINGS: readonly SoluteBasisReading[] = [

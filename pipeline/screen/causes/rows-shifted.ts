@@ -1,4 +1,4 @@
-import type { Change } from "../reread.ts";
+import type { Change } from "../../records/reread.ts";
 import type { Cause, Explanation, Suspects } from "./cause.ts";
 
 const STEPS = [-1, 1] as const;
