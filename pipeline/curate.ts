@@ -1,4 +1,5 @@
 import { fitEdition } from "./fit/edition-fits.ts";
+import { idealComparison } from "./fit/ideal-comparison.ts";
 import { rowResults } from "./fit/row-results.ts";
 import { gradeEdition } from "./grade/edition-grades.ts";
 import { groupIntoSystems } from "./group/systems.ts";
@@ -11,7 +12,7 @@ import type { Problem } from "./problems/catalogue.ts";
 import type { SubstanceIndex } from "./properties/substances.ts";
 import { openAccounts } from "./read/accounts.ts";
 import type { Collection } from "./read/collection.ts";
-import type { Edition, SourceAccount } from "./records/edition.ts";
+import type { Edition, Liquor, SourceAccount } from "./records/edition.ts";
 import { settingsInForce } from "./records/settings.ts";
 import { materialThreshold } from "./screen/material-threshold.ts";
 import { screen } from "./screen/screen.ts";
@@ -116,6 +117,7 @@ export async function curate(
     notices: [...collection.notices, ...notices, ...collection.sources.flatMap((source) => source.notices)],
     grades: gradeEdition(table, systems, fits, flags, sources),
     rowResults: rowResults(fits, table.count),
+    ideals: systems.map(({ index: i }) => idealComparison(fits[i]?.curves[0], liquors[i] as Liquor)),
     liquors,
   };
   return { edition, index, register, normalised };

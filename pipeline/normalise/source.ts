@@ -108,7 +108,8 @@ export function normaliseSource(
     if (typeof basis !== "string") return basis;
     const context = bindUnit(unit, basis, liquorOf(who));
     if (!isFault(context)) known.set(key, context);
-    else if (context.code === "no-density") return { ...context, found: liquorOf(who).missingDensity() ?? context.found };
+    else if (context.code === "no-density")
+      return { ...context, found: liquorOf(who).missingDensity() ?? context.found };
     return context;
   };
 

@@ -21,6 +21,7 @@ export function systemLiquor(who: Identified, identity: Identity, model: LiquorM
   const solvates = (solute?.solidForms ?? []).filter(
     ({ kind, guest }) => (kind === "hydrate" || kind === "solvate") && guest === solvent.name,
   );
+  const polymorphs = (solute?.solidForms ?? []).filter(({ kind }) => kind === "polymorph");
   const factor = ({ molarMass }: SolidForm) => (molarMass ?? Number.NaN) / identity.soluteMolarMass;
   const transitions = unspecified ? solvates.map(({ transitionK }) => transitionK) : [form?.transitionK];
   return {
@@ -34,6 +35,9 @@ export function systemLiquor(who: Identified, identity: Identity, model: LiquorM
     solventFreezingPointK: solvent.meltingPointK ?? Number.NaN,
     formMeltingPointK: form?.meltingPointK ?? (unspecified ? (solute?.meltingPointK ?? Number.NaN) : Number.NaN),
     formFusionEnthalpy: form?.fusionEnthalpy ?? (unspecified ? (solute?.fusionEnthalpy ?? Number.NaN) : Number.NaN),
+    electrolyte: solute?.electrolyte ?? false,
+    solvated: who.solvated,
+    meltingOfSameForm: unspecified ? polymorphs.length < 2 && solvates.length === 0 : form?.meltingPointK !== undefined,
     crystalAt: (temperatureK) => {
       if (!unspecified) {
         return Number.isNaN(crystalMassFactor)

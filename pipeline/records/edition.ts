@@ -1,5 +1,5 @@
 import type { Problem } from "../problems/catalogue.ts";
-import type { Curve, Flag, PooledScales, SystemFit } from "./fits.ts";
+import type { Curve, Flag, IdealComparison, PooledScales, SystemFit } from "./fits.ts";
 import type { SourceCard } from "./generated/source-card.ts";
 import { type MeasurementTable, RowState, textOf } from "./measurements.ts";
 import type { Settings } from "./settings.ts";
@@ -81,6 +81,8 @@ export interface Edition {
   readonly notices: readonly Problem[];
   readonly grades: readonly Grade[];
   readonly rowResults: RowResults;
+  /** The first curve of each system held against the ideal solubility, or why it is not. By position of the system. */
+  readonly ideals: readonly (IdealComparison | { readonly whyNot: string })[];
   /** Properties of a system's liquor that the tables of curves and planning need. */
   readonly liquors: readonly Liquor[];
 }
@@ -97,6 +99,12 @@ export interface Liquor {
   readonly formMeltingPointK: number;
   /** Enthalpy of fusion of the form, J/mol; NaN where unknown. */
   readonly formFusionEnthalpy: number;
+  /** The solute dissociates. */
+  readonly electrolyte: boolean;
+  /** The solid holds solvent. */
+  readonly solvated: boolean;
+  /** The melting data are those of the form dissolved: named, or the only unsolvated one known. */
+  readonly meltingOfSameForm: boolean;
   /** The solid that crystallises at a temperature, with M(crystal)/M(unsolvated); undefined where it cannot be told. */
   readonly crystalAt: (temperatureK: number) => { readonly form: string; readonly massFactor: number } | undefined;
   /** Transition temperatures known for the solid in this solvent, K. */

@@ -66,6 +66,17 @@ export interface RunnerUp {
   readonly why: string;
 }
 
+/** A solubility held against the ideal one; each pair is a bracket from no heat-capacity term to the full one. */
+export interface IdealComparison {
+  readonly temperatureK: number;
+  /** Ideal mole fraction. */
+  readonly low: number;
+  readonly high: number;
+  /** Activity coefficient against the supercooled melt. */
+  readonly gammaLow: number;
+  readonly gammaHigh: number;
+}
+
 /** A fitted temperature model with what is needed to evaluate it and its limits. */
 export interface Curve {
   readonly curveId: string;

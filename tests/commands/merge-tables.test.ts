@@ -1,5 +1,5 @@
 import { createHash } from "node:crypto";
-import { readdirSync, readFileSync, statSync } from "node:fs";
+import { existsSync, readdirSync, readFileSync, statSync } from "node:fs";
 import { join } from "node:path";
 import { beforeAll, describe, expect, test } from "vitest";
 import type { CurvesFile } from "../../pipeline/records/generated/curves-json.ts";
@@ -232,19 +232,36 @@ describe.each(["demo", "handbook"])("merging datasets/%s", (collection) => {
     }
   });
 
-  test("writes a report that opens without a network: no address, no script, every link leads to a file", () => {
+  test("writes a report that opens without a network: no address, and every link leads to a file", () => {
     const pages = summary.files.map(({ path }) => path).filter((path) => path.endsWith(".html"));
     expect(pages.length).toBeGreaterThan(summary.counts.systems);
+    const targets = new Set<string>();
     for (const path of pages) {
       const text = readFileSync(join(out, path), "utf8");
       expect(text).toMatch(
         /^<!doctype html>\n<html lang="en">[\s\S]*<meta charset="utf-8">[\s\S]*<title>[^<]+<\/title>/,
       );
       const markup = text.replaceAll('xmlns="http://www.w3.org/2000/svg"', "").replace(/>[^<]*</g, "><");
-      expect([path, /https?:|<script|<link|<iframe|@import|url\(|\son\w+=/i.test(markup)]).toEqual([path, false]);
-      for (const [, target = ""] of text.matchAll(/(?:href|src)="([^"#]*)"/g)) {
-        expect(statSync(join(out, path, "..", target)).isFile(), `${path} -> ${target}`).toBe(true);
-      }
+      expect([path, markup.match(/https?:[^" ]*|<link|<iframe|<img|\son\w+=|\bsrc=/gi) ?? []]).toEqual([path, []]);
+      expect([path, text.match(/@import|url\(|\bfetch\(|XMLHttpRequest/g) ?? []]).toEqual([path, []]);
+      for (const [, target = ""] of markup.matchAll(/\shref="([^"#]*)/g)) targets.add(join(out, path, "..", target));
+    }
+    expect([...targets].filter((target) => !existsSync(target))).toEqual([]);
+  });
+
+  test("lets no page of the report run a script but the program's own, named by its checksum", () => {
+    for (const { path } of summary.files.filter(({ path }) => path.endsWith(".html"))) {
+      const text = readFileSync(join(out, path), "utf8");
+      const policy = /<meta http-equiv="Content-Security-Policy" content="([^"]*)">/.exec(text)?.[1] ?? "";
+      const scripts = [...text.matchAll(/<script\b([^>]*)>([\s\S]*?)<\/script>/gi)];
+      const hashes = scripts.map(([, , code = ""]) => `'sha256-${createHash("sha256").update(code).digest("base64")}'`);
+      expect([path, policy]).toEqual([path, expect.stringContaining("default-src 'none'")]);
+      expect([path, policy]).toEqual([path, expect.stringContaining(`script-src ${hashes[0] ?? "'none'"}`)]);
+      expect([path, scripts.length <= 1, scripts.every(([, attributes]) => attributes === "")]).toEqual([
+        path,
+        true,
+        true,
+      ]);
     }
   });
 });

@@ -41,7 +41,7 @@ function flagTarget(edition: Edition, flag: Flag): Html {
 export function causeLine({ suspectedCause, causeDetail, causeProbability, proposedValue }: Flag): Html | undefined {
   if (suspectedCause === undefined) return undefined;
   if (suspectedCause === "no simple cause") {
-    return html`<p>Suspected cause: no simple cause; every cause that was tried explains it worse than a random error.</p>`;
+    return html`<p>Suspected cause: no simple cause: none that was tried is likelier than not.</p>`;
   }
   const detail = causeDetail ? html` (${short(causeDetail, 300)})` : "";
   const probability =

@@ -17,6 +17,7 @@ function flattened(settings: object): Map<string, string> {
 /** `temperature_window_K: low` as people read it: `temperature window, K: low`. */
 function words(key: string): string {
   return key
+    .replace(/_wt_percent(?=$|:)/, ", wt %")
     .replace(/_(K|percent|log10)(?=$|:)/, (_, unit: string) => `, ${unit === "percent" ? "%" : unit}`)
     .replaceAll("_", " ")
     .replace(/(\d) (\d)/g, "$1.$2")

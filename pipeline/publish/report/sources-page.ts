@@ -33,7 +33,7 @@ function sourcePart(source: SourceAccount, within: number | undefined, systems: 
         html`${i > 0 ? "; " : ""}<a href="systems/${system.id}.html">${short(titleOf(system.identity), 90)}</a>`,
     );
   return html`<section><h3 id="${source.name}">${short(source.name, 80)}</h3>
-<dl class="facts">${fact("Title", card?.title)}${fact("Origin", card?.origin)}${fact("Reported by", card?.reported_by)}${fact("Laboratory", card?.laboratory)}${fact("Date", card?.date)}${fact("Method", card?.method)}${fact("Reference", card?.reference)}${fact("DOI", card?.doi)}${fact("Licence", card?.licence)}
+<dl class="facts">${fact("Title", card?.title)}${fact("Origin", card?.origin)}${fact("Reported by", card?.reported_by)}${fact("Laboratory", card?.laboratory)}${fact("Date", card?.date)}${fact("Method", card?.method)}${fact("Reference", card?.reference)}${card?.doi ? fact("DOI", card.doi) : ""}${fact("Licence", card?.licence)}
 ${fact("File", source.file)}${fact("SHA-256", source.sha256)}
 ${scatter === "" ? "" : fact("Scatter seen in its systems", scatter)}
 ${
@@ -65,6 +65,6 @@ export function sourcesPage(edition: Edition): string {
     body: html`<h1>Sources</h1>
 ${wideTable("Account of the sources", accountTable(edition))}
 <h2>One by one</h2>
-${parts}`,
+<div class="cols">${parts}</div>`,
   });
 }

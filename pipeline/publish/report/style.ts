@@ -63,7 +63,7 @@ thead .n{white-space:normal}
 .todo>li,.flag{border-left:3px solid var(--mark);padding:0 0 .1rem .9rem;max-width:90ch;min-width:0}.flag{margin:.8rem 0}.todo>li{font-size:.93rem;line-height:1.42}
 .flag.notice{border-left:3px double var(--rule)}
 .todo p,.flag p{margin:.1rem 0;max-width:90ch}
-.cols{display:grid;gap:0 2.5rem;grid-template-columns:repeat(auto-fit,minmax(min(100%,24rem),1fr))}
+.cols>*{min-width:0}.cols{display:grid;gap:0 2.5rem;grid-template-columns:repeat(auto-fit,minmax(min(100%,24rem),1fr))}
 .search{display:flex;flex-wrap:wrap;gap:.4rem .8rem;align-items:center;margin:.6rem 0;font:.9rem system-ui,"DejaVu Sans",sans-serif}
 .search[hidden]{display:none}
 .search input{font:inherit;padding:.35rem .6rem;border:1px solid var(--soft);background:var(--paper);color:var(--ink);width:min(100%,24rem)}

@@ -78,6 +78,17 @@ export function curveRows(edition: Edition): CurveRow[] {
   return curvesOf(edition).map((curve) => curveRow(curve, edition));
 }
 
+/** Ideal solubility of a curve, or why there is none. */
+function idealPart(
+  ideal: Edition["ideals"][number] | undefined,
+): Pick<CurveDocument, "ideal_solubility" | "no_ideal_solubility"> {
+  if (ideal === undefined) return {};
+  if ("whyNot" in ideal) return { no_ideal_solubility: ideal.whyNot };
+  const { temperatureK, low, high, gammaLow, gammaHigh } = ideal;
+  const gamma = { activity_coefficient_low: gammaLow, activity_coefficient_high: gammaHigh };
+  return { ideal_solubility: { temperature_K: temperatureK, low, high, ...gamma } };
+}
+
 /** One curve of `curves.json`, with its measurements. */
 function curveDocument(curve: Curve, edition: Edition): CurveDocument {
   const { points, kept } = edition.fits[curve.system]?.robust ?? { points: undefined, kept: undefined };
@@ -105,6 +116,7 @@ function curveDocument(curve: Curve, edition: Edition): CurveDocument {
       high: enthalpy.high / 1000,
       temperature_K: enthalpy.temperatureK,
     },
+    ...idealPart(edition.ideals[curve.system]),
     notices: [...curve.notices],
     grade_reasons: [...(edition.grades[curve.system]?.reasons ?? [])],
     measurement_ids: ids,

@@ -123,6 +123,35 @@ export interface CurveDocument {
     temperature_K: number;
   };
   /**
+   * Ideal solubility and activity coefficient of an unsolvated non-electrolyte at the middle of the range, each as a bracket from no heat-capacity term to the full one; absent where `no_ideal_solubility` says why.
+   */
+  ideal_solubility?: {
+    /**
+     * Temperature it holds at, K.
+     */
+    temperature_K: number;
+    /**
+     * Ideal mole fraction without heat-capacity term, 1.
+     */
+    low: number;
+    /**
+     * Ideal mole fraction with the full heat-capacity term, 1.
+     */
+    high: number;
+    /**
+     * Lower activity coefficient against the supercooled melt, 1.
+     */
+    activity_coefficient_low: number;
+    /**
+     * Upper activity coefficient against the supercooled melt, 1.
+     */
+    activity_coefficient_high: number;
+  };
+  /**
+   * Why no ideal solubility is given. Text, no unit.
+   */
+  no_ideal_solubility?: string;
+  /**
    * Transition at the warm end of the branch, K; absent where there is none.
    */
   transition?: {

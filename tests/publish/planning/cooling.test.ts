@@ -68,6 +68,12 @@ describe("a cooling plan is left blank, with the reason in words, where", () => 
     ["an end lies within 5 K of a transition", () => plan(5, 60, { transitionsK: [C(57)] }), /transition at 57\.0 °C/],
     ["the solid at the cold end cannot be told", () => plan(5, 60, { crystalAt: () => undefined }), /solid/],
     [
+      "the hot solution would hold less solvent than its crystals: they melt in their own on the way up",
+      () =>
+        plan(5, 60, { massRatioAt: (t) => 0.3 + (t - C(5)) / 150, crystalAt: () => ({ form: "h", massFactor: 2.7 }) }),
+      /melts in its crystal solvent/,
+    ],
+    [
       "the crystals would melt in their crystal solvent",
       () =>
         plan(5, 60, { massRatioAt: (t) => 0.6 + (t - C(5)) / 500, crystalAt: () => ({ form: "h", massFactor: 2.7 }) }),
