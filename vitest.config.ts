@@ -4,6 +4,8 @@ export default defineConfig({
   test: {
     include: ["tests/**/*.test.ts"],
     testTimeout: 30_000,
+    hookTimeout: 60_000,
+    maxWorkers: 2,
     allowOnly: false,
     passWithNoTests: false,
   },

@@ -31,6 +31,9 @@ if (stale || !process.argv.includes("--when-stale")) {
     chmodSync(fresh, 0o755);
     rmSync(join(root, "build"), { recursive: true, force: true });
     renameSync(fresh, join(root, "build"));
+  } catch {
+    // The compiler has said what is wrong; the build that stands is left alone.
+    process.exitCode = 1;
   } finally {
     rmSync(fresh, { recursive: true, force: true });
   }

@@ -32,6 +32,9 @@ function ofOneWay(unit: Unit, needs: Needs, link: Link): readonly (string | unde
     perSolventVolume && needs.solventDensityAtVolumeTemperature === undefined
       ? "volume of solvent taken at 20 °C"
       : undefined,
+    perSolutionVolume && needs.solventDensityAtVolumeTemperature === undefined
+      ? "volume of solution taken at the measuring temperature"
+      : undefined,
     perSolutionVolume && needs.solutionDensity !== undefined ? densityAssumption(needs.solutionDensity) : undefined,
     link.soluteBasis === "anhydrous" ? undefined : `solute weighed as ${link.soluteBasis}`,
   ];

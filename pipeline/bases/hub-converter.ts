@@ -1,3 +1,4 @@
+import { moleFractionEdge } from "./by-amount.ts";
 import { massConcentrationEdge } from "./by-volume.ts";
 import type { SoluteBasis } from "./hydrate.ts";
 import { type Link, linkOf } from "./link.ts";
@@ -27,6 +28,16 @@ export interface HubConverter {
    * property; first order. Pass r where it is known already to save the conversion.
    */
   readonly relativeUncertainty: (value: number, standardUncertainty: number, r?: number) => number;
+  /**
+   * What a row has to itself of the relative standard uncertainty of r [1]: the reported quantity with its relative
+   * uncertainty [1], and the density where it was measured on the very solution.
+   */
+  readonly ownUncertainty: (r: number, relativeOfQuantity: number) => number;
+  /**
+   * What the rows of a source share of the relative standard uncertainty of r, or of the mole fraction [1]: molar
+   * masses, densities and density models, the open reading of a bare volume. It does not average out over the rows.
+   */
+  readonly sharedUncertainty: (value: number, r: number, of: "mass ratio" | "mole fraction") => number;
   /** d ln r/d ln q at r: how a relative change of the basis quantity reaches r. */
   readonly valueElasticity: (r: number) => number;
   /** The properties the result rests on, for what rows of one source share. */
@@ -75,47 +86,79 @@ export function bareVolumeDifference(c: number, needs: Needs): number {
  * `crystalMolarMass`. Says what is missing instead of converting without it.
  *
  * relative u(r)^2 = (E u(q)/q)^2 + sum over named properties (S u(p)/p)^2, with E and S as in `Edge`; a bare volume adds
- * the difference of its two readings.
+ * the difference of its two readings. A property that acts on r and again on x acts on x with the sum of both.
  * @see JCGM 100:2008 (GUM), 5.1.
  */
 export function hubConverter(unit: Unit, needs: Needs, soluteBasis: SoluteBasis = "anhydrous"): HubConverterResult {
   const link = linkOf(unit.basis, soluteBasis);
   const missing = link.missing(needs);
   if (missing.length > 0) return { kind: "missing", missing };
-  const inputs = inputsOf(link);
+  const { inputs, shared, sharedOfMoleFraction, measured } = inputsOf(link);
   const { scale } = unit;
   const toHub = (value: number) => link.toHub(quantityFromValue(scale, value), needs);
+  const ownUncertainty = (r: number, relativeOfQuantity: number) => {
+    const ofValue = Math.abs(link.valueElasticity(r, needs) * relativeOfQuantity);
+    return measured === undefined ? ofValue : Math.sqrt(ofValue * ofValue + partOf(measured, r, needs));
+  };
+  const sharedUncertainty = (value: number, r: number, of: "mass ratio" | "mole fraction") => {
+    let variance = unit.bareVolume ? bareVolumeDifference(quantityFromValue(scale, value), needs) ** 2 : 0;
+    for (const input of of === "mass ratio" ? shared : sharedOfMoleFraction) variance += partOf(input, r, needs);
+    const u = Math.sqrt(variance);
+    return of === "mass ratio" ? u : u / moleFractionEdge.valueElasticity(r, needs);
+  };
   const relativeUncertainty = (value: number, standardUncertainty: number, known?: number) => {
     const r = known ?? toHub(value);
-    const ofValue = link.valueElasticity(r, needs) * relativeFromStandard(scale, value, standardUncertainty);
-    let variance = ofValue * ofValue;
-    for (const input of inputs) {
-      const u = input.relativeUncertainty(needs);
-      if (u === 0) continue;
-      const part = input.elasticity(r, needs) * u;
-      variance += part * part;
-    }
-    if (unit.bareVolume) variance += bareVolumeDifference(quantityFromValue(scale, value), needs) ** 2;
-    return Math.sqrt(variance);
+    const own = ownUncertainty(r, relativeFromStandard(scale, value, standardUncertainty));
+    const common = sharedUncertainty(value, r, "mass ratio");
+    return Math.sqrt(own * own + common * common);
   };
   const converter: HubConverter = {
     unit,
     toHub,
     fromHub: (r) => valueFromQuantity(scale, link.fromHub(r, needs)),
     relativeUncertainty,
+    ownUncertainty,
+    sharedUncertainty,
     valueElasticity: (r) => link.valueElasticity(r, needs),
     inputs,
   };
   return { kind: "converter", converter };
 }
 
-const gathered = new WeakMap<Link, readonly NamedInput[]>();
+/** Square of what one property contributes to the relative uncertainty of r. */
+function partOf(input: NamedInput, r: number, needs: Needs): number {
+  const u = input.relativeUncertainty(needs);
+  if (u === 0) return 0;
+  const part = input.elasticity(r, needs) * u;
+  return part * part;
+}
+
+/** The named inputs of a link: all, those that rows share (for r and for x), and the one that is a row's own. */
+interface LinkInputs {
+  readonly inputs: readonly NamedInput[];
+  readonly shared: readonly NamedInput[];
+  readonly sharedOfMoleFraction: readonly NamedInput[];
+  readonly measured: NamedInput | undefined;
+}
+
+const isMeasured = ({ name }: { readonly name: string }) => name === "density of the solution";
+const gathered = new WeakMap<Link, LinkInputs>();
 
 /** The named inputs of a link, gathered once: links are constant, converters are many. */
-function inputsOf(link: Link): readonly NamedInput[] {
+function inputsOf(link: Link): LinkInputs {
   const known = gathered.get(link);
   if (known !== undefined) return known;
   const inputs = gatherInputs(link.inputs);
-  gathered.set(link, inputs);
-  return inputs;
+  const onward = moleFractionEdge.inputs.map((input): Input => {
+    const { elasticity } = input;
+    return { ...input, elasticity: (r, needs) => -elasticity(r, needs) };
+  });
+  const found: LinkInputs = {
+    inputs,
+    shared: inputs.filter((input) => !isMeasured(input)),
+    sharedOfMoleFraction: gatherInputs([...link.inputs, ...onward]).filter((input) => !isMeasured(input)),
+    measured: inputs.find(isMeasured),
+  };
+  gathered.set(link, found);
+  return found;
 }

@@ -6,8 +6,11 @@
  * - a  g crystal per g solvent added:           r = a/(R + a (R - 1))
  * - e  g crystal equivalent per g total solvent: r = e/R
  *
- * CuSO4·5H2O at 20 °C: r = 0.207, a = 0.367, e = 0.324. R of a salt and its free base or acid, where nothing joins
- * the solvent, obeys the third equation alone.
+ * CuSO4·5H2O at 20 °C: r = 0.207, a = 0.367, e = 0.324.
+ *
+ * A salt (or co-crystal) and its free acid or base obey the third equation alone, for no counter-ion joins the solvent:
+ * with the free acid or base as solute and the salt as its form, "anhydrous" is the mass of the free acid or base and
+ * "hydrate equivalent per total solvent" that of the salt, R = M(salt)/M(free). There is no other way to say it.
  */
 export type SoluteBasis = "anhydrous" | "hydrate per added solvent" | "hydrate equivalent per total solvent";
 

@@ -8,10 +8,15 @@ import type { LiquorModel } from "./liquor.ts";
 /** Hazard words that a planning table repeats. */
 const MARKED = /oxidis|energetic|peroxide|explos/i;
 
-/** The solvate stable at a temperature among those of a solute in this solvent: the first whose transition lies above. */
-function stableSolvate(forms: readonly SolidForm[], temperatureK: number): SolidForm | undefined {
+/**
+ * The solvate stable at a temperature among those of a solute in this solvent: the first whose transition lies above.
+ * `undefined` where none is; "open" where several could be, none of them with a known transition.
+ */
+function stableSolvate(forms: readonly SolidForm[], temperatureK: number): SolidForm | "open" | undefined {
   const reach = (form: SolidForm) => form.transitionK ?? Number.POSITIVE_INFINITY;
-  return forms.filter((form) => reach(form) > temperatureK).sort((a, b) => reach(a) - reach(b))[0];
+  const able = forms.filter((form) => reach(form) > temperatureK).sort((a, b) => reach(a) - reach(b));
+  const [first, second] = able;
+  return first !== undefined && second !== undefined && reach(first) === reach(second) ? "open" : first;
 }
 
 /** What the writers need to know of a system's liquor, with every density evaluated inside its range only. */
@@ -45,6 +50,7 @@ export function systemLiquor(who: Identified, identity: Identity, model: LiquorM
           : { form: identity.solidForm, massFactor: crystalMassFactor };
       }
       const stable = stableSolvate(solvates, temperatureK);
+      if (stable === "open") return undefined;
       if (stable === undefined) return { form: "unspecified", massFactor: 1 };
       return Number.isNaN(factor(stable)) ? undefined : { form: stable.form, massFactor: factor(stable) };
     },

@@ -4,7 +4,7 @@ import { tmpdir } from "node:os";
 import { dirname, join } from "node:path";
 import { fileURLToPath } from "node:url";
 import { parse } from "csv-parse/sync";
-import { afterAll } from "vitest";
+import { afterAll, expect } from "vitest";
 import type { SourceCard } from "../../pipeline/records/generated/source-card.ts";
 
 export const ROOT = fileURLToPath(new URL("../../", import.meta.url));
@@ -29,6 +29,11 @@ interface Where {
 /** Runs the built command with these arguments to its end; one that hangs is stopped and has no exit code. */
 export function saltern(arguments_: readonly string[], where: Where = {}): Promise<Run> {
   return run(process.execPath, [COMMAND, ...arguments_], where);
+}
+
+/** Expects how a run ended; its messages are shown where it ended otherwise. */
+export function ended({ code, stdout, stderr }: Run, expected: number): void {
+  expect(code, `${stdout}\n${stderr}`).toBe(expected);
 }
 
 /** Runs any program to its end. */

@@ -117,23 +117,28 @@ export function planCooling(curve: Curve, conditions: CoolingConditions): Coolin
   const { massRatioAt, halfWidthAt, excessSolventPercent, solventDensity20C } = conditions;
   const blank = (blankReason: string): CoolingPlan => ({ cautions: [], blankReason });
   const [low, high] = curve.temperatureRangeK;
-  const ceiling = least(
+  const warmest = least(
     high,
     conditions.boilingPointK - BELOW_BOILING_K,
     conditions.formMeltingPointK - BELOW_MELTING_K,
   );
-  const coldK = greatest(low, conditions.freezingPointK + ABOVE_FREEZING_K, COLDEST_K);
+  const coldest = greatest(low, conditions.freezingPointK + ABOVE_FREEZING_K, COLDEST_K);
+  // An end too near a transition moves away from it, into the range.
+  const near = (end: number) => conditions.transitionsK.filter((t) => Math.abs(t - end) < NEAR_TRANSITION_K);
+  const coldK = greatest(coldest, ...near(coldest).map((t) => t + NEAR_TRANSITION_K));
+  const ceiling = least(warmest, ...near(warmest).map((t) => t - NEAR_TRANSITION_K));
   if (curve.model === "constant") return blank("measured at one temperature only");
   if (ceiling - coldK < SMALLEST_SPAN_K) {
     return blank(`usable span ${celsius(coldK)} to ${celsius(ceiling)} is below ${SMALLEST_SPAN_K} K`);
   }
   const hotK = hottest(massRatioAt, coldK, ceiling);
   if (hotK - coldK < SMALLEST_SPAN_K) return blank("solubility does not rise on heating: cooling brings nothing back");
-  const near = conditions.transitionsK.find(
-    (t) => Math.min(Math.abs(t - hotK), Math.abs(t - coldK)) < NEAR_TRANSITION_K,
-  );
-  if (near !== undefined)
-    return blank(`an end lies within ${NEAR_TRANSITION_K} K of the transition at ${celsius(near)}`);
+  const transition = near(hotK)[0];
+  if (transition !== undefined) {
+    return blank(
+      `the highest solubility lies within ${NEAR_TRANSITION_K} K of the transition at ${celsius(transition)}`,
+    );
+  }
   const crystal = conditions.crystalAt(coldK);
   if (crystal === undefined)
     return blank("which solid crystallises at the cold end cannot be told: name the solid form");

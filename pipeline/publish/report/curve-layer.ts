@@ -24,8 +24,8 @@ function overRange(curve: CurveLine, { x, y }: Frame): Html {
   const up = (values: readonly number[]) => (i: number) => px(y(values[i] as number));
   const known = (values: readonly number[]) => (i: number) => Number.isFinite(values[i]);
   const path = (values: readonly number[]) =>
-    line<number>(across, up(values)).defined(known(values)).digits(1)(index) ?? "";
-  const band = area<number>(across, up(curve.low), up(curve.high)).defined(known(curve.high)).digits(1)(index) ?? "";
+    line<number>(across, up(values)).defined(known(values)).digits(null)(index) ?? "";
+  const band = area<number>(across, up(curve.low), up(curve.high)).defined(known(curve.high)).digits(null)(index) ?? "";
   return raw(
     `<path class="band" d="${band}"/><path class="new" d="${path(curve.newLow)}"/><path class="new" d="${path(curve.newHigh)}"/><path class="curve" d="${path(curve.y)}"/>`,
   );

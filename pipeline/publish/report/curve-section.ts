@@ -10,7 +10,8 @@ const EQUATIONS: Readonly<Record<CurveModel, string>> = {
   "van 't Hoff": "ln Y = <var>A</var> + <var>B</var>/<var>T</var>",
   "modified Apelblat": "ln Y = <var>A</var> + <var>B</var>/<var>T</var> + <var>C</var> ln <var>T</var>",
   "quadratic in 1/T": "ln Y = <var>A</var> + <var>B</var>/<var>T</var> + <var>C</var>/<var>T</var><sup>2</sup>",
-  "Buchowski-Ksiazczak lambda-h": "ln[1 + λ(1 − Y)/Y] = λ<var>h</var>(1/<var>T</var> − 1/<var>T</var><sub>m</sub>)",
+  "Buchowski-Ksiazczak lambda-h":
+    "ln[1 + &lambda;(1 &minus; Y)/Y] = &lambda;<var>h</var>(1/<var>T</var> &minus; 1/<var>T</var><sub>m</sub>)",
   constant: "ln Y = <var>A</var>",
 };
 
@@ -45,7 +46,7 @@ function coefficientTable({ coefficients, fitBasis, model }: Curve): Html {
     name === "B" || name === "h" || name === "Tm" ? "K" : name === "C" && model === "quadratic in 1/T" ? "K²" : "1";
   const rows = coefficients.map(({ name, value, standardUncertainty: u }) => {
     const given = u === 0 ? "given" : significant(u, 3);
-    return html`<tr><th scope="row"><var>${name === "lambda" ? "λ" : name}</var></th><td class="n">${significant(value, DIGITS)}</td><td class="n">${given}</td><td>${unit(name)}</td></tr>`;
+    return html`<tr><th scope="row"><var>${name === "lambda" ? raw("&lambda;") : name}</var></th><td class="n">${significant(value, DIGITS)}</td><td class="n">${given}</td><td>${unit(name)}</td></tr>`;
   });
   return html`<table><caption>Coefficients of ${fitBasis}; they are correlated, their covariance is in curves.json</caption><thead><tr><th scope="col">Coefficient</th><th scope="col" class="n">Value</th><th scope="col" class="n">Standard uncertainty</th><th scope="col">Unit</th></tr></thead><tbody>${rows}</tbody></table>`;
 }

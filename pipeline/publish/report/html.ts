@@ -14,15 +14,17 @@ const ENTITIES: Readonly<Record<string, string>> = {
   ">": "&gt;",
   '"': "&quot;",
   "'": "&#39;",
+  // As an entity, so that a page without foreign names is stored in one byte a character: half the memory to move.
+  "−": "&minus;",
 };
 
 /** Printable ASCII without markup: nearly every text, passed on as it is. */
-const PLAIN = /^[ !#-%(-;=?-~°±−×·–]*$/;
+const PLAIN = /^[ !#-%(-;=?-~°±×·]*$/;
 
 /** Text with markup, control and bidirectional characters made harmless; a text over `longest` is cut and says so. */
 export function escapeText(text: string, longest = LONGEST): string {
   if (text.length <= longest && PLAIN.test(text)) return text;
-  return safeText(text, longest).replace(/[&<>"']/g, (c) => ENTITIES[c] as string);
+  return safeText(text, longest).replace(/[&<>"'−]/g, (c) => ENTITIES[c] as string);
 }
 
 /** Text from data, cut to `longest` characters with its whole length told. */
@@ -37,18 +39,21 @@ export function raw(markup: string): Html {
 
 type Part = string | number | undefined | Html | readonly Html[];
 
-const render = (part: Part): string => {
-  if (part === undefined) return "";
-  if (typeof part === "string") return escapeText(part);
-  if (typeof part === "number") return String(part);
-  return "html" in part ? part.html : part.map((piece) => piece.html).join("");
-};
+/** Adds a value to the pieces of a text, escaped unless it is markup already. */
+function add(pieces: string[], part: Part): void {
+  if (part === undefined) return;
+  if (typeof part === "string") pieces.push(escapeText(part));
+  else if (typeof part === "number") pieces.push(String(part));
+  else if ("html" in part) pieces.push(part.html);
+  else for (const piece of part) pieces.push(piece.html);
+}
 
 /** Template tag: every value is escaped unless it is {@link Html} itself. */
 export function html(strings: TemplateStringsArray, ...parts: readonly Part[]): Html {
-  let out = strings[0] ?? "";
-  parts.forEach((part, i) => {
-    out += render(part) + (strings[i + 1] ?? "");
-  });
-  return { html: out };
+  const pieces: string[] = [];
+  for (let i = 0; i < strings.length; i++) {
+    pieces.push(strings[i] as string);
+    add(pieces, parts[i]);
+  }
+  return { html: pieces.join("") };
 }

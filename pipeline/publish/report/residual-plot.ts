@@ -48,7 +48,7 @@ export function residualPlot(view: SystemView): Html | undefined {
     const scale =
       lane > 0
         ? ""
-        : html`<text class="tick ly" x="${LEFT - 7}" y="${px(y(percent)) + 4}">+${percent}</text><text class="tick ly" x="${LEFT - 7}" y="${px(y(-percent)) + 4}">−${percent}</text>`;
+        : html`<text class="tick ly" x="${LEFT - 7}" y="${px(y(percent)) + 4}">+${percent}</text><text class="tick ly" x="${LEFT - 7}" y="${px(y(-percent)) + 4}">&minus;${percent}</text>`;
     const middleValue = percentOff(median(own.map(({ deviationPercent }) => deviationPercent)));
     const marks = own.map((point) =>
       residualMark(

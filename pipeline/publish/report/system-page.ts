@@ -69,7 +69,7 @@ function pictures(view: SystemView): Html {
   const letter = view.system.fitBasis === "ln x" ? "x" : "r";
   const residuals = residualPlot(view);
   return html`<div class="plots">
-${figure(vantHoffPlot(view), html`ln <var>${letter}</var> against 1000/<var>T</var>, warm on the left; a van ’t Hoff line is straight here.`)}
+${figure(vantHoffPlot(view), html`ln <var>${letter}</var> against 1000/<var>T</var>, warm on the left; a van &rsquo;t Hoff line is straight here.`)}
 ${figure(solubilityPlot(view), html`Grams of unsolvated solute per 100 g of solvent against temperature.`)}
 ${residuals === undefined ? "" : html`<figure>${residuals}<figcaption>Deviation by source, percent, from what the other points say; under each letter the median. A point beyond its lane stands at the edge, with an arrow.</figcaption></figure>`}
 <div>${legend(view)}</div>

@@ -6,11 +6,31 @@ export type CauseName =
   | "dilution factor"
   | "basis mix-up"
   | "temperature unit"
+  | "temperature offset"
   | "hydrate basis"
+  | "salt or free base"
+  | "composition mix-up"
   | "rows shifted"
   | "digits transposed"
   | "value of another solvent"
-  | "logarithm base";
+  | "logarithm base"
+  | "calculated value copied"
+  | "everything dissolved"
+  | "loss on filtration"
+  | "solvent lost"
+  | "not at equilibrium"
+  | "cloud point for clear point"
+  | "another solid form"
+  | "wet solvent";
+
+/** A system beside the suspected one, whose value may have been taken for it. */
+export interface Neighbouring {
+  readonly system: number;
+  /** What tells it apart, in words. */
+  readonly name: string;
+  /** Whether this source has values there too. */
+  readonly sameSource: boolean;
+}
 
 /** What a cause may look at: one point, or one block whose rows stand in the order of its file. */
 export interface Suspects {
@@ -22,12 +42,16 @@ export interface Suspects {
   readonly reportedValue: (row: number) => number;
   /** Row of the same block before or behind a row in its file; undefined at the ends. */
   readonly neighbour: (row: number, step: 1 | -1) => number | undefined;
-  /** Other systems with the same solute and solid form in another solvent; whether this source has values there too. */
-  readonly otherSolvents: readonly {
-    readonly system: number;
-    readonly name: string;
-    readonly sameSource: boolean;
-  }[];
+  /** Method as stated, one for all rows; "" where they differ or none is stated. */
+  readonly method: string;
+  /** Molar mass of the unsolvated solute, g/mol; NaN where unknown. */
+  readonly soluteMolarMass: number;
+  /** Systems with the same solute and solid form in another solvent. */
+  readonly otherSolvents: readonly Neighbouring[];
+  /** Systems with the same solute and solid form in the same solvents, mixed in another proportion. */
+  readonly otherCompositions: readonly Neighbouring[];
+  /** Whether this source reports the very number of a row, in the same unit, in another system near this temperature. */
+  readonly numberStandsIn: (row: number, system: number) => boolean;
 }
 
 /** One way a cause may have worked. */
@@ -42,6 +66,8 @@ export interface Explanation {
   readonly partner?: (row: number) => { readonly row: number; readonly change: Change } | undefined;
   /** Number in the reported unit that would be right, where `change` alone does not say it. */
   readonly proposes?: (row: number) => number | undefined;
+  /** How many times likelier than by chance something exact is that goes with it for a row, such as equal numbers. */
+  readonly odds?: (row: number) => number;
   /** System whose curve the re-read value must fit, where not the row's own. */
   readonly system?: number;
 }

@@ -1,9 +1,12 @@
 import { parseUnit } from "../../bases/units.ts";
 import type { MeasurementTable } from "../../records/measurements.ts";
 import { textOf } from "../../records/measurements.ts";
-import type { System } from "../../records/systems.ts";
+import type { Identity, System } from "../../records/systems.ts";
 import type { ScreenInput } from "../screen-input.ts";
-import type { Suspects } from "./cause.ts";
+import type { Neighbouring, Suspects } from "./cause.ts";
+
+/** Two tables list the same temperatures to within this, K. */
+const SAME_TEMPERATURE_K = 1;
 
 const canonicalUnits = new Map<string, string>();
 
@@ -22,34 +25,58 @@ function canonicalUnit(text: string): string {
 export function createSuspectFinder(input: ScreenInput) {
   const bySolute = new Map<string, System[]>();
   for (const system of input.systems) {
-    const key = JSON.stringify([system.identity.solute, system.identity.solidForm]);
+    const key = keyOf(system.identity);
     const same = bySolute.get(key);
     if (same) same.push(system);
     else bySolute.set(key, [system]);
   }
   return (system: number, source: number, rows: readonly number[]): Suspects => {
-    const { table, fits } = input;
-    const block = blockRows(table, input.systems[system]!, source);
+    const { table, fits, systems } = input;
+    const own = systems[system]!;
+    const block = blockRows(table, own, source);
     const at = new Map(block.map((row, i) => [row, i]));
-    const units = new Set(rows.map((row) => canonicalUnit(textOf(table, table.reportedUnit[row]!))));
-    const { solute, solidForm, solvent } = input.systems[system]!.identity;
-    const otherSolvents = (bySolute.get(JSON.stringify([solute, solidForm])) ?? [])
-      .filter((other) => other.index !== system && other.identity.solvent !== solvent)
-      .filter((other) => fits[other.index]?.agreement === "agreed")
-      .map((other) => ({
-        system: other.index,
-        name: other.identity.solvent,
-        sameSource: fits[other.index]?.points.source.includes(source) === true,
-      }));
+    const oneOf = (column: Int32Array, spelling = (text: string) => text) => {
+      const texts = new Set(rows.map((row) => spelling(textOf(table, column[row]!))));
+      return texts.size === 1 ? ([...texts][0] ?? "") : "";
+    };
+    const siblings = (bySolute.get(keyOf(own.identity)) ?? []).filter(
+      (other) => other.index !== system && fits[other.index]?.agreement === "agreed",
+    );
+    const neighbouring = (name: (identity: Identity) => string) => (other: System) => ({
+      system: other.index,
+      name: name(other.identity),
+      sameSource: fits[other.index]?.points.source.includes(source) === true,
+    });
+    const sameSolvents = (other: System) => other.identity.solvent === own.identity.solvent;
     return {
       rows,
-      unit: units.size === 1 ? ([...units][0] ?? "") : "",
+      unit: oneOf(table.reportedUnit, canonicalUnit),
+      method: oneOf(table.method),
+      soluteMolarMass: own.identity.soluteMolarMass,
       temperatureK: (row) => table.temperatureK[row]!,
       reportedValue: (row) => table.reportedValue[row]!,
       neighbour: (row, step) => block[(at.get(row) ?? Number.NaN) + step],
-      otherSolvents,
+      otherSolvents: siblings
+        .filter((other) => !sameSolvents(other))
+        .map(neighbouring(({ solvent, composition }) => (composition === "" ? solvent : `${solvent} (${composition})`))),
+      otherCompositions: siblings
+        .filter((other) => sameSolvents(other) && other.identity.composition !== own.identity.composition)
+        .map(neighbouring(({ solvent, composition }): Neighbouring["name"] => `${solvent}, ${composition}`)),
+      numberStandsIn: (row, other) =>
+        systems[other]!.rows.some(
+          (there) =>
+            table.source[there] === source &&
+            table.reportedValue[there] === table.reportedValue[row] &&
+            table.reportedUnit[there] === table.reportedUnit[row] &&
+            Math.abs(table.temperatureK[there]! - table.temperatureK[row]!) < SAME_TEMPERATURE_K,
+        ),
     };
   };
+}
+
+/** Solute, solid form and medium: what two systems share that differ in the solvent alone. */
+function keyOf({ solute, solidForm, medium }: Identity): string {
+  return JSON.stringify([solute, solidForm, medium]);
 }
 
 /** Rows of one source within a system, in the order of its file. */
