@@ -28,6 +28,16 @@ export interface RobustOptions {
   readonly threshold?: (system: number, point: number) => number;
   /** Passes over the edition; the scales are re-estimated between them. Default 4. */
   readonly passes?: number;
+  /** What an earlier fit of the whole edition pooled: then nothing is estimated again, for fitting a few systems anew. */
+  readonly pooled?: PooledFit;
+}
+
+/** What a fit of a whole edition has pooled over its systems. */
+export interface PooledFit {
+  readonly scales: PooledScales;
+  /** Median stated uncertainty of ln value, by source. */
+  readonly typicalU: Float64Array;
+  readonly sums: ScaleSums;
 }
 
 type Threshold = (system: number, point: number) => number;
@@ -59,23 +69,26 @@ const CURVATURE_SPAN_K = 30;
  * @param points points of each system, by position of the system
  * @param perSystem what else must be known of each
  * @param nSources number of sources in the edition
- * @returns fits by position of the system, and the scales of the last pass
+ * @returns fits by position of the system, and what was pooled in the last pass
  */
 export function robustFits(
   points: readonly SystemPoints[],
   perSystem: readonly RobustSystem[],
   nSources: number,
   options: RobustOptions = {},
-): { fits: RobustFit[]; scales: PooledScales } {
+): { fits: RobustFit[]; pooled: PooledFit } {
   const defaults = { ...DEFAULTS, ...options.defaults };
   const threshold = options.threshold ?? (() => LEAVE_OUT);
   const capacity = points.reduce((most, { n }) => Math.max(most, n), 1);
   const ws = createRobustWorkspace(capacity, nSources);
-  const prepared = prepareEdition(ws, points, perSystem, nSources);
-  const sample = scaleSample(points, prepared.betweenClass, nSources);
-  let scales = startScales(prepared.typicalU, defaults);
-  let sums = createScaleSums(nSources);
-  for (let pass = 1; pass < (options.passes ?? 4); pass++) {
+  const { pooled } = options;
+  const fresh = prepareEdition(ws, points, perSystem, nSources);
+  const prepared = { ...fresh, typicalU: pooled?.typicalU ?? fresh.typicalU };
+  const sample = pooled === undefined ? scaleSample(points, prepared.betweenClass, nSources) : [];
+  let scales = pooled?.scales ?? startScales(prepared.typicalU, defaults);
+  let sums = pooled?.sums ?? createScaleSums(nSources);
+  const passes = pooled === undefined ? (options.passes ?? 4) : 1;
+  for (let pass = 1; pass < passes; pass++) {
     sums = createScaleSums(nSources);
     for (const s of sample) {
       const between = betweenOf(scales, prepared.betweenClass[s]!);
@@ -90,7 +103,7 @@ export function robustFits(
     const between = betweenOf(scales, prepared.betweenClass[s]!);
     return toFit(ws, system, s, camps, between, sums, room(prepared.first[s]!, prepared.first[s + 1]!));
   });
-  return { fits, scales };
+  return { fits, pooled: { scales, typicalU: prepared.typicalU, sums } };
 }
 
 /** Between-source standard deviation of a class of systems. */

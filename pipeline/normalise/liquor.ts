@@ -1,11 +1,17 @@
 import type { Needs, Quantity } from "../bases/needs.ts";
-import { apparentDensityFromSolid, massConcentration, type SolutionDensity } from "../bases/solution-density.ts";
+import {
+  apparentDensityFromLiquid,
+  apparentDensityFromSolid,
+  massConcentration,
+  type SolutionDensity,
+} from "../bases/solution-density.ts";
 import { liquidDensity } from "../properties/liquid-density.ts";
 import { ATOMIC_WEIGHTS_REFERENCE } from "../properties/molar-mass.ts";
 import { solutionDensityModel } from "../properties/solution-density-model.ts";
 import type { Substance } from "../properties/substances.ts";
 import type { Identified } from "../records/identified.ts";
 import type { Identity } from "../records/systems.ts";
+import { densityFromNearby, type MeasuredSolution } from "./density-nearby.ts";
 
 /** Relative uncertainty of the density of a solution of an electrolyte without coefficients (common practice). */
 const ELECTROLYTE_U = 0.04;
@@ -22,37 +28,59 @@ export interface LiquorModel {
    * of the solution (kg/m3) where given, else NaN.
    */
   readonly setConditions: (temperatureK: number, volumeTemperatureK: number, measuredDensity: number) => void;
+  /** Densities measured in this system, for the rows that have none. */
+  readonly measured: MeasuredSolution[];
+  /**
+   * Takes the density of the solution from one measured nearby in the system, at the conditions set and mass ratio r.
+   * False, and nothing changed, where the row has a measured density of its own or none is near.
+   */
+  readonly takeNearby: (massRatio: number) => boolean;
   /** Mass concentration, g/L solution, at mass ratio r under the conditions set; NaN where no density is known. */
   readonly massConcentration: (massRatio: number) => number;
   /** Which density is not known under the conditions set, in words; undefined where none is missing. */
   readonly missingDensity: () => string | undefined;
 }
 
+/** Apparent density of the dissolved solute: from the liquid where it is one at this temperature, else from the solid. */
+function apparentDensity(solute: Substance | undefined, solvent: Substance, temperatureK: number): Quantity {
+  const liquid = solute && liquidDensity(solute, temperatureK);
+  const melts = solute?.meltingPointK ?? Number.NEGATIVE_INFINITY;
+  if (liquid !== undefined && temperatureK >= melts) return apparentDensityFromLiquid(liquid);
+  return apparentDensityFromSolid(solute?.solidDensity, solvent.name === "water");
+}
+
 /** Density model of the solution at a temperature: published, else additive volumes; undefined without a solvent density. */
 function solutionDensity(
   solute: Substance | undefined,
   solvent: Substance,
-  apparent: Quantity,
   temperatureK: number,
 ): SolutionDensity | undefined {
   const published = solute && solutionDensityModel(solute, solvent, temperatureK);
+  if (published !== undefined) return published;
   const pure = liquidDensity(solvent, temperatureK);
-  if (published === undefined) {
-    if (pure === undefined) return undefined;
-    const electrolyte = (solute?.electrolyte ?? false) && solvent.name === "water";
-    return {
-      kind: "additive volumes",
-      apparentSoluteDensity: apparent,
-      solventDensity: pure,
-      ...(electrolyte ? { modelRelativeUncertainty: ELECTROLYTE_U } : {}),
-    };
-  }
-  return published;
+  if (pure === undefined) return undefined;
+  const electrolyte = (solute?.electrolyte ?? false) && solvent.name === "water";
+  return {
+    kind: "additive volumes",
+    apparentSoluteDensity: apparentDensity(solute, solvent, temperatureK),
+    solventDensity: pure,
+    ...(electrolyte ? { modelRelativeUncertainty: ELECTROLYTE_U } : {}),
+  };
 }
 
 /** Where a molar mass comes from: the formula where there is one, else what the tables or the row state. */
 function massReference(substance: Substance | undefined): string {
   return substance?.formula === undefined ? "as stated" : ATOMIC_WEIGHTS_REFERENCE;
+}
+
+/** True for a form in which the solute has a counter-ion or co-former: nothing of it joins the solvent. */
+export function isSaltForm({ form }: Identified): boolean {
+  return form?.kind === "salt" || form?.kind === "co-crystal";
+}
+
+/** Molar mass of what was weighed as crystal: the hydrate, solvate, salt or co-crystal; NaN where it is not known. */
+function crystalMass(who: Identified, soluteMolarMass: number): number {
+  return isSaltForm(who) ? (who.form?.molarMass ?? Number.NaN) : who.crystalMassFactor * soluteMolarMass;
 }
 
 /** Largest number of temperatures whose densities are kept. */
@@ -63,9 +91,9 @@ const KEPT = 4096;
  * range of a correlation.
  */
 export function liquorModel(who: Identified, identity: Identity): LiquorModel {
-  const { solute, solvent, form, crystalMassFactor } = who;
-  const apparent = apparentDensityFromSolid(solute?.solidDensity);
+  const { solute, solvent, form } = who;
   const known = new Map<number, SolutionDensity | undefined>();
+  const measured: MeasuredSolution[] = [];
   const quantity = (value: number, relative: number, reference?: string): Quantity | undefined =>
     Number.isNaN(value) ? undefined : { value, standardUncertainty: relative * value, reference };
   const solventAt20 = liquidDensity(solvent, DISPENSED_K);
@@ -76,19 +104,20 @@ export function liquorModel(who: Identified, identity: Identity): LiquorModel {
       (solute?.molarMassUncertainty ?? 0) / identity.soluteMolarMass,
       massReference(solute),
     ),
-    crystalMolarMass: quantity(crystalMassFactor * identity.soluteMolarMass, 0, form?.reference),
+    crystalMolarMass: quantity(crystalMass(who, identity.soluteMolarMass), 0, form?.reference),
     solventMolarMass: quantity(solventMass, (solvent.molarMassUncertainty ?? 0) / solventMass, massReference(solvent)),
     solventDensityAt20C: solventAt20,
   };
   let volumeAtK = Number.NaN;
   const modelAt = (temperatureK: number) => {
     if (known.has(temperatureK)) return known.get(temperatureK);
-    const model = solutionDensity(solute, solvent, apparent, temperatureK);
+    const model = solutionDensity(solute, solvent, temperatureK);
     if (known.size < KEPT) known.set(temperatureK, model);
     return model;
   };
   return {
     needs,
+    measured,
     setConditions: (temperatureK, volumeTemperatureK, measuredDensity) => {
       volumeAtK = Number.isNaN(volumeTemperatureK) ? temperatureK : volumeTemperatureK;
       needs.solventDensityAtVolumeTemperature = Number.isNaN(volumeTemperatureK)
@@ -97,6 +126,12 @@ export function liquorModel(who: Identified, identity: Identity): LiquorModel {
       needs.solutionDensity = Number.isNaN(measuredDensity)
         ? modelAt(volumeAtK)
         : { kind: "measured", density: quantity(measuredDensity, MEASURED_DENSITY_U, "measured") as Quantity };
+    },
+    takeNearby: (massRatio) => {
+      if (measured.length === 0 || needs.solutionDensity?.kind === "measured") return false;
+      const nearby = densityFromNearby(measured, volumeAtK, massRatio, modelAt);
+      if (nearby !== undefined) needs.solutionDensity = nearby;
+      return nearby !== undefined;
     },
     massConcentration: (massRatio) =>
       needs.solutionDensity === undefined ? Number.NaN : massConcentration(needs.solutionDensity, massRatio),

@@ -2,6 +2,7 @@ import type { Problem } from "../problems/catalogue.ts";
 import type { Curve, Flag, IdealComparison, PooledScales, SystemFit } from "./fits.ts";
 import type { SourceCard } from "./generated/source-card.ts";
 import { type MeasurementTable, RowState, textOf } from "./measurements.ts";
+import type { Rulings } from "./rulings.ts";
 import type { Settings } from "./settings.ts";
 import type { System } from "./systems.ts";
 
@@ -77,6 +78,8 @@ export interface Edition {
   readonly fits: readonly SystemFit[];
   readonly scales: PooledScales;
   readonly flags: readonly Flag[];
+  /** What people have decided; flags do not depend on it. */
+  readonly rulings: Rulings;
   readonly refused: readonly Problem[];
   readonly notices: readonly Problem[];
   readonly grades: readonly Grade[];
@@ -113,9 +116,16 @@ export interface Liquor {
   readonly hazards: readonly string[];
 }
 
+/** What ids are made of. */
+export interface Named {
+  readonly sources: readonly Pick<SourceAccount, "name" | "card">[];
+  readonly table: MeasurementTable;
+  readonly systems: readonly System[];
+}
+
 /** `SOURCE:LINE` of a row; `SOURCE:LINE:COLUMN` where its source has several solubility columns. */
-export function measurementId(edition: Edition, row: number): string {
-  const source = edition.sources[edition.table.source[row] as number] as SourceAccount;
+export function measurementId(edition: Omit<Named, "systems">, row: number): string {
+  const source = edition.sources[edition.table.source[row] as number] as Named["sources"][number];
   const id = `${source.name}:${edition.table.line[row]}`;
   return (source.card?.shape ?? "long") === "long"
     ? id
@@ -123,7 +133,7 @@ export function measurementId(edition: Edition, row: number): string {
 }
 
 /** `CODE@TARGET`: the target is a measurement id, `SOURCE@SYSTEM`, a system id or a source name. */
-export function flagId(edition: Edition, flag: Flag): string {
+export function flagId(edition: Named, flag: Flag): string {
   const source = flag.source === undefined ? "" : edition.sources[flag.source]?.name;
   const system = flag.system === undefined ? "" : edition.systems[flag.system]?.id;
   switch (flag.scope) {
@@ -140,8 +150,14 @@ export function flagId(edition: Edition, flag: Flag): string {
 
 /** Status of a row as the tables write it. */
 export function statusOf(edition: Edition, row: number): "kept" | "set aside" | "interval" | "not fitted" {
+  if (edition.rulings.setAside.has(row)) return "set aside";
   const state = edition.table.state[row];
   return state === RowState.interval ? "interval" : state === RowState.notFitted ? "not fitted" : "kept";
+}
+
+/** True for a flag that keeps an edition from being published: blocking, and nobody has ruled on it. By its position. */
+export function needsRuling(edition: Pick<Edition, "flags" | "rulings">, flag: number): boolean {
+  return edition.flags[flag]?.severity === "blocking" && !edition.rulings.ofFlag.has(flag);
 }
 
 /** All curves of the edition, by system, then branch. */

@@ -65,7 +65,11 @@ describe("a cooling plan is left blank, with the reason in words, where", () => 
       /one temperature/,
     ],
     ["heating does not raise the solubility", () => plan(5, 60, { massRatioAt: (t) => 30 / t }), /does not rise/],
-    ["an end lies within 5 K of a transition", () => plan(5, 60, { transitionsK: [C(57)] }), /transition at 57\.0 °C/],
+    [
+      "the solubility is highest within 5 K of a transition",
+      () => plan(5, 60, { massRatioAt: (t) => 0.3 - Math.abs(t - C(40)) / 200, transitionsK: [C(38)] }),
+      /transition at 38\.0 °C/,
+    ],
     ["the solid at the cold end cannot be told", () => plan(5, 60, { crystalAt: () => undefined }), /solid/],
     [
       "the hot solution would hold less solvent than its crystals: they melt in their own on the way up",
@@ -84,6 +88,11 @@ describe("a cooling plan is left blank, with the reason in words, where", () => 
     expect(found.blankReason).toMatch(reason);
     expect([found.maxRecovery, found.workingRecovery, found.solventMLPerG]).toEqual([undefined, undefined, undefined]);
   });
+});
+
+test("an end within 5 K of a transition moves 5 K away from it, into the range", () => {
+  expect(plan(5, 60, { transitionsK: [C(57)] })).toMatchObject({ hotK: C(52), coldK: C(5), blankReason: "" });
+  expect(plan(5, 60, { transitionsK: [C(0.1)] })).toMatchObject({ hotK: C(60), coldK: C(5.1), blankReason: "" });
 });
 
 describe("the figures of a cooling plan", () => {
