@@ -10,18 +10,15 @@ const orNothing = <T extends string>(text: T | null | undefined): T | undefined 
 const numberOrNothing = (value: number | undefined): number | undefined =>
   value === undefined || Number.isNaN(value) ? undefined : value;
 
-/** An object without its undefined members, as the row types want it. */
-type Known<T> = { [K in keyof T]: Exclude<T[K], undefined> };
-export function known<T extends object>(row: T): Known<T> {
-  const out: Partial<T> = {};
-  for (const key in row) if (row[key] !== undefined) out[key] = row[key];
-  return out as Known<T>;
-}
+/** A row whose unknown cells are present as `undefined`: written as empty cells, and left out by JSON. */
+export type Loose<Row> = {
+  readonly [Column in keyof Row]: object extends Pick<Row, Column> ? Row[Column] | undefined : Row[Column];
+};
 
 /** One row of `sources.csv`. */
-function sourceRow(source: SourceAccount, within: number | undefined): SourceRow {
+function sourceRow(source: SourceAccount, within: number | undefined): Loose<SourceRow> {
   const { card } = source;
-  return known({
+  return {
     source: source.name,
     title: orNothing(card?.title),
     origin: card?.origin,
@@ -41,32 +38,29 @@ function sourceRow(source: SourceAccount, within: number | undefined): SourceRow
     refused_whole: source.refusedWhole ? ("yes" as const) : ("no" as const),
     within_sd: source.accepted > 0 ? numberOrNothing(within) : undefined,
     columns_not_used: orNothing(source.columnsNotUsed.join(";")),
-  }) as SourceRow;
+  };
 }
 
 /** Rows of `sources.csv`, by name. */
-export function sourceRows({ sources, scales }: Edition): SourceRow[] {
+export function sourceRows({ sources, scales }: Edition): Loose<SourceRow>[] {
   return sources.map((source, i) => sourceRow(source, scales.within[i]));
 }
 
 /** Rows of `substances.csv`, by key. */
-export function substanceRows({ substances }: Edition): SubstanceRow[] {
-  return substances.map(
-    (s) =>
-      known({
-        key: s.key,
-        name: orNothing(s.name),
-        role: s.role,
-        cas: orNothing(s.cas),
-        inchikey: orNothing(s.inchikey),
-        smiles: orNothing(s.smiles),
-        formula: orNothing(s.formula),
-        molar_mass: numberOrNothing(s.molarMass),
-        melting_point_K: numberOrNothing(s.meltingPointK),
-        hazards: orNothing(s.hazards),
-        reference: orNothing(s.reference),
-      }) as SubstanceRow,
-  );
+export function substanceRows({ substances }: Edition): Loose<SubstanceRow>[] {
+  return substances.map((s) => ({
+    key: s.key,
+    name: orNothing(s.name),
+    role: s.role,
+    cas: orNothing(s.cas),
+    inchikey: orNothing(s.inchikey),
+    smiles: orNothing(s.smiles),
+    formula: orNothing(s.formula),
+    molar_mass: numberOrNothing(s.molarMass),
+    melting_point_K: numberOrNothing(s.meltingPointK),
+    hazards: orNothing(s.hazards),
+    reference: orNothing(s.reference),
+  }));
 }
 
 /** How many rows of a system have each status. */
@@ -87,7 +81,7 @@ export function laboratoriesOf(edition: Edition, rows: Iterable<number>): Set<st
 }
 
 /** Rows of `systems.csv`, by id. */
-export function systemRows(edition: Edition): SystemRow[] {
+export function systemRows(edition: Edition): Loose<SystemRow>[] {
   const flags = edition.systems.map(() => ({ all: 0, blocking: 0 }));
   for (const { system, severity } of edition.flags) {
     const count = system === undefined ? undefined : flags[system];
@@ -101,7 +95,7 @@ export function systemRows(edition: Edition): SystemRow[] {
     const grade = edition.grades[system.index];
     const counts = statusCounts(edition, system);
     const temperatures = Array.from(rows, (row) => edition.table.temperatureK[row] as number);
-    return known({
+    return {
       system: system.id,
       family: system.family,
       solute: identity.solute,
@@ -118,13 +112,13 @@ export function systemRows(edition: Edition): SystemRow[] {
       n_laboratories: laboratoriesOf(edition, rows).size,
       T_min_K: temperatures.reduce((a, b) => Math.min(a, b)),
       T_max_K: temperatures.reduce((a, b) => Math.max(a, b)),
-      agreement: fit?.robust.agreement,
+      agreement: fit?.robust.agreement as SystemRow["agreement"],
       curve_ids: orNothing(fit?.curves.map((curve) => curve.curveId).join(";")),
       no_curve_reason: orNothing(fit?.noCurve),
       n_flags: flags[system.index]?.all ?? 0,
       n_blocking_flags: flags[system.index]?.blocking ?? 0,
-      grade: grade?.grade,
-      reasons: grade?.reasons.join("; "),
-    }) as SystemRow;
+      grade: grade?.grade as SystemRow["grade"],
+      reasons: grade?.reasons.join("; ") ?? "",
+    };
   });
 }

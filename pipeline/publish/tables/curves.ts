@@ -2,7 +2,7 @@ import { curvesOf, type Edition, measurementId } from "../../records/edition.ts"
 import type { Curve, CurveModel } from "../../records/fits.ts";
 import type { CurveRow } from "../../records/generated/curves.ts";
 import type { CurveDocument } from "../../records/generated/curves-json.ts";
-import { known } from "./account.ts";
+import type { Loose } from "./account.ts";
 
 /** Equations with the coefficients named a, b, c in the order of the columns; y is x or r. */
 const EQUATIONS: Readonly<Record<CurveModel, string>> = {
@@ -47,12 +47,12 @@ function shared(curve: Curve, edition: Edition) {
 }
 
 /** One row of `curves.csv`. */
-function curveRow(curve: Curve, edition: Edition): CurveRow {
+function curveRow(curve: Curve, edition: Edition): Loose<CurveRow> {
   const [a, b, c] = curve.coefficients;
   const p = curve.coefficients.length;
   const covariance = (i: number, j: number) => (i < p && j < p ? curve.covariance[i * p + j] : undefined);
   const enthalpy = curve.dissolutionEnthalpy;
-  return known({
+  return {
     ...shared(curve, edition),
     a: a?.value,
     u_a: a?.standardUncertainty,
@@ -70,12 +70,12 @@ function curveRow(curve: Curve, edition: Edition): CurveRow {
     dissolution_enthalpy_temperature_K: enthalpy?.temperatureK,
     notices: curve.notices.join("; ") || undefined,
     grade_reasons: edition.grades[curve.system]?.reasons.join("; "),
-  }) as CurveRow;
+  } as Loose<CurveRow>;
 }
 
 /** Rows of `curves.csv`, by system and branch. */
-export function curveRows(edition: Edition): CurveRow[] {
-  return curvesOf(edition).map((curve) => curveRow(curve, edition));
+export function* curveRows(edition: Edition): Generator<Loose<CurveRow>> {
+  for (const curve of curvesOf(edition)) yield curveRow(curve, edition);
 }
 
 /** Ideal solubility of a curve, or why there is none. */
@@ -90,7 +90,7 @@ function idealPart(
 }
 
 /** One curve of `curves.json`, with its measurements. */
-function curveDocument(curve: Curve, edition: Edition): CurveDocument {
+function curveDocument(curve: Curve, edition: Edition): Loose<CurveDocument> {
   const { points, kept } = edition.fits[curve.system]?.robust ?? { points: undefined, kept: undefined };
   const ids: string[] = [];
   points?.row.forEach((row, i) => {
@@ -99,7 +99,7 @@ function curveDocument(curve: Curve, edition: Edition): CurveDocument {
   });
   const enthalpy = curve.dissolutionEnthalpy;
   const p = curve.coefficients.length;
-  return known({
+  return {
     ...shared(curve, edition),
     coefficients: curve.coefficients.map((c) => ({
       name: c.name,
@@ -107,9 +107,12 @@ function curveDocument(curve: Curve, edition: Edition): CurveDocument {
       standard_uncertainty: c.standardUncertainty,
     })),
     covariance: curve.coefficients.map((_, i) => curve.covariance.slice(i * p, (i + 1) * p)),
-    runners_up: curve.runnersUp.map((r) =>
-      known({ model: r.model, aicc: unlessNaN(r.aicc), leave_one_out: unlessNaN(r.leaveOneOut), why: r.why }),
-    ),
+    runners_up: curve.runnersUp.map((r) => ({
+      model: r.model,
+      aicc: unlessNaN(r.aicc),
+      leave_one_out: unlessNaN(r.leaveOneOut),
+      why: r.why,
+    })),
     dissolution_enthalpy: enthalpy && {
       kJ_per_mol: enthalpy.value / 1000,
       low: enthalpy.low / 1000,
@@ -120,7 +123,7 @@ function curveDocument(curve: Curve, edition: Edition): CurveDocument {
     notices: [...curve.notices],
     grade_reasons: [...(edition.grades[curve.system]?.reasons ?? [])],
     measurement_ids: ids,
-  }) as CurveDocument;
+  } as Loose<CurveDocument>;
 }
 
 /** The document `curves.json` as text, one curve a line: it never stands in memory as a whole. */

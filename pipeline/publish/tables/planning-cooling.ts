@@ -4,7 +4,6 @@ import type { PlanningCoolingRow } from "../../records/generated/planning-coolin
 import type { System } from "../../records/systems.ts";
 import { massRatioFromLn } from "../mass-ratio.ts";
 import { type CoolingPlan, planCooling } from "../planning/cooling.ts";
-import { known } from "./account.ts";
 
 /** What no planning figure holds. */
 const NOTE = "equilibrium, pure solute, this solid form; no kinetics, cake hold-up or impurity effect";
@@ -31,9 +30,9 @@ function planRow(
   plan: CoolingPlan,
   excess: number,
   hazards: readonly string[],
-) {
+): PlanningCoolingRow {
   const cautions = [...plan.cautions, ...(plan.blankReason === "" ? hazards : [])];
-  return known({
+  return {
     system: system.id,
     curve_id: curve?.curveId,
     crystal_form: plan.crystalForm,
@@ -53,7 +52,7 @@ function planRow(
     cautions: cautions.join("; ") || undefined,
     note: NOTE,
     blank_reason: plan.blankReason || undefined,
-  }) as PlanningCoolingRow;
+  } as PlanningCoolingRow;
 }
 
 /** Rows of `planning-cooling.csv`: one per curve; a system without one gets a blank row with the reason. */
