@@ -1,11 +1,13 @@
-import { fitEdition } from "./fit/edition-fits.ts";
+import { type FitContext, fitAgain, fitEdition } from "./fit/edition-fits.ts";
 import { idealComparison } from "./fit/ideal-comparison.ts";
 import { rowResults } from "./fit/row-results.ts";
 import { gradeEdition } from "./grade/edition-grades.ts";
 import { groupIntoSystems } from "./group/systems.ts";
+import { identityNotices } from "./identify/notices.ts";
 import { createIdentityRegister, type IdentityRegister, identifySource } from "./identify/source.ts";
 import { indexSubstances, massFromSmiles } from "./identify/substance-tables.ts";
 import { usedSubstances } from "./identify/used-substances.ts";
+import { createCorrector, withRulings } from "./normalise/corrections.ts";
 import { type Normalised, normaliseEdition } from "./normalise/edition.ts";
 import { createRereader } from "./normalise/reread.ts";
 import type { Problem } from "./problems/catalogue.ts";
@@ -14,6 +16,9 @@ import { openAccounts } from "./read/accounts.ts";
 import type { Collection } from "./read/collection.ts";
 import type { Edition, Liquor, SourceAccount } from "./records/edition.ts";
 import { settingsInForce } from "./records/settings.ts";
+import { applyRulings } from "./rule/apply-rulings.ts";
+import { createTargets } from "./rule/targets.ts";
+import { touchedSystems } from "./rule/touched-systems.ts";
 import { materialThreshold } from "./screen/material-threshold.ts";
 import { screen } from "./screen/screen.ts";
 
@@ -56,7 +61,7 @@ export async function curate(
   const liquors = systems.map(normalised.liquorOf);
 
   onStage("fit");
-  const { fits, scales } = fitEdition(table, systems, {
+  const context: FitContext = {
     sourceCount: accounts.length,
     laboratories: accounts.map(({ card }) => card?.laboratory ?? ""),
     meltingPointK: ({ index: i }) => liquors[i]?.formMeltingPointK ?? Number.NaN,
@@ -67,12 +72,14 @@ export async function curate(
     threshold: ({ identity }, level, lnU) =>
       materialThreshold(level, lnU, identity.aqueousSalt ? "aqueous salt" : "general", settings),
     settings,
-  });
+  };
+  const first = fitEdition(table, systems, context);
+  const { scales } = first;
 
   onStage("screen");
   const flags = screen({
     ...{ table, systems, scales, settings },
-    fits: fits.map(({ robust }) => robust),
+    fits: first.fits.map(({ robust }) => robust),
     about: systems.map(({ identity, index: i }) => ({
       kind: identity.aqueousSalt ? ("aqueous salt" as const) : ("general" as const),
       boilingPointK: liquors[i]?.solventBoilingPointK ?? Number.NaN,
@@ -81,6 +88,17 @@ export async function curate(
     sourceNames: accounts.map(({ name }) => name),
     ...createRereader(table, register.identities, systems, normalised),
   });
+
+  onStage("rule");
+  const named = { sources: accounts, table, systems, flags };
+  const correct = createCorrector(table, identified, positions, {
+    ...{ identities: register.identities, liquorOf: normalised.modelOf, settings },
+  });
+  const rulings = applyRulings(collection.rulings, named, createTargets(named, collection.sources), correct);
+  const decided = withRulings(table, rulings);
+  const touched = touchedSystems(systems, rulings);
+  const omitted = new Set(rulings.setAside.keys());
+  const fits = fitAgain(decided, systems, first, touched, omitted, context);
 
   onStage("grade");
   const refused = [
@@ -108,15 +126,22 @@ export async function curate(
     settings,
     sources,
     substances: usedSubstances(systems, register),
-    table,
+    table: decided,
     systems,
     fits,
     scales,
     flags,
+    rulings,
     refused,
-    notices: [...collection.notices, ...notices, ...collection.sources.flatMap((source) => source.notices)],
-    grades: gradeEdition(table, systems, fits, flags, sources),
-    rowResults: rowResults(fits, table.count),
+    notices: [
+      ...collection.notices,
+      ...notices,
+      ...identityNotices(register, index, collection.sources),
+      ...collection.sources.flatMap((source) => source.notices),
+      ...rulings.problems,
+    ],
+    grades: gradeEdition({ table: decided, systems, fits, flags, sources, rulings }),
+    rowResults: rowResults(fits, table.count, omitted.size === 0 ? undefined : { fits: first.fits, touched, omitted }),
     ideals: systems.map(({ index: i }) => idealComparison(fits[i]?.curves[0], liquors[i] as Liquor)),
     liquors,
   };

@@ -145,10 +145,14 @@ addCommand(program, "convert <value-and-unit>", "convert one value, with its unc
   .requiredOption("--solute <name>", "solute: a name, formula or registry number of the tables")
   .requiredOption("--solvent <name>", "solvent: a name or registry number of the tables")
   .requiredOption("--temperature <value>", "temperature with its unit, such as '25 °C' or '298.15 K'")
-  .option("--uncertainty <u>", "standard uncertainty of the value, in its unit")
+  .option("--uncertainty <u>", "uncertainty of the value, in its unit, or relative to it, such as '3 %'")
+  .option("--uncertainty-kind <kind>", "standard (default) | expanded | range | standard deviation")
+  .option("--coverage-factor <k>", "of an expanded uncertainty; 2 where none is given")
+  .option("--n <n>", "number of replicates behind a standard deviation")
   .option("--solid-form <form>", "solid form in equilibrium, such as 'pentahydrate'")
   .option("--solute-basis <basis>", "anhydrous | hydrate per added solvent | hydrate equivalent per total solvent")
-  .option("--solution-density <kg/m3>", "measured density of the solution")
+  .option("--solution-density <density>", "measured density of the solution, such as '1.05 g/mL'; kg/m3 without a unit")
+  .option("--volume-temperature <value>", "temperature of the volume, where it is not 20 °C (solvent) or --temperature")
   .option("--collection <dir>", "use this collection's own substances as well")
   .addHelpText(
     "after",

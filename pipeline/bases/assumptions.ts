@@ -13,7 +13,8 @@ function densityAssumption(model: SolutionDensity): string | undefined {
       return undefined;
     case "additive volumes": {
       const { value, standardUncertainty } = model.apparentSoluteDensity;
-      const apparent = `apparent density of the solute ${value} kg/m3, u ${standardUncertainty} kg/m3`;
+      const rounded = `${Number(value.toPrecision(4))} kg/m3, u ${Number(standardUncertainty.toPrecision(2))} kg/m3`;
+      const apparent = `apparent density of the solute ${rounded}`;
       const u = model.modelRelativeUncertainty;
       return `solution density by additive volumes, ${apparent}${u === undefined ? "" : `; u ${percent(u)} of the density`}`;
     }

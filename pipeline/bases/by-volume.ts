@@ -86,7 +86,7 @@ export const massConcentrationEdge: Edge = {
   unit: "kg/m3",
   per: "solution",
   counts: "mass",
-  toHubEquation: "r = w/(1 - w) with w rho(w) = c, that is r = c/(rho - c)",
+  toHubEquation: "r = c/(rho - c)",
   fromHubEquation: "c = r/(1 + r) rho",
   missing: solutionDensityMissing,
   toHub: ratioAtConcentration,

@@ -1,6 +1,6 @@
 import type { Link } from "./link.ts";
 import type { Needs, Quantity } from "./needs.ts";
-import { densityEquation } from "./solution-density.ts";
+import { densityAt, densityEquation, densityInputs } from "./solution-density.ts";
 import { quantityFromValue, type Scale, type Unit, valueFromQuantity } from "./unit.ts";
 
 /** A property as a step used it. */
@@ -60,11 +60,6 @@ function inverseScaleEquation(scale: Scale, symbol: string): string {
   }
 }
 
-function withDensity(equation: string, link: Link, needs: Needs): string {
-  if (!isPerSolutionVolume(link) || needs.solutionDensity === undefined) return equation;
-  return `${equation}; ${densityEquation(needs.solutionDensity)}`;
-}
-
 /** Every property once, though a hydrate uses the molar mass of its solute twice. */
 function propertiesUsed(link: Link, r: number, needs: Needs): readonly UsedProperty[] {
   const byName = new Map<string, UsedProperty>();
@@ -75,27 +70,50 @@ function propertiesUsed(link: Link, r: number, needs: Needs): readonly UsedPrope
   return Array.from(byName.values());
 }
 
-/** The two steps from a value in a unit to r [kg/kg]. */
+const ofDensity: ReadonlySet<string> = new Set(densityInputs.map(({ name }) => name));
+
+/** The step that gives the density of a solution of mass ratio r by a model, where the link needs one. */
+function densitySteps(link: Link, r: number, needs: Needs): readonly ConversionStep[] {
+  const model = needs.solutionDensity;
+  if (!isPerSolutionVolume(link) || model === undefined || model.kind === "measured") return [];
+  const properties = propertiesUsed(link, r, needs).filter(({ name }) => ofDensity.has(name));
+  const value = densityAt(model, r / (1 + r));
+  return [{ equation: `${densityEquation(model)} at w = r/(1 + r)`, symbol: "rho", value, unit: "kg/m3", properties }];
+}
+
+/** The properties of the link's own step: those of the density are told where the density is. */
+function linkProperties(link: Link, r: number, needs: Needs): readonly UsedProperty[] {
+  const used = propertiesUsed(link, r, needs);
+  const told = densitySteps(link, r, needs).length > 0;
+  return told ? used.filter(({ name }) => !ofDensity.has(name)) : used;
+}
+
+/**
+ * The steps from a value in a unit to r [kg/kg]. Where a density is modelled it is that of the solution found, for it
+ * and r are solved together.
+ */
 export function stepsToHub(unit: Unit, value: number, link: Link, r: number, needs: Needs): readonly ConversionStep[] {
   const { scale } = unit;
   const { symbol } = link;
   const quantity = quantityFromValue(scale, value);
-  const properties = propertiesUsed(link, r, needs);
+  const properties = linkProperties(link, r, needs);
   return [
     { equation: scaleEquation(scale, symbol), symbol, value: quantity, unit: link.unit, properties: [] },
-    { equation: withDensity(link.toHubEquation, link, needs), symbol: "r", value: r, unit: "kg/kg", properties },
+    ...densitySteps(link, r, needs),
+    { equation: link.toHubEquation, symbol: "r", value: r, unit: "kg/kg", properties },
   ];
 }
 
-/** The two steps from r [kg/kg] to a value in a unit. */
+/** The steps from r [kg/kg] to a value in a unit. */
 export function stepsFromHub(unit: Unit, link: Link, r: number, needs: Needs): readonly ConversionStep[] {
   const { scale, canonical } = unit;
   const { symbol } = link;
   const quantity = link.fromHub(r, needs);
   const value = valueFromQuantity(scale, quantity);
-  const equation = withDensity(link.fromHubEquation, link, needs);
+  const properties = linkProperties(link, r, needs);
   return [
-    { equation, symbol, value: quantity, unit: link.unit, properties: propertiesUsed(link, r, needs) },
+    ...densitySteps(link, r, needs),
+    { equation: link.fromHubEquation, symbol, value: quantity, unit: link.unit, properties },
     { equation: inverseScaleEquation(scale, symbol), symbol: "value", value, unit: canonical, properties: [] },
   ];
 }

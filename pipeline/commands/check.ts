@@ -2,22 +2,24 @@ import { existsSync } from "node:fs";
 import { basename } from "node:path";
 import { type Curated, curate } from "../curate.ts";
 import { systemId, systemKey } from "../group/systems.ts";
+import { nearNameQuestion } from "../identify/notices.ts";
 import { identifySource } from "../identify/source.ts";
 import { massFromSmiles } from "../identify/substance-tables.ts";
 import { type Normalised, normaliseEdition } from "../normalise/edition.ts";
 import { createRereader } from "../normalise/reread.ts";
 import { formatProblem, type Problem, problem } from "../problems/catalogue.ts";
 import { InputError } from "../problems/input-error.ts";
-import { safeText } from "../problems/safe-text.ts";
 import { noticeOf } from "../publish/tables/summary.ts";
-import { readCardNamed, readCollection } from "../read/collection.ts";
+import { type Collection, readCardNamed, readCollection } from "../read/collection.ts";
 import { readSingleSource } from "../read/source.ts";
+import type { Flag } from "../records/fits.ts";
 import type { CheckedRow, CheckResult } from "../records/generated/check-result.ts";
 import { type MeasurementTable, textOf } from "../records/measurements.ts";
 import type { SourceTable } from "../records/readings.ts";
 import type { Identity } from "../records/systems.ts";
-import { type JudgedRow, judgeRows, type KnownSystem, type Verdict } from "../screen/verdicts.ts";
+import { type JudgedRow, judgeRows, type KnownSystem, VERDICTS } from "../screen/verdicts.ts";
 import { type CommonOptions, Exit, type ExitCode, type Terminal } from "./terminal.ts";
+import { verdictLines } from "./verdict-text.ts";
 
 export interface CheckOptions extends CommonOptions {
   readonly collection: string;
@@ -25,8 +27,6 @@ export interface CheckOptions extends CommonOptions {
   readonly like?: string;
   readonly version: string;
 }
-
-const VERDICTS: readonly Verdict[] = ["fits", "off the curve", "outside the range", "new system", "cannot tell"];
 
 /** Reads the new table with the card asked for, or the one beside it. */
 async function readNew(file: string, { collection, card, like }: CheckOptions): Promise<SourceTable> {
@@ -79,13 +79,64 @@ export async function check(file: string, options: CheckOptions, terminal: Termi
   const systemOf = (row: number) => known.get(systemKey(identities[table.identity[row] as number] as Identity));
   const judged = judgeRows(table, systemOf, curated.edition.settings);
   const { inReportedUnit } = createRereader(table, identities, curated.edition.systems, rows);
-  const checked = judged.map((row) => checkedRow(row, table, identities, source, inReportedUnit));
+  const suspicions = await suspicionsOf(source, collection, options.version);
+  const checked = judged.map((row) => {
+    const judgedRow = checkedRow(row, table, identities, source, inReportedUnit);
+    const question = row.verdict === "new system" ? nearNameQuestion(judgedRow.solute, curated.index) : "";
+    const said = question === "" ? judgedRow : { ...judgedRow, look_at: `the name: ${question}` };
+    const suspicion = said.verdict === "off the curve" ? suspicions.get(said.line) : undefined;
+    return suspicion === undefined ? said : { ...said, ...suspicion };
+  });
   const result = resultOf(file, curated, rows, checked);
   if (options.json) terminal.print(JSON.stringify(result));
-  else for (const line of textOfResult(result)) terminal.print(line);
+  else for (const line of verdictLines(result)) terminal.print(line);
   for (const refused of rows.refusedRows) terminal.tell(formatProblem(refused));
   const needsYou = rows.refusedRows.length > 0 || checked.some(({ verdict }) => verdict === "off the curve");
   return needsYou ? Exit.needsYou : Exit.done;
+}
+
+/** What screening suspects of a row, in the words of the result. */
+type Suspicion = Partial<
+  Pick<CheckedRow, "suspected_cause" | "cause_probability" | "proposed_value" | "evidence" | "look_at">
+>;
+
+/**
+ * What screening says of the new rows once they are among the collection's, by line: the cause, and the value that would
+ * fit. The verdicts rest on the collection alone; this looks for reasons, with the whole file as evidence.
+ */
+async function suspicionsOf(
+  source: SourceTable,
+  collection: Collection,
+  version: string,
+): Promise<Map<number, Suspicion>> {
+  const taken = new Set([...collection.sources, ...collection.refusedSources].map(({ name }) => name));
+  const name = taken.has(source.name) ? `${source.name} (new)` : source.name;
+  const sources = [...collection.sources, { ...source, name }].sort((a, b) => (a.name < b.name ? -1 : 1));
+  const { edition } = await curate({ ...collection, sources }, version);
+  const position = edition.sources.findIndex((account) => account.name === name);
+  const suspicions = new Map<number, Suspicion>();
+  const { table } = edition;
+  // Points before blocks: what is said of a row itself is the more precise.
+  for (const flag of [...edition.flags].sort((a, b) => (a.scope < b.scope ? -1 : 1))) {
+    if (flag.severity !== "blocking" || flag.system === undefined) continue;
+    const rows = flag.scope === "measurement" ? [flag.row as number] : (edition.systems[flag.system]?.rows ?? []);
+    if (flag.scope === "block" && flag.source !== position) continue;
+    for (const row of rows)
+      if (table.source[row] === position) suspicions.set(table.line[row] as number, suspicionOf(flag));
+  }
+  return suspicions;
+}
+
+function suspicionOf(flag: Flag): Suspicion {
+  const cause = flag.suspectedCause as CheckedRow["suspected_cause"];
+  const detail = flag.causeDetail === undefined ? "" : ` (${flag.causeDetail})`;
+  return {
+    ...(cause === undefined ? {} : { suspected_cause: cause }),
+    ...(flag.causeProbability === undefined ? {} : { cause_probability: flag.causeProbability }),
+    ...(flag.proposedValue === undefined ? {} : { proposed_value: flag.proposedValue }),
+    evidence: `${flag.evidence}${detail}`,
+    look_at: flag.lookAt,
+  };
 }
 
 /** One judged row in the words of the result. */
@@ -138,26 +189,4 @@ function resultOf(file: string, { edition }: Curated, rows: NewRows, checked: re
     problems: rows.refusedRows.map(noticeOf),
     notices: rows.source.notices.map(noticeOf),
   };
-}
-
-/** The verdicts for people: one line a row, then a summary of the file. */
-function textOfResult(result: CheckResult): string[] {
-  const show = (value: number | string | undefined) =>
-    typeof value === "number" ? String(Number(value.toPrecision(4))) : safeText(value ?? "", 60);
-  const lines = result.rows.map((row) => {
-    const what = `${safeText(row.solute, 40)} in ${safeText(row.solvent, 40)} at ${(row.temperature_K - 273.15).toFixed(1)} °C`;
-    const expected =
-      row.expected_value === undefined
-        ? ""
-        : `, expected ${show(row.expected_value)} (${show(row.expected_low)} to ${show(row.expected_high)})`;
-    const look = row.look_at === "" ? "" : `\n      look at: ${row.look_at}`;
-    return `line ${row.line}: ${row.verdict.toUpperCase()}  ${what}: ${show(row.reported_value)} ${safeText(row.reported_unit, 40)}${expected}\n      ${row.evidence}${look}`;
-  });
-  const counts = VERDICTS.map((verdict) => `${result.verdicts[verdict]} ${verdict}`).join(", ");
-  return [
-    ...lines,
-    "",
-    `${safeText(result.file)}: ${result.readings} readings, ${result.accepted} judged, ${result.refused} refused`,
-    counts,
-  ];
 }

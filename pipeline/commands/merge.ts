@@ -6,7 +6,7 @@ import { openOutputFolder } from "../publish/output-folder.ts";
 import { countsOf, noticeOf, sourceCounts } from "../publish/tables/summary.ts";
 import { writeWorkingTables } from "../publish/working-tables.ts";
 import { readCollection } from "../read/collection.ts";
-import { type Edition, flagId } from "../records/edition.ts";
+import { type Edition, flagId, needsRuling } from "../records/edition.ts";
 import type { MergeResult } from "../records/generated/merge-result.ts";
 import { type CommonOptions, Exit, type ExitCode, type Terminal } from "./terminal.ts";
 
@@ -69,7 +69,7 @@ function account(edition: Edition, open: string): string[] {
   const width = Math.max(6, ...edition.sources.map(({ name }) => name.length));
   const cell = (value: number | string) => String(value).padStart(9);
   const line = (name: string, ...values: (number | string)[]) => `  ${name.padEnd(width)}${values.map(cell).join("")}`;
-  const blocking = edition.flags.filter(({ severity }) => severity === "blocking");
+  const blocking = edition.flags.filter((_, i) => needsRuling(edition, i));
   const flagLines = blocking.slice(0, SHOWN).map((flag) => {
     const cause = flag.suspectedCause ? ` Suspected cause: ${flag.suspectedCause}.` : "";
     return `  ${safeText(flagId(edition, flag))}: ${safeText(flag.evidence, 400)}${cause}`;

@@ -6,6 +6,8 @@ export interface Terminal {
   readonly tell: (text: string) => void;
   /** Shows how far a long piece of work is; nothing off a terminal. */
   readonly progress: (done: string) => void;
+  /** Asks a person and gives the answer, trimmed; absent where nobody sits at the terminal. */
+  readonly ask?: (question: string) => Promise<string>;
   /** Called when the user interrupts the command, to remove temporary files. */
   readonly onInterrupt: (cleanUp: () => void) => void;
 }

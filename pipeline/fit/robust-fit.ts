@@ -69,14 +69,14 @@ const CURVATURE_SPAN_K = 30;
  * @param points points of each system, by position of the system
  * @param perSystem what else must be known of each
  * @param nSources number of sources in the edition
- * @returns fits by position of the system, and what was pooled in the last pass
+ * @returns fits by position of the system, the scales of the last pass, and all that was pooled in it
  */
 export function robustFits(
   points: readonly SystemPoints[],
   perSystem: readonly RobustSystem[],
   nSources: number,
   options: RobustOptions = {},
-): { fits: RobustFit[]; pooled: PooledFit } {
+): { fits: RobustFit[]; scales: PooledScales; pooled: PooledFit } {
   const defaults = { ...DEFAULTS, ...options.defaults };
   const threshold = options.threshold ?? (() => LEAVE_OUT);
   const capacity = points.reduce((most, { n }) => Math.max(most, n), 1);
@@ -103,7 +103,7 @@ export function robustFits(
     const between = betweenOf(scales, prepared.betweenClass[s]!);
     return toFit(ws, system, s, camps, between, sums, room(prepared.first[s]!, prepared.first[s + 1]!));
   });
-  return { fits, pooled: { scales, typicalU: prepared.typicalU, sums } };
+  return { fits, scales, pooled: { scales, typicalU: prepared.typicalU, sums } };
 }
 
 /** Between-source standard deviation of a class of systems. */

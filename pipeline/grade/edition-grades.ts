@@ -1,29 +1,77 @@
-import type { Grade, SourceAccount } from "../records/edition.ts";
-import type { Flag, SystemFit } from "../records/fits.ts";
+import type { Edition, Grade } from "../records/edition.ts";
+import type { SystemFit } from "../records/fits.ts";
 import { type MeasurementTable, textOf } from "../records/measurements.ts";
+import { isDecision, rulingPhrase } from "../records/rulings.ts";
 import type { System } from "../records/systems.ts";
-import { proposeGrade } from "./grade.ts";
+import { AGREEMENT_SDS, type GradeEvidence, proposeGrade } from "./grade.ts";
+
+type Graded = Pick<Edition, "table" | "systems" | "fits" | "flags" | "sources" | "rulings">;
 
 /** A grade for every system, by position. */
-export function gradeEdition(
-  table: MeasurementTable,
-  systems: readonly System[],
-  fits: readonly SystemFit[],
-  flags: readonly Flag[],
-  sources: readonly SourceAccount[],
-): Grade[] {
-  const flagsOf = systems.map(() => [] as Flag[]);
-  for (const flag of flags) if (flag.system !== undefined) flagsOf[flag.system]?.push(flag);
-  return systems.map((system) => {
-    const fit = fits[system.index] as SystemFit;
-    const kept = Array.from(fit.robust.points.row).filter((_, i) => fit.robust.kept[i] === 1);
-    const cards = [...new Set(kept.map((row) => table.source[row] as number))].map((source) => sources[source]);
+export function gradeEdition(edition: Graded): Grade[] {
+  const open = openFlags(edition);
+  return edition.systems.map((system) => {
+    const fit = edition.fits[system.index] as SystemFit;
+    const confirmed = edition.rulings.recommended.get(system.index);
     return proposeGrade({
-      fit,
-      flags: flagsOf[system.index] ?? [],
-      laboratories: new Set(cards.map((source) => source?.card?.laboratory || source?.name)).size,
-      methods: new Set(kept.map((row) => textOf(table, table.method[row] as number))).size,
-      solidChecked: false,
+      ...pointEvidence(fit, edition.table),
+      ...sourceEvidence(edition, fit),
+      openFlags: open(system),
+      confirmedBy: confirmed && rulingPhrase(confirmed).replace(/^kept/, "confirmed"),
     });
   });
+}
+
+/** Counts the open blocking flags of a system: its own, and those on its sources as a whole. `ask` leaves a flag open. */
+function openFlags({ flags, rulings, table }: Graded): (system: System) => number {
+  const bySystem = new Map<number, number>();
+  const bySource = new Map<number, number>();
+  flags.forEach(({ severity, system, source }, i) => {
+    const ruling = rulings.ofFlag.get(i);
+    if (severity !== "blocking" || (ruling !== undefined && isDecision(ruling))) return;
+    if (system !== undefined) bySystem.set(system, (bySystem.get(system) ?? 0) + 1);
+    else if (source !== undefined) bySource.set(source, (bySource.get(source) ?? 0) + 1);
+  });
+  return (system) => {
+    const own = bySystem.get(system.index) ?? 0;
+    if (bySource.size === 0) return own;
+    const sources = new Set(Array.from(system.rows, (row) => table.source[row] as number));
+    return [...sources].reduce((sum, source) => sum + (bySource.get(source) ?? 0), own);
+  };
+}
+
+type PointEvidence = Pick<
+  GradeEvidence,
+  "points" | "kept" | "withinUncertainty" | "judged" | "agreement" | "temperatureK" | "solidChecked"
+>;
+
+function pointEvidence({ robust }: SystemFit, table: MeasurementTable): PointEvidence {
+  const { points, kept, deviation, deviationSd, agreement } = robust;
+  let [keptCount, within, judged, solidChecked] = [0, 0, 0, 0];
+  for (let i = 0; i < points.n; i++) {
+    const z = Math.abs((deviation[i] as number) / (deviationSd[i] as number));
+    if (Number.isFinite(z)) judged++;
+    if (z <= AGREEMENT_SDS) within++;
+    if (kept[i] === 0) continue;
+    keptCount++;
+    solidChecked += table.solidChecked[points.row[i] as number] as number;
+  }
+  return {
+    points: points.n,
+    kept: keptCount,
+    withinUncertainty: within,
+    judged,
+    agreement,
+    temperatureK: points.temperatureK,
+    solidChecked,
+  };
+}
+
+function sourceEvidence({ sources, table }: Graded, { robust }: SystemFit) {
+  const kept = Array.from(robust.points.row).filter((_, i) => robust.kept[i] === 1);
+  const cards = [...new Set(kept.map((row) => table.source[row] as number))].map((source) => sources[source]);
+  return {
+    laboratories: new Set(cards.map((source) => source?.card?.laboratory || source?.name)).size,
+    methods: new Set(kept.map((row) => textOf(table, table.method[row] as number))).size,
+  };
 }

@@ -5,6 +5,7 @@ import { createMeasurementTable, type MeasurementTable } from "../records/measur
 import type { Settings } from "../records/settings.ts";
 import type { Identity, System } from "../records/systems.ts";
 import { type LiquorModel, liquorModel } from "./liquor.ts";
+import { collectMeasuredDensities } from "./measured-densities.ts";
 import { normaliseSource } from "./source.ts";
 import { systemLiquor } from "./system-liquor.ts";
 
@@ -45,6 +46,7 @@ export function normaliseEdition(
     return model;
   };
   const context = { identities, liquorOf: modelOf, settings };
+  for (const source of sources) collectMeasuredDensities(source, context);
   const refused = sources.flatMap((source, i) => normaliseSource(source, sourcePositions[i] as number, table, context));
   const position = new Map(identities.map((identity, i) => [identity, i]));
   return {

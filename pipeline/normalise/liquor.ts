@@ -41,18 +41,24 @@ export interface LiquorModel {
   readonly missingDensity: () => string | undefined;
 }
 
-/** Apparent density of the dissolved solute: from the liquid where it is one at this temperature, else from the solid. */
-function apparentDensity(solute: Substance | undefined, solvent: Substance, temperatureK: number): Quantity {
-  const liquid = solute && liquidDensity(solute, temperatureK);
-  const melts = solute?.meltingPointK ?? Number.NEGATIVE_INFINITY;
-  if (liquid !== undefined && temperatureK >= melts) return apparentDensityFromLiquid(liquid);
-  return apparentDensityFromSolid(solute?.solidDensity, solvent.name === "water");
+/**
+ * Apparent density of the dissolved solute at a temperature: that of the liquid where it is one there, else from the
+ * density of the solid, which is computed once.
+ */
+function apparentDensityModel(solute: Substance | undefined, solvent: Substance): (temperatureK: number) => Quantity {
+  const ofSolid = apparentDensityFromSolid(solute?.solidDensity, solvent.name === "water");
+  if (solute === undefined || solute.liquidDensities.length === 0) return () => ofSolid;
+  return (temperatureK) => {
+    const liquid = temperatureK >= (solute.meltingPointK ?? 0) ? liquidDensity(solute, temperatureK) : undefined;
+    return liquid === undefined ? ofSolid : apparentDensityFromLiquid(liquid);
+  };
 }
 
 /** Density model of the solution at a temperature: published, else additive volumes; undefined without a solvent density. */
 function solutionDensity(
   solute: Substance | undefined,
   solvent: Substance,
+  apparent: (temperatureK: number) => Quantity,
   temperatureK: number,
 ): SolutionDensity | undefined {
   const published = solute && solutionDensityModel(solute, solvent, temperatureK);
@@ -62,7 +68,7 @@ function solutionDensity(
   const electrolyte = (solute?.electrolyte ?? false) && solvent.name === "water";
   return {
     kind: "additive volumes",
-    apparentSoluteDensity: apparentDensity(solute, solvent, temperatureK),
+    apparentSoluteDensity: apparent(temperatureK),
     solventDensity: pure,
     ...(electrolyte ? { modelRelativeUncertainty: ELECTROLYTE_U } : {}),
   };
@@ -92,6 +98,7 @@ const KEPT = 4096;
  */
 export function liquorModel(who: Identified, identity: Identity): LiquorModel {
   const { solute, solvent, form } = who;
+  const apparent = apparentDensityModel(solute, solvent);
   const known = new Map<number, SolutionDensity | undefined>();
   const measured: MeasuredSolution[] = [];
   const quantity = (value: number, relative: number, reference?: string): Quantity | undefined =>
@@ -111,7 +118,7 @@ export function liquorModel(who: Identified, identity: Identity): LiquorModel {
   let volumeAtK = Number.NaN;
   const modelAt = (temperatureK: number) => {
     if (known.has(temperatureK)) return known.get(temperatureK);
-    const model = solutionDensity(solute, solvent, temperatureK);
+    const model = solutionDensity(solute, solvent, apparent, temperatureK);
     if (known.size < KEPT) known.set(temperatureK, model);
     return model;
   };

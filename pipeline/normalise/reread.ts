@@ -1,13 +1,12 @@
 import { moleFractionAt } from "../bases/hub-values.ts";
-import type { SoluteBasis } from "../bases/hydrate.ts";
 import { parseTemperatureUnit } from "../bases/temperature.ts";
 import type { Unit } from "../bases/unit.ts";
 import { type MeasurementTable, textOf } from "../records/measurements.ts";
 import type { Change, RereadRow } from "../records/reread.ts";
 import type { Identity, System } from "../records/systems.ts";
 import type { Normalised } from "./edition.ts";
-import type { LiquorModel } from "./liquor.ts";
-import { bindUnit, readUnit, type UnitContext } from "./unit-context.ts";
+import { createRowBinder } from "./row-binder.ts";
+import type { UnitContext } from "./unit-context.ts";
 
 /** Rows read again under other readings of their unit, temperature or basis; nothing in the table changes. */
 export interface Rereader {
@@ -31,25 +30,10 @@ export function createRereader(
   table: MeasurementTable,
   identities: readonly Identity[],
   systems: readonly System[],
-  { whoOf, modelOf }: Pick<Normalised, "whoOf" | "modelOf">,
+  normalised: Pick<Normalised, "whoOf" | "modelOf">,
 ): Rereader {
   const position = new Map(identities.map((identity, i) => [identity, i]));
-  const bound = new Map<string, UnitContext | undefined>();
-  const bind = (identity: number, unitText: string, basis: SoluteBasis): UnitContext | undefined => {
-    const key = `${identity}\u0000${unitText}\u0000${basis}`;
-    if (bound.has(key)) return bound.get(key);
-    const who = whoOf[identity];
-    const unit = readUnit(unitText);
-    const context = who === undefined || "code" in unit ? undefined : bindUnit(unit, basis, modelOf(who));
-    const usable = context === undefined || "code" in context ? undefined : context;
-    bound.set(key, usable);
-    return usable;
-  };
-
-  const unitOf = (row: number) => textOf(table, table.reportedUnit[row] as number);
-  const basisOf = (row: number) => textOf(table, table.soluteBasis[row] as number) as SoluteBasis;
-  const setConditions = (liquor: LiquorModel, row: number, temperatureK: number) =>
-    liquor.setConditions(temperatureK, table.volumeTemperatureK[row] as number, table.solutionDensity[row] as number);
+  const { bind, unitOf, basisOf, setConditions } = createRowBinder(table, normalised);
   const isLog = (unit: Unit) => unit.scale.kind === "ln" || unit.scale.kind === "log10";
 
   /** Reported number times a factor, in a unit that may be a logarithm. */
@@ -63,7 +47,9 @@ export function createRereader(
     const context = bind(identity, unitOf(row), basisOf(row));
     if (context === undefined) return undefined;
     setConditions(context.liquor, row, table.temperatureK[row] as number);
-    const value = context.converter.fromHub(massRatioOf(lnValue, identities[identity] as Identity));
+    const r = massRatioOf(lnValue, identities[identity] as Identity);
+    context.liquor.takeNearby(r);
+    const value = context.converter.fromHub(r);
     return Number.isFinite(value) ? value : undefined;
   };
 
@@ -71,7 +57,8 @@ export function createRereader(
   const readAgain = (row: number, identity: number, context: UnitContext, value: number, temperatureK: number) => {
     if (!(temperatureK > 0)) return undefined;
     setConditions(context.liquor, row, temperatureK);
-    const r = context.converter.toHub(value);
+    const first = context.converter.toHub(value);
+    const r = context.liquor.takeNearby(first) ? context.converter.toHub(value) : first;
     const x = moleFractionAt(r, context.liquor.needs);
     const lnValue = Math.log(Number.isNaN((identities[identity] as Identity).soluteMolarMass) ? r : x);
     if (!Number.isFinite(lnValue)) return undefined;

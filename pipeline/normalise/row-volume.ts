@@ -5,8 +5,7 @@ import type { Reading } from "../records/readings.ts";
 import { optionalNumber, type SourceCells } from "./source-cells.ts";
 
 /** Densities of saturated liquors in any solvent lie well inside these, kg/m3 (common practice). */
-const LEAST_DENSITY = 300;
-const GREATEST_DENSITY = 5000;
+export const densityRange = { least: 300, greatest: 5000 };
 
 /** Measured density of the solution, kg/m3; NaN where none is given. A value that no liquor has is a slip of the unit. */
 export function readDensity(cells: SourceCells, reading: Reading): number | CellFault {
@@ -19,7 +18,7 @@ export function readDensity(cells: SourceCells, reading: Reading): number | Cell
     return { field: "solution_density", code: "unknown-density-unit", found };
   }
   const density = value * factor;
-  if (density >= LEAST_DENSITY && density <= GREATEST_DENSITY) return density;
+  if (density >= densityRange.least && density <= densityRange.greatest) return density;
   return { field: "solution_density", code: "implausible-density", found };
 }
 

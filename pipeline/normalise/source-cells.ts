@@ -8,6 +8,7 @@ const FIELDS = [
   ...["temperature", "solute_basis", "uncertainty", "coverage_factor", "n"],
   ...["temperature_uncertainty", "temperature_probe", "solution_density", "volume_temperature"],
   ...["heating_rate_K_per_min", "excess_solid", "method", "reference", "doi"],
+  ...["solid_form", "solid_check", "solid_after"],
 ] as const;
 type Field = (typeof FIELDS)[number];
 

@@ -1,5 +1,5 @@
 import { moleFractionAt } from "../bases/hub-values.ts";
-import { isOpenAt, standardFromRelative, type Unit } from "../bases/unit.ts";
+import { isOpenAt, type Unit } from "../bases/unit.ts";
 import type { Problem } from "../problems/catalogue.ts";
 import { type CellFault, readingProblem } from "../records/cells.ts";
 import type { Identified, IdentifiedSource } from "../records/identified.ts";
@@ -7,22 +7,18 @@ import { codeOf, type MeasurementTable, RowState } from "../records/measurements
 import type { Reading } from "../records/readings.ts";
 import type { Settings } from "../records/settings.ts";
 import type { Identity } from "../records/systems.ts";
+import { isNeverFitted, wrongExcessSolid, wrongMethod } from "./fixed-words.ts";
 import type { LiquorModel } from "./liquor.ts";
 import { type ReportedValue, readReportedValue } from "./reported-value.ts";
+import { rowCautions } from "./row-cautions.ts";
 import { readDensity, readVolumeTemperature } from "./row-volume.ts";
+import { createSolidCheck } from "./solid-check.ts";
 import { sourceCells } from "./source-cells.ts";
 import { type RowTemperature, readRowTemperature } from "./temperature.ts";
-import { bindUnit, readSoluteBasis, readUnit, type UnitContext } from "./unit-context.ts";
+import { bindUnit, foreignGuest, readSoluteBasis, readUnit, type UnitContext } from "./unit-context.ts";
 import { impossibleValue } from "./value-checks.ts";
 import { rowUncertainty } from "./value-uncertainty.ts";
 
-/** Methods whose values are shown and never fitted. */
-const NEVER_FITTED: ReadonlySet<string> = new Set(["cloud-point", "kinetic-from-stock"]);
-const METHODS: readonly string[] = [
-  ...["gravimetric", "titration", "hplc", "uv", "refractive-index", "isothermal-synthetic"],
-  ...["clear-point", "cloud-point", "kinetic-from-stock", "unspecified"],
-];
-const EXCESS_SOLID: readonly string[] = ["", "yes", "no", "unknown"];
 const TERM_UNIT = "pharmacopoeia term";
 
 /** What normalising a source needs besides its rows. */
@@ -48,13 +44,6 @@ interface Row {
 
 const isFault = (value: object): value is CellFault => "code" in value;
 
-/** The word of a field with fixed words, or the fault that lists them. */
-function choice(field: string, text: string, words: readonly string[]): CellFault | undefined {
-  if (words.includes(text)) return undefined;
-  const known = words.filter((word) => word !== "").join(", ");
-  return { field, code: "bad-choice", found: `${field} "${text}"`, expected: `one of ${known}` };
-}
-
 /**
  * Normalises one source: every identified reading becomes a row of the table on the common basis, or is refused with its
  * place. Rows of one unit, solute and solvent share one conversion; only densities change with their temperature.
@@ -66,6 +55,7 @@ export function normaliseSource(
   { identities, liquorOf, settings }: NormaliseContext,
 ): Problem[] {
   const cells = sourceCells(source);
+  const solidChecked = createSolidCheck(cells, identities);
   const refused: Problem[] = [];
   const units = new Map<string, Unit | CellFault>();
   const contexts = new Map<Identified, Map<string, UnitContext>>();
@@ -96,7 +86,8 @@ export function normaliseSource(
     }
     // What a conversion assumes follows from which densities it has, so those are part of the key.
     const { solutionDensity: model, solventDensityAtVolumeTemperature: atVolume } = liquorOf(who).needs;
-    const key = `${unitText}\u0000${basisText}\u0000${model?.kind}\u0000${atVolume === undefined}`;
+    const density = model?.kind === "density function" ? model.name : model?.kind;
+    const key = `${unitText}\u0000${basisText}\u0000${density}\u0000${atVolume === undefined}`;
     const found = known.get(key);
     if (found !== undefined) return found;
     const unit = unitOf(unitText);
@@ -106,7 +97,7 @@ export function normaliseSource(
     }
     const basis = readSoluteBasis(basisText, who, unit, valueText);
     if (typeof basis !== "string") return basis;
-    const context = bindUnit(unit, basis, liquorOf(who));
+    const context = bindUnit(unit, basis, liquorOf(who), foreignGuest(who));
     if (!isFault(context)) known.set(key, context);
     else if (context.code === "no-density")
       return { ...context, found: liquorOf(who).missingDensity() ?? context.found };
@@ -118,8 +109,7 @@ export function normaliseSource(
     const reported = readReportedValue(text, cells.decimal);
     if (isFault(reported)) return reported;
     const method = cells.text.method(reading) || defaultMethod;
-    const wrong =
-      choice("method", method, METHODS) ?? choice("excess_solid", cells.text.excess_solid(reading), EXCESS_SOLID);
+    const wrong = wrongMethod(method) ?? wrongExcessSolid(cells.text.excess_solid(reading));
     if (wrong !== undefined) return wrong;
     const temperature = readRowTemperature(
       cells,
@@ -173,7 +163,15 @@ export function normaliseSource(
     const r = context.converter.toHub(reported.value);
     if (!(r > 0)) return noRatio(row);
     if (cells.text.excess_solid(row.reading) === "no") return writeRange(row, reported.value, Number.NaN);
-    return writePoint(row, reported.value, r);
+    return context.liquor.takeNearby(r) ? writeNearby(row, reported.value) : writePoint(row, reported.value, r);
+  }
+
+  /** A row whose solution density comes from one measured nearby: bound again, for its assumptions are others. */
+  function writeNearby(row: Row, value: number): CellFault | undefined {
+    const context = contextOf(row.who, unitShown(row.reading), row.reading, row.text);
+    if (isFault(context)) return context;
+    const r = context.converter.toHub(value);
+    return r > 0 ? writePoint({ ...row, context }, value, r) : noRatio(row);
   }
 
   function writePoint(row: Row, value: number, r: number): CellFault | undefined {
@@ -198,23 +196,23 @@ export function normaliseSource(
     );
     if ("code" in u) return u;
     const x = moleFractionAt(r, liquor.needs);
-    const relative = converter.relativeUncertainty(value, standardFromRelative(unit.scale, value, u.relative), r);
+    const withoutMass = Number.isNaN(x);
+    // d ln x/d ln r = 1 - x: what is relative to r is less so to x when the solution is rich.
+    const own = converter.ownUncertainty(r, u.relative) * (withoutMass ? 1 : 1 - x);
+    const shared = converter.sharedUncertainty(value, r, withoutMass ? "mass ratio" : "mole fraction");
     const at = startRow(row);
     const window = settings.temperature_window_K;
     const inside = row.temperature.kelvin >= window.low && row.temperature.kelvin <= window.high;
-    table.state[at] = NEVER_FITTED.has(row.method) || !inside ? RowState.notFitted : RowState.point;
+    table.state[at] = isNeverFitted(row.method) || !inside ? RowState.notFitted : RowState.point;
     table.reportedValue[at] = value;
     table.massRatio[at] = r;
     table.moleFraction[at] = x;
     table.massConcentration[at] = c;
     table.molPerL[at] = c / identity.soluteMolarMass;
-    // d ln x/d ln r = 1 - x: what is relative to r is less so to x when the solution is rich.
-    table.relativeU[at] = Number.isNaN(x) ? relative : relative * (1 - x);
-    table.assumptions[at] = assumptionsCode(
-      row,
-      u.assumption,
-      inside ? undefined : "outside the temperature window: not fitted",
-    );
+    table.relativeU[at] = Math.sqrt(own * own + shared * shared);
+    table.sharedU[at] = shared;
+    const notFitted = inside ? undefined : "outside the temperature window: not fitted";
+    table.assumptions[at] = assumptionsCode(row, [u.assumption, rowCautions(context, value, u.relative, r), notFitted]);
     return undefined;
   }
 
@@ -236,7 +234,7 @@ export function normaliseSource(
     table.massRatioLow[at] = descending ? b : a;
     table.massRatioHigh[at] = descending ? a : b;
     const bound = row.reported.kind === "number" ? "no excess solid: a lower bound" : undefined;
-    table.assumptions[at] = assumptionsCode(row, bound, undefined);
+    table.assumptions[at] = assumptionsCode(row, [bound]);
     return undefined;
   }
 
@@ -267,6 +265,7 @@ export function normaliseSource(
     table.reference[at] = codeOf(table.texts, cells.text.reference(reading) || (source.card.reference ?? ""));
     table.doi[at] = codeOf(table.texts, cells.text.doi(reading) || (source.card.doi ?? ""));
     table.carried[at] = codeOf(table.texts, carriedText(reading));
+    table.solidChecked[at] = solidChecked(reading, who);
     return at;
   }
 
@@ -283,12 +282,15 @@ export function normaliseSource(
     return text;
   }
 
-  function assumptionsCode(
-    { who, context, temperature }: Row,
-    value: string | undefined,
-    more: string | undefined,
-  ): number {
-    const all = [...who.assumptions, ...context.assumptions, temperature.assumption, value, more];
-    return codeOf(table.texts, all.filter((text) => text !== undefined && text !== "").join("; "));
+  function assumptionsCode({ who, context, temperature }: Row, more: readonly (string | undefined)[]): number {
+    let text = "";
+    const add = (one: string | undefined) => {
+      if (one) text = text === "" ? one : `${text}; ${one}`;
+    };
+    who.assumptions.forEach(add);
+    context.assumptions.forEach(add);
+    add(temperature.assumption);
+    more.forEach(add);
+    return codeOf(table.texts, text);
   }
 }

@@ -80,13 +80,28 @@ export const cellKinds = {
     meaning:
       "Above 20 g/L it matters whether the volume is that of the solution or of the solvent, and the unit does not say.",
     expected: "mg/mL solution, mg/mL solvent, g/L solution or g/L solvent",
-    mend: "write the unit out in full, as the origin of the data defines it",
+    mend: "write the unit out in full, as the origin of the data defines it; state volume_temperature where the volume was not measured at 20 °C (solvent) or at the temperature of the measurement (solution)",
   },
   "open-hydrate-basis": {
     stops: "reading",
     meaning: "The solid is a hydrate or solvate, and it is open whether the amount counts its crystal solvent.",
     expected: "solute_basis: anhydrous, hydrate per added solvent, or hydrate equivalent per total solvent",
     mend: "state solute_basis in a column or as a constant of the card",
+  },
+  "open-salt-basis": {
+    stops: "reading",
+    meaning:
+      "The solid is a salt or co-crystal of the solute, and it is open whether the amount is the mass of the salt or of the free acid or base.",
+    expected:
+      "solute_basis: anhydrous for the mass of the free acid or base, or hydrate equivalent per total solvent for the mass of the salt",
+    mend: "state solute_basis in a column or as a constant of the card; or name the salt itself as the solute",
+  },
+  "unknown-guest-count": {
+    stops: "reading",
+    meaning:
+      "The conversion needs to know how much crystal solvent or counter-ion the form holds, and it is not known.",
+    expected: "a form whose name says its water (monohydrate, pentahydrate), or one listed with its molar mass",
+    mend: "name the count in solid_form, or add the form with guest_per_solute and molar_mass to solid_forms.csv",
   },
   "open-composition": {
     stops: "reading",
@@ -105,6 +120,19 @@ export const cellKinds = {
     meaning: "The solvent is not in the tables of substances.",
     expected: "a name, synonym or registry number of a listed solvent",
     mend: "correct the name, or add the solvent to substances.csv of the collection",
+  },
+  "unknown-solute": {
+    stops: "nothing",
+    meaning:
+      "The solute is in no table of substances but its name is close to one that is; it stays a substance of its own.",
+    expected: "a name, synonym or identifier of a listed substance, or a substance that is really new",
+    mend: "correct the name, or add the solute to substances.csv of the collection",
+  },
+  "identifier-over-name": {
+    stops: "nothing",
+    meaning: "Name and identifier of one row stand for different substances; the identifier decided.",
+    expected: "name and identifier of one substance",
+    mend: "find out which of them is right and correct the other",
   },
   "unresolved-identity": {
     stops: "reading",

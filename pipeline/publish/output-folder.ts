@@ -1,22 +1,9 @@
-import { createHash } from "node:crypto";
-import {
-  closeSync,
-  existsSync,
-  fsyncSync,
-  mkdirSync,
-  openSync,
-  readdirSync,
-  readFileSync,
-  realpathSync,
-  renameSync,
-  rmSync,
-  statSync,
-  writeFileSync,
-  writeSync,
-} from "node:fs";
+import { existsSync, mkdirSync, readdirSync, readFileSync, realpathSync, renameSync, rmSync, statSync } from "node:fs";
 import { basename, dirname, join, resolve, sep } from "node:path";
-import { type Problem, problem } from "../problems/catalogue.ts";
+import { type Problem, type ProblemCode, problem } from "../problems/catalogue.ts";
 import type { WrittenFile } from "../records/generated/summary.ts";
+import { type Lock, takeLock } from "./lock.ts";
+import { flushFolder, writeWhole } from "./write-file.ts";
 
 /** Raised when an output folder cannot be used or written; `problem` says why and how to mend it. */
 export class OutputError extends Error {
@@ -27,11 +14,10 @@ export class OutputError extends Error {
   }
 }
 
-/** Text is written in pieces of about this many characters. */
-const PIECE = 1 << 16;
-
 /** An output folder being built beside its final place. */
 export interface OutputFolder {
+  /** The temporary folder that the files are written to until they are committed. */
+  readonly building: string;
   /** Writes one file, piece by piece, and remembers its SHA-256. */
   readonly write: (name: string, text: Iterable<string>) => void;
   /** Every file written so far with its size and SHA-256, in code-unit order of the paths. */
@@ -42,28 +28,22 @@ export interface OutputFolder {
   readonly discard: () => void;
 }
 
-/** The temporary siblings of an output folder: the one being written, and the one being replaced. */
+/** The temporary siblings of an output folder: the one being written, the one being replaced, and the lock. */
 const siblings = (folder: string) => {
   const beside = (suffix: string) => join(dirname(folder), `.${basename(folder)}.saltern-${suffix}`);
-  return { fresh: beside("new"), old: beside("old") };
+  return { fresh: beside("new"), old: beside("old"), lock: beside("lock") };
 };
 
-/** True if a process with this number runs on this machine. */
-function isRunning(pid: number): boolean {
-  try {
-    process.kill(pid, 0);
-    return true;
-  } catch (error) {
-    return (error as NodeJS.ErrnoException).code === "EPERM";
-  }
-}
-
 /** Turns a file-system error into a problem with a remedy. */
-function writeError(folder: string, error: unknown): OutputError {
+export function writeError(place: string, error: unknown): OutputError {
   if (error instanceof OutputError) return error;
   const { code, message } = error as NodeJS.ErrnoException;
   const kind = code === "ENOSPC" || code === "EDQUOT" ? "no-space" : "output-not-writable";
-  return new OutputError(problem(kind, { file: folder }, { found: message }));
+  return new OutputError(problem(kind, { file: place }, { found: message }));
+}
+
+function refuse(code: ProblemCode, folder: string, found: string): never {
+  throw new OutputError(problem(code, { file: folder }, { found }));
 }
 
 /** Real path of a folder that need not exist yet: that of its nearest existing parent, with the rest appended. */
@@ -71,33 +51,27 @@ function realPath(folder: string): string {
   return existsSync(folder) ? realpathSync(folder) : join(realPath(dirname(folder)), basename(folder));
 }
 
-/** Refuses a folder that is the collection, a parent of it, or holds somebody's files. */
-function checkIsOurs(folder: string, collection: string): void {
+/** Refuses a folder that is the collection, a parent of it, or a part of it that holds inputs. */
+function checkIsNoInput(folder: string, collection: string): void {
   const [out, input] = [realPath(folder), realPath(collection)];
   if (input === out || input.startsWith(out === sep ? sep : out + sep)) {
-    throw new OutputError(
-      problem("output-is-input", { file: folder }, { found: `${folder} holds the collection ${collection}` }),
-    );
+    refuse("output-is-input", folder, `${folder} holds the collection ${collection}`);
   }
   if (["sources", "schemas"].some((part) => out === join(input, part) || out.startsWith(join(input, part) + sep))) {
-    throw new OutputError(
-      problem("output-is-input", { file: folder }, { found: `${folder} is part of the collection` }),
-    );
+    refuse("output-is-input", folder, `${folder} is part of the collection`);
   }
+}
+
+/** Refuses a folder that holds somebody's files. */
+function checkIsOurs(folder: string): void {
   if (!existsSync(folder)) return;
-  if (!statSync(folder).isDirectory()) {
-    throw new OutputError(problem("output-not-ours", { file: folder }, { found: `${folder} is a file` }));
-  }
+  if (!statSync(folder).isDirectory()) refuse("output-not-ours", folder, `${folder} is a file`);
   const names = readdirSync(folder);
   if (names.length > 0 && !hasOurSummary(folder)) {
-    throw new OutputError(
-      problem(
-        "output-not-ours",
-        { file: folder },
-        { found: `${folder} holds ${names.length} entries and no summary.json of ours` },
-      ),
-    );
+    refuse("output-not-ours", folder, `${folder} holds ${names.length} entries and no summary.json of ours`);
   }
+  // A published edition is never replaced, not even by working tables.
+  if (names.includes("edition.json")) refuse("edition-exists", folder, `${folder} holds a published edition`);
 }
 
 /** True if the folder holds a summary.json written by this program. */
@@ -113,15 +87,26 @@ function hasOurSummary(folder: string): boolean {
 }
 
 /**
- * Opens an output folder. Files go to a temporary sibling; `commit` swaps it in by renaming, so that a reader sees the
- * old tables or the new ones and never a mixture. A swap that was interrupted is repaired first.
- * @throws OutputError if the place is the collection, holds other files, is in use, or cannot be written.
+ * Opens an output folder for working tables. Files go to a temporary sibling; `commit` swaps it in by renaming, so that a
+ * reader sees the old tables or the new ones and never a mixture. A swap that was interrupted is repaired first. One
+ * process at a time writes a folder; a second one is refused.
+ * @throws OutputError if the place is the collection, holds other files or an edition, is in use, or cannot be written
  */
 export function openOutputFolder(path: string, collection: string): OutputFolder {
-  const folder = resolve(path);
-  const { fresh, old } = siblings(folder);
-  const files = new Map<string, WrittenFile>();
-  let open = false;
+  return openFolder(path, collection, checkIsOurs);
+}
+
+/**
+ * Opens the folder of a new edition, DIR/E. It appears in one renaming and is never overwritten.
+ * @throws OutputError `edition-exists`, or as {@link openOutputFolder}
+ */
+export function openEditionFolder(path: string, collection: string): OutputFolder {
+  return openFolder(path, collection, (folder) => {
+    if (existsSync(folder)) refuse("edition-exists", path, `${path} exists`);
+  });
+}
+
+function openFolder(path: string, collection: string, check: (folder: string) => void): OutputFolder {
   const guarded = <T>(action: () => T): T => {
     try {
       return action();
@@ -129,86 +114,71 @@ export function openOutputFolder(path: string, collection: string): OutputFolder
       throw writeError(path, error);
     }
   };
+  // A link in the path is followed, so that the folder it leads to is replaced and not the link.
+  const folder = guarded(() => realPath(resolve(path)));
+  const { fresh } = siblings(folder);
+  const files = new Map<string, WrittenFile>();
+  let lock: Lock | undefined;
+  const close = () => {
+    lock?.release();
+    lock = undefined;
+  };
   guarded(() => {
+    checkIsNoInput(folder, collection);
     mkdirSync(dirname(folder), { recursive: true });
-    repairSwap(folder);
-    checkIsOurs(folder, collection);
-    claim(fresh);
-    open = true;
+    lock = lockOf(folder, path);
+    try {
+      repairSwap(folder);
+      check(folder);
+      rmSync(fresh, { recursive: true, force: true });
+      mkdirSync(fresh);
+    } catch (error) {
+      close();
+      throw error;
+    }
   });
 
   return {
+    building: fresh,
     write: (name, text) => guarded(() => files.set(name, { path: name, ...writeWhole(join(fresh, name), text) })),
     files: () => [...files.values()].sort((a, b) => (a.path < b.path ? -1 : 1)),
     commit: () =>
       guarded(() => {
-        rmSync(join(fresh, CLAIM));
-        if (existsSync(folder)) renameSync(folder, old);
-        renameSync(fresh, folder);
-        open = false;
-        rmSync(old, { recursive: true, force: true });
+        swapIn(folder);
+        close();
       }),
     discard: () => {
-      if (open) rmSync(fresh, { recursive: true, force: true });
-      open = false;
+      if (lock !== undefined) rmSync(fresh, { recursive: true, force: true });
+      close();
     },
   };
 }
 
-/** File that names the process which builds a folder. */
-const CLAIM = ".building";
+function lockOf(folder: string, shown: string): Lock {
+  const taken = takeLock(siblings(folder).lock);
+  if ("heldBy" in taken) refuse("in-use", shown, `${taken.heldBy} is writing this folder now`);
+  return taken;
+}
 
-/** Creates the temporary folder; one left by a process that has ended is removed, one of a living process refused. */
-function claim(fresh: string): void {
-  if (existsSync(fresh)) {
-    const holder = existsSync(join(fresh, CLAIM)) ? Number(readFileSync(join(fresh, CLAIM), "utf8")) : Number.NaN;
-    if (Number.isInteger(holder) && holder !== process.pid && isRunning(holder)) {
-      const found = `process ${holder} is writing this folder now`;
-      throw new OutputError(
-        problem(
-          "output-not-writable",
-          { file: fresh },
-          { found, mend: "wait until it has ended, then run the command again" },
-        ),
-      );
-    }
-    rmSync(fresh, { recursive: true, force: true });
+/** Puts the finished folder in its place; what stood there is put back where that fails, and removed where it works. */
+function swapIn(folder: string): void {
+  const { fresh, old } = siblings(folder);
+  const replaces = existsSync(folder);
+  if (replaces) renameSync(folder, old);
+  try {
+    renameSync(fresh, folder);
+  } catch (error) {
+    if (replaces) renameSync(old, folder);
+    throw error;
   }
-  mkdirSync(fresh);
-  writeFileSync(join(fresh, CLAIM), String(process.pid));
+  flushFolder(dirname(folder));
+  rmSync(old, { recursive: true, force: true });
 }
 
 /** After an interrupted swap the folder is missing and its old state stands beside it: puts it back. */
-export function repairSwap(folder: string): void {
-  const { old } = siblings(resolve(folder));
+function repairSwap(folder: string): void {
+  const { old } = siblings(folder);
   if (!existsSync(old)) return;
   if (existsSync(folder)) rmSync(old, { recursive: true, force: true });
   else renameSync(old, folder);
-}
-
-/** Writes one file in pieces, flushes it to disk, and returns its size in bytes and its SHA-256 in hexadecimal. */
-function writeWhole(file: string, text: Iterable<string>): { bytes: number; sha256: string } {
-  mkdirSync(dirname(file), { recursive: true });
-  const hash = createHash("sha256");
-  const descriptor = openSync(file, "wx");
-  let size = 0;
-  try {
-    let piece = "";
-    const flush = () => {
-      const bytes = Buffer.from(piece, "utf8");
-      for (let done = 0; done < bytes.length; ) done += writeSync(descriptor, bytes, done);
-      hash.update(bytes);
-      size += bytes.length;
-      piece = "";
-    };
-    for (const part of text) {
-      piece += part;
-      if (piece.length >= PIECE) flush();
-    }
-    flush();
-    fsyncSync(descriptor);
-  } finally {
-    closeSync(descriptor);
-  }
-  return { bytes: size, sha256: hash.digest("hex") };
 }

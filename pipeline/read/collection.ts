@@ -8,8 +8,9 @@ import type { RefusedSource, SourceTable, TableRow } from "../records/readings.t
 import { validateCollectionCard } from "../records/validators.js";
 import { CARD_END, cardName, readCard } from "./card-file.ts";
 import { readJsonFile } from "./json-file.ts";
-import { type PropertyTables, readCollectionTables, readOwnTable, readProgramTables } from "./own-tables.ts";
+import { type PropertyTables, readCollectionTables, readProgramTables } from "./own-tables.ts";
 import { fileInside } from "./path-inside.ts";
+import { readRulings } from "./rulings-file.ts";
 import { schemaProblem } from "./schema-faults.ts";
 import { readSource, TABLE_END } from "./source.ts";
 
@@ -75,12 +76,13 @@ export async function readCollection(dir: string): Promise<Collection> {
     if (read.ok) sources.push(read.source);
     else refused.push(read.refused);
   }
+  const rulings = await readRulings(dir);
   return {
     ...{ dir, card, sources: sources.sort(byName), refusedSources: uniquelyNamed(refused, sources).sort(byName) },
     program: await readProgramTables(),
     own: await readCollectionTables(dir),
-    rulings: await readOwnTable(dir, "rulings.csv"),
-    notices: folderNotices(dir, names, cards),
+    rulings: rulings.rows,
+    notices: [...folderNotices(dir, names, cards), ...rulings.notices],
   };
 }
 

@@ -75,8 +75,15 @@ export interface MeasurementTable {
   readonly molPerL: Float64Array;
   /** Relative standard uncertainty of the fitted quantity (x, or r where x is unknown), temperature not included. */
   readonly relativeU: Float64Array;
+  /**
+   * The part of `relativeU` that the rows of one source and system share (molar masses, densities and their models, the
+   * open reading of a bare volume): it does not average out over them; the rest is the row's own.
+   */
+  readonly sharedU: Float64Array;
   /** What the solute was weighed as: a solute basis (`texts`). */
   readonly soluteBasis: Int32Array;
+  /** 1 = the solid in equilibrium was looked at and was the one stated. */
+  readonly solidChecked: Uint8Array;
   /** Measured density of the solution, kg/m3, and temperature of the stated volume, K; NaN where not given. */
   readonly solutionDensity: Float64Array;
   readonly volumeTemperatureK: Float64Array;
@@ -96,7 +103,7 @@ const WHOLE = [
 ] as const;
 const REAL = [
   ...["temperatureK", "temperatureU", "reportedValue", "valueLow", "valueHigh", "massRatioLow", "massRatioHigh"],
-  ...["massRatio", "moleFraction", "massConcentration", "molPerL", "relativeU"],
+  ...["massRatio", "moleFraction", "massConcentration", "molPerL", "relativeU", "sharedU"],
   ...["solutionDensity", "volumeTemperatureK"],
 ] as const;
 
@@ -108,6 +115,7 @@ export function createMeasurementTable(capacity: number): MeasurementTable {
     count: 0,
     texts: createDictionary(),
     state: new Uint8Array(capacity),
+    solidChecked: new Uint8Array(capacity),
     ...Object.fromEntries([...whole, ...real]),
   } as unknown as MeasurementTable;
 }

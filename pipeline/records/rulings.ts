@@ -53,6 +53,7 @@ export interface CorrectedRow {
   readonly massConcentration: number;
   readonly molPerL: number;
   readonly relativeU: number;
+  readonly sharedU: number;
   /** Assumptions of the corrected reading. */
   readonly assumptions: string;
   /** Value and unit used, as text. */
@@ -75,6 +76,8 @@ export type Correct = (
 export interface Rulings {
   /** Rulings in force, in the order of rulings.csv. */
   readonly applied: readonly Ruling[];
+  /** Rows decided on, each with the ruling that holds: the narrowest, then the latest. `keep` decides too. */
+  readonly decided: ReadonlyMap<number, Ruling>;
   /** Rows set aside, each with the ruling that does. */
   readonly setAside: ReadonlyMap<number, Ruling>;
   /** Rows corrected, each with its ruling and the row as it then reads. */
@@ -90,6 +93,7 @@ export interface Rulings {
 /** The rulings of a collection that has none. */
 export const NO_RULINGS: Rulings = {
   applied: [],
+  decided: new Map(),
   setAside: new Map(),
   corrected: new Map(),
   ofFlag: new Map(),

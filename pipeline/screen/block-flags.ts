@@ -1,7 +1,8 @@
 import type { Flag, RobustFit } from "../records/fits.ts";
 import type { OffBlock } from "./block-screen.ts";
-import { AS_READ, middle } from "./causes/compete-block.ts";
+import { AS_READ } from "./causes/compete-block.ts";
 import { decided, type Verdict } from "./causes/compete-point.ts";
+import { middle } from "./middle.ts";
 import { type ScreenInput, sourceName } from "./screen-input.ts";
 import { counted, inCelsius, offBy } from "./wording.ts";
 

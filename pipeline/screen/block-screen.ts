@@ -1,8 +1,9 @@
 import { studentTSurvival } from "../numerics/distributions.ts";
 import type { RobustFit } from "../records/fits.ts";
 import type { Suspects } from "./causes/cause.ts";
-import { AS_READ, type BlockReading, blockOffset, blockReadings, IMPOSSIBLE, middle } from "./causes/compete-block.ts";
+import { AS_READ, type BlockReading, blockOffset, blockReadings, IMPOSSIBLE } from "./causes/compete-block.ts";
 import { rejectionLimit } from "./false-discovery.ts";
+import { middle } from "./middle.ts";
 import { type ScreenInput, thresholdOf } from "./screen-input.ts";
 import { sourceWidePosteriors } from "./source-wide.ts";
 import { deletedOffset, fitSources, type SystemModel } from "./system-model.ts";

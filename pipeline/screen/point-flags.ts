@@ -1,9 +1,12 @@
 import { studentTQuantile } from "../numerics/distributions.ts";
 import type { Flag, RobustFit } from "../records/fits.ts";
 import { textOf } from "../records/measurements.ts";
+import { blocksOf } from "./block-screen.ts";
 import type { Suspects } from "./causes/cause.ts";
-import { competeForPoint } from "./causes/compete-point.ts";
+import { competeForPoint, type Verdict } from "./causes/compete-point.ts";
+import { competeForSeries } from "./causes/compete-series.ts";
 import type { OffPoint } from "./point-screen.ts";
+import { isPossibleTemperature } from "./possible-temperature.ts";
 import type { ScreenInput } from "./screen-input.ts";
 import type { SystemModel } from "./system-model.ts";
 import { counted, inCelsius, offBy, threeDigits } from "./wording.ts";
@@ -11,15 +14,58 @@ import { counted, inCelsius, offBy, threeDigits } from "./wording.ts";
 /** Digits of a proposed value: more than any measurement has. */
 const PROPOSED_DIGITS = 8;
 
-/** The flag of one off point: what was seen, what probably happened, what to look at. */
-export function pointFlag(
+/** Finds what the causes may look at for rows of a source in a system. */
+type SuspectFinder = (system: number, source: number, rows: readonly number[]) => Suspects;
+
+/** The flags of off points: what was seen, what probably happened, what to look at. */
+export function pointFlags(
   input: ScreenInput,
   models: readonly [SystemModel, SystemModel],
-  off: OffPoint,
-  suspects: Suspects,
-): Flag {
+  off: readonly OffPoint[],
+  suspectsOf: SuspectFinder,
+): Flag[] {
+  const verdicts = off.map((one) => {
+    const fit = input.fits[one.system]!;
+    const suspects = suspectsOf(one.system, fit.points.source[one.point]!, [fit.points.row[one.point]!]);
+    return competeForPoint({ input, models, fit, point: one.point, suspects, threshold: one.threshold });
+  });
+  const bends = new Map<number, Verdict>();
+  for (const same of byBlock(input, off)) {
+    const bent = bendOf(
+      input,
+      models[0],
+      same.map((j) => off[j]!),
+      same.map((j) => verdicts[j]!.weight),
+    );
+    for (const j of same) if (bent?.explained.has(off[j]!.point)) bends.set(j, bent.verdict);
+  }
+  return off.map((one, j) => pointFlag(input, one, bends.get(j) ?? verdicts[j]!));
+}
+
+/** Positions of the off points of each block, in order of first appearance. */
+function byBlock({ fits }: ScreenInput, off: readonly OffPoint[]): number[][] {
+  const blocks = new Map<string, number[]>();
+  for (const [j, { system, point }] of off.entries()) {
+    const key = `${system}:${fits[system]!.points.source[point]}`;
+    blocks.set(key, [...(blocks.get(key) ?? []), j]);
+  }
+  return [...blocks.values()];
+}
+
+/** What bends the series of off points of one block, if anything does. */
+function bendOf(input: ScreenInput, model: SystemModel, off: readonly OffPoint[], weights: readonly number[]) {
+  const { system, point } = off[0]!;
+  const fit = input.fits[system]!;
+  if (fit.agreement !== "agreed" || off.some(({ impossible }) => impossible)) return undefined;
+  const source = fit.points.source[point]!;
+  const points = (blocksOf(fit).get(source) ?? []).filter((i) => isPossibleTemperature(fit.points.temperatureK[i]!));
+  const method = textOf(input.table, input.table.method[fit.points.row[point]!]!);
+  const offWeight = new Map(off.map((one, j) => [one.point, weights[j]!]));
+  return competeForSeries({ model, fit, source, points, offWeight, method });
+}
+
+function pointFlag(input: ScreenInput, off: OffPoint, verdict: Verdict): Flag {
   const fit = input.fits[off.system]!;
-  const verdict = competeForPoint({ input, models, fit, point: off.point, suspects, threshold: off.threshold });
   const flag = {
     scope: "measurement",
     code: "off-curve",

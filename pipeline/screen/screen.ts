@@ -4,7 +4,7 @@ import { screenBlocks } from "./block-screen.ts";
 import { createSuspectFinder } from "./causes/suspects.ts";
 import { conflictFlags } from "./conflicts.ts";
 import { liquidRangeFlags } from "./liquid-range.ts";
-import { pointFlag } from "./point-flags.ts";
+import { pointFlags } from "./point-flags.ts";
 import { screenPoints } from "./point-screen.ts";
 import { repeatFlags } from "./repeats.ts";
 import { type ScreenInput, thresholdOf } from "./screen-input.ts";
@@ -27,10 +27,7 @@ export function screen(input: ScreenInput): Flag[] {
   return [
     ...conflictFlags(input, models[0]),
     ...blocks.map((block) => blockFlag(input, block)),
-    ...points.map((off) => {
-      const { row, source } = input.fits[off.system]!.points;
-      return pointFlag(input, models, off, suspectsOf(off.system, source[off.point]!, [row[off.point]!]));
-    }),
+    ...pointFlags(input, models, points, suspectsOf),
     ...cannotTellFlags(input, new Set(points.map(({ system }) => system))),
     ...repeatFlags(input),
     ...liquidRangeFlags(input),

@@ -1,8 +1,7 @@
-import { AS_READ, type BlockReading } from "./causes/compete-block.ts";
+import { AS_READ, type BlockReading, FREE_OFFSET } from "./causes/compete-block.ts";
 
-/** Blocks that the prior counts for when a source's own share of a mistake is estimated. */
+/** Blocks that the prior counts for beside the other blocks of a source. */
 const PRIOR_BLOCKS = 4;
-const ROUNDS = 6;
 
 /** A tested block, as far as this needs it. */
 interface Judged {
@@ -12,42 +11,38 @@ interface Judged {
 
 /**
  * Posterior probabilities of the readings of every block, the blocks of a source lending one another strength: a source
- * that wrote one basis for another did so in more than one system. The share of each mistake within a source is
- * estimated by expectation and maximisation, starting from the priors; blocks that were not suspicious count as read.
+ * that wrote one basis for another did so in more than one system. Each block is first judged alone; then the share of a
+ * mistake among the other blocks of its source joins its prior, as in Dirichlet-multinomial sampling. One round only:
+ * blocks that borrow from what they lent would talk one another into a cause. An offset without a known cause is no
+ * mistake that repeats, and lends nothing. Blocks that were not suspicious count as read.
  *
  * @param blocksOfSource all blocks of each source that could be judged
  */
 export function sourceWidePosteriors(blocks: readonly Judged[], blocksOfSource: Int32Array): number[][] {
+  const alone = blocks.map(({ readings }) => normalised(readings, ({ logPrior }) => Math.exp(logPrior)));
   const bySource = new Map<number, number[]>();
-  for (const [j, { source }] of blocks.entries()) {
-    const same = bySource.get(source);
-    if (same) same.push(j);
-    else bySource.set(source, [j]);
-  }
-  const posteriors: number[][] = blocks.map(({ readings }) => normalised(readings, undefined));
+  for (const [j, { source }] of blocks.entries()) bySource.set(source, [...(bySource.get(source) ?? []), j]);
+  const posteriors: number[][] = [...alone];
   for (const [source, members] of bySource) {
-    for (let round = 0; round < ROUNDS; round++) {
-      const expected = new Map<string, number>();
-      for (const j of members) {
-        for (const [r, { key }] of blocks[j]!.readings.entries())
-          expected.set(key, (expected.get(key) ?? 0) + posteriors[j]![r]!);
-      }
-      const unsuspicious = Math.max(0, blocksOfSource[source]! - members.length);
-      expected.set(AS_READ, (expected.get(AS_READ) ?? 0) + unsuspicious);
-      const all = members.length + unsuspicious;
-      const share = (reading: BlockReading) =>
-        (PRIOR_BLOCKS * Math.exp(reading.logPrior) + (expected.get(reading.key) ?? 0)) / (PRIOR_BLOCKS + all);
-      for (const j of members) posteriors[j] = normalised(blocks[j]!.readings, share);
+    const counts = new Map([[AS_READ, Math.max(0, blocksOfSource[source]! - members.length)]]);
+    for (const j of members) {
+      for (const [r, { key }] of blocks[j]!.readings.entries()) counts.set(key, (counts.get(key) ?? 0) + alone[j]![r]!);
+    }
+    const others = Math.max(members.length, blocksOfSource[source]!) - 1;
+    for (const j of members) {
+      const own = new Map(blocks[j]!.readings.map(({ key }, r) => [key, alone[j]![r]!]));
+      posteriors[j] = normalised(blocks[j]!.readings, ({ key, logPrior }) => {
+        if (key === FREE_OFFSET) return Math.exp(logPrior);
+        const same = Math.max(0, (counts.get(key) ?? 0) - own.get(key)!);
+        return (PRIOR_BLOCKS * Math.exp(logPrior) + same) / (PRIOR_BLOCKS + others);
+      });
     }
   }
   return posteriors;
 }
 
-function normalised(
-  readings: readonly BlockReading[],
-  share: ((reading: BlockReading) => number) | undefined,
-): number[] {
-  const logs = readings.map((reading) => (share ? Math.log(share(reading)) : reading.logPrior) + reading.logDensity);
+function normalised(readings: readonly BlockReading[], prior: (reading: BlockReading) => number): number[] {
+  const logs = readings.map((reading) => Math.log(prior(reading)) + reading.logDensity);
   const top = Math.max(...logs);
   const weights = logs.map((log) => Math.exp(log - top));
   const sum = weights.reduce((total, weight) => total + weight, 0);

@@ -150,31 +150,47 @@ export interface Series {
   readonly noiseVariance: readonly number[];
 }
 
+/** d ln value/dT of the curve at a temperature, 1/K: central difference over 1 K. */
+export function curveSlope(of: SystemModel, temperatureK: number): number {
+  return predictCurve(of, temperatureK + 0.5).mean - predictCurve(of, temperatureK - 0.5).mean;
+}
+
 /**
  * ln of the joint density of a series from a new source, given the fitted sources: curve uncertainty, one common
- * offset of variance `offsetVariance` and noise together.
+ * offset of variance `offsetVariance` and noise together. Returned as a function of the deviations from the curve.
  */
-export function seriesLogDensity(of: SystemModel, series: Series, offsetVariance: number): number {
-  const n = series.lnValue.length;
+export function seriesDensity(
+  of: SystemModel,
+  temperatureK: readonly number[],
+  noiseVariance: readonly number[],
+  offsetVariance: number,
+): (deviations: readonly number[]) => number {
+  const n = temperatureK.length;
   const seriesModel = createGroupedModel(of.model.p, 1);
   priorFromPosterior(seriesModel, of.model);
   seriesModel.groups = 1;
   seriesModel.offsetVariance[0] = offsetVariance;
-  const design = new Float64Array(n * SCREENING_STRIDE);
-  const response = new Float64Array(n);
-  for (let i = 0; i < n; i++) {
-    writeScreeningBasis(series.temperatureK[i]!, of.centreK, of.breakK, design, i * SCREENING_STRIDE);
-    response[i] = series.lnValue[i]! - of.shift - expected(of.model, design, i * SCREENING_STRIDE);
-  }
   const rows: GroupedRows = {
     n,
-    design,
+    design: new Float64Array(n * SCREENING_STRIDE),
     stride: SCREENING_STRIDE,
-    response,
-    variance: Float64Array.from(series.noiseVariance),
+    response: new Float64Array(n),
+    variance: Float64Array.from(noiseVariance),
     group: new Int32Array(n),
   };
+  for (let i = 0; i < n; i++)
+    writeScreeningBasis(temperatureK[i]!, of.centreK, of.breakK, rows.design, i * SCREENING_STRIDE);
   const use = new Uint8Array(n).fill(1);
-  fitGroupedModel(seriesModel, rows, use);
-  return logMarginalDensity(seriesModel, rows, use);
+  return (deviations) => {
+    rows.response.set(deviations);
+    fitGroupedModel(seriesModel, rows, use);
+    return logMarginalDensity(seriesModel, rows, use);
+  };
+}
+
+/** The same of a series of values. */
+export function seriesLogDensity(of: SystemModel, series: Series, offsetVariance: number): number {
+  const { temperatureK, lnValue, noiseVariance } = series;
+  const deviations = lnValue.map((y, i) => y - predictCurve(of, temperatureK[i]!).mean);
+  return seriesDensity(of, temperatureK, noiseVariance, offsetVariance)(deviations);
 }

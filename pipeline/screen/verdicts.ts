@@ -8,7 +8,8 @@ import { materialThreshold } from "./material-threshold.ts";
 import { inCelsius, offBy, threeDigits } from "./wording.ts";
 
 /** What `check` says of a new row. */
-export type Verdict = "fits" | "off the curve" | "outside the range" | "new system" | "cannot tell";
+export const VERDICTS = ["fits", "off the curve", "outside the range", "new system", "cannot tell"] as const;
+export type Verdict = (typeof VERDICTS)[number];
 
 /** The collection's knowledge of one system, for judging new rows. */
 export interface KnownSystem {

@@ -25,18 +25,24 @@ describe("a conversion explained", () => {
     const result = convert(12.3, "mg/mL solution", "mole fraction", needs, { standardUncertainty: 0.3 });
     expect(result.steps.map((step) => step.equation)).toEqual([
       "c = value",
-      "r = w/(1 - w) with w rho(w) = c, that is r = c/(rho - c); 1/rho = w/rho2 + (1 - w)/rho1",
+      "1/rho = w/rho2 + (1 - w)/rho1 at w = r/(1 + r)",
+      "r = c/(rho - c)",
       "x = (r/M2)/(r/M2 + 1/M1)",
       "value = x",
     ]);
     expect(result.steps.map(({ symbol, unit }) => `${symbol} ${unit}`)).toEqual([
       "c kg/m3",
+      "rho kg/m3",
       "r kg/kg",
       "x mol/mol",
       "value mole fraction",
     ]);
-    expect(result.steps[2]?.properties[0]).toMatchObject({ symbol: "M2", value: 151.163, reference: "IUPAC 2021" });
+    const [c, rho, ratio] = result.steps.map(({ value }) => value);
+    expect(ratio).toBeCloseTo((c ?? 0) / ((rho ?? 0) - (c ?? 0)), 14);
+    expect(result.steps[1]?.properties.map(({ symbol }) => symbol)).toEqual(["rho2", "rho1"]);
+    expect(result.steps[3]?.properties[0]).toMatchObject({ symbol: "M2", value: 151.163, reference: "IUPAC 2021" });
     expect(result.assumptions).toEqual([
+      "volume of solution taken at the measuring temperature",
       "solution density by additive volumes, apparent density of the solute 1200 kg/m3, u 120 kg/m3",
     ]);
     expect(result.amplification).toBeCloseTo(1.0125, 4);

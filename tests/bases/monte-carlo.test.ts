@@ -6,7 +6,8 @@ import type { SoluteBasis } from "../../pipeline/bases/hydrate.ts";
 import type { Needs, Quantity } from "../../pipeline/bases/needs.ts";
 import { convert, converterOf } from "./support.ts";
 
-const draws = 100_000;
+/** SALTERN_LONG=1 makes the long run: the standard error of an SD over 100,000 draws is 0.2 %, over 20,000 it is 0.5 %. */
+const draws = process.env.SALTERN_LONG === "1" ? 100_000 : 20_000;
 
 interface Drawn extends Quantity {
   value: number;
@@ -82,7 +83,7 @@ const cases: readonly (readonly [value: number, u: number, unit: string, soluteB
   [1.3, 0.05, "mol/kg solvent", "hydrate per added solvent"],
 ];
 
-describe("first-order propagation against 100,000 draws", () => {
+describe(`first-order propagation against ${draws} draws`, () => {
   test.each(cases)(
     "%s with u %s in %s (%s) agrees within 5 % or says that it does not",
     (value, u, unit, soluteBasis) => {
@@ -90,11 +91,10 @@ describe("first-order propagation against 100,000 draws", () => {
       const more = { standardUncertainty: u, soluteBasis };
       const explained = convert(value, unit, "g/100 g solvent", needs, more);
       const deviation = simulated(value, u, unit, soluteBasis, 20260314) / explained.massRatioRelativeUncertainty - 1;
-      if (Math.abs(deviation) > firstOrderTolerance) {
-        expect(explained.firstOrderDeviation).toBeGreaterThan(firstOrderTolerance);
-      } else {
-        expect(explained.firstOrderDeviation).toBeLessThan(0.08);
-      }
+      const told = explained.cautions.some((text) => text.startsWith("first-order uncertainty"));
+      if (Math.abs(deviation) > firstOrderTolerance) expect(told).toBe(true);
+      // What the row says of itself is what the draws find, as well as three points can tell: to 6 %.
+      expect(Math.abs(explained.firstOrderDeviation - deviation)).toBeLessThan(0.06);
     },
   );
 });

@@ -96,8 +96,9 @@ test.each([
   expect(Math.abs(estimated / density - 1)).toBeLessThan(2 * u);
 });
 
-test("the apparent density is 0.93 of the solid's, u 6 %, and 1200, u 120, where that is unknown", () => {
+test("the apparent density is 0.93 of the solid's, u 6 %, in water 9 %, and 1200, u 120, where that is unknown", () => {
   expect(apparentDensityFromSolid(1000)).toMatchObject({ value: 930, standardUncertainty: 55.8 });
+  expect(apparentDensityFromSolid(1000, true).standardUncertainty).toBeCloseTo(83.7, 12);
   expect(apparentDensityFromSolid(undefined)).toMatchObject({ value: 1200, standardUncertainty: 120 });
 });
 

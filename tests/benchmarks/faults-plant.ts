@@ -22,7 +22,7 @@ export function faultRow(b: Planting, random: RandomSource, row: number, kind: s
   };
   if (kind === "power of ten") put(value * [10, 0.1, 100, 0.01][random.integerBelow(4)]!);
   else if (kind === "dilution factor") put(value / [2, 2, 5, 5, 4, 20][random.integerBelow(6)]!);
-  else if (kind === "random") put(value * Math.exp((0.2 + 1.3 * random.uniform()) * (random.uniform() < 0.5 ? -1 : 1)));
+  else if (kind === "random") put(value * Math.exp(anyAmount(random)));
   else if (kind === "digits transposed") put(transposed(value));
   else if (kind === "rows shifted") {
     const next = row + 1;
@@ -41,10 +41,20 @@ export function faultRow(b: Planting, random: RandomSource, row: number, kind: s
     );
     const other = same[random.integerBelow(same.length)];
     if (other !== undefined) {
+      const there = b.systems[other]!.rows.find(
+        (r) => table.source[r] === table.source[row] && Math.abs(table.temperatureK[r]! - table.temperatureK[row]!) < 1,
+      );
       const unit = table.texts.texts[table.reportedUnit[row]!]!;
-      put(write(b, other, unit, b.truths[other]!(table.temperatureK[row]!) + 0.02 * random.normal(), "anhydrous"));
+      if (there !== undefined) put(table.reportedValue[there]!);
+      else put(write(b, other, unit, b.truths[other]!(table.temperatureK[row]!) + 0.02 * random.normal(), "anhydrous"));
     }
   }
+}
+
+/** A shift of ln value from 15 % to a factor of 6, log-uniform, to either side. */
+export function anyAmount(random: RandomSource): number {
+  const [least, most] = [Math.log(1.15), Math.log(6)];
+  return least * (most / least) ** random.uniform() * (random.uniform() < 0.5 ? -1 : 1);
 }
 
 /** The first swap of neighbouring digits. */

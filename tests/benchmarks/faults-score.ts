@@ -44,6 +44,10 @@ interface Scored {
   readonly majority: boolean;
 }
 
+/** Faults that bend a series; its rows are clean as long as they are bent by less than can be seen. */
+const BENT: ReadonlySet<string> = new Set([
+  ...["everything dissolved", "loss on filtration", "solvent lost", "not at equilibrium", "temperature offset"],
+]);
 const NO_CAUSE = "no simple cause";
 
 /** Adds one world to the score; what went wrong is told in `misses`. */
@@ -114,10 +118,17 @@ function scoreRow(of: Scored, source: number, row: number): void {
     const name = world.transitionSystems.has(of.system) ? "transition" : "clean";
     add(`false flags, ${name} rows`, flagged);
     add("clean rows given a cause", flag !== undefined && flag.suspectedCause !== NO_CAUSE);
-    if (flagged) miss(`false, ${name} row ${key} shift ${shift}: ${(flag ?? of.ofBlock.get(key)!).evidence}`);
+    const told = flag ?? of.ofBlock.get(key);
+    if (told !== undefined) miss(`false, ${name} row ${key} shift ${shift}, ${told.suspectedCause}: ${told.evidence}`);
     return;
   }
   if (!isVisible(world, row)) return;
+  const bent = BENT.has(fault);
+  if (bent) {
+    if (of.majority) add("recall, bent series", flagged);
+    if (of.majority && flagged) scoreCause(of, flag ?? of.ofBlock.get(key)!, fault, "series");
+    return;
+  }
   add(of.majority ? "recall, points" : "recall, points, one source or no majority", flagged);
   if (!flagged && of.majority) miss(`point ${fault} ${key} shift ${shift} not found, conflict ${of.conflict}`);
   if (flag !== undefined) scoreCause(of, flag, fault, "point");
@@ -126,13 +137,17 @@ function scoreRow(of: Scored, source: number, row: number): void {
 function scoreCause({ world, add, miss }: Scored, flag: Flag, fault: string, level: string): void {
   if (fault === "random") {
     add("cause given to random faults", flag.suspectedCause !== NO_CAUSE);
-    if (flag.suspectedCause !== NO_CAUSE) miss(`random named ${flag.suspectedCause}: ${flag.causeDetail}`);
+    add(`  cause given to random faults, ${level}s`, flag.suspectedCause !== NO_CAUSE);
+    if (flag.suspectedCause !== NO_CAUSE)
+      miss(`random named ${flag.suspectedCause}: ${flag.causeDetail} ${flag.causeProbability}`);
     return;
   }
   const right = flag.suspectedCause === fault;
   add("cause right", right);
   add(`  ${level} cause ${fault}`, right);
-  if (!right) miss(`${level} ${fault} named ${flag.suspectedCause}: ${flag.causeDetail}`);
+  const off =
+    flag.row === undefined ? "" : ` (ln x off by ${world.shiftOfRow[flag.row]!.toFixed(2)}; ${flag.evidence})`;
+  if (!right) miss(`${level} ${fault} named ${flag.suspectedCause}: ${flag.causeDetail}${off}`);
   if (flag.proposedValue === undefined || flag.row === undefined) return;
   add("proposed value within 5 %", Math.abs(flag.proposedValue / world.trueReported[flag.row]! - 1) < 0.05);
 }

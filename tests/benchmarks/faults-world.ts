@@ -4,8 +4,9 @@ import { type RandomSource, seededRandom } from "../../pipeline/numerics/random.
 import { codeOf, createMeasurementTable, type MeasurementTable } from "../../pipeline/records/measurements.ts";
 import type { Reread } from "../../pipeline/records/reread.ts";
 import { type System, type SystemPoints, systemPoints } from "../../pipeline/records/systems.ts";
+import { bendOf } from "./faults-bends.ts";
 import { reread, setValue, write } from "./faults-conversions.ts";
-import { faultRow } from "./faults-plant.ts";
+import { anyAmount, faultRow } from "./faults-plant.ts";
 
 /** Invented worlds of measurements in which every fault is known. */
 export interface WorldOptions {
@@ -15,6 +16,8 @@ export interface WorldOptions {
   readonly between: number;
   readonly singleFaults: number;
   readonly blockFaults: number;
+  /** Share of blocks whose series is bent: plateau, cold filter, open vessel, too short a time, wrong thermometer. */
+  readonly bends: number;
   /** Share of systems with a change of the solid phase on heating. */
   readonly transitions: number;
   /** Fewest and most temperatures of a block. */
@@ -30,6 +33,7 @@ export const USUAL: WorldOptions = {
   between: 0.025,
   singleFaults: 0.04,
   blockFaults: 0.08,
+  bends: 0.03,
   transitions: 0.1,
   temperatures: [4, 10],
   steepest: 45,
@@ -170,6 +174,13 @@ function needsOf(solute: Solute, solvent: (typeof SOLVENTS)[number]): Needs {
   };
 }
 
+const BENDS = [
+  "everything dissolved",
+  "loss on filtration",
+  "solvent lost",
+  "not at equilibrium",
+  "temperature offset",
+] as const;
 const BLOCK_KINDS = ["power of ten", "basis mix-up", "basis mix-up", "temperature unit", "dilution factor", "random"];
 const POINT_KINDS = [
   "power of ten",
@@ -209,18 +220,20 @@ function addBlock(
   const kind = random.uniform() < options.blockFaults ? kinds[random.integerBelow(kinds.length)]! : "";
   const power = [10, 0.1, 1000, 0.001, 0.01, 100][random.integerBelow(6)]!;
   const dilution = [2, 5, 4, 20][random.integerBelow(4)]!;
-  const away = (0.2 + 0.6 * random.uniform()) * (random.uniform() < 0.5 ? -1 : 1);
+  const away = anyAmount(random);
   const units = OTHER_UNIT[habit.unit]!;
   const written = kind === "basis mix-up" ? units[random.integerBelow(units.length)]! : habit.unit;
   const scale = habit.temperature === "°F" ? "°C" : "°F";
+  const bent = kind === "" && random.uniform() < options.bends ? BENDS[random.integerBelow(BENDS.length)]! : "";
+  const truth = b.truths[system]!;
+  const bend = bent === "" ? () => 0 : bendOf(random, bent, truth, low, high);
   for (let i = 0; i < n; i++) {
     const T = Math.round(low + ((high - low) * i) / Math.max(1, n - 1)) + 0.15;
     const claimed =
       kind === "temperature unit"
         ? parseTemperatureUnit(habit.temperature)!.toKelvin(parseTemperatureUnit(scale)!.fromKelvin(T))
         : T;
-    const truth = b.truths[system]!;
-    const ln = truth(T) + offset + habit.sd * random.normal() + (kind === "random" ? away : 0);
+    const ln = truth(T) + bend(T) + offset + habit.sd * random.normal() + (kind === "random" ? away : 0);
     const trueValue = write(b, system, habit.unit, ln, "anhydrous");
     let value =
       kind === "hydrate basis"
@@ -237,11 +250,11 @@ function addBlock(
     b.table.temperatureU[row] = 0.1;
     b.table.reportedUnit[row] = codeOf(b.table.texts, habit.unit);
     b.table.relativeU[row] = habit.u;
-    b.faultOfRow[row] = kind;
+    b.faultOfRow[row] = kind === "" ? bent : kind;
     b.trueReported[row] = trueValue;
     setValue(b, row, Number(value.toPrecision(4)));
     if (kind !== "") b.faultOfBlock.set(`${system}:${source}`, kind);
-    else if (random.uniform() < options.singleFaults)
+    else if (bent === "" && random.uniform() < options.singleFaults)
       b.pending.push({ row, kind: POINT_KINDS[random.integerBelow(POINT_KINDS.length)]! });
   }
 }

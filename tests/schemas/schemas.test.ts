@@ -50,9 +50,10 @@ const UNIT = new RegExp(
 describe("the schemas", () => {
   test("cover every file kind of a collection, of the tables and of the machine-readable results", () => {
     expect(schemas.map(({ name }) => name)).toEqual([
-      ...["check-result", "collection", "convert-result", "curves", "curves-json", "flags", "grid", "measurements"],
-      ...["merge-result", "planning-cooling", "property-values", "refused", "rulings", "solid-forms", "source-card"],
-      ...["sources", "substances", "substances-out", "summary", "systems"],
+      ...["check-result", "collection", "compare-result", "convert-result", "curves", "curves-json", "edition"],
+      ...["flags", "grid", "measurements", "merge-result", "planning-cooling", "property-values", "publish-result"],
+      ...["refused", "rule-result", "rulings", "solid-forms", "source-card", "sources", "substances"],
+      ...["substances-out", "summary", "systems"],
     ]);
   });
 

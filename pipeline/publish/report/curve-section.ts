@@ -1,7 +1,7 @@
 import type { Curve, CurveModel } from "../../records/fits.ts";
 import type { GridRow } from "../../records/generated/grid.ts";
 import { celsius, fixed, plainNumber, significant } from "./figures.ts";
-import { type Html, html, raw } from "./html.ts";
+import { type Html, html, raw, short } from "./html.ts";
 import { wideTable } from "./page.ts";
 import type { SystemView } from "./system-view.ts";
 
@@ -60,7 +60,19 @@ function runnersUp({ runnersUp: others, aicc }: Curve): Html {
   return html`<table><caption>Runners-up, on the same kept points</caption><thead><tr><th scope="col">Model</th><th scope="col" class="n">AICc above the chosen</th><th scope="col" class="n">Leave-one-out, %</th><th scope="col">Why it was passed over</th></tr></thead><tbody>${rows}</tbody></table>`;
 }
 
-function curvePart(curve: Curve): Html {
+/** The curve held against the ideal solubility: facts for the list, or why there are none. */
+function idealFacts({ edition, system }: SystemView): Html {
+  const ideal = edition.ideals[system.index];
+  if (ideal === undefined) return html``;
+  if ("whyNot" in ideal) return html`<dt>Ideal solubility</dt><dd>not compared: ${short(ideal.whyNot, 300)}</dd>`;
+  const span = (low: number, high: number) =>
+    significant(low, 3) === significant(high, 3)
+      ? significant(low, 3)
+      : `${significant(low, 3)} to ${significant(high, 3)}`;
+  return html`<dt>Ideal solubility at ${celsius(ideal.temperatureK)} °C</dt><dd><var>x</var> ${span(ideal.low, ideal.high)}; activity coefficient ${span(ideal.gammaLow, ideal.gammaHigh)} (without and with the full heat-capacity term)</dd>`;
+}
+
+function curvePart(curve: Curve, more: Html): Html {
   const letter = curve.fitBasis === "ln x" ? "x" : "r";
   const [low, high] = curve.temperatureRangeK;
   const enthalpy = curve.dissolutionEnthalpy;
@@ -77,7 +89,7 @@ function curvePart(curve: Curve): Html {
 <dt>Scatter within sources (SD)</dt><dd>${scatter}</dd>
 <dt>Scatter between sources (SD)</dt><dd>${between}</dd>
 ${enthalpy === undefined ? "" : html`<dt>Apparent dissolution enthalpy</dt><dd>${significant(enthalpy.value / 1000, 4)} kJ/mol at ${celsius(enthalpy.temperatureK)} °C (95 % limits ${significant(enthalpy.low / 1000, 4)} to ${significant(enthalpy.high / 1000, 4)})</dd>`}
-</dl>${curve.notices.map((notice) => html`<p>Note: ${notice}.</p>`)}</div></div>
+${more}</dl>${curve.notices.map((notice) => html`<p>Note: ${notice}.</p>`)}</div></div>
 ${wideTable("Runners-up", runnersUp(curve))}`;
 }
 
@@ -101,9 +113,10 @@ function valueTable(grid: readonly GridRow[]): Html {
 }
 
 /** Curve with equation, coefficients, quality, runners-up, and values at round temperatures; or why there is none. */
-export function curveSection({ fit }: SystemView, grid: readonly GridRow[]): Html {
+export function curveSection(view: SystemView, grid: readonly GridRow[]): Html {
+  const { fit } = view;
   const curves = fit?.curves ?? [];
   if (curves.length === 0) return html`<h2 id="curve">Curve</h2><p>No curve: ${fit?.noCurve ?? "not fitted"}.</p>`;
   const values = grid.length === 0 ? "" : wideTable("Values at round temperatures", valueTable(grid));
-  return html`<h2 id="curve">Curve</h2>${curves.map(curvePart)}${values}`;
+  return html`<h2 id="curve">Curve</h2>${curves.map((curve, i) => curvePart(curve, i === 0 ? idealFacts(view) : html``))}${values}`;
 }

@@ -1,8 +1,9 @@
 import { type Edition, flagId, measurementId } from "../../records/edition.ts";
 import type { Flag } from "../../records/fits.ts";
+import { rulingPhrase } from "../../records/rulings.ts";
 import { significant } from "./figures.ts";
 import { type Html, html, short } from "./html.ts";
-import type { SystemView } from "./system-view.ts";
+import { rulingsByFlag, type SystemView, waits } from "./system-view.ts";
 
 /** `off-curve` as people say it: `Off the curve`; a code without words of its own loses its hyphens. */
 const WORDS: Readonly<Record<string, string>> = {
@@ -53,11 +54,20 @@ export function causeLine({ suspectedCause, causeDetail, causeProbability, propo
   return html`<p>Suspected cause: <b>${suspectedCause}</b>${detail}${probability}${value}.</p>`;
 }
 
+/** What a person has decided on a flag; nothing where nobody has. */
+export function rulingLine(edition: Edition, flag: Flag): Html | undefined {
+  const ruling = rulingsByFlag(edition).get(flag);
+  return ruling === undefined ? undefined : html`<p><b>Ruling</b>: ${short(rulingPhrase(ruling), 700)}.</p>`;
+}
+
 function flagBox(edition: Edition, flag: Flag): Html {
-  const needs = flag.severity === "blocking";
-  const kind = needs ? html`<span class="need">Needs a person.</span>` : html`<span class="soft">Notice.</span>`;
+  const needs = waits(edition, flag);
+  const ruled = rulingLine(edition, flag);
+  const kind = needs
+    ? html`<span class="need">Needs a person.</span>`
+    : html`<span class="soft">${ruled === undefined ? "Notice." : "Ruled on."}</span>`;
   return html`<div class="flag${needs ? "" : " notice"}"><p>${kind} <b>${flagWords(flag)}</b>: ${flagTarget(edition, flag)}</p>
-<p>${short(sentence(flag.evidence), 1200)}.</p>${causeLine(flag) ?? ""}<p>${short(flag.lookAt, 600)}</p>
+<p>${short(sentence(flag.evidence), 1200)}.</p>${causeLine(flag) ?? ""}<p>${short(flag.lookAt, 600)}</p>${ruled ?? ""}
 <p class="soft">Ruling target: <code>${short(flagId(edition, flag), 240)}</code></p></div>`;
 }
 

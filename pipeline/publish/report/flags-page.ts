@@ -1,10 +1,10 @@
 import { type Edition, measurementId } from "../../records/edition.ts";
 import type { Flag } from "../../records/fits.ts";
 import { counted } from "./figures.ts";
-import { causeLine, flagWords, sentence } from "./flag-section.ts";
+import { causeLine, flagWords, rulingLine, sentence } from "./flag-section.ts";
 import { type Html, html, short } from "./html.ts";
 import { page } from "./page.ts";
-import { titleOf } from "./system-view.ts";
+import { rulingsByFlag, titleOf, waits } from "./system-view.ts";
 
 /** Most flags told on the page; all are in flags.csv. */
 const MOST_FLAGS = 1000;
@@ -12,9 +12,9 @@ const MOST_FLAGS = 1000;
 /** What is decided first: what concerns a whole source or system, then series, then single points. */
 const ORDER: Readonly<Record<Flag["scope"], number>> = { source: 0, system: 1, block: 2, measurement: 3 };
 
-/** Flags that need a person, the widest first. */
-export function byUrgency({ flags }: Edition): Flag[] {
-  return flags.filter(({ severity }) => severity === "blocking").sort((a, b) => ORDER[a.scope] - ORDER[b.scope]);
+/** Flags that wait for a person, the widest first. */
+export function byUrgency(edition: Edition): Flag[] {
+  return edition.flags.filter((flag) => waits(edition, flag)).sort((a, b) => ORDER[a.scope] - ORDER[b.scope]);
 }
 
 /** One flag of a list: what, where with a link to its system, evidence, cause, what to look at. */
@@ -27,14 +27,15 @@ export function flagItem(edition: Edition, flag: Flag): Html {
   const where =
     system === undefined
       ? html`${target}`
-      : html`<a href="systems/${system.id}.html#flags">${short(titleOf(system.identity), 160)}</a>${target === "" ? "" : html`, ${short(target, 120)}`}`;
-  return html`<li><p><b>${flagWords(flag)}</b>: ${where}</p><p>${short(sentence(flag.evidence), 900)}.</p>${causeLine(flag) ?? ""}<p class="soft">${short(flag.lookAt, 400)}</p></li>`;
+      : html`<a href="systems/${system.id}.html#flags">${short(titleOf(system.identity), 300)}</a>${target === "" ? "" : html`, ${short(target, 120)}`}`;
+  return html`<li><p><b>${flagWords(flag)}</b>: ${where}</p><p>${short(sentence(flag.evidence), 900)}.</p>${causeLine(flag) ?? ""}<p class="soft">${short(flag.lookAt, 400)}</p>${rulingLine(edition, flag) ?? ""}</li>`;
 }
 
-/** Every flag: those that need a person, then notices. */
+/** Every flag: those that need a person, those ruled on, then notices. */
 export function flagsPage(edition: Edition): string {
   const urgent = byUrgency(edition);
-  const notices = edition.flags.filter(({ severity }) => severity === "notice");
+  const ruled = edition.flags.filter((flag) => rulingsByFlag(edition).has(flag));
+  const notices = edition.flags.filter((flag) => flag.severity === "notice" && !rulingsByFlag(edition).has(flag));
   const part = (flags: readonly Flag[]): Html => {
     const rest = flags.length - MOST_FLAGS;
     return flags.length === 0
@@ -47,6 +48,7 @@ export function flagsPage(edition: Edition): string {
     body: html`<h1>Flags</h1>
 <p>A flag is a remark with evidence; it changes nothing by itself. A person decides by a ruling: keep, set aside, correct or ask.</p>
 <h2>Need a person (${urgent.length})</h2>${part(urgent)}
+<h2>Ruled on (${ruled.length})</h2>${part(ruled)}
 <h2>Notices (${notices.length})</h2>${part(notices)}`,
   });
 }

@@ -1,5 +1,6 @@
 import { measurementId, type SourceAccount } from "../../records/edition.ts";
 import { textOf } from "../../records/measurements.ts";
+import { rulingPhrase } from "../../records/rulings.ts";
 import { celsius, fixed, percentOff, significant, sourceLetter } from "./figures.ts";
 import { type Html, html, short } from "./html.ts";
 import { wideTable } from "./page.ts";
@@ -40,6 +41,8 @@ interface TableContext {
   /** Assumptions made, and references of single rows. */
   readonly assumptions: Notes;
   readonly references: Notes;
+  /** Decisions of people on single rows. */
+  readonly decisions: Notes;
   /** True if any row carries columns of its source. */
   readonly carries: boolean;
 }
@@ -52,7 +55,7 @@ const range = (low: number, high: number, digits: number): string =>
       : `${significant(low, digits)} to ${significant(high, digits)}`;
 
 function measurementRow(context: TableContext, point: DrawnPoint, budget: RowBudget | undefined): Html {
-  const { table, sources, rowResults } = context.view.edition;
+  const { table, sources, rowResults, rulings } = context.view.edition;
   const { row, state } = point;
   const text = (column: Int32Array) => textOf(table, column[row] as number);
   const reported = text(table.reportedText) || String(table.reportedValue[row]);
@@ -60,10 +63,19 @@ function measurementRow(context: TableContext, point: DrawnPoint, budget: RowBud
   const long = (sources[table.source[row] as number]?.card?.shape ?? "long") === "long";
   const column = long ? "" : html`, ${short(text(table.column), 40)}`;
   const origin = [text(table.reference), text(table.doi)].filter((part) => part !== "").join(", doi ");
-  const notes = `${context.assumptions.numberOf(text(table.assumptions))} ${context.references.numberOf(origin)}`;
+  const corrected = rulings.corrected.get(row);
+  const ruling = rulings.setAside.get(row) ?? corrected?.ruling;
+  const decision =
+    ruling === undefined ? "" : `${rulingPhrase(ruling)}${corrected ? `; now read as ${corrected.row.corrected}` : ""}`;
+  const value = (of: "moleFraction" | "massConcentration") => significant(corrected?.row[of] ?? table[of][row]);
+  const notes = [
+    context.assumptions.numberOf(corrected?.row.assumptions ?? text(table.assumptions)),
+    context.references.numberOf(origin),
+    context.decisions.numberOf(decision),
+  ].join(" ");
   const carried = context.carries ? html`<td class="w">${short(text(table.carried), 120)}</td>` : "";
   const status = `${state.replace(" by the fit", "")}${point.flagged ? ", flagged" : ""}`;
-  return html`<tr><th scope="row" class="t">${sourceLetter(point.source)} ${table.line[row]}${column}</th><td class="t">${status}</td><td class="n">${celsius(point.temperatureK)}</td><td class="n">${short(reported, CELL)}</td><td class="t">${short(text(table.reportedUnit), CELL)}</td><td class="n">${significant(table.moleFraction[row])}</td><td class="n">${percent}</td><td class="n">${significant(table.massConcentration[row])}</td><td class="n">${significant(budget?.value, 2)}</td><td class="n">${significant(budget?.temperatureK, 2)}</td><td class="n">${significant(budget?.both, 2)}</td><td class="n">${percentOff(point.deviationPercent)}</td><td class="n">${fixed(rowResults.z[row], 1)}</td><td class="t">${short(text(table.method), CELL)}</td><td class="t">${notes}</td>${carried}</tr>`;
+  return html`<tr><th scope="row" class="t">${sourceLetter(point.source)} ${table.line[row]}${column}</th><td class="t">${status}</td><td class="n">${celsius(point.temperatureK)}</td><td class="n">${short(reported, CELL)}</td><td class="t">${short(text(table.reportedUnit), CELL)}</td><td class="n">${value("moleFraction")}</td><td class="n">${percent}</td><td class="n">${value("massConcentration")}</td><td class="n">${significant(budget?.value, 2)}</td><td class="n">${significant(budget?.temperatureK, 2)}</td><td class="n">${significant(budget?.both, 2)}</td><td class="n">${percentOff(point.deviationPercent)}</td><td class="n">${fixed(rowResults.z[row], 1)}</td><td class="t">${short(text(table.method), CELL)}</td><td class="t">${notes}</td>${carried}</tr>`;
 }
 
 /** The measurements of one source under its letter, name and file. */
@@ -88,6 +100,7 @@ export function measurementSection(view: SystemView, budgets: readonly RowBudget
     budgets,
     assumptions: notesOf("n"),
     references: notesOf("r"),
+    decisions: notesOf("d"),
     carries: shown.some(({ row }) => table.carried[row] !== 0),
   };
   const blocks = view.sources.map((source) => sourceBlock(context, source, shown));
@@ -97,5 +110,5 @@ export function measurementSection(view: SystemView, budgets: readonly RowBudget
   const heads = html`<tr><th scope="col">Line</th><th scope="col">Status</th><th scope="col" class="n">°C</th><th scope="col" class="n">Reported</th><th scope="col">Unit</th><th scope="col" class="n">x</th><th scope="col" class="n">g/100 g solvent</th><th scope="col" class="n">mg/mL solution</th><th scope="col" class="n">u, %</th><th scope="col" class="n">u(T), K</th><th scope="col" class="n">u with T, %</th><th scope="col" class="n">Off by, %</th><th scope="col" class="n">z</th><th scope="col">Method</th><th scope="col">Notes</th>${context.carries ? html`<th scope="col">Carried</th>` : ""}</tr>`;
   return html`<h2 id="measurements">Measurements</h2>
 ${wideTable("Measurements", html`<table class="measurements"><caption>${view.points.length} measurements as reported and on the common bases, by source and line of its file; an id is SOURCE:LINE${example}. u: standard uncertainty of the value. Off by, and z: from what the other points say. Left out: weight 0 in the curve.</caption><thead>${heads}</thead>${blocks}</table>`)}
-${rest > 0 ? html`<p>${rest} more in measurements.csv.</p>` : ""}${context.assumptions.list()}${context.references.list()}`;
+${rest > 0 ? html`<p>${rest} more in measurements.csv.</p>` : ""}${context.assumptions.list()}${context.references.list()}${context.decisions.list()}`;
 }

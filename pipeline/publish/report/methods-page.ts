@@ -29,7 +29,7 @@ function models(): Html {
 <dt>Buchowski-Ksiazczak λh${cite("buchowski")}</dt><dd class="eq">${equationHtml("Buchowski-Ksiazczak lambda-h", "x")}</dd>
 <dt>quadratic in 1/<var>T</var>${cite("grant")}</dt><dd class="eq">${equationHtml("quadratic in 1/T", "x")}</dd>
 <dt>constant</dt><dd class="eq">${equationHtml("constant", "x")}, at one temperature</dd></dl>
-<p>Models with three coefficients need at least 6 temperatures over at least 30 K; λh needs the melting point of the solid form. A curve that reaches a mole fraction above 1, or turns where the points do not show it, is passed over. Of the rest the smallest corrected Akaike criterion wins${cite("aicc", "burnham")}; below a difference of 2 the leave-one-out residual decides. The apparent enthalpy of dissolution, −<var>R</var> d ln <var>x</var>/d(1/<var>T</var>), is given at the harmonic mean temperature${cite("krug")}.</p>`;
+<p>Models with three coefficients need at least 6 temperatures over at least 30 K; λh needs the melting point of the solid form. A curve that reaches a mole fraction above 1, or turns where the points do not show it, is passed over. Of the rest the smallest corrected Akaike criterion wins${cite("aicc", "burnham")}; below a difference of 2 the leave-one-out residual decides. The apparent enthalpy of dissolution, −<var>R</var> d ln <var>x</var>/d(1/<var>T</var>), is given at the harmonic mean temperature${cite("krug")}. Where the melting data of the form are known the curve is held against the ideal solubility${cite("prausnitz")}; an activity coefficient near 1 means nearly ideal mixing.</p>`;
 }
 
 function fitting({ scales }: Edition): Html {

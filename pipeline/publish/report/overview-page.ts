@@ -7,6 +7,7 @@ import { byUrgency, flagItem } from "./flags-page.ts";
 import { type Html, html, raw, short } from "./html.ts";
 import { OVERVIEW_SCRIPT } from "./overview-script.ts";
 import { page, wideTable } from "./page.ts";
+import { waits } from "./system-view.ts";
 
 /** Flags told on the overview before it refers to the page of flags. */
 const FLAGS_SHOWN = 12;
@@ -42,10 +43,7 @@ ${tally([
   [edition.sources.length, html`<a href="sources.html">sources</a>`],
   [edition.systems.length, html`systems`],
   [curves, html`curves`],
-  [
-    edition.flags.filter(({ severity }) => severity === "blocking").length,
-    html`<a href="flags.html">flags that need a person</a>`,
-  ],
+  [byUrgency(edition).length, html`<a href="flags.html">flags that need a person</a>`],
 ])}
 <p>Measurements: ${status.kept} kept, ${status["set aside"]} set aside, ${status.interval} known as a range, ${status["not fitted"]} shown and not fitted. Proposed grades: ${gradeWords || "none"}.</p>`;
 }
@@ -95,10 +93,10 @@ function systemRow(edition: Edition, system: System, flags: readonly Flag[]): Ht
     sources.add(table.source[row] as number);
   }
   const models = edition.fits[system.index]?.curves.map(({ model }) => model).join(", ");
-  const blocking = flags.filter(({ severity }) => severity === "blocking").length;
+  const blocking = flags.filter((flag) => waits(edition, flag)).length;
   const liquid = [solvent, composition, medium].filter((part) => part !== "").join(", ");
   const flagged =
-    blocking === 0 ? (flags.length === 0 ? "" : counted(flags.length, "notice")) : `${blocking} to decide`;
+    blocking === 0 ? (flags.length === 0 ? "" : counted(flags.length, "remark")) : `${blocking} to decide`;
   return html`<tr class="system"><th scope="row"><a href="${systemFile(system)}">${short(liquid, 90)}</a></th><td>${short(solidForm, 60)}</td><td class="n">${system.rows.length}</td><td class="n">${sources.size}</td><td class="n">${low === high ? celsius(low) : `${fixed(low - 273.15, 0)} to ${fixed(high - 273.15, 0)}`}</td><td>${rangeBar(low, high)}</td><td class="n">${atRoom(edition, system)}</td><td>${models || "none"}</td><td>${edition.grades[system.index]?.grade ?? ""}</td><td>${flagged}</td></tr>`;
 }
 

@@ -51,7 +51,7 @@ export function refusedPage(edition: Edition): string {
     name: "refused.html",
     body: html`<h1>Refused readings</h1>
 <p>${refused.length === 0 ? "None: every reading became a measurement." : "Nothing was guessed and nothing dropped: each line says what was found and how to mend it. A source refused as a whole counts once."}</p>
-${byKind(refused)}
+${refused.length === 0 ? "" : html`<h2 id="kinds">By kind of problem</h2>${byKind(refused)}`}
 <h2 id="notices">Notices</h2>
 <p>${notices.length === 0 ? "None." : "These stopped nothing; they tell how files were read."}</p>
 ${byKind(notices)}`,

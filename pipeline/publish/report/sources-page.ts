@@ -30,7 +30,7 @@ function sourcePart(source: SourceAccount, within: number | undefined, systems: 
     .slice(0, MOST_SYSTEMS)
     .map(
       (system, i) =>
-        html`${i > 0 ? "; " : ""}<a href="systems/${system.id}.html">${short(titleOf(system.identity), 90)}</a>`,
+        html`${i > 0 ? "; " : ""}<a href="systems/${system.id}.html">${short(titleOf(system.identity), 300)}</a>`,
     );
   return html`<section><h3 id="${source.name}">${short(source.name, 80)}</h3>
 <dl class="facts">${fact("Title", card?.title)}${fact("Origin", card?.origin)}${fact("Reported by", card?.reported_by)}${fact("Laboratory", card?.laboratory)}${fact("Date", card?.date)}${fact("Method", card?.method)}${fact("Reference", card?.reference)}${card?.doi ? fact("DOI", card.doi) : ""}${fact("Licence", card?.licence)}

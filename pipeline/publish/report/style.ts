@@ -12,7 +12,7 @@ const COLOURS = `
 const TEXT = `
 *{box-sizing:border-box}
 html{-webkit-text-size-adjust:100%}
-body{margin:0;background:var(--paper);color:var(--ink);font:17px/1.5 "Iowan Old Style","Palatino Linotype",Palatino,"Book Antiqua",Georgia,"DejaVu Serif",serif}
+body{margin:0;overflow-wrap:anywhere;background:var(--paper);color:var(--ink);font:17px/1.5 "Iowan Old Style","Palatino Linotype",Palatino,"Book Antiqua",Georgia,"DejaVu Serif",serif}
 main,.head,footer{max-width:84rem;margin:0 auto;padding:0 1.5rem}
 a{color:var(--link);text-underline-offset:.15em;text-decoration-thickness:1px}
 a:hover{text-decoration-thickness:2px}

@@ -11,7 +11,7 @@ import { page } from "./page.ts";
 import { planningSection } from "./planning-section.ts";
 import { type PlotPicture, solubilityPlot, vantHoffPlot } from "./plots.ts";
 import { residualPlot } from "./residual-plot.ts";
-import { type SystemView, titleOf } from "./system-view.ts";
+import { type SystemView, titleOf, waits } from "./system-view.ts";
 import { rowBudgets, uncertaintySection } from "./uncertainty-section.ts";
 
 /** Longest name of a solute, form or solvent in running text. */
@@ -49,8 +49,8 @@ ${identity.medium === "" ? "" : html`<dt>Medium</dt><dd>${short(identity.medium,
 }
 
 /** One sentence that leads to the flags, where a person is needed. */
-function summons({ flags }: SystemView): Html {
-  const blocking = flags.filter(({ severity }) => severity === "blocking");
+function summons({ edition, flags }: SystemView): Html {
+  const blocking = flags.filter((flag) => waits(edition, flag));
   if (blocking.length === 0) return html``;
   const words = [...new Set(blocking.map((flag) => flagWords(flag).toLowerCase()))].join(", ");
   return html`<p class="lead"><span class="need">Needs a person:</span> <a href="#flags">${counted(blocking.length, "flag")}</a> (${words}).</p>`;
@@ -80,7 +80,7 @@ function pager({ previous, next }: Neighbours): Html {
   const link = (system: System | undefined, word: string) =>
     system === undefined
       ? html`<span></span>`
-      : html`<span>${word}: ${systemLink(system, short(titleOf(system.identity), 80))}</span>`;
+      : html`<span>${word}: ${systemLink(system, short(titleOf(system.identity), 300))}</span>`;
   return html`<nav class="pager" aria-label="Neighbouring systems">${link(previous, "Previous")}${link(next, "Next")}</nav>`;
 }
 
@@ -91,7 +91,7 @@ export function systemPage(view: SystemView, neighbours: Neighbours, tables: Sys
   return page(view.edition, {
     title,
     depth: 1,
-    body: html`<h1>${short(title, 2 * NAME)}</h1>
+    body: html`<h1>${short(title, 600)}</h1>
 ${summons(view)}${facts(view, neighbours)}
 ${pictures(view)}
 ${flagSection(view)}

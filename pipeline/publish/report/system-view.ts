@@ -1,5 +1,7 @@
+import { safeText } from "../../problems/safe-text.ts";
 import { type Edition, type Grade, statusOf } from "../../records/edition.ts";
 import type { Curve, Flag, SystemFit } from "../../records/fits.ts";
+import type { Ruling } from "../../records/rulings.ts";
 import type { Identity, System } from "../../records/systems.ts";
 import { massRatioFromLn } from "../mass-ratio.ts";
 
@@ -12,7 +14,7 @@ export interface DrawnPoint {
   /** Position of its source in {@link SystemView.sources}. */
   readonly source: number;
   readonly state: PointState;
-  /** True if a flag that needs a person concerns it, by itself or with its block. */
+  /** True if a flag that nobody has ruled on and that needs a person concerns it, by itself or with its block. */
   readonly flagged: boolean;
   readonly temperatureK: number;
   /** ln x or ln r, by the system's fit basis; of an interval its limits. */
@@ -52,9 +54,15 @@ export interface SystemView {
 /** Points at which a curve is drawn. */
 const STEPS = 48;
 
-/** `benzoic acid in ethanol + water (0.500)`: solute and solvent of a system, each part bounded by the page. */
+/** Longest part of a title: a name of 2,000 characters must not hide the solvent behind it. */
+const LONGEST_PART = 120;
+
+/** `benzoic acid in ethanol + water, 0.500`: solute and solvent of a system, each part made safe and bounded. */
 export function titleOf({ solute, solvent, composition, medium }: Identity): string {
-  return `${solute} in ${[solvent, composition, medium].filter((part) => part !== "").join(", ")}`;
+  const parts = [solvent, composition, medium]
+    .filter((part) => part !== "")
+    .map((part) => safeText(part, LONGEST_PART));
+  return `${safeText(solute, LONGEST_PART)} in ${parts.join(", ")}`;
 }
 
 /** What is fitted, as ln x or ln r, from a mass ratio r; -Infinity for 0, NaN for what is unknown. */
@@ -85,11 +93,28 @@ function drawnCurve(curve: Curve): DrawnCurve {
   };
 }
 
-/** Rows that a flag which needs a person concerns, by themselves or with their block. */
-function flaggedRows({ table }: Edition, system: System, flags: readonly Flag[]): Set<number> {
+const ruledFlags = new WeakMap<Edition, ReadonlyMap<Flag, Ruling>>();
+
+/** Rulings by the flag they answer; worked out once for an edition, whose records never change. */
+export function rulingsByFlag(edition: Edition): ReadonlyMap<Flag, Ruling> {
+  const known = ruledFlags.get(edition);
+  if (known !== undefined) return known;
+  const byFlag = new Map(Array.from(edition.rulings.ofFlag, ([i, ruling]) => [edition.flags[i] as Flag, ruling]));
+  ruledFlags.set(edition, byFlag);
+  return byFlag;
+}
+
+/** True for a flag that waits for a person: blocking, and nobody has ruled on it. */
+export function waits(edition: Edition, flag: Flag): boolean {
+  return flag.severity === "blocking" && !rulingsByFlag(edition).has(flag);
+}
+
+/** Rows that a flag which waits for a person concerns, by themselves or with their block. */
+function flaggedRows(edition: Edition, system: System, flags: readonly Flag[]): Set<number> {
   const rows = new Set<number>();
+  const { table } = edition;
   for (const flag of flags) {
-    if (flag.severity !== "blocking") continue;
+    if (!waits(edition, flag)) continue;
     if (flag.scope === "measurement" && flag.row !== undefined) rows.add(flag.row);
     if (flag.scope !== "block") continue;
     for (const row of system.rows) if (table.source[row] === flag.source) rows.add(row);
@@ -112,7 +137,13 @@ export function systemView(edition: Edition, system: System, flags: readonly Fla
   const ofRow = (row: number): DrawnPoint => {
     const at = (column: Float64Array) => column[row] as number;
     const state = stateOf(edition, row);
-    const known = state === "interval" ? Number.NaN : at(table.massRatio);
+    const read = edition.rulings.corrected.get(row)?.row;
+    const [ratio, ratioLow, ratioHigh] = [
+      read?.massRatio ?? at(table.massRatio),
+      read?.massRatioLow ?? at(table.massRatioLow),
+      read?.massRatioHigh ?? at(table.massRatioHigh),
+    ];
+    const known = state === "interval" ? Number.NaN : ratio;
     return {
       row,
       source: position.get(table.source[row] as number) as number,
@@ -120,21 +151,21 @@ export function systemView(edition: Edition, system: System, flags: readonly Fla
       flagged: flagged.has(row),
       temperatureK: at(table.temperatureK),
       ln: lnFromMassRatio(known, system),
-      lnLow: lnFromMassRatio(at(table.massRatioLow), system),
-      lnHigh: lnFromMassRatio(at(table.massRatioHigh), system),
+      lnLow: lnFromMassRatio(ratioLow, system),
+      lnHigh: lnFromMassRatio(ratioHigh, system),
       percent: 100 * known,
-      percentLow: 100 * at(table.massRatioLow),
-      percentHigh: 100 * at(table.massRatioHigh),
+      percentLow: 100 * ratioLow,
+      percentHigh: 100 * ratioHigh,
       deviationPercent: at(rowResults.deviationPercent),
     };
   };
-  const blockingFirst = (flag: Flag) => (flag.severity === "blocking" ? 0 : 1);
+  const order = (flag: Flag) => (waits(edition, flag) ? 0 : flag.severity === "blocking" ? 1 : 2);
   return {
     edition,
     system,
     fit,
     grade: edition.grades[system.index],
-    flags: [...flags].sort((a, b) => blockingFirst(a) - blockingFirst(b)),
+    flags: [...flags].sort((a, b) => order(a) - order(b)),
     sources,
     points: Array.from(system.rows, ofRow),
     curves: fit?.curves.map(drawnCurve) ?? [],

@@ -10,6 +10,8 @@ const STEP_K = 0.05;
 export interface RowBudget {
   /** Of the value itself, as reported or by default, conversion to the fitted quantity included. */
   readonly value: number;
+  /** The part of it that the rows of a source share, so that it does not average out. */
+  readonly shared: number;
   /** Of the temperature, K, and what it does to the value through the slope of the curve, percent. */
   readonly temperatureK: number;
   readonly temperature: number;
@@ -36,7 +38,7 @@ export function rowBudgets(view: SystemView): RowBudget[] {
     const uT = table.temperatureU[row] as number;
     const temperature = 100 * slopeAt(view, temperatureK) * uT;
     const both = Number.isNaN(temperature) ? Number.NaN : Math.hypot(value, temperature);
-    return { value, temperatureK: uT, temperature, both };
+    return { value, shared: 100 * (table.sharedU[row] as number), temperatureK: uT, temperature, both };
   });
 }
 
@@ -47,10 +49,10 @@ export function uncertaintySection(view: SystemView, budgets: readonly RowBudget
     significant(median(values.filter((value) => Number.isFinite(value))), 2);
   const rows = view.sources.map((source, i) => {
     const own = budgets.filter((_, k) => points[k]?.source === i);
-    return html`<tr><th scope="row"><b>${sourceLetter(i)}</b> ${edition.sources[source]?.name ?? ""}</th><td class="n">${percent(own.map(({ value }) => value))}</td><td class="n">${significant(median(own.map(({ temperatureK }) => temperatureK)), 2)}</td><td class="n">${percent(own.map(({ temperature }) => temperature))}</td><td class="n">${percent(own.map(({ both }) => both))}</td><td class="n">${significant(100 * (edition.scales.within[source] as number), 2)}</td></tr>`;
+    return html`<tr><th scope="row"><b>${sourceLetter(i)}</b> ${edition.sources[source]?.name ?? ""}</th><td class="n">${percent(own.map(({ value }) => value))}</td><td class="n">${percent(own.map(({ shared }) => shared))}</td><td class="n">${significant(median(own.map(({ temperatureK }) => temperatureK)), 2)}</td><td class="n">${percent(own.map(({ temperature }) => temperature))}</td><td class="n">${percent(own.map(({ both }) => both))}</td><td class="n">${significant(100 * (edition.scales.within[source] as number), 2)}</td></tr>`;
   });
   const between = fit?.curves[0]?.betweenSd ?? fit?.robust.betweenSd;
   return html`<h2 id="uncertainty">Uncertainty budget</h2>
-${wideTable("Uncertainty budget by source", html`<table><caption>Standard uncertainties in percent of the value: medians over the measurements of each source, beside the scatter seen</caption><thead><tr><th scope="col">Source</th><th scope="col" class="n">Value, %</th><th scope="col" class="n">Temperature, K</th><th scope="col" class="n">Temperature, as %</th><th scope="col" class="n">Both, %</th><th scope="col" class="n">Scatter seen in all its systems, %</th></tr></thead><tbody>${rows}</tbody></table>`)}
+${wideTable("Uncertainty budget by source", html`<table><caption>Standard uncertainties in percent of the value: medians over the measurements of each source, beside the scatter seen</caption><thead><tr><th scope="col">Source</th><th scope="col" class="n">Value, %</th><th scope="col" class="n">Shared by its rows, %</th><th scope="col" class="n">Temperature, K</th><th scope="col" class="n">Temperature, as %</th><th scope="col" class="n">Both, %</th><th scope="col" class="n">Scatter seen in all its systems, %</th></tr></thead><tbody>${rows}</tbody></table>`)}
 <p>Between sources: ${between === undefined ? "unknown" : `${significant(100 * between, 2)} %`} (SD). It is part of both kinds of 95 % limits, also where one source alone measured the system.</p>`;
 }

@@ -1,5 +1,5 @@
 import type { Edition, SourceAccount } from "../../records/edition.ts";
-import { statusOf } from "../../records/edition.ts";
+import { needsRuling, statusOf } from "../../records/edition.ts";
 import type { SourceRow } from "../../records/generated/sources.ts";
 import type { SubstanceRow } from "../../records/generated/substances-out.ts";
 import type { SystemRow } from "../../records/generated/systems.ts";
@@ -83,11 +83,11 @@ export function laboratoriesOf(edition: Edition, rows: Iterable<number>): Set<st
 /** Rows of `systems.csv`, by id. */
 export function systemRows(edition: Edition): Loose<SystemRow>[] {
   const flags = edition.systems.map(() => ({ all: 0, blocking: 0 }));
-  for (const { system, severity } of edition.flags) {
+  for (const [i, { system }] of edition.flags.entries()) {
     const count = system === undefined ? undefined : flags[system];
     if (count === undefined) continue;
     count.all++;
-    if (severity === "blocking") count.blocking++;
+    if (needsRuling(edition, i)) count.blocking++;
   }
   return edition.systems.map((system) => {
     const { identity, rows } = system;

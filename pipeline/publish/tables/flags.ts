@@ -3,7 +3,8 @@ import type { Cell } from "../csv.ts";
 
 /** Rows of `flags.csv`, in the order of the edition's flags. */
 export function* flagRows(edition: Edition): Generator<Cell[]> {
-  for (const flag of edition.flags) {
+  for (const [i, flag] of edition.flags.entries()) {
+    const ruling = edition.rulings.ofFlag.get(i);
     const source = flag.row === undefined ? flag.source : edition.table.source[flag.row];
     yield [
       flagId(edition, flag),
@@ -20,7 +21,7 @@ export function* flagRows(edition: Edition): Generator<Cell[]> {
       flag.proposedValue,
       flag.evidence,
       flag.lookAt,
-      "",
+      ruling && `${ruling.id} ${ruling.action}`,
     ];
   }
 }

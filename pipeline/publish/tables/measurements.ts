@@ -21,9 +21,9 @@ export function flagsByRow(edition: Edition): Map<number, string> {
   return byRow;
 }
 
-/** Reported number, or the reported text where it was an interval. */
+/** Reported number, or the reported text where it was an interval (that of an interval corrected to a number included). */
 function reportedValue(table: MeasurementTable, row: number): Cell {
-  return table.state[row] === RowState.interval
+  return table.state[row] === RowState.interval || Number.isNaN(table.reportedValue[row])
     ? table.texts.texts[table.reportedText[row] as number]
     : table.reportedValue[row];
 }

@@ -1,5 +1,5 @@
 import type { Problem } from "../../problems/catalogue.ts";
-import { curvesOf, type Edition, statusOf } from "../../records/edition.ts";
+import { curvesOf, type Edition, needsRuling, statusOf } from "../../records/edition.ts";
 import type { Counts, Notice, SourceCounts, Summary, WrittenFile } from "../../records/generated/summary.ts";
 
 /** Counts of a whole edition. */
@@ -25,7 +25,7 @@ export function countsOf(edition: Edition): Counts {
     systems: systems.length,
     curves: curvesOf(edition).length,
     flags: flags.length,
-    blocking_flags: flags.filter(({ severity }) => severity === "blocking").length,
+    blocking_flags: flags.filter((_, i) => needsRuling(edition, i)).length,
   };
 }
 

@@ -9,17 +9,17 @@ export interface ConvertResult {
    */
   format: 1;
   /**
-   * Value, in the unit beside it.
+   * Value, in the unit beside it; null where the basis is open and each reading has a value of its own.
    */
-  value: number;
+  value: number | null;
   /**
    * Unit asked for. No unit of its own.
    */
   unit: string;
   /**
-   * Standard uncertainty of the value, in its unit.
+   * Standard uncertainty of the value, in its unit; null where the basis is open.
    */
-  standard_uncertainty: number;
+  standard_uncertainty: number | null;
   /**
    * Steps in their order.
    */
@@ -28,6 +28,18 @@ export interface ConvertResult {
    * What was assumed. No unit.
    */
   assumptions: string[];
+  /**
+   * What weakens the result: a density error amplified beyond use, an uncertainty too large for first order. No unit.
+   */
+  cautions?: string[];
+  /**
+   * What contributes to the standard uncertainty, largest first. Independent of one another: the root of the sum of their squares is the relative standard uncertainty.
+   */
+  budget?: BudgetPart[];
+  /**
+   * Where the basis is open: every way to read the value, converted; absent otherwise.
+   */
+  readings?: Reading[];
 }
 /**
  * One step of a conversion.
@@ -82,4 +94,34 @@ export interface UsedProperty {
    * Where it comes from. Text, no unit.
    */
   reference?: string;
+}
+/**
+ * One contribution to the uncertainty.
+ */
+export interface BudgetPart {
+  /**
+   * What it comes from. Text, no unit.
+   */
+  name: string;
+  /**
+   * Relative standard uncertainty it brings to the result, %.
+   */
+  percent: number;
+}
+/**
+ * One way to read a value whose basis is open.
+ */
+export interface Reading {
+  /**
+   * The unit, the solute basis, or both. Text, no unit.
+   */
+  reading: string;
+  /**
+   * Value under this reading, in the unit of the result; null where it cannot be converted.
+   */
+  value: number | null;
+  /**
+   * Standard uncertainty of the value, in its unit; null where it cannot be converted.
+   */
+  standard_uncertainty: number | null;
 }

@@ -82,7 +82,7 @@ export interface FlagRow {
    */
   look_at: string;
   /**
-   * Ruling on it; key of rulings.csv. No unit.
+   * Ruling that settles it: its name in rulings.csv, and its action. No unit.
    */
   ruling?: string;
 }

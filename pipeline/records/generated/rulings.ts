@@ -9,7 +9,7 @@ export interface RulingRow {
    */
   ruling_id: string;
   /**
-   * Flag id, measurement id, block (SOURCE@SYSTEM) or source it is on. No unit.
+   * Flag id, measurement id, block (SOURCE@SYSTEM) or source it is on; recommended@SYSTEM confirms a grade. No unit.
    */
   target: string;
   /**
@@ -17,11 +17,11 @@ export interface RulingRow {
    */
   action: "keep" | "set aside" | "correct" | "ask";
   /**
-   * Value that replaces the reported one, in corrected_unit; for `correct` alone.
+   * Value that replaces the reported one, in corrected_unit; for `correct` alone. Empty: the reported value stands.
    */
   corrected_value?: number;
   /**
-   * Unit of corrected_value; for `correct` alone. No unit of its own.
+   * Unit that replaces the reported one; for `correct` alone. Empty: the reported unit stands. No unit of its own.
    */
   corrected_unit?: string;
   /**
@@ -41,7 +41,7 @@ export interface RulingRow {
    */
   date: string;
   /**
-   * Hash of the reported fields judged. No unit.
+   * Hash of the reported fields judged: sha256: and the first 16 hexadecimal digits. No unit.
    */
   fingerprint: string;
 }

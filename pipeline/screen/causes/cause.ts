@@ -1,4 +1,5 @@
 import type { Change } from "../../records/reread.ts";
+import type { BlockSeries, Pattern } from "./pattern.ts";
 
 /** The causes a flag may name. */
 export type CauseName =
@@ -82,4 +83,9 @@ export interface Cause {
   /** What the person who measured should look at. */
   readonly lookAt: string;
   readonly explanations: (suspects: Suspects) => readonly Explanation[];
+  /** Rate at which blocks are bent in this way, and the ways; absent where the cause bends no series. Common practice. */
+  readonly bending?: {
+    readonly rate: number;
+    readonly patterns: (series: BlockSeries) => readonly Pattern[];
+  };
 }

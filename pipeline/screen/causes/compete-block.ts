@@ -1,9 +1,12 @@
 import type { RobustFit } from "../../records/fits.ts";
+import { middle } from "../middle.ts";
 import { isPossibleTemperature } from "../possible-temperature.ts";
 import type { ScreenInput } from "../screen-input.ts";
 import { fitSources, predict, predictCurve, type Series, type SystemModel, seriesLogDensity } from "../system-model.ts";
+import { bentReadings, LEFT_OVER } from "./bent-block.ts";
 import type { CauseName, Explanation, Suspects } from "./cause.ts";
 import { EVERY_CAUSE } from "./every-cause.ts";
+import { logSum } from "./log-sum.ts";
 
 /** Readings of a block that are no mistake of a known kind. */
 export const AS_READ = "as read";
@@ -34,9 +37,9 @@ export interface BlockCase {
 
 /** Prior probability that a block is sound as read, and that an off block has no known cause. Common practice. */
 const AS_READ_PRIOR = 0.9;
-const NONE_PRIOR = 0.25;
-/** Variance of the offset of a block that is off for no known cause, ln units squared. */
-const FREE_VARIANCE = 0.64;
+const NONE_PRIOR = 0.1;
+/** Variances of the offset of a block that is off for no known cause, ln units squared: a little or a lot, equally often. */
+const FREE_VARIANCES = [0.0625, 0.64] as const;
 /** Standardised residuals beyond this from the block's own median count as single faults within the block. */
 const STRAY_Z = 5;
 /** ln of the density given to a stray point: a chance of 0.03, spread over about 3 ln units. */
@@ -45,8 +48,6 @@ const STRAY_LOG_DENSITY = Math.log(0.03 / 3);
 export const IMPOSSIBLE = -1e6;
 /** At most this share of a block may be stray. */
 const STRAY_SHARE = 0.25;
-/** Scatter about its own median, in standard deviations, that a re-read block may have in its middle (0.67 expected). */
-const LEFT_OVER = 1.5;
 /** Part of the material threshold from which a point sides with the offset of its block. */
 const ALIKE_SHARE = 0.7;
 
@@ -68,25 +69,41 @@ export function blockReadings(of: BlockCase): BlockReading[] {
       ...none,
       key: FREE_OFFSET,
       logPrior: offPrior + Math.log(NONE_PRIOR),
-      logDensity: density(FREE_VARIANCE + between) ?? strayDensity,
+      logDensity: freeDensity(density, between) ?? strayDensity,
     },
   ];
   for (const cause of EVERY_CAUSE) {
     if (cause.blockPrior === 0) continue;
-    for (const explanation of cause.explanations(of.suspects)) {
-      const logDensity = explained(of, explanation, between);
-      if (logDensity === undefined) continue;
-      readings.push({
-        key: `${cause.name}: ${explanation.detail}`,
-        cause: cause.name,
-        detail: explanation.detail,
-        lookAt: cause.lookAt,
-        logPrior: offPrior + Math.log(cause.blockPrior * explanation.weight),
-        logDensity,
-      });
-    }
+    const read = (detail: string, weight: number, logDensity: number | undefined) => {
+      if (logDensity === undefined) return;
+      const { name, lookAt } = cause;
+      const logPrior = offPrior + Math.log(cause.blockPrior * weight);
+      readings.push({ key: `${name}: ${detail}`, cause: name, detail, lookAt, logPrior, logDensity });
+    };
+    for (const how of cause.explanations(of.suspects)) read(how.detail, how.weight, explained(of, how, between));
+    if (asRead === undefined) continue;
+    const block = { model: of.models[0], series: asRead, method: of.suspects.method, threshold: of.threshold, between };
+    for (const { detail, weight, logDensity } of bentReadings(block, cause)) read(detail, weight, logDensity);
   }
-  return readings;
+  return joined(readings);
+}
+
+/** Log density with an offset that is off a little or a lot. */
+function freeDensity(density: (offsetVariance: number) => number | undefined, between: number): number | undefined {
+  const logs = FREE_VARIANCES.map((variance) => density(variance + between));
+  const known = logs.filter((log) => log !== undefined);
+  return known.length === 0 ? undefined : logSum(known) - Math.log(FREE_VARIANCES.length);
+}
+
+/** Readings of one key as one: the ways in which a cause may bend a series differ in nothing that could be named. */
+function joined(readings: readonly BlockReading[]): BlockReading[] {
+  const byKey = new Map<string, BlockReading[]>();
+  for (const reading of readings) byKey.set(reading.key, [...(byKey.get(reading.key) ?? []), reading]);
+  return [...byKey.values()].map((same) => {
+    const logPrior = logSum(same.map((reading) => reading.logPrior));
+    const logJoint = logSum(same.map((reading) => reading.logPrior + reading.logDensity));
+    return { ...same[0]!, logPrior, logDensity: logJoint - logPrior };
+  });
 }
 
 /** Log density of the re-read block, or undefined where it cannot be re-read or would still be off. */
@@ -157,13 +174,6 @@ function densityOf(of: BlockCase, model: SystemModel, series: Series, offsetVari
     ) +
     (strays + missing) * STRAY_LOG_DENSITY
   );
-}
-
-/** Median of a short list. */
-export function middle(values: readonly number[]): number {
-  const sorted = [...values].sort((a, b) => a - b);
-  const half = sorted.length >> 1;
-  return sorted.length % 2 === 1 ? sorted[half]! : (sorted[half - 1]! + sorted[half]!) / 2;
 }
 
 /**

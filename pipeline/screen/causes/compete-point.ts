@@ -17,6 +17,11 @@ export interface Verdict {
   readonly lookAt: string;
 }
 
+/** The outcome for a point, with the weight of all that was tried: a density of ln value. */
+export interface PointVerdict extends Verdict {
+  readonly weight: number;
+}
+
 /** A cause is named above this posterior probability; a value is proposed above the other. */
 export const NAMED_ABOVE = 0.5;
 export const PROPOSED_ABOVE = 0.9;
@@ -25,8 +30,8 @@ export const LOOK_AGAIN =
   "Look the value and its temperature up in the notebook or the original table; if they stand, measure again.";
 
 /** Prior probability of a random error, and how its size in ln value is spread. Common practice. */
-const NONE_PRIOR = 0.55;
-const NONE_SCALE = 0.9;
+const NONE_PRIOR = 0.7;
+const [NONE_LEAST, NONE_MOST] = [0.14, 2];
 const NONE_WIDEST = 10;
 /** Share of random errors of any size at all. */
 const NONE_WIDE_SHARE = 0.25;
@@ -50,7 +55,7 @@ export interface PointCase {
  * re-read temperature, given the kept points without it; shares within a cause are summed. What is impossible is
  * skipped.
  */
-export function competeForPoint(of: PointCase): Verdict {
+export function competeForPoint(of: PointCase): PointVerdict {
   const { fit, point, models } = of;
   const sound = fit.apartSources.length === 0 ? undefined : new Set(fit.soundSources);
   fitSources(models[0], fit, (source) => sound?.has(source) !== false, point);
@@ -77,7 +82,7 @@ export function competeForPoint(of: PointCase): Verdict {
     const { detail, proposedValue } = winner;
     best = { cause: cause.name, probability: 0, lookAt: cause.lookAt, detail, proposedValue };
   }
-  return decided(best, bestWeight / total);
+  return { ...decided(best, bestWeight / total), weight: total };
 }
 
 interface Evaluated {
@@ -104,7 +109,7 @@ function evaluate(of: PointCase, how: Explanation): Evaluated | undefined {
   const says = SAYS_VALUE.has(change.kind) ? fitting.reportedValue : how.proposes?.(row);
   return {
     detail: how.detail,
-    density: how.weight * ofPartner * normalDensity(fitting.deviation, fitting.variance),
+    density: how.weight * ofPartner * (how.odds?.(row) ?? 1) * normalDensity(fitting.deviation, fitting.variance),
     proposedValue: says,
   };
 }
@@ -139,8 +144,9 @@ function oddsOfFit(deviation: number, variance: number): number {
   return normalDensity(deviation, variance) / noneDensity(deviation);
 }
 
-/** Density of the deviation of a random error: mostly moderate, sometimes anything. */
+/** Density of the deviation of a random error: as many small ones as large ones on a logarithmic scale, some anything. */
 function noneDensity(deviation: number): number {
-  const moderate = Math.exp(-Math.abs(deviation) / NONE_SCALE) / (2 * NONE_SCALE);
-  return (1 - NONE_WIDE_SHARE) * moderate + NONE_WIDE_SHARE / NONE_WIDEST;
+  const size = Math.abs(deviation);
+  const usual = size > NONE_MOST ? 0 : 1 / (2 * Math.max(size, NONE_LEAST) * Math.log(NONE_MOST / NONE_LEAST));
+  return (1 - NONE_WIDE_SHARE) * usual + NONE_WIDE_SHARE / NONE_WIDEST;
 }

@@ -8,8 +8,10 @@ const LEAST_CHANGE = 0.04;
 
 /** Numbers that a swap of two neighbouring, different digits makes of a number as written; the sign and the decimal point stay. */
 export function transpositions(value: number): number[] {
-  const text = String(Math.abs(value));
-  if (text.includes("e")) return [];
+  const written = String(Math.abs(value));
+  if (written.includes("e")) return [];
+  // A zero that a swap brought to the front is not written: 0109 for 1009.
+  const text = written.startsWith("0") ? written : `0${written}`;
   const places = [...text].flatMap((c, i) => (c >= "0" && c <= "9" ? [i] : []));
   const found: number[] = [];
   for (let j = 1; j < places.length; j++) {

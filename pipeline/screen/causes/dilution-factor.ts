@@ -21,8 +21,8 @@ const FORGOTTEN = 0.8;
  */
 export const dilutionFactor: Cause = {
   name: "dilution factor",
-  pointPrior: 0.12,
-  blockPrior: 0.12,
+  pointPrior: 0.15,
+  blockPrior: 0.08,
   lookAt: "Look at the dilution of this sample in the analysis record and whether it was counted once.",
   explanations: () =>
     FACTORS.flatMap(([factor, share]) => [

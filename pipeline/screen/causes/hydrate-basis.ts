@@ -16,7 +16,7 @@ const READINGS: readonly SoluteBasisReading[] = [
  */
 export const hydrateBasis: Cause = {
   name: "hydrate basis",
-  pointPrior: 0.02,
+  pointPrior: 0.006,
   blockPrior: 0.2,
   lookAt:
     "Look at what was weighed in or dried out: the hydrate or the anhydrous solute, and which water it was counted with.",

@@ -3,7 +3,7 @@ import type { MeasurementTable } from "../../records/measurements.ts";
 import { textOf } from "../../records/measurements.ts";
 import type { Identity, System } from "../../records/systems.ts";
 import type { ScreenInput } from "../screen-input.ts";
-import type { Neighbouring, Suspects } from "./cause.ts";
+import type { Suspects } from "./cause.ts";
 
 /** Two tables list the same temperatures to within this, K. */
 const SAME_TEMPERATURE_K = 1;
@@ -58,10 +58,12 @@ export function createSuspectFinder(input: ScreenInput) {
       neighbour: (row, step) => block[(at.get(row) ?? Number.NaN) + step],
       otherSolvents: siblings
         .filter((other) => !sameSolvents(other))
-        .map(neighbouring(({ solvent, composition }) => (composition === "" ? solvent : `${solvent} (${composition})`))),
+        .map(
+          neighbouring(({ solvent, composition }) => (composition === "" ? solvent : `${solvent} (${composition})`)),
+        ),
       otherCompositions: siblings
         .filter((other) => sameSolvents(other) && other.identity.composition !== own.identity.composition)
-        .map(neighbouring(({ solvent, composition }): Neighbouring["name"] => `${solvent}, ${composition}`)),
+        .map(neighbouring(({ solvent, composition }) => `${solvent}, ${composition}`)),
       numberStandsIn: (row, other) =>
         systems[other]!.rows.some(
           (there) =>

@@ -10,7 +10,7 @@ const SCALES = ["°C", "K", "°F"] as const;
  */
 export const temperatureUnit: Cause = {
   name: "temperature unit",
-  pointPrior: 0.03,
+  pointPrior: 0.008,
   blockPrior: 0.15,
   lookAt: "Look at the scale of the temperature column: °C, K or °F.",
   explanations: () =>

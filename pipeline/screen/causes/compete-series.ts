@@ -1,0 +1,199 @@
+import type { RobustFit } from "../../records/fits.ts";
+import {
+  curveSlope,
+  fitSources,
+  predictCurve,
+  type Series,
+  type SystemModel,
+  seriesDensity,
+  seriesLogDensity,
+} from "../system-model.ts";
+import type { Cause } from "./cause.ts";
+import { NAMED_ABOVE, type Verdict } from "./compete-point.ts";
+import { EVERY_CAUSE } from "./every-cause.ts";
+import { logSum } from "./log-sum.ts";
+import { growing, type Pattern } from "./pattern.ts";
+import { bentSeries } from "./pattern-density.ts";
+
+/** A block some of whose points are off, as one series. */
+export interface SeriesCase {
+  readonly model: SystemModel;
+  readonly fit: RobustFit;
+  readonly source: number;
+  /** Points of the block at possible temperatures. */
+  readonly points: readonly number[];
+  /** Weight of each off point on its own: every cause of a single row and "none" together, a density of ln value. */
+  readonly offWeight: ReadonlyMap<number, number>;
+  readonly method: string;
+}
+
+/** What bends a series, and the off points it accounts for. */
+export interface SeriesVerdict {
+  readonly verdict: Verdict;
+  readonly explained: ReadonlySet<number>;
+}
+
+/** Rate of single faults among rows. Common practice. */
+const SINGLE_RATE = 0.03;
+/** Rate of series over which the stable solid changes. Common practice. */
+const CHANGE_OF_SOLID_RATE = 0.1;
+/** An off point farther than this from the bent series, in standard deviations, is off for its own reason. */
+const STRAY_Z = 4;
+/** No value on a plateau is farther from it, in standard deviations. */
+const LEVEL_Z = 3;
+/** Another source bears witness where it has a kept point this near the outermost off point, K. */
+const WITNESS_K = 8;
+
+interface Tried {
+  readonly logWeight: number;
+  readonly explained: readonly number[];
+}
+
+/**
+ * The causes that bend a series compete with single faults: rate x share of the way x density of the whole block so
+ * bent, against the rate of a single fault for each off point times what stands for it alone, times the density of the
+ * other points as read. Without another source near the off points only a plateau can be told from a change of the solid
+ * phase or a curve that is too simple.
+ */
+export function competeForSeries(of: SeriesCase): SeriesVerdict | undefined {
+  const { model, fit, source } = of;
+  const others = new Set(fit.soundSources.filter((other) => other !== source));
+  const otherwise = logWeightOfOtherBent(of, others);
+  fitSources(model, fit, (other) => others.has(other));
+  const order = [...of.points].sort((a, b) => fit.points.temperatureK[a]! - fit.points.temperatureK[b]!);
+  const off = order.filter((point) => of.offWeight.has(point));
+  const none = logWeightOf(
+    of,
+    order.filter((point) => !of.offWeight.has(point)),
+    off,
+  );
+  const witnessed = hasWitness(fit, others, off);
+  const { temperatureK, lnValue } = seriesOf(fit, order);
+  const slope = others.size === 0 ? undefined : temperatureK.map((T) => curveSlope(model, T));
+  let total = 1 + Math.exp(otherwise - none);
+  if (!witnessed) {
+    // Without a witness the curve itself may turn there: another solid phase gives the same picture.
+    for (const pattern of growing({ temperatureK }, 1, -1, "")) {
+      const tried = tryPattern(of, order, off, pattern);
+      if (tried !== undefined) total += CHANGE_OF_SOLID_RATE * pattern.weight * Math.exp(tried.logWeight - none);
+    }
+  }
+  let best: { cause: Cause; pattern: Pattern; explained: readonly number[] } | undefined;
+  let bestSum = 0;
+  for (const cause of EVERY_CAUSE) {
+    let sum = 0;
+    let top = 0;
+    let winner: typeof best;
+    for (const pattern of cause.bending?.patterns({ temperatureK, lnValue, slope, method: of.method }) ?? []) {
+      const tried = witnessed || pattern.kind === "level" ? tryPattern(of, order, off, pattern) : undefined;
+      if (tried === undefined) continue;
+      const weight = cause.bending!.rate * pattern.weight * Math.exp(tried.logWeight - none);
+      sum += weight;
+      if (weight <= top) continue;
+      top = weight;
+      winner = { cause, pattern, explained: tried.explained };
+    }
+    total += sum;
+    if (sum <= bestSum) continue;
+    bestSum = sum;
+    best = winner;
+  }
+  const probability = bestSum / total;
+  if (best === undefined || !(probability > NAMED_ABOVE)) return undefined;
+  const { name, lookAt } = best.cause;
+  const verdict = { cause: name, detail: best.pattern.detail, lookAt, probability, proposedValue: undefined };
+  return { verdict, explained: new Set(best.explained) };
+}
+
+/**
+ * ln weight of the other reading where exactly one other source is there to compare with: this block as read, and the
+ * other source bent. Both readings are p(one) p(other | one); p alone is the density under the prior of the curve.
+ */
+function logWeightOfOtherBent(of: SeriesCase, others: ReadonlySet<number>): number {
+  const [other] = others;
+  if (other === undefined || others.size !== 1) return Number.NEGATIVE_INFINITY;
+  const { model, fit, source } = of;
+  const variance = fit.betweenSd ** 2;
+  const ascending = (points: number[]) =>
+    points.sort((a, b) => fit.points.temperatureK[a]! - fit.points.temperatureK[b]!);
+  const own = ascending([...of.points]);
+  const theirs = ascending(
+    [...fit.points.source.keys()].filter((i) => fit.points.source[i] === other && fit.kept[i] === 1),
+  );
+  fitSources(model, fit, () => false);
+  const alone = (points: readonly number[]) => seriesLogDensity(model, seriesOf(fit, points), variance);
+  const apart = alone(own) - alone(theirs);
+  const kept = Uint8Array.from(fit.points.source, (s, i) => (s === source && of.points.includes(i) ? 1 : 0));
+  fitSources(model, { ...fit, kept }, (s) => s === source);
+  const { temperatureK, lnValue } = seriesOf(fit, theirs);
+  const slope = temperatureK.map((T) => curveSlope(model, T));
+  const ways = EVERY_CAUSE.flatMap(({ bending }) =>
+    (bending?.patterns({ temperatureK, lnValue, slope, method: of.method }) ?? []).map(
+      (pattern) =>
+        Math.log(bending!.rate * pattern.weight) +
+        bentSeries(model, seriesOf(fit, theirs), variance, pattern).logDensity,
+    ),
+  );
+  return ways.length === 0 ? Number.NEGATIVE_INFINITY : apart + logSum(ways);
+}
+
+/** ln weight of points as read, times that of single faults. */
+function logWeightOf(of: SeriesCase, sound: readonly number[], single: readonly number[]): number {
+  const { model, fit, offWeight } = of;
+  const weight = single.reduce((sum, point) => sum + Math.log(SINGLE_RATE * offWeight.get(point)!), 0);
+  if (sound.length === 0) return weight;
+  const { temperatureK, lnValue, noiseVariance } = seriesOf(fit, sound);
+  const deviations = lnValue.map((y, i) => y - predictCurve(model, temperatureK[i]!).mean);
+  return weight + seriesDensity(model, temperatureK, noiseVariance, fit.betweenSd ** 2)(deviations);
+}
+
+/** The block under a pattern; off points that stray from it count as single faults. Undefined where it explains none. */
+function tryPattern(
+  of: SeriesCase,
+  order: readonly number[],
+  off: readonly number[],
+  pattern: Pattern,
+): Tried | undefined {
+  const { fit, model } = of;
+  const variance = fit.betweenSd ** 2;
+  const first = bentSeries(model, seriesOf(fit, order), variance, pattern);
+  const z = new Map(order.map((point, i) => [point, Math.abs(first.left[i]!) / first.leftSd[i]!]));
+  const strays = new Set(off.filter((point) => z.get(point)! > STRAY_Z));
+  const touched = order.filter((_, i) => (pattern.kind === "level" ? i >= pattern.from : pattern.shape[i] !== 0));
+  const explained = touched.filter((point) => of.offWeight.has(point) && !strays.has(point));
+  if (explained.length === 0) return undefined;
+  if (pattern.kind === "level") {
+    // A plateau lies below the curve, and all its values are the same.
+    if (fit.deviation[explained[0]!]! > 0 || touched.some((point) => z.get(point)! > LEVEL_Z)) return undefined;
+  }
+  if (strays.size === 0) return { logWeight: first.logDensity, explained };
+  const rest = order.filter((point) => !strays.has(point));
+  const without = withoutPoints(pattern, order, strays);
+  if (without === undefined) return undefined;
+  const { logDensity } = bentSeries(model, seriesOf(fit, rest), variance, without);
+  return { logWeight: logDensity + logWeightOf(of, [], [...strays]), explained };
+}
+
+/** The pattern on a series that lacks some points; undefined where too little of it is left. */
+function withoutPoints(pattern: Pattern, order: readonly number[], strays: ReadonlySet<number>): Pattern | undefined {
+  if (pattern.kind === "growing") return { ...pattern, shape: pattern.shape.filter((_, i) => !strays.has(order[i]!)) };
+  const from = order.slice(0, pattern.from).filter((point) => !strays.has(point)).length;
+  return from === 0 || order.length - strays.size - from < 2 ? undefined : { ...pattern, from };
+}
+
+function hasWitness({ points, kept }: RobustFit, others: ReadonlySet<number>, off: readonly number[]): boolean {
+  const temperatures = off.map((point) => points.temperatureK[point]!);
+  return temperatures.every((T) =>
+    points.source.some(
+      (source, i) => others.has(source) && kept[i] === 1 && Math.abs(points.temperatureK[i]! - T) <= WITNESS_K,
+    ),
+  );
+}
+
+function seriesOf({ points, noiseSd }: RobustFit, of: readonly number[]): Series {
+  return {
+    temperatureK: of.map((point) => points.temperatureK[point]!),
+    lnValue: of.map((point) => points.lnValue[point]!),
+    noiseVariance: of.map((point) => noiseSd[point]! ** 2),
+  };
+}
