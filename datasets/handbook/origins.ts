@@ -14,7 +14,7 @@ export interface Origin {
 
 const FACTS = "published values, quoted as facts with their reference";
 const CRC = "J. R. Rumble (ed.), CRC Handbook of Chemistry and Physics, 98th ed., CRC Press 2017, table";
-const COPY = "read in a public transcription (chicolucio/solutions), the printed table was not seen";
+const COPY = "read in a public copy (chicolucio/solutions), the printed table was not seen";
 const MOHOS = "F. A. Mohos, Confectionery and Chocolate Engineering, 2010, Table";
 const MEMORY = "from memory, not verified against the source";
 

@@ -83,7 +83,7 @@ interface Search {
  *
  * Stops when the relative offset is at most 1e-9 or every Gauss-Newton step is at most 1e-11 of its parameter.
  * @throws RangeError if residuals or Jacobian are not finite at the start, or n is below the number of parameters.
- * @see More, in Numerical Analysis, Lecture Notes in Mathematics 630 (1978) 105-116 (scaling); Nielsen, IMM-REP-1999-05
+ * @see More, in Numerical Analysis, ed. Watson (Springer, 1978) 105-116 (scaling); Nielsen, IMM-REP-1999-05
  *   (damping); Bates and Watts, Technometrics 23 (1981) 179-183 (relative offset).
  */
 export function levenbergMarquardt(problem: NonlinearProblem): NonlinearFit {

@@ -2,7 +2,7 @@ import { describe, expect, test } from "vitest";
 import { equilibriumRecovery } from "../../../pipeline/publish/planning/cooling.ts";
 
 // g unsolvated per 100 g water: CRC Handbook of Chemistry and Physics, 98th edition (2017), table Aqueous Solubility of
-// Inorganic Compounds at Various Temperatures, as read in a public transcription of it.
+// Inorganic Compounds at Various Temperatures, as read in a public copy of it.
 const ANHYDROUS: Readonly<Record<string, Readonly<Record<number, number>>>> = {
   KNO3: { 0: 13.64, 20: 31.93, 60: 109.2, 80: 170.3 },
   KCl: { 0: 27.78, 20: 34.03, 60: 45.77, 80: 51.19 },
