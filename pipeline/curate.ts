@@ -21,6 +21,7 @@ import { createTargets } from "./rule/targets.ts";
 import { touchedSystems } from "./rule/touched-systems.ts";
 import { materialThreshold } from "./screen/material-threshold.ts";
 import { screen } from "./screen/screen.ts";
+import { thresholdKind } from "./screen/threshold-kind.ts";
 
 /** An edition with what `check` needs to judge new rows against it. */
 export interface Curated {
@@ -59,6 +60,7 @@ export async function curate(
   onStage("group");
   const systems = groupIntoSystems(table, register.identities);
   const liquors = systems.map(normalised.liquorOf);
+  const kinds = systems.map((system) => thresholdKind(table, system));
 
   onStage("fit");
   const context: FitContext = {
@@ -69,8 +71,7 @@ export async function curate(
       liquors[i]?.solventFreezingPointK ?? Number.NaN,
       liquors[i]?.solventBoilingPointK ?? Number.NaN,
     ],
-    threshold: ({ identity }, level, lnU) =>
-      materialThreshold(level, lnU, identity.aqueousSalt ? "aqueous salt" : "general", settings),
+    threshold: ({ index: i }, level, lnU) => materialThreshold(level, lnU, kinds[i] ?? "general", settings),
     settings,
   };
   const first = fitEdition(table, systems, context);
@@ -80,8 +81,8 @@ export async function curate(
   const flags = screen({
     ...{ table, systems, scales, settings },
     fits: first.fits.map(({ robust }) => robust),
-    about: systems.map(({ identity, index: i }) => ({
-      kind: identity.aqueousSalt ? ("aqueous salt" as const) : ("general" as const),
+    about: systems.map(({ index: i }) => ({
+      kind: kinds[i] ?? "general",
       boilingPointK: liquors[i]?.solventBoilingPointK ?? Number.NaN,
       freezingPointK: liquors[i]?.solventFreezingPointK ?? Number.NaN,
     })),

@@ -76,8 +76,7 @@ export async function askRuling(
 const TARGETS = "the id of a flag or measurement, SOURCE@SYSTEM, or the name of a source";
 
 function tellOpen(open: readonly string[], terminal: Terminal): void {
-  if (open.length === 0) return terminal.tell("No flag needs a ruling.");
-  terminal.tell("Flags that need a ruling:");
+  terminal.tell(open.length === 0 ? "No flag needs a ruling." : "Flags that need a ruling:");
   for (const id of open.slice(0, LISTED)) terminal.tell(`  ${safeText(id)}`);
   if (open.length > LISTED) terminal.tell(`  and ${open.length - LISTED} more in flags.csv`);
 }

@@ -35,7 +35,7 @@ export async function rule(dir: string, options: RuleOptions, terminal: Terminal
   const line = { ...ruling, fingerprint: targets.fingerprint(target.rows) };
   const { edition, applied, told } = await tryOut(collection, line, options.version, terminal);
   const id = appendRuling(dir, line);
-  const result = resultOf({ before, edition, applied: { ...applied, id }, told, file: join(dir, "rulings.csv") });
+  const result = resultOf({ before, edition, applied, told, id, file: join(dir, "rulings.csv") });
   if (options.json) terminal.print(JSON.stringify(result));
   else for (const text of account(result, { ...applied, id }, target, before, edition)) terminal.print(text);
   for (const notice of told) terminal.tell(`notice: ${formatProblem(notice)}`);
@@ -63,27 +63,22 @@ interface Outcome {
   readonly edition: Edition;
   readonly applied: Ruling;
   readonly told: readonly Problem[];
+  readonly id: string;
   readonly file: string;
 }
 
-function resultOf({ before, edition, applied, told, file }: Outcome): RuleResult {
+function resultOf({ before, edition, applied, told, id, file }: Outcome): RuleResult {
   const settled = edition.flags.filter(
     (_, i) => edition.rulings.ofFlag.get(i)?.line === applied.line && !before.rulings.ofFlag.has(i),
   );
   return {
     format: 1,
-    ruling: { ...appliedRuling(edition, { ...applied }), measurement_ids: judged(edition, applied) },
+    ruling: { ...appliedRuling(edition, applied), ruling_id: id },
     file,
     flags_settled: settled.map((flag) => flagId(edition, flag)),
     blocking_flags_left: edition.flags.filter((_, i) => needsRuling(edition, i)).length,
     notices: told.map(noticeOf),
   };
-}
-
-/** Ids of the measurements that the ruling decides: the record in the edition goes by the identity of the ruling tried. */
-function judged(edition: Edition, { line }: Ruling): string[] {
-  const tried = edition.rulings.applied.find((ruling) => ruling.line === line) as Ruling;
-  return appliedRuling(edition, tried).measurement_ids;
 }
 
 /** For people: what was written, what it settles, and what it changes. */

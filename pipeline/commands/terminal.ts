@@ -4,8 +4,8 @@ export interface Terminal {
   readonly print: (text: string) => void;
   /** Messages and problems, on standard error; silent with --quiet. */
   readonly tell: (text: string) => void;
-  /** Shows how far a long piece of work is; nothing off a terminal. */
-  readonly progress: (done: string) => void;
+  /** Names the step now at work, on a bar once a command has run for a second; nothing off a terminal. */
+  readonly progress: (step: string) => void;
   /** Asks a person and gives the answer, trimmed; absent where nobody sits at the terminal. */
   readonly ask?: (question: string) => Promise<string>;
   /** Called when the user interrupts the command, to remove temporary files. */

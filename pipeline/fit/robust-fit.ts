@@ -14,6 +14,7 @@ import {
   type ScaleSums,
   startScales,
 } from "./pooled-scales.ts";
+import { repeatedPoints } from "./repeated-points.ts";
 import { failure, settleSources } from "./robust-keep.ts";
 import { type PreparedEdition, prepareEdition, type RobustSystem, spanK } from "./robust-prepare.ts";
 import { createRobustWorkspace, fillBasis, loadSystem, modelOf, type RobustWorkspace } from "./robust-workspace.ts";
@@ -63,8 +64,8 @@ const CURVATURE_SPAN_K = 30;
  * prior on curvature, in which points are dropped or taken back on their deleted deviations; between the passes the
  * scatter within each source and between sources is re-estimated from the whole edition.
  *
- * The result does not depend on the order of a system's points, but for rounding. Points that are not finite or are
- * excluded take no part; what can be said of them is said.
+ * The result does not depend on the order of a system's points, but for rounding. Points that are not finite, are
+ * excluded or repeat an earlier source exactly take no part; what can be said of them is said.
  *
  * @param points points of each system, by position of the system
  * @param perSystem what else must be known of each
@@ -82,7 +83,8 @@ export function robustFits(
   const capacity = points.reduce((most, { n }) => Math.max(most, n), 1);
   const ws = createRobustWorkspace(capacity, nSources);
   const { pooled } = options;
-  const fresh = prepareEdition(ws, points, perSystem, nSources);
+  const systems = perSystem.map((about, s) => onceOnly(about, points[s]!));
+  const fresh = prepareEdition(ws, points, systems, nSources);
   const prepared = { ...fresh, typicalU: pooled?.typicalU ?? fresh.typicalU };
   const sample = pooled === undefined ? scaleSample(points, prepared.betweenClass, nSources) : [];
   let scales = pooled?.scales ?? startScales(prepared.typicalU, defaults);
@@ -92,18 +94,37 @@ export function robustFits(
     sums = createScaleSums(nSources);
     for (const s of sample) {
       const between = betweenOf(scales, prepared.betweenClass[s]!);
-      const camps = settle(ws, points[s]!, s, perSystem[s], prepared, scales, threshold);
+      const camps = settle(ws, points[s]!, s, systems[s], prepared, scales, threshold);
       gather(ws, sums, prepared.betweenClass[s]!, between, camps !== undefined);
     }
     scales = nextScales(sums, scales, defaults);
   }
   const room = fitRoom(prepared.first[points.length]!);
   const fits = points.map((system, s) => {
-    const camps = settle(ws, system, s, perSystem[s], prepared, scales, threshold);
+    const camps = settle(ws, system, s, systems[s], prepared, scales, threshold);
     const between = betweenOf(scales, prepared.betweenClass[s]!);
-    return toFit(ws, system, s, camps, between, sums, room(prepared.first[s]!, prepared.first[s + 1]!));
+    const repeated = systems[s]?.repeated;
+    return toFit(ws, system, s, camps, between, sums, repeated, room(prepared.first[s]!, prepared.first[s + 1]!));
   });
   return { fits, scales, pooled: { scales, typicalU: prepared.typicalU, sums } };
+}
+
+/** A system in which readings that are written twice take part once. */
+interface OnceOnly extends RobustSystem {
+  readonly repeated?: Uint8Array;
+}
+
+function onceOnly(about: RobustSystem, points: SystemPoints): OnceOnly {
+  const repeated = repeatedPoints(points);
+  if (repeated === undefined) return about;
+  return { ...about, repeated, excluded: repeated.map((mark, i) => mark | (about.excluded?.[i] ?? 0)) };
+}
+
+/** Whether a source has nothing of its own here: it is neither sound nor apart. */
+function isCopy(ws: RobustWorkspace, g: number, repeated: Uint8Array | undefined): boolean {
+  if (repeated === undefined) return false;
+  for (let k = ws.groupStart[g]!; k < ws.groupStart[g + 1]!; k++) if (repeated[ws.order[k]!] === 0) return false;
+  return true;
 }
 
 /** Between-source standard deviation of a class of systems. */
@@ -189,11 +210,14 @@ function toFit(
   camps: Camps,
   between: number,
   sums: ScaleSums,
+  repeated: Uint8Array | undefined,
   fit: ReturnType<ReturnType<typeof fitRoom>>,
 ): RobustFit {
   const n = points.n;
   const sources: [sound: number[], apart: number[]] = [[], []];
-  for (let g = 0; g < ws.groups; g++) sources[ws.sound[g] === 1 ? 0 : 1].push(ws.sourceOf[g]!);
+  for (let g = 0; g < ws.groups; g++) {
+    if (!isCopy(ws, g, repeated)) sources[ws.sound[g] === 1 ? 0 : 1].push(ws.sourceOf[g]!);
+  }
   let kept = 0;
   for (let k = 0; k < n; k++) {
     const i = ws.order[k]!;

@@ -18,6 +18,12 @@ const REACH_FACTOR = 1.1;
  */
 const CARRIED_BY_VOLUMES_U = 0.0025;
 const CARRIED_BY_FUNCTION_U = 0.0015;
+/**
+ * Measured densities further from the model than this are not carried to other rows: the estimate by additive volumes
+ * missed no handbook density of a dissolved solid by more than 11 %, published functions none by more than 0.2 %.
+ */
+const CREDIBLE_FOR_VOLUMES = 0.15;
+const CREDIBLE_FOR_FUNCTION = 0.02;
 
 /** The measured solution nearest to (T, r) inside the reach of both; undefined where there is none. */
 function nearest(measured: readonly MeasuredSolution[], temperatureK: number, massRatio: number) {
@@ -36,7 +42,8 @@ function nearest(measured: readonly MeasuredSolution[], temperatureK: number, ma
 /**
  * Density of a solution from one measured in the same system: the model that would hold otherwise, scaled to go through
  * the measured density, rho(w, T) = rho_model(w, T) rho'/rho_model(w', T'). Only within 5 K and a factor 1.1 in r of the
- * nearest measured solution; undefined beyond, or where there is no model to carry it.
+ * nearest measured solution; undefined beyond, where there is no model to carry it, or where the measured density is too
+ * far from it to be believed of another row.
  *
  * @param modelAt the model that holds otherwise, at a temperature [K]
  */
@@ -51,8 +58,8 @@ export function densityFromNearby(
   const there = near && modelAt(near.temperatureK);
   if (near === undefined || here === undefined || there === undefined || here.kind === "measured") return undefined;
   const factor = near.density / densityAt(there, near.massRatio / (1 + near.massRatio));
-  if (!(factor > 0)) return undefined;
   const published = here.kind === "density function";
+  if (!(Math.abs(factor - 1) <= (published ? CREDIBLE_FOR_FUNCTION : CREDIBLE_FOR_VOLUMES))) return undefined;
   return {
     kind: "density function",
     name: `a density measured nearby in the same system, carried by ${published ? here.name : "additive volumes"}`,

@@ -117,7 +117,8 @@ export function liquorModel(who: Identified, identity: Identity): LiquorModel {
   };
   let volumeAtK = Number.NaN;
   const modelAt = (temperatureK: number) => {
-    if (known.has(temperatureK)) return known.get(temperatureK);
+    const before = known.get(temperatureK);
+    if (before !== undefined || known.has(temperatureK)) return before;
     const model = solutionDensity(solute, solvent, apparent, temperatureK);
     if (known.size < KEPT) known.set(temperatureK, model);
     return model;

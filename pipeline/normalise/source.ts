@@ -1,5 +1,5 @@
 import { moleFractionAt } from "../bases/hub-values.ts";
-import { isOpenAt, type Unit } from "../bases/unit.ts";
+import { isOpenAt } from "../bases/unit.ts";
 import type { Problem } from "../problems/catalogue.ts";
 import { type CellFault, readingProblem } from "../records/cells.ts";
 import type { Identified, IdentifiedSource } from "../records/identified.ts";
@@ -11,11 +11,12 @@ import { isNeverFitted, wrongExcessSolid, wrongMethod } from "./fixed-words.ts";
 import type { LiquorModel } from "./liquor.ts";
 import { type ReportedValue, readReportedValue } from "./reported-value.ts";
 import { rowCautions } from "./row-cautions.ts";
+import { contextFinder } from "./row-contexts.ts";
 import { readDensity, readVolumeTemperature } from "./row-volume.ts";
 import { createSolidCheck } from "./solid-check.ts";
 import { sourceCells } from "./source-cells.ts";
 import { type RowTemperature, readRowTemperature } from "./temperature.ts";
-import { bindUnit, foreignGuest, readSoluteBasis, readUnit, type UnitContext } from "./unit-context.ts";
+import type { UnitContext } from "./unit-context.ts";
 import { impossibleValue } from "./value-checks.ts";
 import { rowUncertainty } from "./value-uncertainty.ts";
 
@@ -57,52 +58,11 @@ export function normaliseSource(
   const cells = sourceCells(source);
   const solidChecked = createSolidCheck(cells, identities);
   const refused: Problem[] = [];
-  const units = new Map<string, Unit | CellFault>();
-  const contexts = new Map<Identified, Map<string, UnitContext>>();
   const defaultMethod = source.card.method ?? "unspecified";
   const handbook = source.card.origin === "handbook";
   const columnCode = source.headings.map((heading) => codeOf(table.texts, heading));
 
-  const unitOf = (text: string): Unit | CellFault => {
-    let unit = units.get(text);
-    if (unit === undefined) {
-      unit = readUnit(text);
-      units.set(text, unit);
-    }
-    return unit;
-  };
-
-  const contextOf = (
-    who: Identified,
-    unitText: string,
-    reading: Reading,
-    valueText: string,
-  ): UnitContext | CellFault => {
-    const basisText = cells.text.solute_basis(reading);
-    let known = contexts.get(who);
-    if (known === undefined) {
-      known = new Map();
-      contexts.set(who, known);
-    }
-    // What a conversion assumes follows from which densities it has, so those are part of the key.
-    const { solutionDensity: model, solventDensityAtVolumeTemperature: atVolume } = liquorOf(who).needs;
-    const density = model?.kind === "density function" ? model.name : model?.kind;
-    const key = `${unitText}\u0000${basisText}\u0000${density}\u0000${atVolume === undefined}`;
-    const found = known.get(key);
-    if (found !== undefined) return found;
-    const unit = unitOf(unitText);
-    if (isFault(unit)) return unit;
-    if (unit.namedSolvent !== undefined && identities[who.index]?.solvent !== unit.namedSolvent) {
-      return { field: "solubility", code: "open-unit", found: `"${unitText}" in ${identities[who.index]?.solvent}` };
-    }
-    const basis = readSoluteBasis(basisText, who, unit, valueText);
-    if (typeof basis !== "string") return basis;
-    const context = bindUnit(unit, basis, liquorOf(who), foreignGuest(who));
-    if (!isFault(context)) known.set(key, context);
-    else if (context.code === "no-density")
-      return { ...context, found: liquorOf(who).missingDensity() ?? context.found };
-    return context;
-  };
+  const contextOf = contextFinder(cells, identities, liquorOf);
 
   const readRow = (reading: Reading, who: Identified): Row | CellFault => {
     const text = reading.cells[reading.valueIndex] ?? "";

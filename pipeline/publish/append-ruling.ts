@@ -15,7 +15,7 @@ import { RULINGS_COLUMNS } from "../records/generated/rulings.ts";
 import { csvRecord } from "./csv.ts";
 import { takeLock } from "./lock.ts";
 import { OutputError, writeError } from "./output-folder.ts";
-import { flushFolder, writeAll } from "./write-file.ts";
+import { flushFolder, writeAll, writeWhole } from "./write-file.ts";
 
 /** A ruling as text, by column; its name is given by the file. */
 export type NewRuling = Readonly<Partial<Record<Exclude<(typeof RULINGS_COLUMNS)[number], "ruling_id">, string>>>;
@@ -83,12 +83,8 @@ function createWith(collection: string, file: string, ruling: NewRuling): string
   const id = nextId("");
   const fresh = join(collection, ".rulings.csv.saltern-new");
   rmSync(fresh, { force: true });
-  const descriptor = openSync(fresh, "wx");
   try {
-    const text = csvRecord(RULINGS_COLUMNS) + line({ ...ruling, ruling_id: id }, OWN_STYLE);
-    writeAll(descriptor, Buffer.from(text, "utf8"));
-    fsyncSync(descriptor);
-    closeSync(descriptor);
+    writeWhole(fresh, [csvRecord(RULINGS_COLUMNS), line({ ...ruling, ruling_id: id }, OWN_STYLE)]);
     renameSync(fresh, file);
   } catch (error) {
     rmSync(fresh, { force: true });

@@ -1,5 +1,6 @@
 import type { Flag, RobustFit } from "../records/fits.ts";
 import type { OffBlock } from "./block-screen.ts";
+import { competeAcrossSystems } from "./causes/across-systems.ts";
 import { AS_READ } from "./causes/compete-block.ts";
 import { decided, type Verdict } from "./causes/compete-point.ts";
 import { middle } from "./middle.ts";
@@ -11,10 +12,16 @@ const LARGEST_FORM_RATIO = Math.log(10);
 const MORE_STABLE_FORM =
   "Look at the solid at the end of the measurement (XRPD, Raman): the lower values may be those of a more stable form.";
 
-/** The one flag of a block that is off as a whole. */
-export function blockFlag(input: ScreenInput, block: OffBlock): Flag {
+/** One flag for each block that is off as a whole. */
+export function blockFlags(input: ScreenInput, blocks: readonly OffBlock[]): Flag[] {
+  const verdicts = blocks.map(verdictOf);
+  const unexplained = blocks.filter((_, j) => verdicts[j]!.cause === undefined);
+  const across = competeAcrossSystems(input.systems, unexplained);
+  return blocks.map((block, j) => blockFlag(input, block, across.get(block) ?? verdicts[j]!));
+}
+
+function blockFlag(input: ScreenInput, block: OffBlock, verdict: Verdict): Flag {
   const fit = input.fits[block.system]!;
-  const verdict = verdictOf(block);
   const lower = couldBeStableForm(block);
   const flag = {
     scope: "block",

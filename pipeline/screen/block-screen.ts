@@ -81,9 +81,10 @@ export function screenBlocks(
 
 /** Sources whose block can be compared with enough others. */
 function judgedSources({ soundSources, apartSources, points }: RobustFit): number[] {
+  if (soundSources.length === 0) return [];
   const sound = soundSources.length > LEAST_OTHERS ? soundSources : [];
-  const apart = soundSources.length > 0 ? apartSources : [];
-  return [...sound, ...apart].filter((source) => {
+  const copies = [...new Set(points.source)].filter((s) => !soundSources.includes(s) && !apartSources.includes(s));
+  return [...sound, ...apartSources, ...copies].filter((source) => {
     let count = 0;
     for (let i = 0; i < points.n && count < LEAST_POINTS; i++) if (points.source[i] === source) count++;
     return count >= LEAST_POINTS;

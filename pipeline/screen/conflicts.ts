@@ -1,11 +1,17 @@
 import type { Flag, RobustFit } from "../records/fits.ts";
 import { textOf } from "../records/measurements.ts";
+import type { Suspects } from "./causes/cause.ts";
+import { reconciling } from "./conflict-causes.ts";
 import { type ScreenInput, sourceName } from "./screen-input.ts";
 import { fitSources, predict, type SystemModel } from "./system-model.ts";
 import { counted, inCelsius, listed, offBy, threeDigits } from "./wording.ts";
 
 /** One flag for every system whose sources disagree without a majority: both readings laid out, nothing set aside. */
-export function conflictFlags(input: ScreenInput, model: SystemModel): Flag[] {
+export function conflictFlags(
+  input: ScreenInput,
+  models: readonly [SystemModel, SystemModel],
+  suspectsOf: (system: number, source: number, rows: readonly number[]) => Suspects,
+): Flag[] {
   return input.fits.flatMap((fit) => {
     if (fit.agreement !== "conflict") return [];
     return [
@@ -14,7 +20,7 @@ export function conflictFlags(input: ScreenInput, model: SystemModel): Flag[] {
         code: "sources-disagree",
         severity: "blocking",
         system: fit.system,
-        evidence: evidence(input, fit, model),
+        evidence: [evidence(input, fit, models[0]), ...reconciling(input, models, fit, suspectsOf)].join("; "),
         lookAt:
           "Look at basis, solid form, solvent water and temperature of both sources, or measure one point by a third " +
           "way. The lower values could be those of a more stable form.",

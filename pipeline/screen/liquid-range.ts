@@ -42,6 +42,13 @@ function mayBeOutside({ boilingPointK, freezingPointK }: ScreenedSystem, tempera
   return temperatureK.some((T) => T > boilingPointK || T < freezingPointK);
 }
 
+/** Whether a point of a system lies outside the liquid range of its solvent. */
+export function isOutsideLiquid(input: ScreenInput, system: number, point: number): boolean {
+  const about = input.about[system];
+  const { temperatureK, row } = input.fits[system]!.points;
+  return about !== undefined && isOutside(about, temperatureK[point]!, input.table.moleFraction[row[point]!]!);
+}
+
 function isOutside(about: ScreenedSystem, temperatureK: number, moleFraction: number): boolean {
   const depression = moleFraction > 0 ? FREEZING_DEPRESSION_K * moleFraction : 0;
   return temperatureK > about.boilingPointK + MARGIN_K || temperatureK < about.freezingPointK - MARGIN_K - depression;

@@ -5,6 +5,7 @@ import { blocksOf } from "./block-screen.ts";
 import type { Suspects } from "./causes/cause.ts";
 import { competeForPoint, type Verdict } from "./causes/compete-point.ts";
 import { competeForSeries } from "./causes/compete-series.ts";
+import { type EndRun, endRun } from "./end-runs.ts";
 import type { OffPoint } from "./point-screen.ts";
 import { isPossibleTemperature } from "./possible-temperature.ts";
 import type { ScreenInput } from "./screen-input.ts";
@@ -15,7 +16,7 @@ import { counted, inCelsius, offBy, threeDigits } from "./wording.ts";
 const PROPOSED_DIGITS = 8;
 
 /** Finds what the causes may look at for rows of a source in a system. */
-type SuspectFinder = (system: number, source: number, rows: readonly number[]) => Suspects;
+export type SuspectFinder = (system: number, source: number, rows: readonly number[]) => Suspects;
 
 /** The flags of off points: what was seen, what probably happened, what to look at. */
 export function pointFlags(
@@ -30,7 +31,13 @@ export function pointFlags(
     return competeForPoint({ input, models, fit, point: one.point, suspects, threshold: one.threshold });
   });
   const bends = new Map<number, Verdict>();
+  const runs = new Map<number, EndRun>();
   for (const same of byBlock(input, off)) {
+    const run = endRun(
+      input,
+      same.map((j) => off[j]!),
+    );
+    if (run !== undefined) for (const j of same) if (run.points.has(off[j]!.point)) runs.set(j, run);
     const bent = bendOf(
       input,
       models[0],
@@ -39,7 +46,7 @@ export function pointFlags(
     );
     for (const j of same) if (bent?.explained.has(off[j]!.point)) bends.set(j, bent.verdict);
   }
-  return off.map((one, j) => pointFlag(input, one, bends.get(j) ?? verdicts[j]!));
+  return off.map((one, j) => pointFlag(input, one, bends.get(j) ?? verdicts[j]!, runs.get(j)));
 }
 
 /** Positions of the off points of each block, in order of first appearance. */
@@ -61,20 +68,30 @@ function bendOf(input: ScreenInput, model: SystemModel, off: readonly OffPoint[]
   const points = (blocksOf(fit).get(source) ?? []).filter((i) => isPossibleTemperature(fit.points.temperatureK[i]!));
   const method = textOf(input.table, input.table.method[fit.points.row[point]!]!);
   const offWeight = new Map(off.map((one, j) => [one.point, weights[j]!]));
-  return competeForSeries({ model, fit, source, points, offWeight, method });
+  const mayHydrate = input.about[system]?.kind === "aqueous salt";
+  const tolerance = off[0]!.threshold;
+  return competeForSeries({ model, fit, source, points, offWeight, method, mayHydrate, tolerance });
 }
 
-function pointFlag(input: ScreenInput, off: OffPoint, verdict: Verdict): Flag {
+/** `read at 40.0 °C it lies 1.2 % above the curve`. */
+function movedText({ moved }: Verdict): string {
+  return moved === undefined
+    ? ""
+    : `read at ${inCelsius(moved.temperatureK)} it lies ${offBy(moved.deviation)} the curve`;
+}
+
+function pointFlag(input: ScreenInput, off: OffPoint, verdict: Verdict, run: EndRun | undefined): Flag {
+  const together = run === undefined ? "" : run.words;
   const fit = input.fits[off.system]!;
   const flag = {
     scope: "measurement",
     code: "off-curve",
-    severity: "blocking",
+    severity: run?.oneFinding === true && run.outermost !== off.point ? "notice" : "blocking",
     row: fit.points.row[off.point]!,
     source: fit.points.source[off.point]!,
     system: off.system,
     suspectedCause: verdict.cause ?? "no simple cause",
-    evidence: evidence(input, fit, off),
+    evidence: [evidence(input, fit, off), movedText(verdict), together].filter((text) => text !== "").join("; "),
     lookAt: verdict.lookAt,
   } as const;
   if (verdict.cause === undefined) return flag;

@@ -1,11 +1,12 @@
 import type { Flag, RobustFit } from "../records/fits.ts";
-import { blockFlag } from "./block-flags.ts";
+import { blockFlags } from "./block-flags.ts";
 import { screenBlocks } from "./block-screen.ts";
+import { calculatedFlags } from "./causes/calculated-value-copied.ts";
 import { createSuspectFinder } from "./causes/suspects.ts";
 import { conflictFlags } from "./conflicts.ts";
-import { liquidRangeFlags } from "./liquid-range.ts";
-import { pointFlags } from "./point-flags.ts";
-import { screenPoints } from "./point-screen.ts";
+import { isOutsideLiquid, liquidRangeFlags } from "./liquid-range.ts";
+import { pointFlags, type SuspectFinder } from "./point-flags.ts";
+import { type OffPoint, screenPoints } from "./point-screen.ts";
 import { repeatFlags } from "./repeats.ts";
 import { type ScreenInput, thresholdOf } from "./screen-input.ts";
 import { createSystemModel, type SystemModel } from "./system-model.ts";
@@ -23,15 +24,47 @@ export function screen(input: ScreenInput): Flag[] {
   const models: readonly [SystemModel, SystemModel] = [createSystemModel(capacity), createSystemModel(capacity)];
   const suspectsOf = createSuspectFinder(input);
   const blocks = screenBlocks(input, models, suspectsOf);
-  const points = screenPoints(input, new Set(blocks.map(({ system, source }) => `${system}:${source}`)));
+  const blocked = new Set(blocks.map(({ system, source }) => `${system}:${source}`));
+  const points = screenPoints(input, blocked);
   return [
-    ...conflictFlags(input, models[0]),
-    ...blocks.map((block) => blockFlag(input, block)),
+    ...conflictFlags(input, models, suspectsOf),
+    ...blockFlags(input, blocks),
     ...pointFlags(input, models, points, suspectsOf),
+    ...misreadTemperatures(input, models, points, blocked, suspectsOf),
     ...cannotTellFlags(input, new Set(points.map(({ system }) => system))),
     ...repeatFlags(input),
+    ...calculatedFlags(input),
     ...liquidRangeFlags(input),
   ];
+}
+
+/**
+ * Points outside the liquid range take no part in a fit, and so far off the curve says little; but where the temperature
+ * on another scale puts them on it, the scale is what is wrong.
+ *
+ * @param told points that are flagged already
+ * @param blocked `SYSTEM:SOURCE` of the blocks that are off as a whole
+ */
+function misreadTemperatures(
+  input: ScreenInput,
+  models: readonly [SystemModel, SystemModel],
+  told: readonly OffPoint[],
+  blocked: ReadonlySet<string>,
+  suspectsOf: SuspectFinder,
+): Flag[] {
+  const known = new Set(told.map(({ system, point }) => `${system}:${point}`));
+  const outside: OffPoint[] = [];
+  for (const { system, points, deviation, deviationSd } of input.fits) {
+    for (let point = 0; point < points.n; point++) {
+      if (!isOutsideLiquid(input, system, point)) continue;
+      if (known.has(`${system}:${point}`) || blocked.has(`${system}:${points.source[point]}`)) continue;
+      const threshold = thresholdOf(input, system, point);
+      if (!(Math.abs(deviation[point]!) > threshold)) continue;
+      const z = deviation[point]! / deviationSd[point]!;
+      outside.push({ system, point, z, threshold, impossible: false, unsure: false });
+    }
+  }
+  return pointFlags(input, models, outside, suspectsOf).filter((flag) => flag.suspectedCause === "temperature unit");
 }
 
 /** Deviations that look off in a system too small to say so: one notice a system, none where all looks well. */

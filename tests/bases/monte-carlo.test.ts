@@ -93,8 +93,8 @@ describe(`first-order propagation against ${draws} draws`, () => {
       const deviation = simulated(value, u, unit, soluteBasis, 20260314) / explained.massRatioRelativeUncertainty - 1;
       const told = explained.cautions.some((text) => text.startsWith("first-order uncertainty"));
       if (Math.abs(deviation) > firstOrderTolerance) expect(told).toBe(true);
-      // What the row says of itself is what the draws find, as well as three points can tell: to 6 %.
-      expect(Math.abs(explained.firstOrderDeviation - deviation)).toBeLessThan(0.06);
+      // What the row says of itself is what the draws find, as well as three points can tell.
+      expect(Math.abs(explained.firstOrderDeviation - deviation)).toBeLessThan(0.03 + 0.15 * Math.abs(deviation));
     },
   );
 });

@@ -66,7 +66,10 @@ export function scoreWorld(world: World, score: Score, misses: string[] = []): v
   for (const { index, rows } of world.systems) {
     const points = [...rows].filter((row) => world.table.state[row] === 0);
     const sources = [...new Set(points.map((row) => world.table.source[row]!))];
-    const sound = sources.filter((source) => !world.faultOfBlock.has(`${index}:${source}`));
+    const bent = new Set(
+      points.filter((row) => BENT.has(world.faultOfRow[row]!)).map((row) => world.table.source[row]!),
+    );
+    const sound = sources.filter((source) => !world.faultOfBlock.has(`${index}:${source}`) && !bent.has(source));
     const majority = sources.length >= 2 && sound.length * 2 > sources.length;
     const of: Scored = {
       ...{ world, add, ofRow, ofBlock, majority },

@@ -1,76 +1,92 @@
 import { describe, expect, test } from "vitest";
 import { type GradeEvidence, proposeGrade } from "../../pipeline/grade/grade.ts";
-import type { Agreement, Flag } from "../../pipeline/records/fits.ts";
-import { plainPoints } from "../fit/plain-system.ts";
 
-interface Case {
+interface Case extends Partial<Omit<GradeEvidence, "temperatureK">> {
   readonly celsius?: readonly number[];
-  readonly laboratories?: number;
-  readonly methods?: number;
-  readonly solidChecked?: boolean;
-  readonly agreement?: Agreement;
-  readonly flags?: readonly Flag["severity"][];
 }
 
 const SPRING = [5, 15, 25, 35, 45];
+const CONFIRMED = "confirmed by head of quality on 2026-04-01: agreed (R0007)";
 
-/** The grade of a system with five temperatures over 40 K from two laboratories that agree, some of it changed. */
-function graded(given: Case = {}) {
-  const { celsius = SPRING, laboratories = 2, methods = 2, solidChecked = true, agreement = "agreed" } = given;
-  const points = plainPoints(
-    celsius.map((t) => t + 273.15),
-    celsius.map(() => -3),
-  );
-  const flags = (given.flags ?? []).map(
-    (severity): Flag => ({ scope: "measurement", code: "off-curve", severity, evidence: "", lookAt: "" }),
-  );
-  const fit = { robust: { points, agreement }, curves: [] } as unknown as GradeEvidence["fit"];
-  return proposeGrade({ fit, flags, laboratories, methods, solidChecked });
+/** The grade of a system that meets every criterion, some of it changed: ten points of two laboratories that agree. */
+function graded({ celsius = SPRING, ...given }: Case = {}) {
+  return proposeGrade({
+    ...{ points: 10, kept: 10, withinUncertainty: 10, judged: 10, agreement: "agreed" },
+    ...{ laboratories: 2, methods: 2, solidChecked: 10, openFlags: 0, confirmedBy: undefined, ...given },
+    temperatureK: Float64Array.from(celsius, (t) => t + 273.15),
+  });
 }
 
 describe("the proposed grade", () => {
   test("is tentative at best: recommended needs a ruling with a name", () => {
     expect(graded().grade).toBe("tentative");
     expect(graded({ laboratories: 7, methods: 4 }).grade).toBe("tentative");
+    expect(graded().reasons.at(-1)).toContain("meets every criterion");
   });
 
-  test("is tentative for one laboratory that covers temperature", () => {
+  test("is recommended where every criterion is met and a person confirms it by name", () => {
+    const { grade, reasons } = graded({ confirmedBy: CONFIRMED });
+    expect([grade, reasons.at(-1)]).toEqual(["recommended", `recommended, ${CONFIRMED}`]);
+  });
+
+  test.each([
+    ["one laboratory", { laboratories: 1 }],
+    ["89 % of the points within two standard deviations", { points: 100, judged: 100, withinUncertainty: 89 }],
+    ["three temperatures", { celsius: [5, 25, 45] }],
+    ["temperatures over 19 K", { celsius: [5, 10, 20, 24] }],
+    ["the solid checked for fewer than half of the points", { solidChecked: 4 }],
+  ] satisfies [string, Case][])("stays tentative with %s, whoever confirms it", (_, given) => {
+    const { grade, reasons } = graded({ ...given, confirmedBy: CONFIRMED });
+    expect(grade).toBe("tentative");
+    expect(reasons.at(-1)).toMatch(
+      /^recommendation without effect while (1 criterion|2 criteria) above (is|are) not met/,
+    );
+  });
+
+  test.each([
+    ["90 % of the points within two standard deviations", { withinUncertainty: 9 }],
+    ["temperatures over exactly 20 K", { celsius: [5, 10, 20, 25] }],
+    ["the solid checked for half of the points", { solidChecked: 5 }],
+    ["one method", { methods: 1 }],
+  ] satisfies [string, Case][])("can be recommended with %s", (_, given) => {
+    expect(graded({ ...given, confirmedBy: CONFIRMED }).grade).toBe("recommended");
+  });
+
+  test("is tentative for one laboratory that covers temperature, or that measured one temperature only", () => {
     expect(graded({ laboratories: 1, methods: 1 }).grade).toBe("tentative");
+    expect(graded({ laboratories: 1, methods: 1, celsius: [25] }).grade).toBe("tentative");
   });
 
   test.each([
     ["sources in conflict", { agreement: "conflict" }],
-    ["an open flag that needs a person", { flags: ["blocking"] }],
+    ["an open flag that needs a person", { openFlags: 1 }],
     ["one laboratory with three temperatures only", { laboratories: 1, celsius: [5, 25, 45] }],
     ["one laboratory over less than 20 K", { laboratories: 1, celsius: [20, 25, 30, 35] }],
-  ] satisfies [string, Case][])("is doubtful for %s", (_, given) => {
+  ] satisfies [string, Case][])("is doubtful for %s, whoever recommends it", (_, given) => {
     expect(graded(given).grade).toBe("doubtful");
+    expect(graded({ ...given, confirmedBy: CONFIRMED }).grade).toBe("doubtful");
   });
 
-  test("is not lowered by a notice", () => {
-    expect(graded({ flags: ["notice", "notice"] }).grade).toBe("tentative");
-  });
-
-  test("is rejected where no point is left to fit", () => {
-    const { grade, reasons } = graded({ celsius: [], laboratories: 0, methods: 0 });
-    expect([grade, reasons[0]]).toEqual(["rejected", "no point to fit"]);
+  test("is rejected where no point is left to fit, or none is kept", () => {
+    const nothing = { celsius: [], points: 0, kept: 0, judged: 0, withinUncertainty: 0, laboratories: 0, methods: 0 };
+    expect(graded(nothing)).toMatchObject({ grade: "rejected", reasons: expect.arrayContaining(["no point to fit"]) });
+    expect(graded({ kept: 0 })).toMatchObject({
+      grade: "rejected",
+      reasons: expect.arrayContaining(["no point is kept"]),
+    });
   });
 });
 
-describe("the reasons of a grade", () => {
-  test("tell every criterion with its number, and what is wanted", () => {
-    const { reasons } = graded({ laboratories: 1, methods: 1, flags: ["blocking", "blocking"] });
-    expect(reasons).toEqual([
-      "1 independent laboratory (at least 2 wanted)",
-      "5 temperatures over 40 K (at least 4 over 20 K wanted)",
-      "1 method",
-      "solid phase checked at equilibrium",
-      "sources agree or only one measured",
-      "2 open flags need a person",
-    ]);
+test("the reasons tell every criterion with its number, and what is wanted", () => {
+  const { reasons } = graded({
+    ...{ laboratories: 1, methods: 1, openFlags: 2, withinUncertainty: 8, judged: 9, kept: 8, solidChecked: 3 },
   });
-
-  test("say that an unchecked solid phase caps the grade", () => {
-    expect(graded({ solidChecked: false }).reasons.join()).toContain("not checked");
-  });
+  expect(reasons).toEqual([
+    "1 independent laboratory (at least 2 wanted)",
+    "8 of 9 points within 2 standard deviations of what the others say (at least 90 % wanted), all of one laboratory",
+    "5 temperatures over 40 K (at least 4 over 20 K wanted)",
+    "1 method (more than one rules out an error they share)",
+    "solid phase checked at equilibrium for 3 of 8 kept points (at least half wanted): tentative at best",
+    "2 open flags need a person",
+  ]);
 });

@@ -1,6 +1,8 @@
+import { groupIntoSystems } from "../../pipeline/group/systems.ts";
 import { createIdentityRegister, identifySource } from "../../pipeline/identify/source.ts";
 import { indexSubstances } from "../../pipeline/identify/substance-tables.ts";
 import { normaliseEdition } from "../../pipeline/normalise/edition.ts";
+import { createRereader } from "../../pipeline/normalise/reread.ts";
 import { createRowBudget } from "../../pipeline/normalise/row-budget.ts";
 import { readProgramTables } from "../../pipeline/read/own-tables.ts";
 import type { SourceCard } from "../../pipeline/records/generated/source-card.ts";
@@ -11,7 +13,8 @@ import { readAccepted } from "../read/temporary-collection.ts";
 
 const program = readProgramTables();
 
-/** A table with a card normalised as a whole, with solid forms of the group's own: the column store and its budgets. */
+/** A table with a card normalised as a whole, with solid forms of the group's own: the column store, its budgets and
+ * its rows read again. */
 export async function normaliseTable(csv: string, card: Partial<SourceCard>, solidForms: readonly TableRow[] = []) {
   const source = await readAccepted(csv, card);
   const register = createIdentityRegister();
@@ -24,5 +27,6 @@ export async function normaliseTable(csv: string, card: Partial<SourceCard>, sol
     refused: [...identified.refused, ...normalised.refused],
     assumptions: (row: number) => textOf(table, table.assumptions[row] as number),
     budgetOf: createRowBudget(table, normalised),
+    ...createRereader(table, register.identities, groupIntoSystems(table, register.identities), normalised),
   };
 }

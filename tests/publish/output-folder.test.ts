@@ -1,8 +1,9 @@
 import { createHash } from "node:crypto";
-import { existsSync, mkdirSync, readdirSync, readFileSync, renameSync, symlinkSync, writeFileSync } from "node:fs";
+import { existsSync, mkdirSync, readdirSync, readFileSync, renameSync, rmSync, symlinkSync } from "node:fs";
+import { hostname } from "node:os";
 import { dirname, join } from "node:path";
 import { describe, expect, test } from "vitest";
-import { OutputError, openOutputFolder } from "../../pipeline/publish/output-folder.ts";
+import { OutputError, openEditionFolder, openOutputFolder } from "../../pipeline/publish/output-folder.ts";
 import { temporaryFolder } from "../read/temporary-collection.ts";
 
 const SUMMARY = JSON.stringify({ format: 1, program_version: "0.1.0", files: [] });
@@ -147,9 +148,10 @@ describe("an interruption", () => {
     expect(hidden(base)).toEqual([]);
   });
 
-  test("while writing leaves a temporary folder of a process that has ended, which is replaced", () => {
+  test("while writing leaves a temporary folder and the lock of a process that has ended, which are replaced", () => {
+    const { base, collection, out } = place({ ".out.saltern-new/a": "half" });
     // No process has this number: the largest on Linux is 4194304.
-    const { base, collection, out } = place({ ".out.saltern-new/.building": "99999999", ".out.saltern-new/a": "half" });
+    symlinkSync(`99999999||${hostname()}`, join(base, ".out.saltern-lock"));
     const folder = openOutputFolder(out, collection);
     folder.write("b", ["whole"]);
     folder.commit();
@@ -158,14 +160,86 @@ describe("an interruption", () => {
   });
 
   test("is none where another process is writing the folder now: the second one stops and touches nothing", () => {
-    const { base, collection, out } = place({ ".out.saltern-new/.building": String(process.ppid) });
-    writeFileSync(join(base, ".out.saltern-new", "a"), "half");
-    expect(refusal(() => openOutputFolder(out, collection))).toBe("output-not-writable");
-    expect(readdirSync(join(base, ".out.saltern-new")).sort()).toEqual([".building", "a"]);
+    const { base, collection, out } = place({ ".out.saltern-new/a": "half", ".out.saltern-old/summary.json": SUMMARY });
+    symlinkSync(`${process.ppid}||${hostname()}`, join(base, ".out.saltern-lock"));
+    expect(refusal(() => openOutputFolder(out, collection))).toBe("in-use");
+    expect(hidden(base).sort()).toEqual([".out.saltern-lock", ".out.saltern-new", ".out.saltern-old"]);
+    expect(readdirSync(join(base, ".out.saltern-new"))).toEqual(["a"]);
+  });
+
+  test("is none where a process of another machine holds the folder: nobody here can tell whether it lives", () => {
+    const { base, collection, out } = place();
+    symlinkSync("99999999||another-machine.example", join(base, ".out.saltern-lock"));
+    expect(refusal(() => openOutputFolder(out, collection))).toBe("in-use");
+  });
+
+  test("of a process whose number another one has now leaves a lock that is seen through by its start time", () => {
+    const { base, collection, out } = place();
+    // The parent of this process runs, but did not start at the first tick of the clock.
+    symlinkSync(`${process.ppid}|1|${hostname()}`, join(base, ".out.saltern-lock"));
+    if (!existsSync("/proc/self/stat")) return;
+    openOutputFolder(out, collection).discard();
+    expect(hidden(base)).toEqual([]);
+  });
+
+  test("that keeps the new folder from its place puts the earlier one back", () => {
+    const { base, collection, out } = place({ "out/summary.json": SUMMARY, "out/old.csv": "old" });
+    const folder = openOutputFolder(out, collection);
+    folder.write("new.csv", ["new"]);
+    // Somebody removes the finished folder just before it is put in its place.
+    rmSync(folder.building, { recursive: true });
+    expect(refusal(() => folder.commit())).toBe("output-not-writable");
+    expect(readdirSync(out).sort()).toEqual(["old.csv", "summary.json"]);
+    folder.discard();
+    expect(hidden(base)).toEqual([]);
   });
 
   test("by a file in the way is told as a problem with a remedy", () => {
     const { base, collection } = place({ blocked: "a file" });
     expect(refusal(() => openOutputFolder(join(base, "blocked", "out"), collection))).toBe("output-not-writable");
   });
+});
+
+describe("the folder of an edition", () => {
+  test("appears in one renaming and is never overwritten, not even by working tables", () => {
+    const { base, collection } = place();
+    const out = join(base, "editions", "2026-1");
+    const folder = openEditionFolder(out, collection);
+    folder.write("edition.json", ["{}"]);
+    folder.write("summary.json", [SUMMARY]);
+    expect(readdirSync(join(base, "editions")).sort()).toEqual([".2026-1.saltern-lock", ".2026-1.saltern-new"]);
+    folder.commit();
+    expect(readdirSync(join(base, "editions"))).toEqual(["2026-1"]);
+    expect(refusal(() => openEditionFolder(out, collection))).toBe("edition-exists");
+    expect(refusal(() => openOutputFolder(out, collection))).toBe("edition-exists");
+    expect(readdirSync(out).sort()).toEqual(["edition.json", "summary.json"]);
+  });
+
+  test("is refused where anything of its name stands, an empty folder or a file included", () => {
+    const { base, collection } = place({ "editions/b": "a file" });
+    mkdirSync(join(base, "editions", "a"));
+    for (const name of ["a", "b"]) {
+      expect(refusal(() => openEditionFolder(join(base, "editions", name), collection))).toBe("edition-exists");
+    }
+  });
+
+  test("is written by one at a time", () => {
+    const { base, collection } = place();
+    const first = openEditionFolder(join(base, "e"), collection);
+    expect(refusal(() => openEditionFolder(join(base, "e"), collection))).toBe("in-use");
+    first.discard();
+    openEditionFolder(join(base, "e"), collection).discard();
+    expect(hidden(base)).toEqual([]);
+  });
+});
+
+test("a link in the path is followed: the folder it leads to is replaced, the link stays", () => {
+  const { base, collection } = place({ "far/out/summary.json": SUMMARY });
+  symlinkSync(join(base, "far", "out"), join(base, "link"));
+  const folder = openOutputFolder(join(base, "link"), collection);
+  folder.write("a", ["a"]);
+  folder.commit();
+  expect(readdirSync(join(base, "far", "out"))).toEqual(["a"]);
+  expect(readdirSync(join(base, "link"))).toEqual(["a"]);
+  expect(hidden(base)).toEqual([]);
 });

@@ -9,6 +9,10 @@ function suspects(rows: readonly number[], unit = "g/100 g solvent"): Suspects {
   return {
     rows,
     unit,
+    method: "",
+    soluteMolarMass: 180,
+    otherCompositions: [{ system: 9, name: "solvent A + solvent B, 0.4", sameSource: true }],
+    numberStandsIn: (_, system) => system === 4,
     temperatureK: (row) => 280 + 10 * row,
     reportedValue: (row) => values[row]!,
     neighbour: (row, step) => (row + step in values ? row + step : undefined),

@@ -32,13 +32,24 @@ export function series(
   return celsius.map((t, i) => [t, change(Number((thousandX(t) * scatter[i % 8]!).toPrecision(4)), i)]);
 }
 
+/** What else may be said of every invented system. */
+export interface More extends Partial<ScreenedSystem> {
+  readonly method?: string;
+  /** Systems are mixtures of the same two solvents, of composition `1`, `2` ... */
+  readonly mixtures?: boolean;
+  /** Solute of each system; one and the same where absent. */
+  readonly solutes?: readonly string[];
+  /** Solvent of each system; `solvent 1`, `solvent 2` ... where absent. */
+  readonly solvents?: readonly string[];
+}
+
 /** Screens systems of one invented solute, one solvent each (`solvent 1`, `solvent 2` ...), reported as 1000 x. */
-export function screened(systems: readonly Sources[], about: Partial<ScreenedSystem> = {}): Flag[] {
+export function screened(systems: readonly Sources[], about: More = {}): Flag[] {
   return screen(inputOf(systems, about));
 }
 
 /** What screening is given for such systems. */
-export function inputOf(systems: readonly Sources[], about: Partial<ScreenedSystem> = {}): ScreenInput {
+export function inputOf(systems: readonly Sources[], about: More = {}): ScreenInput {
   const sourceNames = [...new Set(systems.flatMap((system) => Object.keys(system)))].sort();
   const table = createMeasurementTable(1000);
   const unit = codeOf(table.texts, "1000 x");
@@ -54,19 +65,30 @@ export function inputOf(systems: readonly Sources[], about: Partial<ScreenedSyst
         table.temperatureU[row] = 0.1;
         table.reportedValue[row] = value;
         table.reportedUnit[row] = unit;
+        table.method[row] = codeOf(table.texts, about.method ?? "");
         table.moleFraction[row] = value / 1000;
         table.massRatio[row] = massRatio(value / 1000);
         table.massConcentration[row] = 1000 * massRatio(value / 1000);
         table.relativeU[row] = 0.015;
       }
     }
-    const identity = { solute: "invented", solidForm: "unspecified", solvent: `solvent ${index + 1}` };
+    const identity = {
+      solute: about.solutes?.[index] ?? "invented",
+      solidForm: "unspecified",
+      solvent: about.mixtures === true ? "solvent 1 + solvent 2" : (about.solvents?.[index] ?? `solvent ${index + 1}`),
+    };
     return {
       ...{ index, id: `system-${index + 1}`, key: `${index}`, family: `${index}`, fitBasis: "ln x" },
       rows: Int32Array.from(rows),
       identity: {
         ...identity,
-        ...{ composition: "", medium: "", soluteMolarMass: SOLUTE, solventMolarMass: SOLVENT, aqueousSalt: false },
+        ...{
+          composition: about.mixtures === true ? `${index + 1}` : "",
+          medium: "",
+          soluteMolarMass: SOLUTE,
+          solventMolarMass: SOLVENT,
+          aqueousSalt: false,
+        },
       },
     };
   });
@@ -100,7 +122,9 @@ export function inputOf(systems: readonly Sources[], about: Partial<ScreenedSyst
   return {
     ...{ table, systems: made, fits, scales, sourceNames, reread, settings: DEFAULT_SETTINGS },
     inReportedUnit: (_, lnValue) => 1000 * Math.exp(lnValue),
-    about: made.map(() => ({ kind: "general", boilingPointK: Number.NaN, freezingPointK: Number.NaN, ...about })),
+    about: made.map(
+      () => ({ kind: "general", boilingPointK: Number.NaN, freezingPointK: Number.NaN, ...about }) as const,
+    ),
   };
 }
 

@@ -20,12 +20,22 @@ export function curveLayer(curve: CurveLine, frame: Frame): Html {
 
 function overRange(curve: CurveLine, { x, y }: Frame): Html {
   const index = curve.x.map((_, i) => i);
-  const across = (i: number) => px(x(curve.x[i] as number));
-  const up = (values: readonly number[]) => (i: number) => px(y(values[i] as number));
-  const known = (values: readonly number[]) => (i: number) => Number.isFinite(values[i]);
-  const path = (values: readonly number[]) =>
-    line<number>(across, up(values)).defined(known(values)).digits(null)(index) ?? "";
-  const band = area<number>(across, up(curve.low), up(curve.high)).defined(known(curve.high)).digits(null)(index) ?? "";
+  const places = curve.x.map((value) => px(x(value)));
+  const heights = (values: readonly number[]) => values.map((value) => px(y(value)));
+  const across = (i: number) => places[i] as number;
+  // Coordinates are rounded already; beyond a mole fraction of 1 there is no value, and no line.
+  const path = (values: readonly number[]) => {
+    const at = heights(values);
+    const draw = line<number>(across, (i) => at[i] as number).defined((i) => Number.isFinite(at[i]));
+    return draw.digits(null)(index) ?? "";
+  };
+  const [low, high] = [heights(curve.low), heights(curve.high)];
+  const shade = area<number>(
+    across,
+    (i) => low[i] as number,
+    (i) => high[i] as number,
+  ).defined((i) => Number.isFinite(high[i]));
+  const band = shade.digits(null)(index) ?? "";
   return raw(
     `<path class="band" d="${band}"/><path class="new" d="${path(curve.newLow)}"/><path class="new" d="${path(curve.newHigh)}"/><path class="curve" d="${path(curve.y)}"/>`,
   );

@@ -42,7 +42,7 @@ function flagTarget(edition: Edition, flag: Flag): Html {
 export function causeLine({ suspectedCause, causeDetail, causeProbability, proposedValue }: Flag): Html | undefined {
   if (suspectedCause === undefined) return undefined;
   if (suspectedCause === "no simple cause") {
-    return html`<p>Suspected cause: no simple cause: none that was tried is likelier than not.</p>`;
+    return html`<p>Suspected cause: none; of those that were tried no one is likelier than not.</p>`;
   }
   const detail = causeDetail ? html` (${short(causeDetail, 300)})` : "";
   const probability =

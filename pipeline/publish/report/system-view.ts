@@ -52,7 +52,7 @@ export interface SystemView {
 }
 
 /** Points at which a curve is drawn. */
-const STEPS = 48;
+const STEPS = 36;
 
 /** Longest part of a title: a name of 2,000 characters must not hide the solvent behind it. */
 const LONGEST_PART = 120;

@@ -104,7 +104,7 @@ export interface BudgetPart {
    */
   name: string;
   /**
-   * Relative standard uncertainty it brings to the result, %.
+   * Relative standard uncertainty it brings to the result, percent.
    */
   percent: number;
 }

@@ -47,7 +47,7 @@ const byUnit: ReadonlyMap<string, readonly string[]> = new Map(
 export const basisMixUp: Cause = {
   name: "basis mix-up",
   pointPrior: 0.01,
-  blockPrior: 0.3,
+  blockPrior: 0.24,
   lookAt: "Look at what the values are per in the heading of the original table: solvent or solution, mass or volume.",
   explanations: ({ unit }) => {
     const others = byUnit.get(unit) ?? [];

@@ -7,6 +7,8 @@ import { bentReadings, LEFT_OVER } from "./bent-block.ts";
 import type { CauseName, Explanation, Suspects } from "./cause.ts";
 import { EVERY_CAUSE } from "./every-cause.ts";
 import { logSum } from "./log-sum.ts";
+import type { Pattern } from "./pattern.ts";
+import { bentSeries } from "./pattern-density.ts";
 
 /** Readings of a block that are no mistake of a known kind. */
 export const AS_READ = "as read";
@@ -37,7 +39,9 @@ export interface BlockCase {
 
 /** Prior probability that a block is sound as read, and that an off block has no known cause. Common practice. */
 const AS_READ_PRIOR = 0.9;
-const NONE_PRIOR = 0.1;
+const NONE_PRIOR = 0.12;
+/** Share of such blocks that are tilted too, by how much at the ends, and how irregularly, part of that. */
+const [TILTED_SHARE, TILT_SD, TILT_IRREGULAR] = [0.3, 0.15, 0.3];
 /** Variances of the offset of a block that is off for no known cause, ln units squared: a little or a lot, equally often. */
 const FREE_VARIANCES = [0.0625, 0.64] as const;
 /** Standardised residuals beyond this from the block's own median count as single faults within the block. */
@@ -69,7 +73,7 @@ export function blockReadings(of: BlockCase): BlockReading[] {
       ...none,
       key: FREE_OFFSET,
       logPrior: offPrior + Math.log(NONE_PRIOR),
-      logDensity: freeDensity(density, between) ?? strayDensity,
+      logDensity: asRead === undefined ? strayDensity : freeDensity(of, asRead, between),
     },
   ];
   for (const cause of EVERY_CAUSE) {
@@ -88,11 +92,21 @@ export function blockReadings(of: BlockCase): BlockReading[] {
   return joined(readings);
 }
 
-/** Log density with an offset that is off a little or a lot. */
-function freeDensity(density: (offsetVariance: number) => number | undefined, between: number): number | undefined {
-  const logs = FREE_VARIANCES.map((variance) => density(variance + between));
-  const known = logs.filter((log) => log !== undefined);
-  return known.length === 0 ? undefined : logSum(known) - Math.log(FREE_VARIANCES.length);
+/** Log density of a block with an offset of its own, a little or a lot, and perhaps a bend of its own. */
+function freeDensity(of: BlockCase, asRead: Series, between: number): number {
+  const [model] = of.models;
+  const T = asRead.temperatureK;
+  const [low, high] = [Math.min(...T), Math.max(...T)];
+  const tilt: Pattern = {
+    ...({ kind: "growing", detail: "", weight: 1, sign: 0 } as const),
+    ...{ sd: TILT_SD, irregular: TILT_IRREGULAR },
+    shape: T.map((t) => (high > low ? (2 * t - low - high) / (high - low) : 0)),
+  };
+  const ways = FREE_VARIANCES.flatMap((variance) => [
+    Math.log(1 - TILTED_SHARE) + densityOf(of, model, asRead, variance + between),
+    Math.log(TILTED_SHARE) + bentSeries(model, asRead, variance + between, tilt).logDensity,
+  ]);
+  return logSum(ways) - Math.log(FREE_VARIANCES.length);
 }
 
 /** Readings of one key as one: the ways in which a cause may bend a series differ in nothing that could be named. */

@@ -14,6 +14,8 @@ export interface Verdict {
   readonly probability: number;
   /** Number in the reported unit that would be right; undefined where a cause changes something else, or none won. */
   readonly proposedValue: number | undefined;
+  /** Where the row belongs, where the cause moves its temperature: the temperature (K), and how far it then lies off. */
+  readonly moved?: { readonly temperatureK: number; readonly deviation: number } | undefined;
   readonly lookAt: string;
 }
 
@@ -30,11 +32,13 @@ export const LOOK_AGAIN =
   "Look the value and its temperature up in the notebook or the original table; if they stand, measure again.";
 
 /** Prior probability of a random error, and how its size in ln value is spread. Common practice. */
-const NONE_PRIOR = 0.7;
+const NONE_PRIOR = 0.8;
 const [NONE_LEAST, NONE_MOST] = [0.14, 2];
 const NONE_WIDEST = 10;
 /** Share of random errors of any size at all. */
 const NONE_WIDE_SHARE = 0.25;
+/** Density given to "none" where the temperature cannot be meant: the value is not what is wrong. */
+const IMPOSSIBLE_DENSITY = 0.005;
 /** A re-read value must come this near, in standard deviations. */
 const NEAR_Z = 3;
 
@@ -59,7 +63,8 @@ export function competeForPoint(of: PointCase): PointVerdict {
   const { fit, point, models } = of;
   const sound = fit.apartSources.length === 0 ? undefined : new Set(fit.soundSources);
   fitSources(models[0], fit, (source) => sound?.has(source) !== false, point);
-  let total = NONE_PRIOR * noneDensity(fit.deviation[point]!);
+  const meant = isPossibleTemperature(fit.points.temperatureK[point]!);
+  let total = NONE_PRIOR * (meant ? noneDensity(fit.deviation[point]!) : IMPOSSIBLE_DENSITY);
   let best: Verdict | undefined;
   let bestWeight = 0;
   for (const cause of EVERY_CAUSE) {
@@ -79,8 +84,8 @@ export function competeForPoint(of: PointCase): PointVerdict {
     total += sum;
     if (winner === undefined || sum <= bestWeight) continue;
     bestWeight = sum;
-    const { detail, proposedValue } = winner;
-    best = { cause: cause.name, probability: 0, lookAt: cause.lookAt, detail, proposedValue };
+    const { detail, proposedValue, moved } = winner;
+    best = { cause: cause.name, probability: 0, lookAt: cause.lookAt, detail, proposedValue, moved };
   }
   return { ...decided(best, bestWeight / total), weight: total };
 }
@@ -89,6 +94,7 @@ interface Evaluated {
   readonly detail: string;
   readonly density: number;
   readonly proposedValue: number | undefined;
+  readonly moved: Verdict["moved"];
 }
 
 /** Likelihood of one explanation times its share; undefined where it is impossible or leaves the point off. */
@@ -111,6 +117,7 @@ function evaluate(of: PointCase, how: Explanation): Evaluated | undefined {
     detail: how.detail,
     density: how.weight * ofPartner * (how.odds?.(row) ?? 1) * normalDensity(fitting.deviation, fitting.variance),
     proposedValue: says,
+    moved: change.kind === "temperature" || change.kind === "temperature scale" ? fitting : undefined,
   };
 }
 
@@ -125,7 +132,7 @@ function fits({ input, fit, point, threshold }: PointCase, model: SystemModel, r
   const deviation = reread.lnValue - expected.mean;
   const variance = expected.variance + fit.noiseSd[point]! ** 2;
   if (!(Math.abs(deviation) < Math.min(threshold, NEAR_Z * Math.sqrt(variance)))) return undefined;
-  return { deviation, variance, reportedValue: reread.reportedValue };
+  return { deviation, variance, reportedValue: reread.reportedValue, temperatureK: reread.temperatureK };
 }
 
 /** Names the best cause above 0.5, keeps its value above 0.9. */

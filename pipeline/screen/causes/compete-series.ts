@@ -12,7 +12,7 @@ import type { Cause } from "./cause.ts";
 import { NAMED_ABOVE, type Verdict } from "./compete-point.ts";
 import { EVERY_CAUSE } from "./every-cause.ts";
 import { logSum } from "./log-sum.ts";
-import { growing, type Pattern } from "./pattern.ts";
+import { type BlockSeries, growing, type Pattern } from "./pattern.ts";
 import { bentSeries } from "./pattern-density.ts";
 
 /** A block some of whose points are off, as one series. */
@@ -25,6 +25,10 @@ export interface SeriesCase {
   /** Weight of each off point on its own: every cause of a single row and "none" together, a density of ln value. */
   readonly offWeight: ReadonlyMap<number, number>;
   readonly method: string;
+  /** Material threshold, ln value. */
+  readonly tolerance: number;
+  /** The solid may be another hydrate in one source than in the others: a salt in water. */
+  readonly mayHydrate: boolean;
 }
 
 /** What bends a series, and the off points it accounts for. */
@@ -35,8 +39,12 @@ export interface SeriesVerdict {
 
 /** Rate of single faults among rows. Common practice. */
 const SINGLE_RATE = 0.03;
-/** Rate of series over which the stable solid changes. Common practice. */
+/** Rate of series over which the stable solid changes where no other source would see it. Common practice. */
 const CHANGE_OF_SOLID_RATE = 0.1;
+/** Rate of series of a salt in water that are of another hydrate at one end than those of the other sources. */
+const HYDRATE_RATE = 0.05;
+/** Part of the material threshold from which a point sides with those that are off. */
+const SIDES_SHARE = 0.4;
 /** An off point farther than this from the bent series, in standard deviations, is off for its own reason. */
 const STRAY_Z = 4;
 /** No value on a plateau is farther from it, in standard deviations. */
@@ -71,12 +79,10 @@ export function competeForSeries(of: SeriesCase): SeriesVerdict | undefined {
   const { temperatureK, lnValue } = seriesOf(fit, order);
   const slope = others.size === 0 ? undefined : temperatureK.map((T) => curveSlope(model, T));
   let total = 1 + Math.exp(otherwise - none);
-  if (!witnessed) {
-    // Without a witness the curve itself may turn there: another solid phase gives the same picture.
-    for (const pattern of growing({ temperatureK }, 1, -1, "")) {
-      const tried = tryPattern(of, order, off, pattern);
-      if (tried !== undefined) total += CHANGE_OF_SOLID_RATE * pattern.weight * Math.exp(tried.logWeight - none);
-    }
+  const changeOfSolid = witnessed ? (of.mayHydrate ? HYDRATE_RATE : 0) : CHANGE_OF_SOLID_RATE;
+  for (const pattern of changeOfSolid === 0 ? [] : eitherEnd({ temperatureK })) {
+    const tried = tryPattern(of, order, off, pattern);
+    if (tried !== undefined) total += changeOfSolid * pattern.weight * Math.exp(tried.logWeight - none);
   }
   let best: { cause: Cause; pattern: Pattern; explained: readonly number[] } | undefined;
   let bestSum = 0;
@@ -161,7 +167,7 @@ function tryPattern(
   const strays = new Set(off.filter((point) => z.get(point)! > STRAY_Z));
   const touched = order.filter((_, i) => (pattern.kind === "level" ? i >= pattern.from : pattern.shape[i] !== 0));
   const explained = touched.filter((point) => of.offWeight.has(point) && !strays.has(point));
-  if (explained.length === 0) return undefined;
+  if (explained.length === 0 || !isSeries(of, touched, explained)) return undefined;
   if (pattern.kind === "level") {
     // A plateau lies below the curve, and all its values are the same.
     if (fit.deviation[explained[0]!]! > 0 || touched.some((point) => z.get(point)! > LEVEL_Z)) return undefined;
@@ -172,6 +178,20 @@ function tryPattern(
   if (without === undefined) return undefined;
   const { logDensity } = bentSeries(model, seriesOf(fit, rest), variance, without);
   return { logWeight: logDensity + logWeightOf(of, [], [...strays]), explained };
+}
+
+/** Whether a bend shows in more than one point: two that are off, or one and another that sides with it. */
+function isSeries({ fit, tolerance }: SeriesCase, touched: readonly number[], explained: readonly number[]): boolean {
+  const side = Math.sign(fit.deviation[explained[0]!]!);
+  return touched.filter((point) => side * fit.deviation[point]! > SIDES_SHARE * tolerance).length > 1;
+}
+
+/** A bend of the curve itself at either end, either way: another solid gives the same picture. */
+function eitherEnd(series: Pick<BlockSeries, "temperatureK">): Pattern[] {
+  const ends = ([1, -1] as const).flatMap((end) =>
+    ([1, -1] as const).flatMap((sign) => growing(series, end, sign, "")),
+  );
+  return ends.map((pattern) => ({ ...pattern, weight: pattern.weight / 2 }));
 }
 
 /** The pattern on a series that lacks some points; undefined where too little of it is left. */

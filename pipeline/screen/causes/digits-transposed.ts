@@ -2,9 +2,9 @@ import type { Cause } from "./cause.ts";
 
 /** A swap that changes the number by more than this factor (ln) moved a leading zero: rarer than the others. */
 const WITH_ZERO = 1.5;
-const WITH_ZERO_SHARE = 0.4;
+const WITH_ZERO_SHARE = 0.2;
 /** Swaps that change the number by less cannot be what is seen. */
-const LEAST_CHANGE = 0.04;
+const LEAST_CHANGE = 0.08;
 
 /** Numbers that a swap of two neighbouring, different digits makes of a number as written; the sign and the decimal point stay. */
 export function transpositions(value: number): number[] {
@@ -40,9 +40,11 @@ export const digitsTransposed: Cause = {
     if (rows.length !== 1 || row === undefined) return [];
     const reported = reportedValue(row);
     const candidates = transpositions(reported).filter((value) => Math.abs(value / reported - 1) > LEAST_CHANGE);
+    const share = (value: number) => (Math.abs(Math.log(value / reported)) > WITH_ZERO ? WITH_ZERO_SHARE : 1);
+    const all = candidates.reduce((sum, value) => sum + share(value), 0);
     return candidates.map((value) => ({
       detail: `${reported} should read ${value}`,
-      weight: (Math.abs(Math.log(value / reported)) > WITH_ZERO ? WITH_ZERO_SHARE : 1) / candidates.length,
+      weight: share(value) / Math.max(1, all),
       change: () => ({ kind: "value", value }),
     }));
   },

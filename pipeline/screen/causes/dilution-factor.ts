@@ -2,15 +2,15 @@ import type { Cause } from "./cause.ts";
 
 /** Usual dilutions of a saturated solution before analysis that are no powers of ten, with their shares. */
 const FACTORS: readonly (readonly [factor: number, share: number])[] = [
-  [2, 0.3],
-  [4, 0.1],
-  [5, 0.35],
-  [20, 0.12],
-  [25, 0.06],
-  [50, 0.07],
+  [2, 0.2],
+  [4, 0.12],
+  [5, 0.36],
+  [20, 0.14],
+  [25, 0.08],
+  [50, 0.1],
 ];
 /** Forgetting a dilution is commoner than counting it twice. */
-const FORGOTTEN = 0.8;
+const FORGOTTEN = 0.87;
 
 /**
  * Dilution before analysis not counted (value too low) or counted twice (too high).
@@ -21,7 +21,7 @@ const FORGOTTEN = 0.8;
  */
 export const dilutionFactor: Cause = {
   name: "dilution factor",
-  pointPrior: 0.15,
+  pointPrior: 0.12,
   blockPrior: 0.08,
   lookAt: "Look at the dilution of this sample in the analysis record and whether it was counted once.",
   explanations: () =>

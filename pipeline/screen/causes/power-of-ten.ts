@@ -17,7 +17,7 @@ const SHARES: readonly (readonly [factor: number, share: number])[] = [
  */
 export const powerOfTen: Cause = {
   name: "power of ten",
-  pointPrior: 0.2,
+  pointPrior: 0.28,
   blockPrior: 0.2,
   lookAt: "Look at the decimal point and the prefix of the unit in the notebook or the original table.",
   explanations: () =>

@@ -1,0 +1,22 @@
+import type { AcrossSystems } from "./across-systems.ts";
+
+/** How much likelier it is that another solute in the same solvent is off to the same side, or the other. */
+const [SAME_SIDE, OTHER_SIDE] = [12, 4];
+
+/**
+ * The solvent of one source held water (or another solvent): everything it measured in that solvent is off, one solute
+ * more than the other, and its other solvents are not.
+ *
+ * Computes whether other solutes of the same source in the same organic solvent are off as whole blocks too.
+ * Known limitation: one solute says nothing; the amount of water is not estimated, and any other impurity of the solvent
+ * gives the same picture.
+ */
+export const wetSolvent: AcrossSystems = {
+  name: "wet solvent",
+  lookAt: "Look at the grade and water content (Karl Fischer) of this solvent in this source.",
+  applies: (_, { identity }) => identity.composition === "" && identity.solvent !== "water",
+  together: (a, b) => a.identity.solvent === b.identity.solvent && a.identity.solute !== b.identity.solute,
+  likelihoodRatio: (first, second) => (first.offset * second.offset > 0 ? SAME_SIDE : OTHER_SIDE),
+  priorOdds: 0.15,
+  detail: (blocks) => `${blocks.length} solutes of this source are off in this solvent`,
+};
