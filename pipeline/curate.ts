@@ -10,6 +10,7 @@ import { usedSubstances } from "./identify/used-substances.ts";
 import { createCorrector, withRulings } from "./normalise/corrections.ts";
 import { type Normalised, normaliseEdition } from "./normalise/edition.ts";
 import { createRereader } from "./normalise/reread.ts";
+import { createRowBudget } from "./normalise/row-budget.ts";
 import type { Problem } from "./problems/catalogue.ts";
 import type { SubstanceIndex } from "./properties/substances.ts";
 import { openAccounts } from "./read/accounts.ts";
@@ -145,6 +146,7 @@ export async function curate(
     rowResults: rowResults(fits, table.count, omitted.size === 0 ? undefined : { fits: first.fits, touched, omitted }),
     ideals: systems.map(({ index: i }) => idealComparison(fits[i]?.curves[0], liquors[i] as Liquor)),
     liquors,
+    budgetOf: createRowBudget(table, normalised),
   };
   return { edition, index, register, normalised };
 }

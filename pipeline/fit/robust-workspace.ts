@@ -35,7 +35,9 @@ export interface RobustWorkspace {
   readonly groupOfSource: Int32Array;
 }
 
-/** ln of the ratio to the median temperature beyond which a temperature takes no part: K read as °C, say. */
+/** Room temperature, K. */
+const ROOM_K = 296;
+/** ln of the ratio to the usual temperature beyond which a temperature takes no part: K read as °C, say. */
 const FAR_K = Math.log(1.5);
 
 /** A workspace for systems of up to `capacity` points from `nSources` sources. */
@@ -109,7 +111,7 @@ export function loadSystem(ws: RobustWorkspace, points: SystemPoints, excluded: 
   groupStart[0] = 0;
   let finite = 0;
   let sumT = 0;
-  const middleK = medianTemperature(points, scratch);
+  const usualK = usualTemperature(points, scratch);
   for (let g = 0; g < ws.groups; g++) {
     groupOfSource[sourceOf[g]!] = -1;
     for (let k = groupStart[g]!; k < groupStart[g + 1]!; k++) {
@@ -119,7 +121,7 @@ export function loadSystem(ws: RobustWorkspace, points: SystemPoints, excluded: 
       rows.group[k] = g;
       ws.temperatureK[k] = T;
       rows.response[k] = y;
-      const ok = Math.abs(Math.log(T / middleK)) < FAR_K && Math.abs(y) < 1e3 && excluded?.[i] !== 1;
+      const ok = Math.abs(Math.log(T / usualK)) < FAR_K && Math.abs(y) < 1e3 && excluded?.[i] !== 1;
       usable[k] = ok ? 1 : 0;
       if (!ok) continue;
       scratch[finite++] = y;
@@ -131,11 +133,33 @@ export function loadSystem(ws: RobustWorkspace, points: SystemPoints, excluded: 
   for (let k = 0; k < n; k++) rows.response[k]! -= ws.shift;
 }
 
-/** Median of the temperatures above 0 K; NaN where there are none. */
-function medianTemperature({ n, temperatureK }: SystemPoints, scratch: Float64Array): number {
-  let count = 0;
-  for (let i = 0; i < n; i++) if (temperatureK[i]! > 0 && temperatureK[i]! < 1e5) scratch[count++] = temperatureK[i]!;
-  return count === 0 ? Number.NaN : medianInPlace(scratch, count);
+/**
+ * Temperature about which a system is taken to be measured, K; NaN where there is none above 0 K. Where temperatures lie
+ * too far apart for one curve, that of the source whose median is nearest to room temperature: which source has more
+ * points says nothing about whose scale is wrong.
+ */
+function usualTemperature({ n, temperatureK, source }: SystemPoints, scratch: Float64Array): number {
+  let [low, high] = [Number.POSITIVE_INFINITY, 0];
+  for (let i = 0; i < n; i++) {
+    const T = temperatureK[i]!;
+    if (!(T > 0 && T < 1e5)) continue;
+    low = Math.min(low, T);
+    high = Math.max(high, T);
+  }
+  if (Math.log(high / low) < FAR_K) return Math.sqrt(low * high);
+  let usual = Number.NaN;
+  for (const one of new Set(source)) {
+    let count = 0;
+    for (let i = 0; i < n; i++) {
+      const T = temperatureK[i]!;
+      if (source[i] === one && T > 0 && T < 1e5) scratch[count++] = T;
+    }
+    if (count === 0) continue;
+    const median = medianInPlace(scratch, count);
+    const nearer = Math.abs(Math.log(median / ROOM_K)) < Math.abs(Math.log(usual / ROOM_K));
+    if (Number.isNaN(usual) || nearer) usual = median;
+  }
+  return usual;
 }
 
 /** Fills the basis for the system's temperatures, with the break at `breakK` (NaN = none). */

@@ -203,7 +203,16 @@ export function normaliseSource(
     if (missing !== undefined && context.unit.basis.includes("volume")) {
       return { field: "solubility", code: "no-density", found: missing };
     }
-    const found = `${text} ${context.unit.canonical} leaves no room for the solvent, or is beyond what the density is known for`;
+    const { unit, liquor } = context;
+    const { solutionDensity: model } = liquor.needs;
+    if (unit.basis.includes("volume of solution") && model?.kind !== "measured") {
+      const why =
+        model?.kind === "additive volumes"
+          ? `an assumed apparent density of the solute of ${Math.round(model.apparentSoluteDensity.value)} kg/m3 can hold`
+          : "the published densities reach";
+      return { field: "solubility", code: "no-density", found: `${text} ${unit.canonical} is more than ${why}` };
+    }
+    const found = `${text} ${unit.canonical} leaves no room for the solvent`;
     return { field: "solubility", code: "fraction-at-or-above-one", found };
   }
 

@@ -86,6 +86,11 @@ export interface Edition {
   readonly rowResults: RowResults;
   /** The first curve of each system held against the ideal solubility, or why it is not. By position of the system. */
   readonly ideals: readonly (IdealComparison | { readonly whyNot: string })[];
+  /** What contributes how much to a row's uncertainty, percent; `slopePerK` is d ln value/dT of its curve. */
+  readonly budgetOf: (
+    row: number,
+    slopePerK?: number,
+  ) => readonly { readonly name: string; readonly percent: number }[];
   /** Properties of a system's liquor that the tables of curves and planning need. */
   readonly liquors: readonly Liquor[];
 }

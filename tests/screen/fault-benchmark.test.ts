@@ -3,24 +3,25 @@ import { type Score, scoreWorld } from "../benchmarks/faults-score.ts";
 import { makeWorld, USUAL } from "../benchmarks/faults-world.ts";
 
 /**
- * A quick run of the fault benchmark: two invented worlds of 150 systems. The limits lie below the figures of the full
- * run by what two seeds can scatter.
+ * A quick run of the fault benchmark: two small invented worlds with faults enough to count. Floors lie below the figures
+ * of the full run (tests/benchmarks/README.md) by what so few cases scatter.
  */
 test("of known faults in invented worlds nearly all are found, nearly no clean row is flagged, causes are mostly right", () => {
   const score: Score = new Map();
-  for (const seed of [11, 12]) scoreWorld(makeWorld({ ...USUAL, seed }), score);
-  const share = (name: string) => {
+  for (const seed of [11, 12]) scoreWorld(makeWorld({ ...USUAL, seed, solutes: 22, sources: [2, 4] }), score);
+  const share = (name: string, least = 20) => {
     const { hits, cases } = score.get(name)!;
-    expect(cases, name).toBeGreaterThan(5);
+    expect(cases, name).toBeGreaterThanOrEqual(least);
     return hits / cases;
   };
-  expect(share("recall, points")).toBeGreaterThan(0.95);
-  expect(share("recall, blocks")).toBeGreaterThan(0.9);
-  expect(share("two-source conflicts reported")).toBeGreaterThan(0.8);
-  expect(share("false flags, clean rows")).toBeLessThan(0.004);
-  expect(share("false flags, transition rows")).toBeLessThan(0.03);
-  expect(share("cause right")).toBeGreaterThan(0.8);
-  expect(share("cause given to random faults")).toBeLessThan(0.3);
-  expect(share("clean rows given a cause")).toBeLessThan(0.002);
-  expect(share("proposed value within 5 %")).toBeGreaterThan(0.85);
+  expect(share("recall, points")).toBeGreaterThanOrEqual(0.97);
+  expect(share("recall, blocks")).toBeGreaterThanOrEqual(0.95);
+  expect(share("recall, bent series")).toBeGreaterThanOrEqual(0.75);
+  expect(share("two-source conflicts reported", 8)).toBeGreaterThanOrEqual(0.85);
+  expect(share("false flags, clean rows", 3000)).toBeLessThanOrEqual(0.002);
+  expect(share("false flags, transition rows", 300)).toBeLessThanOrEqual(0.015);
+  expect(share("cause right")).toBeGreaterThanOrEqual(0.82);
+  expect(share("cause given to random faults")).toBeLessThanOrEqual(0.18);
+  expect(share("clean rows given a cause", 3000)).toBeLessThanOrEqual(0.0015);
+  expect(share("proposed value within 5 %")).toBeGreaterThanOrEqual(0.95);
 });

@@ -54,6 +54,14 @@ const range = (low: number, high: number, digits: number): string =>
       ? `from ${significant(low, digits)}`
       : `${significant(low, digits)} to ${significant(high, digits)}`;
 
+/** The whole uncertainty of a row; where several things contribute it opens to what brings how much. */
+function budgetCell(budget: RowBudget | undefined): Html {
+  const whole = significant(budget?.both, 2);
+  if (budget === undefined || budget.parts.length < 2) return html`${whole}`;
+  const parts = budget.parts.map(({ name, percent }) => `${name} ${significant(percent, 2)}`).join("; ");
+  return html`<details><summary>${whole || "budget"}</summary>${parts}</details>`;
+}
+
 function measurementRow(context: TableContext, point: DrawnPoint, budget: RowBudget | undefined): Html {
   const { table, sources, rowResults, rulings } = context.view.edition;
   const { row, state } = point;
@@ -75,7 +83,7 @@ function measurementRow(context: TableContext, point: DrawnPoint, budget: RowBud
   ].join(" ");
   const carried = context.carries ? html`<td class="w">${short(text(table.carried), 120)}</td>` : "";
   const status = `${state.replace(" by the fit", "")}${point.flagged ? ", flagged" : ""}`;
-  return html`<tr><th scope="row" class="t">${sourceLetter(point.source)} ${table.line[row]}${column}</th><td class="t">${status}</td><td class="n">${celsius(point.temperatureK)}</td><td class="n">${short(reported, CELL)}</td><td class="t">${short(text(table.reportedUnit), CELL)}</td><td class="n">${value("moleFraction")}</td><td class="n">${percent}</td><td class="n">${value("massConcentration")}</td><td class="n">${significant(budget?.value, 2)}</td><td class="n">${significant(budget?.temperatureK, 2)}</td><td class="n">${significant(budget?.both, 2)}</td><td class="n">${percentOff(point.deviationPercent)}</td><td class="n">${fixed(rowResults.z[row], 1)}</td><td class="t">${short(text(table.method), CELL)}</td><td class="t">${notes}</td>${carried}</tr>`;
+  return html`<tr><th scope="row" class="t">${sourceLetter(point.source)} ${table.line[row]}${column}</th><td class="t">${status}</td><td class="n">${celsius(point.temperatureK)}</td><td class="n">${short(reported, CELL)}</td><td class="t">${short(text(table.reportedUnit), CELL)}</td><td class="n">${value("moleFraction")}</td><td class="n">${percent}</td><td class="n">${value("massConcentration")}</td><td class="n">${significant(budget?.value, 2)}</td><td class="n">${significant(budget?.temperatureK, 2)}</td><td class="n">${budgetCell(budget)}</td><td class="n">${percentOff(point.deviationPercent)}</td><td class="n">${fixed(rowResults.z[row], 1)}</td><td class="t">${short(text(table.method), CELL)}</td><td class="t">${notes}</td>${carried}</tr>`;
 }
 
 /** The measurements of one source under its letter, name and file. */

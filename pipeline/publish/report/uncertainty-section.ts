@@ -1,3 +1,4 @@
+import type { Edition } from "../../records/edition.ts";
 import { median, significant, sourceLetter } from "./figures.ts";
 import { type Html, html } from "./html.ts";
 import { wideTable } from "./page.ts";
@@ -17,6 +18,8 @@ export interface RowBudget {
   readonly temperature: number;
   /** Both together: their root sum of squares. */
   readonly both: number;
+  /** What contributes how much, percent, largest first. */
+  readonly parts: ReturnType<Edition["budgetOf"]>;
 }
 
 /** |d ln value/dT| of the system's curve at a temperature, 1/K; NaN outside the range of its curves. */
@@ -36,9 +39,17 @@ export function rowBudgets(view: SystemView): RowBudget[] {
   return view.points.map(({ row, temperatureK }) => {
     const value = 100 * (table.relativeU[row] as number);
     const uT = table.temperatureU[row] as number;
-    const temperature = 100 * slopeAt(view, temperatureK) * uT;
+    const slope = slopeAt(view, temperatureK);
+    const temperature = 100 * slope * uT;
     const both = Number.isNaN(temperature) ? Number.NaN : Math.hypot(value, temperature);
-    return { value, shared: 100 * (table.sharedU[row] as number), temperatureK: uT, temperature, both };
+    return {
+      value,
+      shared: 100 * (table.sharedU[row] as number),
+      temperatureK: uT,
+      temperature,
+      both,
+      parts: view.edition.budgetOf(row, slope),
+    };
   });
 }
 

@@ -19,7 +19,8 @@ export function transpositions(value: number): number[] {
     if (text[a] === text[b]) continue;
     const swapped = text.slice(0, a) + text[b] + text.slice(a + 1, b) + text[a] + text.slice(b + 1);
     const number = Math.sign(value) * Number(swapped);
-    if (number !== 0 && Math.abs(number) !== Math.abs(value)) found.push(number);
+    // Ten times the number is a decimal point set wrongly, and another cause.
+    if (number !== 0 && Math.abs(number) !== Math.abs(value) && number !== 10 * value) found.push(number);
   }
   return found;
 }
