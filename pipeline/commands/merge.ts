@@ -70,8 +70,9 @@ function account(edition: Edition, open: string): string[] {
   const cell = (value: number | string) => String(value).padStart(9);
   const line = (name: string, ...values: (number | string)[]) => `  ${name.padEnd(width)}${values.map(cell).join("")}`;
   const blocking = edition.flags.filter((_, i) => needsRuling(edition, i));
+  const settled = edition.flags.filter(({ severity }) => severity === "blocking").length - blocking.length;
   const flagLines = blocking.slice(0, SHOWN).map((flag) => {
-    const cause = flag.suspectedCause ? ` Suspected cause: ${flag.suspectedCause}.` : "";
+    const cause = flag.suspectedCause ? `. Suspected cause: ${flag.suspectedCause}` : "";
     return `  ${safeText(flagId(edition, flag))}: ${safeText(flag.evidence, 400)}${cause}`;
   });
   return [
@@ -82,7 +83,7 @@ function account(edition: Edition, open: string): string[] {
     line("all", counts.readings, counts.accepted, counts.refused, counts.missing_cells),
     "",
     `${counts.systems} systems of ${counts.families} families, ${counts.curves} curves, ${counts.intervals} intervals, ${counts.not_fitted} values shown and not fitted`,
-    `${counts.flags} flags, ${counts.blocking_flags} of them need a person${counts.blocking_flags > 0 ? ":" : ""}`,
+    `${counts.flags} flags${settled > 0 ? `, ${settled} settled by a ruling` : ""}, ${counts.blocking_flags} that need a person${counts.blocking_flags > 0 ? ":" : ""}`,
     ...flagLines,
     ...(blocking.length > SHOWN ? [`  and ${blocking.length - SHOWN} more in flags.csv`] : []),
     "",

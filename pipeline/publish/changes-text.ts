@@ -104,7 +104,7 @@ export function changesTitle({ old, new: now }: CompareResult): string {
 
 /** Markup of Markdown and HTML made harmless. */
 const plain = (line: string) =>
-  line.replace(/[&<>]/g, (c) => `&#${c.charCodeAt(0)};`).replace(/([\\`*_[\]#|])/g, "\\$1");
+  line.replace(/([\\`*_[\]#|])/g, "\\$1").replace(/[&<>]/g, (c) => `&#${c.charCodeAt(0)};`);
 
 /** CHANGES.md: what changed, as Markdown. */
 export function* changesMarkdown(result: CompareResult): Generator<string> {

@@ -16,7 +16,7 @@ const MORE_STABLE_FORM =
 export function blockFlags(input: ScreenInput, blocks: readonly OffBlock[]): Flag[] {
   const verdicts = blocks.map(verdictOf);
   const unexplained = blocks.filter((_, j) => verdicts[j]!.cause === undefined);
-  const across = competeAcrossSystems(input.systems, unexplained);
+  const across = competeAcrossSystems(input, unexplained);
   return blocks.map((block, j) => blockFlag(input, block, across.get(block) ?? verdicts[j]!));
 }
 

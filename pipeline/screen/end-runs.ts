@@ -10,6 +10,10 @@ export interface EndRun {
   readonly outermost: number;
   /** True where no other source reaches there: the curve itself may turn, and the run is one finding, not several. */
   readonly oneFinding: boolean;
+  /** True where exactly one other sound source reaches there: either of the two could be the wrong one. */
+  readonly contested: boolean;
+  /** Temperatures of the run with what lies near, K. */
+  readonly nearK: readonly [low: number, high: number];
   /** What to add to the evidence of each of them. */
   readonly words: string;
 }
@@ -48,6 +52,8 @@ export function endRun(input: ScreenInput, off: readonly OffPoint[]): EndRun | u
     return {
       points: new Set(run),
       outermost: order[0]!,
+      contested: seen && fit.soundSources.length === 2 && fit.soundSources.includes(own),
+      nearK: [low, high],
       oneFinding: !seen && run.length >= LEAST_ONE_FINDING,
       words: `one of the ${run.length} ${end} points of ${sourceName(input, own)}, which leave the curve together${alone}`,
     };

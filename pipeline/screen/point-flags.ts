@@ -5,6 +5,7 @@ import { blocksOf } from "./block-screen.ts";
 import type { Suspects } from "./causes/cause.ts";
 import { competeForPoint, type Verdict } from "./causes/compete-point.ts";
 import { competeForSeries } from "./causes/compete-series.ts";
+import { contestedFlag, isContested, SURE } from "./contested-ends.ts";
 import { type EndRun, endRun } from "./end-runs.ts";
 import type { OffPoint } from "./point-screen.ts";
 import { isPossibleTemperature } from "./possible-temperature.ts";
@@ -46,7 +47,39 @@ export function pointFlags(
     );
     for (const j of same) if (bent?.explained.has(off[j]!.point)) bends.set(j, bent.verdict);
   }
-  return off.map((one, j) => pointFlag(input, one, bends.get(j) ?? verdicts[j]!, runs.get(j)));
+  // A row with a slip of its own, such as a decimal point, is no part of a quarrel between sources.
+  const slipped = (j: number) => !bends.has(j) && verdicts[j]!.cause !== undefined;
+  const sure = (j: number) => (bends.get(j)?.probability ?? 0) > SURE;
+  const quarrels = quarrelsOf(off, runs, (j) => slipped(j) || sure(j));
+  return [
+    ...[...quarrels.values()].map(({ off: one, run }) => contestedFlag(input, one, run)),
+    ...off.flatMap((one, j) => {
+      const quarrel = quarrels.get(one.system);
+      if (quarrel !== undefined && !slipped(j) && isContested(input, one, quarrel.run)) return [];
+      return [pointFlag(input, one, bends.get(j) ?? verdicts[j]!, runs.get(j))];
+    }),
+  ];
+}
+
+/** A run of off points where the two sources of a system part, with one of the points. */
+interface Quarrel {
+  readonly off: OffPoint;
+  readonly run: EndRun;
+}
+
+/** Contested runs by system, of which no point is explained by itself. */
+function quarrelsOf(
+  off: readonly OffPoint[],
+  runs: ReadonlyMap<number, EndRun>,
+  isExplained: (j: number) => boolean,
+): Map<number, Quarrel> {
+  const explained = new Set([...runs].flatMap(([j, run]) => (isExplained(j) ? [run] : [])));
+  const quarrels = new Map<number, Quarrel>();
+  for (const [j, run] of runs) {
+    const one = off[j]!;
+    if (run.contested && !explained.has(run) && !quarrels.has(one.system)) quarrels.set(one.system, { off: one, run });
+  }
+  return quarrels;
 }
 
 /** Positions of the off points of each block, in order of first appearance. */

@@ -66,18 +66,19 @@ function reReported(input: ScreenInput, system: System): Flag[] {
   const { table } = input;
   const { rows } = system;
   const twins = new Map<number, Map<number, Shared>>();
-  const scatter = scatterOf(input, system.index);
+  let scatter = Number.NaN;
   for (let i = 1; i < rows.length; i++) {
     for (let j = 0; j < i; j++) {
-      const tolerance = sameMeasurement(table, rows[i]!, rows[j]!);
-      if (tolerance === undefined) continue;
+      const width = sameMeasurement(table, rows[i]!, rows[j]!);
+      if (width === undefined) continue;
+      if (Number.isNaN(scatter)) scatter = scatterOf(input, system.index);
       const [later, earlier] = [table.source[rows[i]!]!, table.source[rows[j]!]!];
       const counts = twins.get(later) ?? new Map<number, Shared>();
       twins.set(later, counts);
       const shared = counts.get(earlier) ?? { pairs: 0, logChance: 0 };
       counts.set(earlier, shared);
       shared.pairs++;
-      shared.logChance += Math.log(Math.min(1, (2 * tolerance) / (Math.sqrt(2 * Math.PI) * scatter)));
+      shared.logChance += Math.log(Math.min(1, (2 * width) / (Math.sqrt(2 * Math.PI) * scatter)));
     }
   }
   return [...twins].flatMap(([later, counts]) => repeatsOf(input, system, later, counts));
@@ -91,17 +92,18 @@ function scatterOf({ fits }: ScreenInput, system: number): number {
 }
 
 /**
- * How near (ln value) two rows of different sources at one temperature had to be to count as one value, whatever the unit:
- * the rounding of the coarser one. Undefined where they are not that near.
+ * How near (ln value) two rows of different sources at one temperature would be by rounding alone, whatever the unit, where
+ * they are that near; undefined where they are not.
  */
 function sameMeasurement(table: MeasurementTable, a: number, b: number): number | undefined {
   const { massRatio, temperatureK, source, reportedValue } = table;
+  if (!(Math.abs(temperatureK[a]! - temperatureK[b]!) < SAME_TEMPERATURE_K) || source[a] === source[b])
+    return undefined;
   const apart = Math.abs(massRatio[a]! / massRatio[b]! - 1);
-  if (!(apart < COARSEST) || source[a] === source[b]) return undefined;
-  if (!(Math.abs(temperatureK[a]! - temperatureK[b]!) < SAME_TEMPERATURE_K)) return undefined;
+  if (!(apart < COARSEST)) return undefined;
   const rounding = Math.max(roundingOf(reportedValue[a]!), roundingOf(reportedValue[b]!));
   const tolerance = Math.min(COARSEST, Math.max(SAME_VALUE, rounding));
-  return apart <= tolerance ? tolerance : undefined;
+  return apart <= tolerance ? Math.max(tolerance, rounding) : undefined;
 }
 
 /** The notice for the source that most of a block's values repeat, if there is one. */

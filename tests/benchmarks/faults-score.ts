@@ -37,6 +37,8 @@ interface Scored {
   readonly miss: (text: string) => void;
   readonly ofRow: ReadonlyMap<number, Flag>;
   readonly ofBlock: ReadonlyMap<string, Flag>;
+  /** Blocks whose cause has been scored. */
+  readonly toldBlocks: Set<string>;
   readonly conflict: boolean;
   readonly system: number;
   readonly sources: number;
@@ -74,6 +76,7 @@ export function scoreWorld(world: World, score: Score, misses: string[] = []): v
     const of: Scored = {
       ...{ world, add, ofRow, ofBlock, majority },
       miss: (text) => misses.push(text),
+      toldBlocks: new Set(),
       conflict: conflicts.has(index),
       system: index,
       sources: sources.length,
@@ -129,7 +132,10 @@ function scoreRow(of: Scored, source: number, row: number): void {
   const bent = BENT.has(fault);
   if (bent) {
     if (of.majority) add("recall, bent series", flagged);
-    if (of.majority && flagged) scoreCause(of, flag ?? of.ofBlock.get(key)!, fault, "series");
+    // A flag on the whole block is one case, not one a row.
+    const told = flag ?? (of.toldBlocks.has(key) ? undefined : of.ofBlock.get(key));
+    if (flag === undefined) of.toldBlocks.add(key);
+    if (of.majority && told !== undefined) scoreCause(of, told, fault, "series");
     return;
   }
   add(of.majority ? "recall, points" : "recall, points, one source or no majority", flagged);

@@ -35,7 +35,7 @@ describe("two editions that say the same", () => {
 
 describe("an edition after two more rulings", () => {
   test("differs: exit 1, in words a chemist uses, with the ruling behind each change", async () => {
-    const run = await saltern(["compare", at("first"), at("second")]);
+    const run = await compare(at("first"), at("second"));
     expect(run.code).toBe(1);
     expect(run.stdout).toContain("salicylic acid in ethanol: doubtful, now tentative");
     expect(run.stdout).toMatch(

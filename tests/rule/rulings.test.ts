@@ -104,6 +104,16 @@ describe("each action", () => {
     expect(impossible.table.massRatio).toEqual(plain.table.massRatio);
   });
 
+  test("a system fitted again without any change has the same curve: what was pooled over the edition stays", async () => {
+    const same = { action: "correct", corrected_value: "151.3", evidence: "read again", fingerprint: print.line };
+    const edition = await ruled({ target: "alpha:4", ...same });
+    const [now, before] = [edition, plain].map(({ fits }) => fits[0]?.curves[0]);
+    expect(edition.rulings.corrected.size).toBe(1);
+    expect([now?.model, now?.n, now?.coefficients]).toEqual([before?.model, before?.n, before?.coefficients]);
+    expect(now?.limits(300)).toEqual(before?.limits(300));
+    expect(edition.rowResults.z).toEqual(plain.rowResults.z);
+  });
+
   test("ask holds no edition back, and the question stays open in the grade", async () => {
     const edition = await ruled({ target: FLAG, action: "ask", fingerprint: print.flag });
     expect(needsRuling(edition, flagIds(edition).indexOf(FLAG))).toBe(false);

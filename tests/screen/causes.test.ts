@@ -12,6 +12,7 @@ function suspects(rows: readonly number[], unit = "g/100 g solvent"): Suspects {
     method: "",
     soluteMolarMass: 180,
     otherCompositions: [{ system: 9, name: "solvent A + solvent B, 0.4", sameSource: true }],
+    otherReadingK: (row) => (row === 1 ? 301 : undefined),
     numberStandsIn: (_, system) => system === 4,
     temperatureK: (row) => 280 + 10 * row,
     reportedValue: (row) => values[row]!,
@@ -117,6 +118,13 @@ describe("the changes that undo a cause", () => {
     // Chlorine 35.45 and hydrogen 1.008, IUPAC 2021.
     expect(changes("salt or free base", suspects([0, 1, 2]), 1)[0]).toEqual({ kind: "factor", factor: 180 / 216.46 });
     expect(changes("salt or free base", { ...suspects([0]), soluteMolarMass: Number.NaN }, 0)).toEqual([]);
+  });
+
+  test("take a clear point to the temperature of the cloud point of the same solution", () => {
+    expect(changes("cloud point for clear point", suspects([1]), 1)).toEqual([
+      { kind: "temperature", temperatureK: 301 },
+    ]);
+    expect(changes("cloud point for clear point", suspects([0]), 0)).toEqual([undefined]);
   });
 
   test("hold it for likelier that a value was taken from a column in which the very number stands", () => {

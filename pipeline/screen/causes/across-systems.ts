@@ -1,5 +1,6 @@
 import type { System } from "../../records/systems.ts";
 import type { OffBlock } from "../block-screen.ts";
+import type { ScreenInput } from "../screen-input.ts";
 import { anotherSolidForm } from "./another-solid-form.ts";
 import type { Verdict } from "./compete-point.ts";
 import { NAMED_ABOVE } from "./compete-point.ts";
@@ -20,6 +21,9 @@ export interface AcrossSystems {
   readonly detail: (blocks: readonly OffBlock[]) => string;
 }
 
+/** Share of the source's other blocks of the kind that must be off too: among many, one more is off by chance. */
+const LEAST_SHARE = 0.5;
+
 const EVERY_ACROSS: readonly AcrossSystems[] = [anotherSolidForm, wetSolvent];
 
 /**
@@ -29,7 +33,7 @@ const EVERY_ACROSS: readonly AcrossSystems[] = [anotherSolidForm, wetSolvent];
  * @param unexplained off blocks without a cause
  */
 export function competeAcrossSystems(
-  systems: readonly System[],
+  { systems, fits }: Pick<ScreenInput, "systems" | "fits">,
   unexplained: readonly OffBlock[],
 ): ReadonlyMap<OffBlock, Verdict> {
   const verdicts = new Map<OffBlock, Verdict>();
@@ -45,6 +49,10 @@ export function competeAcrossSystems(
           cause.together(own, systems[other.system]!),
       );
       if (family.length === 0) continue;
+      const all = fits.filter(
+        ({ system, points }) => cause.together(own, systems[system]!) && points.source.includes(block.source),
+      );
+      if (family.length < LEAST_SHARE * all.length) continue;
       const odds = family.reduce((product, other) => product * cause.likelihoodRatio(block, other), cause.priorOdds);
       const probability = odds / (1 + odds);
       if (!(probability > Math.max(NAMED_ABOVE, verdicts.get(block)?.probability ?? 0))) continue;

@@ -10,7 +10,7 @@ import { takenFrom } from "./taken-from.ts";
  */
 export const anotherSolvent: Cause = {
   name: "value of another solvent",
-  pointPrior: 0.18,
+  pointPrior: 0.13,
   blockPrior: 0.05,
   lookAt: "Look at whether the value was taken from the column or row of another solvent.",
   explanations: ({ otherSolvents, numberStandsIn }) => takenFrom(otherSolvents, numberStandsIn),

@@ -49,6 +49,7 @@ export function calculatedFlags(input: ScreenInput): Flag[] {
     return [...blocksOf(fit)].flatMap(([source, points]): Flag[] => {
       if (!mayBeSmooth(fit, points)) return [];
       const left = rmsLeft(model, rows, fit, points);
+      if (!(left < OF_ROUNDING * LEAST_SCATTER)) return [];
       const rounding = rmsRounding(input, fit, points);
       if (!(rounding < LEAST_SCATTER) || !(left < OF_ROUNDING * rounding)) return [];
       return [

@@ -51,6 +51,8 @@ export interface Suspects {
   readonly otherSolvents: readonly Neighbouring[];
   /** Systems with the same solute and solid form in the same solvents, mixed in another proportion. */
   readonly otherCompositions: readonly Neighbouring[];
+  /** Temperature (K) of another reading of the same solution that no fit uses, such as the cloud point of a clear point. */
+  readonly otherReadingK: (row: number) => number | undefined;
   /** Whether this source reports the very number of a row, in the same unit, in another system near this temperature. */
   readonly numberStandsIn: (row: number, system: number) => boolean;
 }

@@ -1,5 +1,6 @@
 import type { RobustFit } from "../../records/fits.ts";
 import type { Change } from "../../records/reread.ts";
+import { isOutsideLiquid } from "../liquid-range.ts";
 import { isPossibleTemperature } from "../possible-temperature.ts";
 import type { ScreenInput } from "../screen-input.ts";
 import { fitSources, predict, type SystemModel } from "../system-model.ts";
@@ -32,12 +33,12 @@ export const LOOK_AGAIN =
   "Look the value and its temperature up in the notebook or the original table; if they stand, measure again.";
 
 /** Prior probability of a random error, and how its size in ln value is spread. Common practice. */
-const NONE_PRIOR = 0.8;
+const NONE_PRIOR = 0.85;
 const [NONE_LEAST, NONE_MOST] = [0.14, 2];
 const NONE_WIDEST = 10;
 /** Share of random errors of any size at all. */
 const NONE_WIDE_SHARE = 0.25;
-/** Density given to "none" where the temperature cannot be meant: the value is not what is wrong. */
+/** Density given to "none" where the temperature is hardly meant: the value is not what is wrong. */
 const IMPOSSIBLE_DENSITY = 0.005;
 /** A re-read value must come this near, in standard deviations. */
 const NEAR_Z = 3;
@@ -63,7 +64,8 @@ export function competeForPoint(of: PointCase): PointVerdict {
   const { fit, point, models } = of;
   const sound = fit.apartSources.length === 0 ? undefined : new Set(fit.soundSources);
   fitSources(models[0], fit, (source) => sound?.has(source) !== false, point);
-  const meant = isPossibleTemperature(fit.points.temperatureK[point]!);
+  const possible = isPossibleTemperature(fit.points.temperatureK[point]!);
+  const meant = possible && !isOutsideLiquid(of.input, fit.system, point);
   let total = NONE_PRIOR * (meant ? noneDensity(fit.deviation[point]!) : IMPOSSIBLE_DENSITY);
   let best: Verdict | undefined;
   let bestWeight = 0;

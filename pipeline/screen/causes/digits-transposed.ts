@@ -33,7 +33,7 @@ export function transpositions(value: number): number[] {
  */
 export const digitsTransposed: Cause = {
   name: "digits transposed",
-  pointPrior: 0.13,
+  pointPrior: 0.115,
   blockPrior: 0,
   lookAt: "Look at the digits of this value in the notebook or the original table.",
   explanations: ({ rows, reportedValue }) => {

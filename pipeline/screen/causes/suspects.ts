@@ -1,6 +1,5 @@
 import { parseUnit } from "../../bases/units.ts";
-import type { MeasurementTable } from "../../records/measurements.ts";
-import { textOf } from "../../records/measurements.ts";
+import { type MeasurementTable, RowState, textOf } from "../../records/measurements.ts";
 import type { Identity, System } from "../../records/systems.ts";
 import type { ScreenInput } from "../screen-input.ts";
 import type { Suspects } from "./cause.ts";
@@ -64,6 +63,16 @@ export function createSuspectFinder(input: ScreenInput) {
       otherCompositions: siblings
         .filter((other) => sameSolvents(other) && other.identity.composition !== own.identity.composition)
         .map(neighbouring(({ solvent, composition }) => `${solvent}, ${composition}`)),
+      otherReadingK: (row) => {
+        const twin = own.rows.find(
+          (other) =>
+            table.state[other] === RowState.notFitted &&
+            table.source[other] === source &&
+            table.reportedValue[other] === table.reportedValue[row] &&
+            table.reportedUnit[other] === table.reportedUnit[row],
+        );
+        return twin === undefined ? undefined : table.temperatureK[twin]!;
+      },
       numberStandsIn: (row, other) =>
         systems[other]!.rows.some(
           (there) =>
