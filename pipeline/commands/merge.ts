@@ -6,7 +6,8 @@ import { openOutputFolder } from "../publish/output-folder.ts";
 import { countsOf, noticeOf, sourceCounts } from "../publish/tables/summary.ts";
 import { writeWorkingTables } from "../publish/working-tables.ts";
 import { readCollection } from "../read/collection.ts";
-import { type Edition, flagId, needsRuling } from "../records/edition.ts";
+import { type Edition, flagId } from "../records/edition.ts";
+import type { Flag } from "../records/fits.ts";
 import type { MergeResult } from "../records/generated/merge-result.ts";
 import { type CommonOptions, Exit, type ExitCode, type Terminal } from "./terminal.ts";
 
@@ -69,11 +70,14 @@ function account(edition: Edition, open: string): string[] {
   const width = Math.max(6, ...edition.sources.map(({ name }) => name.length));
   const cell = (value: number | string) => String(value).padStart(9);
   const line = (name: string, ...values: (number | string)[]) => `  ${name.padEnd(width)}${values.map(cell).join("")}`;
-  const blocking = edition.flags.filter((_, i) => needsRuling(edition, i));
-  const settled = edition.flags.filter(({ severity }) => severity === "blocking").length - blocking.length;
-  const flagLines = blocking.slice(0, SHOWN).map((flag) => {
+  const blocking = edition.flags.filter(({ severity }) => severity === "blocking");
+  const rulingOf = (flag: Flag) => edition.rulings.ofFlag.get(edition.flags.indexOf(flag));
+  const first = [...blocking].sort((x, y) => Number(rulingOf(x) !== undefined) - Number(rulingOf(y) !== undefined));
+  const flagLines = first.slice(0, SHOWN).map((flag) => {
     const cause = flag.suspectedCause ? `. Suspected cause: ${flag.suspectedCause}` : "";
-    return `  ${safeText(flagId(edition, flag))}: ${safeText(flag.evidence, 400)}${cause}`;
+    const ruling = rulingOf(flag);
+    const standing = ruling === undefined ? "open" : `settled (${safeText(ruling.id, 20)}, ${ruling.action})`;
+    return `  ${standing}: ${safeText(flagId(edition, flag))}: ${safeText(flag.evidence, 400)}${cause}`;
   });
   return [
     safeText(edition.collection.title),
@@ -83,7 +87,7 @@ function account(edition: Edition, open: string): string[] {
     line("all", counts.readings, counts.accepted, counts.refused, counts.missing_cells),
     "",
     `${counts.systems} systems of ${counts.families} families, ${counts.curves} curves, ${counts.intervals} intervals, ${counts.not_fitted} values shown and not fitted`,
-    `${counts.flags} flags${settled > 0 ? `, ${settled} settled by a ruling` : ""}, ${counts.blocking_flags} that need a person${counts.blocking_flags > 0 ? ":" : ""}`,
+    `${counts.flags} flags: ${counts.blocking_flags} need a person, ${blocking.length - counts.blocking_flags} are settled by a ruling, ${counts.flags - blocking.length} are notices`,
     ...flagLines,
     ...(blocking.length > SHOWN ? [`  and ${blocking.length - SHOWN} more in flags.csv`] : []),
     "",

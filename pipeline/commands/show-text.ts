@@ -4,6 +4,7 @@ import { percentFromLn, type SystemView, titleOf } from "../publish/report/syste
 import { equationOf } from "../publish/tables/curves.ts";
 import { type Edition, flagId } from "../records/edition.ts";
 import type { Curve } from "../records/fits.ts";
+import { rulingPhrase } from "../records/rulings.ts";
 import { valuesOf } from "./shown-values.ts";
 import { textPlot } from "./text-plot.ts";
 
@@ -77,10 +78,12 @@ function flagLines({ edition, flags }: SystemView): string[] {
     "flags:",
     ...flags.slice(0, FLAGS_SHOWN).flatMap((flag) => {
       const cause = flag.suspectedCause === undefined ? "" : ` Suspected cause: ${flag.suspectedCause}.`;
+      const ruling = edition.rulings.ofFlag.get(edition.flags.indexOf(flag));
+      const standing = ruling ? "settled" : flag.severity === "blocking" ? "needs a person" : "notice";
       return [
-        `  ${flag.severity === "blocking" ? "needs a person" : "notice"}: ${safeText(flagId(edition, flag), 240)}`,
+        `  ${standing}: ${safeText(flagId(edition, flag), 240)}`,
         `      ${safeText(flag.evidence, 600)}.${safeText(cause)}`,
-        `      ${safeText(flag.lookAt, 400)}`,
+        `      ${safeText(ruling === undefined ? flag.lookAt : rulingPhrase(ruling), 400)}`,
       ];
     }),
     ...(rest > 0 ? [`  and ${rest} more in flags.csv`] : []),

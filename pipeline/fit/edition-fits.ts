@@ -28,9 +28,12 @@ export interface EditionFits {
   readonly pooled: PooledFit;
 }
 
+/** A point this far beyond a boiling or freezing point still counts as inside: thermometers and pressures vary, K. */
+const LIQUID_MARGIN_K = 1;
+
 /** 1 for points outside the liquid range of the solvent. */
 function outside(temperatureK: Float64Array, [freezing, boiling]: readonly [number, number]): Uint8Array {
-  return Uint8Array.from(temperatureK, (t) => (t < freezing || t > boiling ? 1 : 0));
+  return Uint8Array.from(temperatureK, (t) => (t < freezing - LIQUID_MARGIN_K || t > boiling + LIQUID_MARGIN_K ? 1 : 0));
 }
 
 /** Fits all systems: robust screening fits with pooled scales first, then the published curve of each. */

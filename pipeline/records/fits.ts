@@ -41,7 +41,7 @@ export interface RobustFit {
   readonly degreesOfFreedom: number;
   /** Sources (positions in the edition's list) whose blocks are sound: they agree and form the majority. Ascending. */
   readonly soundSources: readonly number[];
-  /** Sources whose whole block lies apart from the sound majority. Ascending. */
+  /** Sources whose whole block lies apart from the sound majority; a pure copy of another is in neither list. Ascending. */
   readonly apartSources: readonly number[];
   /** In a conflict: the groups of sources that agree within themselves, largest first. */
   readonly camps: readonly (readonly number[])[];
