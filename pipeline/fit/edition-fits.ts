@@ -33,7 +33,9 @@ const LIQUID_MARGIN_K = 1;
 
 /** 1 for points outside the liquid range of the solvent. */
 function outside(temperatureK: Float64Array, [freezing, boiling]: readonly [number, number]): Uint8Array {
-  return Uint8Array.from(temperatureK, (t) => (t < freezing - LIQUID_MARGIN_K || t > boiling + LIQUID_MARGIN_K ? 1 : 0));
+  return Uint8Array.from(temperatureK, (t) =>
+    t < freezing - LIQUID_MARGIN_K || t > boiling + LIQUID_MARGIN_K ? 1 : 0,
+  );
 }
 
 /** Fits all systems: robust screening fits with pooled scales first, then the published curve of each. */

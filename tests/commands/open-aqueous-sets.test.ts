@@ -57,9 +57,9 @@ describe.skipIf(absent)("nine open aqueous sets, merged", () => {
   test("are accepted but for values that no solution can have, or that need a density nobody gave", () => {
     expect(summary.counts.accepted).toBeGreaterThan(0.98 * 19_795);
     const codes = new Set(readTable(out, "refused.csv").rows.map(({ code }) => code));
-    expect([...codes].filter((code) => !["fraction-at-or-above-one", "no-molar-mass", "no-density"].includes(code ?? ""))).toEqual(
-      [],
-    );
+    expect(
+      [...codes].filter((code) => !["fraction-at-or-above-one", "no-molar-mass", "no-density"].includes(code ?? "")),
+    ).toEqual([]);
   });
 
   test("hold 9,982 solutes, and every one is listed or has all of its readings refused", () => {
