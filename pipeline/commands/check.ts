@@ -79,7 +79,9 @@ export async function check(file: string, options: CheckOptions, terminal: Termi
   const systemOf = (row: number) => known.get(systemKey(identities[table.identity[row] as number] as Identity));
   const judged = judgeRows(table, systemOf, curated.edition.settings);
   const { inReportedUnit } = createRereader(table, identities, curated.edition.systems, rows);
-  const suspicions = await suspicionsOf(source, collection, options.version);
+  // Reasons are looked for only where something is off: it takes a second look at the whole collection.
+  const anyOff = judged.some(({ verdict }) => verdict === "off the curve");
+  const suspicions = anyOff ? await suspicionsOf(source, collection, options.version) : new Map<number, Suspicion>();
   const checked = judged.map((row) => {
     const judgedRow = checkedRow(row, table, identities, source, inReportedUnit);
     const question = row.verdict === "new system" ? nearNameQuestion(judgedRow.solute, curated.index) : "";
