@@ -54,7 +54,9 @@ interface NewRows extends Normalised {
 async function normaliseNew(source: SourceTable, { index, register, edition }: Curated): Promise<NewRows> {
   const identified = identifySource(source, index, await massFromSmiles([source]), register);
   const normalised = normaliseEdition([identified], [0], register.identities, edition.settings);
-  return { ...normalised, source, refusedRows: [...source.refused, ...identified.refused, ...normalised.refused] };
+  const refusedRows = [...source.refused, ...identified.refused, ...normalised.refused];
+  refusedRows.sort((a, b) => (a.place.line ?? 0) - (b.place.line ?? 0));
+  return { ...normalised, source, refusedRows };
 }
 
 /** What the collection knows, by identity. */

@@ -53,11 +53,6 @@ export function problem(code: ProblemCode, place: Place, details: Details): Prob
   return { code, place, found: short, expected, mend, ...(raw === undefined ? {} : { raw }) };
 }
 
-/** True if a problem only tells something and stops nothing. */
-export function isNotice({ code }: Problem): boolean {
-  return kinds[code].stops === "nothing";
-}
-
 /**
  * A problem as three lines for a terminal, with everything unsafe in it made visible:
  * ```

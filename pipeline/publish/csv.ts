@@ -22,10 +22,3 @@ export function* csvTable(columns: readonly string[], rows: Iterable<readonly Ce
   yield csvRecord(columns);
   for (const row of rows) yield csvRecord(row);
 }
-
-/** Cells of an object in the order of a table's columns. @throws RangeError if the object has a key that is no column. */
-export function cellsInOrder(columns: readonly string[], row: Readonly<Record<string, Cell>>): Cell[] {
-  for (const key of Object.keys(row))
-    if (!columns.includes(key)) throw new RangeError(`no column "${key}" in this table`);
-  return columns.map((column) => row[column]);
-}

@@ -1,8 +1,8 @@
 import { studentTSurvival } from "../numerics/distributions.ts";
+import { benjaminiHochbergThreshold } from "../numerics/multiple-testing.ts";
 import type { RobustFit } from "../records/fits.ts";
 import type { Suspects } from "./causes/cause.ts";
 import { AS_READ, type BlockReading, blockOffset, blockReadings, IMPOSSIBLE } from "./causes/compete-block.ts";
-import { rejectionLimit } from "./false-discovery.ts";
 import { middle } from "./middle.ts";
 import { type ScreenInput, thresholdOf } from "./screen-input.ts";
 import { sourceWidePosteriors } from "./source-wide.ts";
@@ -65,10 +65,10 @@ export function screenBlocks(
       if (block !== undefined) tested.push(block);
     }
   }
-  const limit = rejectionLimit(
+  const limit = benjaminiHochbergThreshold(
     tested.map(({ p }) => p),
-    total,
     input.settings.false_discovery_rate,
+    total,
   );
   const posteriors = sourceWidePosteriors(tested, blocksOfSource);
   return tested

@@ -1,6 +1,6 @@
 import { normalQuantile, studentTSurvival } from "../numerics/distributions.ts";
+import { benjaminiHochbergThreshold } from "../numerics/multiple-testing.ts";
 import type { RobustFit } from "../records/fits.ts";
-import { rejectionLimit } from "./false-discovery.ts";
 import { isPossibleTemperature } from "./possible-temperature.ts";
 import { type ScreenInput, thresholdOf } from "./screen-input.ts";
 
@@ -52,7 +52,7 @@ export function screenPoints(input: ScreenInput, blocked: ReadonlySet<string>): 
       candidates.push({ system: fit.system, point, z, ...limitsOf(input, fit, point), impossible: false });
     }
   }
-  const limit = rejectionLimit(pValues, total, q);
+  const limit = benjaminiHochbergThreshold(pValues, q, total);
   return candidates.filter(({ system, point, threshold, impossible }, j) => {
     return impossible || (pValues[j]! <= limit && Math.abs(input.fits[system]!.deviation[point]!) >= threshold);
   });

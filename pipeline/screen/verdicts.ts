@@ -1,9 +1,9 @@
 import { normalSurvival } from "../numerics/distributions.ts";
+import { benjaminiHochbergThreshold } from "../numerics/multiple-testing.ts";
 import type { Curve } from "../records/fits.ts";
 import { type MeasurementTable, RowState } from "../records/measurements.ts";
 import type { Settings } from "../records/settings.ts";
 import type { System } from "../records/systems.ts";
-import { rejectionLimit } from "./false-discovery.ts";
 import { materialThreshold } from "./material-threshold.ts";
 import { inCelsius, offBy, threeDigits } from "./wording.ts";
 
@@ -81,6 +81,7 @@ function candidateOf(table: MeasurementTable, row: number, known: KnownSystem | 
   }
   const expectedLn = curve.evaluate(T);
   const deviation = lnValueOf(table, row, known.system) - expectedLn;
+  if (!Number.isFinite(deviation)) return simple("cannot tell", "the row has no value on the basis of the curve", "");
   const { newMeasurement } = curve.limits(T);
   const sd = Math.max(newMeasurement / NORMAL_95, table.relativeU[row] as number);
   const halfWidth = NORMAL_95 * sd;
@@ -101,7 +102,7 @@ export function judgeRows(
   const outcomes = Array.from({ length: table.count }, (_, row) => candidateOf(table, row, systemOf(row)));
   const candidates = outcomes.filter((outcome): outcome is Candidate => "known" in outcome);
   const pOf = ({ z }: Candidate) => 2 * normalSurvival(Math.abs(z));
-  const limit = rejectionLimit(candidates.map(pOf), candidates.length, settings.false_discovery_rate);
+  const limit = benjaminiHochbergThreshold(candidates.map(pOf), settings.false_discovery_rate, candidates.length);
   return outcomes.map((outcome) => {
     if (!("known" in outcome)) return outcome;
     const { row, known, expectedLn, halfWidth, deviation, z, weak } = outcome;

@@ -59,3 +59,11 @@ test("of no tests none is rejected, and what is no probability is refused", () =
   expect(() => benjaminiHochbergThreshold([0.1, Number.NaN], 0.05)).toThrow(RangeError);
   expect(() => benjaminiHochbergThreshold([0.1], 2)).toThrow(/rate/);
 });
+
+test("tests that are only counted give the same limit as tests that are listed", () => {
+  // The fifteen p-values of Benjamini and Hochberg (1995), section 3.2; the six smallest listed, the rest counted.
+  const smallest = [0.0001, 0.0004, 0.0019, 0.0095, 0.0201, 0.0278];
+  expect(benjaminiHochbergThreshold(smallest, 0.05, 15)).toBe(0.0095);
+  expect(benjaminiHochbergThreshold([0.04, 0.05], 0.05)).toBe(0.05);
+  expect(benjaminiHochbergThreshold([], 0.05, 0)).toBe(-1);
+});

@@ -1,6 +1,6 @@
 import { readFileSync } from "node:fs";
 import { expect, test } from "vitest";
-import { formatProblem, isNotice, kinds, problem } from "../../pipeline/problems/catalogue.ts";
+import { formatProblem, kinds, problem } from "../../pipeline/problems/catalogue.ts";
 import { InputError } from "../../pipeline/problems/input-error.ts";
 import { catalogueAsMarkdown } from "../../pipeline/problems/readme-text.ts";
 
@@ -48,11 +48,6 @@ test("every kind of problem says what is wrong, what was expected and how to men
       expect(phrase, code).not.toMatch(/\.$/);
     }
   }
-});
-
-test("a notice is told from a problem that stops something", () => {
-  expect(isNotice(problem("table-without-card", { file: "a.csv" }, { found: "" }))).toBe(true);
-  expect(isNotice(problem("ragged-row", { file: "a.csv" }, { found: "" }))).toBe(false);
 });
 
 test("README.md of the problems agrees with the catalogue", () => {

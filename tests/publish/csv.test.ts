@@ -1,7 +1,7 @@
 import { parse } from "csv-parse/sync";
 import fc from "fast-check";
 import { describe, expect, test } from "vitest";
-import { type Cell, cellsInOrder, csvCell, csvRecord, csvTable } from "../../pipeline/publish/csv.ts";
+import { type Cell, csvCell, csvRecord, csvTable } from "../../pipeline/publish/csv.ts";
 
 describe("a cell of an output table (RFC 4180)", () => {
   test.each([
@@ -67,12 +67,6 @@ describe("a table", () => {
       }),
       { numRuns: 300 },
     );
-  });
-
-  test("takes the cells of an object in the order of its columns, and no key that is no column", () => {
-    expect(cellsInOrder(["b", "a"], { a: 1, b: 2 })).toEqual([2, 1]);
-    expect(cellsInOrder(["b", "a"], { a: 1 })).toEqual([undefined, 1]);
-    expect(() => cellsInOrder(["a"], { a: 1, c: 2 })).toThrow(RangeError);
   });
 
   test("record holds as many cells as were given", () => {
