@@ -65,8 +65,9 @@ export function screenBlocks(
       if (block !== undefined) tested.push(block);
     }
   }
+  // A block whose deviation cannot be told (NaN) is no evidence; it counts among the tests and is never rejected.
   const limit = benjaminiHochbergThreshold(
-    tested.map(({ p }) => p),
+    tested.map(({ p }) => p).filter((p) => !Number.isNaN(p)),
     input.settings.false_discovery_rate,
     total,
   );
