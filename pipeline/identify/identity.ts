@@ -62,6 +62,7 @@ export function resolveIdentity(
     solidForm: form.name,
     solvent: solvent.name,
     composition: "",
+    solventComponents: [{ name: solvent.name, massFraction: 1 }],
     medium: mediumOf(cells("medium"), cells("stereo")),
     soluteMolarMass: form.unsolvatedMolarMass,
     solventMolarMass: solvent.molarMass ?? Number.NaN,

@@ -124,6 +124,74 @@ export interface Curve {
   readonly limits: (temperatureK: number) => { readonly curve: number; readonly newMeasurement: number };
 }
 
+/** A change of the solid phase within a system whose solid form is not specified. */
+export interface Transition {
+  /** Temperature at which the two branches meet, K, with 95 % limits. */
+  readonly temperatureK: number;
+  readonly low: number;
+  readonly high: number;
+  /** p of no break by parametric bootstrap. */
+  readonly probability: number;
+}
+
+/** How one source of a system of several stands to the others. */
+export interface SourceStanding {
+  /** Position in the edition's list. */
+  readonly source: number;
+  /** Number of its kept points. */
+  readonly n: number;
+  /** Mean deviation of its points, ln value, from the curve of the other sources, with 95 % limits. */
+  readonly offset: number;
+  readonly low: number;
+  readonly high: number;
+  /** Largest change of the published curve, ln value, over its range when the source is left out; NaN where no curve remains. */
+  readonly influence: number;
+  /** The curve without the source; absent where none can be fitted. */
+  readonly without?: Curve;
+}
+
+/** Jouyban-Acree-van 't Hoff model of one solute in one solid form over a binary solvent. */
+export interface MixtureModel {
+  /** Readable id, unique in the edition. */
+  readonly id: string;
+  readonly solute: string;
+  readonly solidForm: string;
+  readonly medium: string;
+  /** The two solvents in the order of the systems' `solvent`. */
+  readonly solvents: readonly [string, string];
+  /** Positions of the systems behind it, pure solvents included, ascending by mass fraction of the first solvent. */
+  readonly systems: readonly number[];
+  readonly fitBasis: FitBasis;
+  readonly coefficients: readonly {
+    readonly name: string;
+    readonly value: number;
+    readonly standardUncertainty: number;
+  }[];
+  /** Row-major, in the order of the coefficients. */
+  readonly covariance: readonly number[];
+  /** Mass fraction of the first solvent, free of solute: lowest and highest of the data. */
+  readonly fractionRange: readonly [number, number];
+  readonly temperatureRangeK: readonly [number, number];
+  readonly n: number;
+  readonly nSources: number;
+  readonly rmsd: number;
+  readonly ardPercent: number;
+  /** Solubility passes through a maximum inside the composition range at these temperatures; empty where none. */
+  readonly innerMaxima: readonly {
+    readonly temperatureK: number;
+    readonly fraction: number;
+    readonly lnValue: number;
+  }[];
+  readonly notices: readonly string[];
+  /** ln value inside the range of compositions and temperatures. @throws RangeError outside it. */
+  readonly evaluate: (fraction: number, temperatureK: number) => number;
+  /** Half-widths, in ln value, of the 95 % limits of the surface and of a new measurement from a new source. */
+  readonly limits: (
+    fraction: number,
+    temperatureK: number,
+  ) => { readonly curve: number; readonly newMeasurement: number };
+}
+
 /** Why a system has no curve. */
 export interface NoCurve {
   readonly system: number;
@@ -133,8 +201,13 @@ export interface NoCurve {
 /** Outcome of fitting one system. */
 export interface SystemFit {
   readonly robust: RobustFit;
+  /** One curve, or one a branch, ascending in temperature. */
   readonly curves: readonly Curve[];
   readonly noCurve?: string;
+  /** Where the two branches of two curves meet. */
+  readonly transition?: Transition;
+  /** By source, ascending; empty where a single source is left. */
+  readonly standings?: readonly SourceStanding[];
 }
 
 /** A remark on a measurement, block, source or system, as `flags.csv` lists it. */

@@ -84,6 +84,11 @@ export interface MeasurementTable {
   readonly soluteBasis: Int32Array;
   /** 1 = the solid in equilibrium was looked at and was the one stated. */
   readonly solidChecked: Uint8Array;
+  /** Exact mass fractions of the first and second component of a mixed solvent, free of solute; NaN in a pure solvent. */
+  readonly firstFraction: Float64Array;
+  readonly secondFraction: Float64Array;
+  /** Standard uncertainty of `firstFraction`. */
+  readonly fractionU: Float64Array;
   /** Measured density of the solution, kg/m3, and temperature of the stated volume, K; NaN where not given. */
   readonly solutionDensity: Float64Array;
   readonly volumeTemperatureK: Float64Array;
@@ -104,7 +109,7 @@ const WHOLE = [
 const REAL = [
   ...["temperatureK", "temperatureU", "reportedValue", "valueLow", "valueHigh", "massRatioLow", "massRatioHigh"],
   ...["massRatio", "moleFraction", "massConcentration", "molPerL", "relativeU", "sharedU"],
-  ...["solutionDensity", "volumeTemperatureK"],
+  ...["solutionDensity", "volumeTemperatureK", "firstFraction", "secondFraction", "fractionU"],
 ] as const;
 
 /** An empty table with room for `capacity` rows; numbers start as NaN, texts as "". */

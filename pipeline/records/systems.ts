@@ -8,8 +8,13 @@ export interface Identity {
   readonly solidForm: string;
   /** Name of the solvent; components of a mixture joined by ` + `. */
   readonly solvent: string;
-  /** Composition key of a mixture (mass fractions); "" for a pure solvent. */
+  /** Composition key of a mixture, `70.5:29.5 w/w` in the order of `solvent`; "" for a pure solvent. */
   readonly composition: string;
+  /**
+   * Names of the solvent's components and their mass fractions by the composition key, in the order of `solvent`, one
+   * entry for a pure solvent. The exact fractions of a row stand in the measurement table.
+   */
+  readonly solventComponents: readonly { readonly name: string; readonly massFraction: number }[];
   /** Medium (buffer, common ion, co-former); "" for none. */
   readonly medium: string;
   /** Molar mass of the unsolvated solute, g/mol; NaN where unknown. */

@@ -151,6 +151,7 @@ function addSystem(
       solidForm: "unspecified",
       solvent: solvent.name,
       composition: "",
+      solventComponents: [{ name: solvent.name, massFraction: 1 }],
       medium: "",
       soluteMolarMass: solute.M,
       solventMolarMass: solvent.M,

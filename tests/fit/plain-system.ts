@@ -15,6 +15,7 @@ export function plainSystem(index = 0, fitBasis: FitBasis = "ln x", aqueousSalt 
     rows: new Int32Array(0),
     identity: {
       ...{ solute: "solute", solidForm: "unspecified", solvent: "solvent", composition: "", medium: "" },
+      solventComponents: [{ name: "solvent", massFraction: 1 }],
       ...{ soluteMolarMass: 150, solventMolarMass: 46, aqueousSalt },
     },
   };

@@ -6,6 +6,7 @@ import type { Identity } from "../../pipeline/records/systems.ts";
 
 const IDENTITY: Identity = {
   ...{ solute: "copper(II) sulfate", solidForm: "pentahydrate", solvent: "water", composition: "", medium: "" },
+  solventComponents: [{ name: "water", massFraction: 1 }],
   ...{ soluteMolarMass: 159.6, solventMolarMass: 18.015, aqueousSalt: true },
 };
 

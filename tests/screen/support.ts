@@ -85,6 +85,7 @@ export function inputOf(systems: readonly Sources[], about: More = {}): ScreenIn
         ...{
           composition: about.mixtures === true ? `${index + 1}` : "",
           medium: "",
+          solventComponents: [{ name: identity.solvent, massFraction: 1 }],
           soluteMolarMass: SOLUTE,
           solventMolarMass: SOLVENT,
           aqueousSalt: false,
