@@ -3,9 +3,10 @@ import { idealComparison } from "./fit/ideal-comparison.ts";
 import { rowResults } from "./fit/row-results.ts";
 import { gradeEdition } from "./grade/edition-grades.ts";
 import { groupIntoSystems } from "./group/systems.ts";
+import { compositionNotices } from "./identify/composition-notices.ts";
 import { identityNotices } from "./identify/notices.ts";
 import { createIdentityRegister, type IdentityRegister, identifySource } from "./identify/source.ts";
-import { indexSubstances, massFromSmiles } from "./identify/substance-tables.ts";
+import { indexSubstances, structureReader } from "./identify/substance-tables.ts";
 import { usedSubstances } from "./identify/used-substances.ts";
 import { createCorrector, withRulings } from "./normalise/corrections.ts";
 import { type Normalised, normaliseEdition } from "./normalise/edition.ts";
@@ -48,9 +49,9 @@ export async function curate(
 
   onStage("identify");
   const { index, notices } = indexSubstances(collection.program, collection.own);
-  const smilesMass = await massFromSmiles(collection.sources);
+  const structures = await structureReader(collection.sources);
   const register = createIdentityRegister();
-  const identified = collection.sources.map((source) => identifySource(source, index, smilesMass, register));
+  const identified = collection.sources.map((source) => identifySource(source, index, structures, register));
 
   onStage("normalise");
   const accounts = openAccounts(collection);
@@ -70,7 +71,7 @@ export async function curate(
     meltingPointK: ({ index: i }) => liquors[i]?.formMeltingPointK ?? Number.NaN,
     liquidRangeK: ({ index: i }) => [
       liquors[i]?.solventFreezingPointK ?? Number.NaN,
-      liquors[i]?.solventBoilingPointK ?? Number.NaN,
+      liquors[i]?.solventHighestBoilingPointK ?? Number.NaN,
     ],
     threshold: ({ index: i }, level, lnU) => materialThreshold(level, lnU, kinds[i] ?? "general", settings),
     settings,
@@ -82,10 +83,12 @@ export async function curate(
   const flags = screen({
     ...{ table, systems, scales, settings },
     fits: first.fits.map(({ robust }) => robust),
+    curves: first.fits.map(({ curves }) => curves),
     about: systems.map(({ index: i }) => ({
       kind: kinds[i] ?? "general",
-      boilingPointK: liquors[i]?.solventBoilingPointK ?? Number.NaN,
+      boilingPointK: liquors[i]?.solventHighestBoilingPointK ?? Number.NaN,
       freezingPointK: liquors[i]?.solventFreezingPointK ?? Number.NaN,
+      ...(liquors[i] === undefined ? {} : { liquor: liquors[i] }),
     })),
     sourceNames: accounts.map(({ name }) => name),
     ...createRereader(table, register.identities, systems, normalised),
@@ -139,6 +142,7 @@ export async function curate(
       ...collection.notices,
       ...notices,
       ...identityNotices(register, index, collection.sources),
+      ...compositionNotices(register),
       ...collection.sources.flatMap((source) => source.notices),
       ...rulings.problems,
     ],

@@ -1,25 +1,29 @@
 import { existsSync } from "node:fs";
 import { basename } from "node:path";
+import { isLogarithmic } from "../bases/written-precision.ts";
 import { type Curated, curate } from "../curate.ts";
 import { systemId, systemKey } from "../group/systems.ts";
 import { nearNameQuestion } from "../identify/notices.ts";
 import { identifySource } from "../identify/source.ts";
-import { massFromSmiles } from "../identify/substance-tables.ts";
+import { structureReader } from "../identify/substance-tables.ts";
 import { type Normalised, normaliseEdition } from "../normalise/edition.ts";
 import { createRereader } from "../normalise/reread.ts";
 import { formatProblem, type Problem, problem } from "../problems/catalogue.ts";
 import { InputError } from "../problems/input-error.ts";
 import { noticeOf } from "../publish/tables/summary.ts";
-import { type Collection, readCardNamed, readCollection } from "../read/collection.ts";
+import { readCardNamed, readCollection } from "../read/collection.ts";
 import { readSingleSource } from "../read/source.ts";
-import type { Flag } from "../records/fits.ts";
 import type { CheckedRow, CheckResult } from "../records/generated/check-result.ts";
 import { type MeasurementTable, textOf } from "../records/measurements.ts";
 import type { SourceTable } from "../records/readings.ts";
 import type { Identity } from "../records/systems.ts";
 import { type JudgedRow, judgeRows, type KnownSystem, VERDICTS } from "../screen/verdicts.ts";
+import { repeatsOf, type Suspicion, suspicionsOf } from "./check-findings.ts";
+import { ifMerged, mergeNew } from "./check-merged.ts";
+import { standingOf } from "./check-standing.ts";
+import { mergedLines } from "./merged-text.ts";
 import { type CommonOptions, Exit, type ExitCode, type Terminal } from "./terminal.ts";
-import { verdictLines } from "./verdict-text.ts";
+import { needsLook, verdictLines } from "./verdict-text.ts";
 
 export interface CheckOptions extends CommonOptions {
   readonly collection: string;
@@ -52,7 +56,7 @@ interface NewRows extends Normalised {
 }
 
 async function normaliseNew(source: SourceTable, { index, register, edition }: Curated): Promise<NewRows> {
-  const identified = identifySource(source, index, await massFromSmiles([source]), register);
+  const identified = identifySource(source, index, await structureReader([source]), register);
   const normalised = normaliseEdition([identified], [0], register.identities, edition.settings);
   const refusedRows = [...source.refused, ...identified.refused, ...normalised.refused];
   refusedRows.sort((a, b) => (a.place.line ?? 0) - (b.place.line ?? 0));
@@ -69,7 +73,11 @@ function knownSystems({ edition }: Curated): Map<string, KnownSystem> {
   );
 }
 
-/** `saltern check FILE --collection C`: a verdict on every new row; nothing of the collection changes. */
+/**
+ * `saltern check FILE --collection C`: a verdict on every new row, which rests on the collection alone; then, with the file
+ * as one more source, the reasons, how the file stands to the others, and what would change. Nothing of the collection
+ * does.
+ */
 export async function check(file: string, options: CheckOptions, terminal: Terminal): Promise<ExitCode> {
   const source = await readNew(file, options);
   const collection = await readCollection(options.collection);
@@ -81,66 +89,42 @@ export async function check(file: string, options: CheckOptions, terminal: Termi
   const systemOf = (row: number) => known.get(systemKey(identities[table.identity[row] as number] as Identity));
   const judged = judgeRows(table, systemOf, curated.edition.settings);
   const { inReportedUnit } = createRereader(table, identities, curated.edition.systems, rows);
-  // Reasons are looked for only where something is off: it takes a second look at the whole collection.
-  const anyOff = judged.some(({ verdict }) => verdict === "off the curve");
-  const suspicions = anyOff ? await suspicionsOf(source, collection, options.version) : new Map<number, Suspicion>();
+  const merged = await mergeNew(source, collection, options.version);
+  const suspicions = suspicionsOf(merged);
   const checked = judged.map((row) => {
     const judgedRow = checkedRow(row, table, identities, source, inReportedUnit);
     const question = row.verdict === "new system" ? nearNameQuestion(judgedRow.solute, curated.index) : "";
     const said = question === "" ? judgedRow : { ...judgedRow, look_at: `the name: ${question}` };
-    const suspicion = said.verdict === "off the curve" ? suspicions.get(said.line) : undefined;
-    return suspicion === undefined ? said : { ...said, ...suspicion };
+    return withSuspicion(said, suspicions.get(said.line));
   });
-  const result = resultOf(file, curated, rows, checked);
+  const result = {
+    ...resultOf(file, curated, rows, checked),
+    ...standingOf(judged, table, curated.edition),
+    repeats: repeatsOf(merged),
+    if_merged: ifMerged(curated, merged),
+  };
   if (options.json) terminal.print(JSON.stringify(result));
-  else for (const line of verdictLines(result)) terminal.print(line);
+  else for (const line of [...verdictLines(result), ...mergedLines(result)]) terminal.print(line);
   for (const refused of rows.refusedRows) terminal.tell(formatProblem(refused));
-  const needsYou = rows.refusedRows.length > 0 || checked.some(({ verdict }) => verdict === "off the curve");
-  return needsYou ? Exit.needsYou : Exit.done;
+  return rows.refusedRows.length > 0 || checked.some(needsLook) ? Exit.needsYou : Exit.done;
 }
-
-/** What screening suspects of a row, in the words of the result. */
-type Suspicion = Partial<
-  Pick<CheckedRow, "suspected_cause" | "cause_probability" | "proposed_value" | "evidence" | "look_at">
->;
 
 /**
- * What screening says of the new rows once they are among the collection's, by line: the cause, and the value that would
- * fit. The verdicts rest on the collection alone; this looks for reasons, with the whole file as evidence.
+ * Adds what screening suspects. That the sources of a system disagree explains a row that is off, and is no remark on one
+ * that fits.
  */
-async function suspicionsOf(
-  source: SourceTable,
-  collection: Collection,
-  version: string,
-): Promise<Map<number, Suspicion>> {
-  const taken = new Set([...collection.sources, ...collection.refusedSources].map(({ name }) => name));
-  const name = taken.has(source.name) ? `${source.name} (new)` : source.name;
-  const sources = [...collection.sources, { ...source, name }].sort((a, b) => (a.name < b.name ? -1 : 1));
-  const { edition } = await curate({ ...collection, sources }, version);
-  const position = edition.sources.findIndex((account) => account.name === name);
-  const suspicions = new Map<number, Suspicion>();
-  const { table } = edition;
-  // Points before blocks: what is said of a row itself is the more precise.
-  for (const flag of [...edition.flags].sort((a, b) => (a.scope < b.scope ? -1 : 1))) {
-    if (flag.severity !== "blocking" || flag.system === undefined) continue;
-    const rows = flag.scope === "measurement" ? [flag.row as number] : (edition.systems[flag.system]?.rows ?? []);
-    if (flag.scope === "block" && flag.source !== position) continue;
-    for (const row of rows)
-      if (table.source[row] === position) suspicions.set(table.line[row] as number, suspicionOf(flag));
-  }
-  return suspicions;
+function withSuspicion(row: CheckedRow, suspicion: Suspicion | undefined): CheckedRow {
+  if (suspicion === undefined) return row;
+  if (row.verdict !== "off the curve") return suspicion.cause_scope === "system" ? row : { ...row, ...suspicion };
+  // What is expected is told from the collection alone; screening has the file among its evidence.
+  const seen = (suspicion.evidence ?? "").split("; ").filter((part) => !part.startsWith("expected "));
+  return { ...row, ...suspicion, evidence: seen.join("; ") };
 }
 
-function suspicionOf(flag: Flag): Suspicion {
-  const cause = flag.suspectedCause as CheckedRow["suspected_cause"];
-  const detail = flag.causeDetail === undefined ? "" : ` (${flag.causeDetail})`;
-  return {
-    ...(cause === undefined ? {} : { suspected_cause: cause }),
-    ...(flag.causeProbability === undefined ? {} : { cause_probability: flag.causeProbability }),
-    ...(flag.proposedValue === undefined ? {} : { proposed_value: flag.proposedValue }),
-    evidence: `${flag.evidence}${detail}`,
-    look_at: flag.lookAt,
-  };
+/** 100 (value / expected - 1) in the reported unit; of the quantity itself where the unit is a logarithm. */
+function percentOff(reported: number | string, expected: number | undefined, unit: string, deviation: number): number {
+  const direct = typeof reported === "number" && expected !== undefined && !isLogarithmic(unit);
+  return direct ? 100 * (reported / expected - 1) : 100 * Math.expm1(deviation);
 }
 
 /** One judged row in the words of the result. */
@@ -158,6 +142,7 @@ function checkedRow(
   const inUnit = (shift: number) => (expectedLn === undefined ? undefined : inReportedUnit(row, expectedLn + shift));
   const limits = [inUnit(-(halfWidth ?? 0)), inUnit(halfWidth ?? 0)].filter((value) => value !== undefined);
   const expected = inUnit(0);
+  const unit = textOf(table, table.reportedUnit[row] as number);
   return {
     measurement_id: `${source.name}:${table.line[row]}`,
     line: table.line[row] as number,
@@ -168,10 +153,10 @@ function checkedRow(
     solvent: identity.solvent,
     temperature_K: table.temperatureK[row] as number,
     reported_value: reported,
-    reported_unit: textOf(table, table.reportedUnit[row] as number),
+    reported_unit: unit,
     ...(expected === undefined ? {} : { expected_value: expected }),
     ...(limits.length < 2 ? {} : { expected_low: Math.min(...limits), expected_high: Math.max(...limits) }),
-    ...(deviation === undefined ? {} : { deviation_percent: 100 * Math.expm1(deviation) }),
+    ...(deviation === undefined ? {} : { deviation_percent: percentOff(reported, expected, unit, deviation) }),
     ...(z === undefined ? {} : { z }),
     verdict,
     evidence,
@@ -179,7 +164,9 @@ function checkedRow(
   };
 }
 
-function resultOf(file: string, { edition }: Curated, rows: NewRows, checked: readonly CheckedRow[]): CheckResult {
+type Told = Omit<CheckResult, "offsets" | "pooled_offset" | "repeats" | "if_merged">;
+
+function resultOf(file: string, { edition }: Curated, rows: NewRows, checked: readonly CheckedRow[]): Told {
   const counts = Object.fromEntries(VERDICTS.map((v) => [v, checked.filter(({ verdict }) => verdict === v).length]));
   return {
     format: 1,

@@ -10,6 +10,7 @@ import { formatProblem, type Problem } from "../problems/catalogue.ts";
 import { readCollectionTables, readProgramTables } from "../read/own-tables.ts";
 import type { CellFault } from "../records/cells.ts";
 import type { Identified } from "../records/identified.ts";
+import { settingsInForce } from "../records/settings.ts";
 import { explain, explainReadings, openResultOf, type Reading, resultOf } from "./convert-answer.ts";
 import {
   argumentProblem,
@@ -27,8 +28,15 @@ export type { ConvertOptions } from "./convert-arguments.ts";
 
 const NO_TABLES = { substances: [], solidForms: [], propertyValues: [] };
 
-/** Solute, solvent and form of the command line with the properties of their liquor. */
-async function liquorOf(options: ConvertOptions): Promise<{ readonly who: Identified; readonly liquor: LiquorModel }> {
+/**
+ * Solute, solvent and form of the command line with the properties of their liquor. What a dissolved solvate brings into
+ * the liquor is known only once it is said what was weighed.
+ */
+async function liquorOf(
+  options: ConvertOptions,
+  value: number,
+  unit: string,
+): Promise<{ readonly who: Identified; readonly liquor: LiquorModel }> {
   const own = options.collection === undefined ? NO_TABLES : await readCollectionTables(options.collection);
   const { index } = indexSubstances(await readProgramTables(), own);
   const cells: Readonly<Record<string, string>> = {
@@ -40,10 +48,12 @@ async function liquorOf(options: ConvertOptions): Promise<{ readonly who: Identi
     (field) => cells[field] ?? "",
     index,
     () => undefined,
+    ".",
+    options.soluteBasis === undefined ? undefined : { text: String(value), unit, soluteBasis: options.soluteBasis },
   );
   if ("code" in found) return stopAt(found);
   const who = register(createIdentityRegister(), found);
-  return { who, liquor: liquorModel(who, found.identity) };
+  return { who, liquor: liquorModel(who, found.identity, settingsInForce(undefined)) };
 }
 
 const argumentOf = (field: string) => (field === "solubility" ? "value" : `--${field.replaceAll("_", "-")}`);
@@ -97,7 +107,7 @@ export async function convert(text: string, options: ConvertOptions, terminal: T
       ? Number.NaN
       : temperatureOf("--volume-temperature", options.volumeTemperature);
   const density = densityOf(options.solutionDensity);
-  const { who, liquor } = await liquorOf(options);
+  const { who, liquor } = await liquorOf(options, value, rest);
   liquor.setConditions(temperatureK, volumeK, density);
 
   const { senses, open } = sensesOf(rest, value, options, who);
@@ -116,6 +126,9 @@ export async function convert(text: string, options: ConvertOptions, terminal: T
     ...who.assumptions,
     ...result.assumptions,
     ...(guest === undefined ? [] : [guest]),
+    ...(liquor.volumeRemark !== "" && [only.unit, target].some(({ basis }) => basis.includes("volume"))
+      ? [liquor.volumeRemark]
+      : []),
     ...(options.uncertainty === undefined
       ? ["value taken as exact: only properties contribute to the uncertainty"]
       : []),

@@ -1,5 +1,6 @@
 import { quadraticForm, transformCoefficients, transformCovariance } from "../curves/coefficient-transformation.ts";
 import { centredSlope, centredValue, type LinearModel, setDesignColumns } from "../curves/linear-models.ts";
+import { informationCriteria } from "../numerics/information-criteria.ts";
 import type { CurveModel } from "../records/fits.ts";
 import type { FitWorkspace } from "./fit-workspace.ts";
 import { generalisedLeastSquares, leaveOneOut, withinPart } from "./generalised-least-squares.ts";
@@ -63,9 +64,11 @@ const LEAST_SHARE = 1e-12;
 
 /** Sets the covariance of the points of a common fit from the variances of the weighting in force. */
 export function setPointCovariance(ws: FitWorkspace, common: CommonFit, variance: Float64Array): void {
-  const { n, sources } = common.points;
-  const between = sources.length > 1 ? common.betweenVariance : 0;
-  setRandomIntercept(ws.common, n, sources.length, variance, common.varianceFactor, between);
+  const { points, varianceFactor, betweenVariance } = common;
+  const { n, sources } = points;
+  if (sources.length > 1)
+    setRandomIntercept(ws.common, n, sources.length, variance, varianceFactor, betweenVariance, points);
+  else setRandomIntercept(ws.common, n, 1, variance, varianceFactor, 0);
 }
 
 /**
@@ -155,9 +158,14 @@ export function linearCandidate(common: CommonFit, fit: LinearFit): Candidate {
 }
 
 /** Covariance of centred coefficients with the offset of a single source: the fit stays, its intercept is less sure. */
-function withOffset({ points, betweenVariance }: CommonFit, covariance: readonly number[]): readonly number[] {
-  if (points.sources.length > 1) return covariance;
-  return [covariance[0]! + betweenVariance, ...covariance.slice(1)];
+function withOffset(common: CommonFit, covariance: readonly number[]): readonly number[] {
+  if (common.points.sources.length > 1) return covariance;
+  return [covariance[0]! + loneOffsetVariance(common), ...covariance.slice(1)];
+}
+
+/** Variance of the offset of a single source, which the fit cannot tell from the curve: tau^2 and what its points share. */
+export function loneOffsetVariance({ points, betweenVariance }: Pick<CommonFit, "points" | "betweenVariance">): number {
+  return betweenVariance + (points.sharedVariance[0] ?? 0);
 }
 
 /**
@@ -170,11 +178,9 @@ function withOffset({ points, betweenVariance }: CommonFit, covariance: readonly
  */
 export function correctedAkaike(ws: FitWorkspace, common: CommonFit, residualSumOfSquares: number, p: number): number {
   const n = common.points.n;
-  const k = p + 1;
-  if (n - k - 1 <= 0) return Number.POSITIVE_INFINITY;
+  const { aicc } = informationCriteria(Math.max(residualSumOfSquares, n * LEAST_SHARE), n, p);
+  if (aicc === Number.POSITIVE_INFINITY) return aicc;
   let jacobian = 0;
   if (common.weighting === "absolute") for (let i = 0; i < n; i++) jacobian += 2 * (ws.fitted[i]! - ws.lnValue[i]!);
-  const meanSquare = Math.max(residualSumOfSquares / n, LEAST_SHARE);
-  const deviance = n * (Math.log(2 * Math.PI * meanSquare) + 1) + logDeterminant(ws.common) + jacobian;
-  return deviance + 2 * k + (2 * k * (k + 1)) / (n - k - 1);
+  return aicc + logDeterminant(ws.common) + jacobian;
 }

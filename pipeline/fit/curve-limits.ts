@@ -25,6 +25,7 @@ export function curveLimits(fitted: FittedModels, chosen: Candidate, { scales }:
     withinDegreesOfFreedom: scale.degreesOfFreedom,
     betweenVariance: scale.betweenVariance,
     betweenDegreesOfFreedom,
+    sharedVariance: points.sharedVariance.reduce((sum, one) => sum + one / points.sharedVariance.length, 0),
     newSourceVariance: scale.varianceFactor * newSourceVariance(fitted, scales.within),
     oneSource: points.sources.length === 1,
   });

@@ -8,6 +8,8 @@ export interface LimitScales {
   /** tau^2 and its degrees of freedom; 0 = the default setting, taken as given. */
   readonly betweenVariance: number;
   readonly betweenDegreesOfFreedom: number;
+  /** Mean variance that the points of a source share here (densities, molar masses): a new source has its own. */
+  readonly sharedVariance: number;
   /** Variance of a single measurement within a source whose noise is not known. */
   readonly newSourceVariance: number;
   /** True if only one source was fitted: its offset is then not in the covariance of the coefficients. */
@@ -40,7 +42,8 @@ export function curveVariances(largest: LinearFit, scales: LimitScales): CurveVa
   const { model, covariance, withinPart, centreK } = largest;
   const p = model.parameterCount;
   const row = new Float64Array(p);
-  const offset = scales.oneSource ? scales.betweenVariance : 0;
+  const newOffset = scales.betweenVariance + scales.sharedVariance;
+  const offset = scales.oneSource ? newOffset : 0;
   const sum = (moreWithin: number, moreBetween: number): Variance => {
     // Where weights differ by many orders of magnitude the forms cancel; neither part may leave 0 to the whole.
     const whole = Math.max(0, quadraticForm(covariance, row, p));
@@ -54,7 +57,7 @@ export function curveVariances(largest: LinearFit, scales: LimitScales): CurveVa
     },
     ofNewMeasurement: (T) => {
       model.writeDesignRow(row, 0, T, centreK);
-      return sum(scales.newSourceVariance, offset + scales.betweenVariance);
+      return sum(scales.newSourceVariance, offset + newOffset);
     },
     ofSlope: (T) => {
       model.writeSlopeRow(row, 0, T, centreK);
@@ -63,7 +66,12 @@ export function curveVariances(largest: LinearFit, scales: LimitScales): CurveVa
   };
 }
 
-function sumOfParts(within: number, between: number, scales: LimitScales): Variance {
+/** Sum of a variance within and one between sources, with Satterthwaite's degrees of freedom. */
+export function sumOfParts(
+  within: number,
+  between: number,
+  scales: Pick<LimitScales, "withinDegreesOfFreedom" | "betweenDegreesOfFreedom">,
+): Variance {
   const value = within + between;
   const ofWithin = within ** 2 / scales.withinDegreesOfFreedom;
   const ofBetween = scales.betweenDegreesOfFreedom > 0 ? between ** 2 / scales.betweenDegreesOfFreedom : 0;

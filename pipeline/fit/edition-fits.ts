@@ -1,9 +1,16 @@
-import type { Curve, PooledScales, SystemFit } from "../records/fits.ts";
+import type { Curve, PooledScales, RobustFit, SystemFit } from "../records/fits.ts";
 import type { MeasurementTable } from "../records/measurements.ts";
 import type { Settings } from "../records/settings.ts";
 import { type System, type SystemPoints, systemPoints } from "../records/systems.ts";
+import { seedOf } from "./break-bootstrap.ts";
+import { kinkOf } from "./break-slopes.ts";
 import { isCurve, publishedCurve } from "./published-curve.ts";
 import { type PooledFit, robustFits } from "./robust-fit.ts";
+import { twoBranchCurves } from "./two-branch-curves.ts";
+import { breakPoints } from "./two-branch-fit.ts";
+import { searchBreaks } from "./two-branch-search.ts";
+import { withStandings } from "./with-standings.ts";
+import { writtenValues } from "./written-values.ts";
 
 /** What fitting an edition needs to know besides its rows. */
 export interface FitContext {
@@ -15,6 +22,11 @@ export interface FitContext {
   readonly meltingPointK: (system: System) => number;
   /** Liquid range of a system's solvent, K; NaN where unknown. Points outside are shown, never fitted. */
   readonly liquidRangeK: (system: System) => readonly [freezing: number, boiling: number];
+  /**
+   * Transitions listed for the solids of a system, K. A listed one is tried as the place of a break even where nothing in
+   * the points suggests it; what is asked of the evidence stays the same.
+   */
+  readonly transitionsK?: (system: System) => readonly number[];
   /** Smallest |deviation| in ln value worth a person's time, by level and uncertainty. */
   readonly threshold: (system: System, level: number, lnU: number) => number;
   readonly settings: Settings;
@@ -41,6 +53,7 @@ function outside(temperatureK: Float64Array, [freezing, boiling]: readonly [numb
 /** Fits all systems: robust screening fits with pooled scales first, then the published curve of each. */
 export function fitEdition(table: MeasurementTable, systems: readonly System[], context: FitContext): EditionFits {
   return fitSystems(
+    table,
     systems,
     systems.map((system) => systemPoints(table, system)),
     context,
@@ -64,7 +77,7 @@ export function fitAgain(
 ): SystemFit[] {
   const again = touched.map((index) => systems[index] as System);
   const points = again.map((system) => systemPoints(table, system, omit));
-  const second = fitSystems(again, points, context, pooled);
+  const second = fitSystems(table, again, points, context, pooled);
   const all = [...fits];
   second.fits.forEach((fit, i) => {
     const index = touched[i] as number;
@@ -74,39 +87,86 @@ export function fitAgain(
 }
 
 function fitSystems(
+  table: MeasurementTable,
   systems: readonly System[],
   points: readonly SystemPoints[],
   context: FitContext,
   before?: PooledFit,
 ): EditionFits {
-  const { settings, laboratories, sourceCount } = context;
-  const perSystem = systems.map((system, i) => ({
-    aqueousSalt: system.identity.aqueousSalt,
-    water: system.identity.solvent === "water",
-    excluded: outside(points[i]?.temperatureK ?? new Float64Array(), context.liquidRangeK(system)),
-  }));
-  const between = settings.between_laboratory_percent;
+  const { settings, laboratories } = context;
+  const robustly = robustFitter(table, systems, points, context);
   const {
     fits: robust,
     scales,
     pooled,
-  } = robustFits(points, perSystem, sourceCount, {
-    defaults: { between: between.general / 100, betweenAqueousSalt: between.aqueous_salts / 100 },
-    threshold: (system, point) =>
-      context.threshold(
-        systems[system] as System,
-        points[system]?.level[point] as number,
-        points[system]?.lnU[point] as number,
-      ),
-    ...(before === undefined ? {} : { pooled: before }),
-  });
+  } = robustly(
+    systems.map((_, system) => ({ system })),
+    before,
+  );
+  const breaks = searchBreaks(subjectsOfBreaks(systems, robust, context), robust, (wanted) =>
+    wanted.length === 0 ? [] : robustly(wanted, pooled).fits,
+  );
   const curveContext = { scales, laboratories, weighting: settings.fit_weighting };
   const fits = systems.map((system, i): SystemFit => {
-    const fit = robust[i] as (typeof robust)[number];
     const subject = { system, branch: 1, meltingPointK: context.meltingPointK(system) };
+    const found = breaks.get(i);
+    const pair =
+      found?.sense === "falls" ? twoBranchCurves(found, subject, curveContext, seedOf(system.id)) : undefined;
+    if (found !== undefined && pair !== undefined)
+      return withStandings({ robust: found.robust, ...pair }, subject, curveContext);
+    const fit = robust[i] as (typeof robust)[number];
     const outcome = publishedCurve(fit, subject, curveContext);
     const curves: Curve[] = isCurve(outcome) ? [outcome] : [];
-    return isCurve(outcome) ? { robust: fit, curves } : { robust: fit, curves, noCurve: outcome.reason };
+    const fitted: SystemFit = {
+      ...{ robust: fit, curves },
+      ...(isCurve(outcome) ? {} : { noCurve: outcome.reason }),
+      ...(found?.sense === "rises" ? { kink: kinkOf(breakPoints(fit), found) } : {}),
+    };
+    return withStandings(fitted, subject, curveContext);
   });
   return { fits, scales, pooled };
+}
+
+/** Robust fits of some of the systems, named by their position, with a break where one is wanted. */
+function robustFitter(
+  table: MeasurementTable,
+  systems: readonly System[],
+  points: readonly SystemPoints[],
+  context: FitContext,
+) {
+  const { settings, laboratories, sourceCount } = context;
+  const between = settings.between_laboratory_percent;
+  return (wanted: readonly { readonly system: number; readonly breakK?: number }[], pooled?: PooledFit) => {
+    const own = wanted.map(({ system }) => systems[system] as System);
+    const ownPoints = wanted.map(({ system }) => points[system] as SystemPoints);
+    const about = own.map((system, i) => ({
+      aqueousSalt: system.identity.aqueousSalt,
+      water: system.identity.solvent === "water",
+      excluded: outside(ownPoints[i]?.temperatureK ?? new Float64Array(), context.liquidRangeK(system)),
+      ...(wanted[i]?.breakK === undefined ? {} : { breakK: wanted[i].breakK }),
+    }));
+    const outcome = robustFits(ownPoints, about, sourceCount, {
+      defaults: { between: between.general / 100, betweenAqueousSalt: between.aqueous_salts / 100 },
+      laboratories,
+      written: writtenValues(table, own, ownPoints),
+      threshold: (system, point) =>
+        context.threshold(
+          own[system] as System,
+          ownPoints[system]?.level[point] as number,
+          ownPoints[system]?.lnU[point] as number,
+        ),
+      ...(pooled === undefined ? {} : { pooled }),
+    });
+    return { ...outcome, fits: outcome.fits.map((fit, i) => ({ ...fit, system: wanted[i]?.system ?? i })) };
+  };
+}
+
+/** Systems in which a break may be looked for: the solid form is not specified, and the sources do not disagree. */
+function subjectsOfBreaks(systems: readonly System[], robust: readonly RobustFit[], context: FitContext) {
+  return systems.flatMap((system, i) => {
+    const { agreement, points } = robust[i] as RobustFit;
+    if (system.identity.solidForm !== "unspecified" || agreement !== "agreed") return [];
+    const excluded = () => outside(points.temperatureK, context.liquidRangeK(system));
+    return [{ system: i, seed: seedOf(system.id), knownK: context.transitionsK?.(system) ?? [], excluded }];
+  });
 }

@@ -1,11 +1,12 @@
-import type { SystemPoints } from "../records/systems.ts";
+import { ownLnU, type SystemPoints, sharedVarianceOf } from "../records/systems.ts";
 import type { FitWorkspace } from "./fit-workspace.ts";
+import type { OffsetParts } from "./random-intercept.ts";
 
 /**
  * What the kept points of a system cover. The points themselves stand in the workspace: T, u(T), ln value, u(ln value),
- * noise and source of n points, in row order, sources numbered 0 and up.
+ * noise and source of n points, in row order, sources numbered 0 and up; u(ln value) is the point's own part.
  */
-export interface KeptPoints {
+export interface KeptPoints extends OffsetParts {
   readonly n: number;
   /** Positions of the sources in the edition's list, in order of first row. */
   readonly sources: readonly number[];
@@ -38,14 +39,18 @@ const UNSTATED_U = 0.05;
  * @param points the system's points
  * @param kept 1 = stays in the published curve, by point
  * @param noiseSd scatter within its source that the screening fit assumed for each point, SD of ln value
+ * @param laboratories laboratory of each source, by position in the edition's list; "" = not stated, one of its own
  */
 export function loadKeptPoints(
   ws: FitWorkspace,
   points: SystemPoints,
   kept: Uint8Array,
   noiseSd: Float64Array | undefined,
+  laboratories: readonly string[] = [],
 ): KeptPoints {
   const sources: number[] = [];
+  const count: number[] = [];
+  const sharedVariance: number[] = [];
   let n = 0;
   let unusable = 0;
   let reciprocals = 0;
@@ -56,13 +61,17 @@ export function loadKeptPoints(
       continue;
     }
     const uT = points.temperatureU[i]!;
-    const u = points.lnU[i]!;
+    const u = ownLnU(points, i);
     ws.temperatureK[n] = points.temperatureK[i]!;
     ws.temperatureU[n] = Math.max(0, Number.isNaN(uT) ? 0 : uT);
     ws.lnValue[n] = points.lnValue[i]!;
     ws.lnU[n] = u > 0 ? u : UNSTATED_U;
     ws.noiseSd[n] = noiseSd === undefined ? Number.NaN : noiseSd[i]!;
-    ws.block[n] = numberOf(sources, points.source[i]!);
+    const b = numberOf(sources, points.source[i]!);
+    ws.block[n] = b;
+    count[b] = (count[b] ?? 0) + 1;
+    const mean = sharedVariance[b] ?? 0;
+    sharedVariance[b] = mean + (sharedVarianceOf(points, i) - mean) / count[b];
     reciprocals += 1 / points.temperatureK[i]!;
     n++;
   }
@@ -70,7 +79,16 @@ export function loadKeptPoints(
   // Rounding must not carry the mean of equal temperatures past them.
   const centreK = Math.min(cover.highK, Math.max(cover.lowK, n / reciprocals));
   const { distinctTemperatures, lowK, highK } = cover;
-  return { n, sources, distinctTemperatures, lowK, highK, centreK, unusable };
+  const perLaboratory = sourcesPerLaboratory(sources, laboratories);
+  return { n, sources, perLaboratory, sharedVariance, distinctTemperatures, lowK, highK, centreK, unusable };
+}
+
+/** How many of these sources come from the laboratory of each, itself included; one where none is stated. */
+export function sourcesPerLaboratory(sources: readonly number[], laboratories: readonly string[]): number[] {
+  return sources.map((source) => {
+    const own = laboratories[source] ?? "";
+    return own === "" ? 1 : sources.filter((other) => laboratories[other] === own).length;
+  });
 }
 
 function usable(points: SystemPoints, i: number): boolean {

@@ -1,6 +1,12 @@
 import { transformCovariance } from "../curves/coefficient-transformation.ts";
 import { lnMoleFraction, parameterCount, publishedFromLogarithms, writeGradientRow } from "../curves/lambda-h.ts";
-import { type Candidate, type CommonFit, correctedAkaike, setPointCovariance } from "./candidate.ts";
+import {
+  type Candidate,
+  type CommonFit,
+  correctedAkaike,
+  loneOffsetVariance,
+  setPointCovariance,
+} from "./candidate.ts";
 import type { FitWorkspace } from "./fit-workspace.ts";
 import { leaveOneOut } from "./generalised-least-squares.ts";
 import { solve, whiten } from "./random-intercept.ts";
@@ -160,11 +166,11 @@ function candidateAt(ws: FitWorkspace, common: CommonFit, best: Trial, meltingPo
   };
 }
 
-/** Adds what the unknown offset of a single source does to the coefficients: tau^2 a a', a = C J' K^-1 1. */
+/** Adds what the unknown offset of a single source does to the coefficients: t a a', t its variance, a = C J' K^-1 1. */
 function withOffset(common: CommonFit, covariance: number[], [s0, s1]: readonly [number, number]): number[] {
   if (common.points.sources.length > 1) return covariance;
   const [c00, c01, , c11] = covariance as [number, number, number, number];
   const [a0, a1] = [c00 * s0 + c01 * s1, c01 * s0 + c11 * s1];
-  const t = common.betweenVariance;
+  const t = loneOffsetVariance(common);
   return [c00 + t * a0 * a0, c01 + t * a0 * a1, c01 + t * a0 * a1, c11 + t * a1 * a1];
 }

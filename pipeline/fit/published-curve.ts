@@ -23,18 +23,20 @@ export type { CurveContext, CurveSubject, ScreenedPoints } from "./system-models
  * Models are fitted by generalised least squares with a random offset per source, so that laboratories carry the weight
  * and not points; the choice follows {@link chooseModel}; the limits follow {@link curveLimits}.
  * @param screened points and kept mask; a conflict between sources gives no curve
+ * @param reachK temperatures that the curve shall reach beyond its points: the next point across a transition, K
  * @returns a curve of finite numbers (NaN only for an AICc that is not defined), or the reason why there is none
  */
 export function publishedCurve(
   screened: ScreenedPoints,
   subject: CurveSubject,
   context: CurveContext,
+  reachK: readonly number[] = [],
 ): Curve | NoCurve {
   const system = subject.system.index;
   if (screened.agreement === "conflict")
     return { system, reason: "the sources disagree and none of the readings has a majority" };
   const ws = fitWorkspace(screened.points.n);
-  const points = loadKeptPoints(ws, screened.points, screened.kept, screened.noiseSd);
+  const points = loadKeptPoints(ws, screened.points, screened.kept, screened.noiseSd, context.laboratories);
   if (points.n === 0) return { system, reason: noPoints(screened, points.unusable) };
   const fitted = fitModels(ws, points, screened, subject, context);
   if (fitted === undefined)
@@ -44,7 +46,7 @@ export function publishedCurve(
     };
   const { chosen, runnersUp } = fitted.choice;
   if (chosen === undefined) return { system, reason: runnersUp.map(({ model, why }) => `${model} ${why}`).join("; ") };
-  return curveOf(ws, fitted, chosen, subject, context);
+  return curveOf(ws, fitted, chosen, subject, context, reachK);
 }
 
 /** True if the outcome is a curve. */
@@ -65,11 +67,12 @@ function curveOf(
   chosen: Candidate,
   subject: CurveSubject,
   context: CurveContext,
+  reachK: readonly number[],
 ): Curve {
   const { points, scale, choice } = fitted;
   const { system, branch } = subject;
   const limits = curveLimits(fitted, chosen, context);
-  const range = [points.lowK, points.highK] as const;
+  const range = [Math.min(points.lowK, ...reachK), Math.max(points.highK, ...reachK)] as const;
   const { names, values, covariance } = chosen.published();
   const p = names.length;
   const { rmsd, ardPercent } = deviations(ws, chosen, points.n);

@@ -1,44 +1,114 @@
+import { type CopiedBlock, type CopiedSource, RepeatKind, type Repeats } from "../records/repeats.ts";
 import type { SystemPoints } from "../records/systems.ts";
+import { averagedBlocks } from "./averaged-points.ts";
+import { copiedBlocks } from "./copied-blocks.ts";
+import { copiedSources, createSourceTally, type SourceTally } from "./copied-sources.ts";
+import { type EqualPair, equalPairs, type Written } from "./equal-pairs.ts";
 
-/** Values that agree to this (ln value), at temperatures that agree to this (K), are one reading written twice. */
-const SAME_VALUE = 2e-4;
-const SAME_TEMPERATURE_K = 0.011;
-/** Equal pairs from which, where they are at least half of a block, the block is a copy; fewer can be chance. */
-const LEAST_PAIRS = 3;
-
-/**
- * Points of a source that repeat those of a source before it exactly, in a block that does so for three points or more
- * and for at least half of them: one measurement that is written twice counts once. For independent values with a scatter
- * of 3 % the chance of one such pair is 0.4 %, of three in one block below one in a million.
- *
- * @returns 1 for each repeated point; undefined where there is none
- */
-export function repeatedPoints({ n, source, temperatureK, lnValue }: SystemPoints): Uint8Array | undefined {
-  let repeated: Uint8Array | undefined;
-  for (let i = 0; i < n; i++) {
-    for (let j = 0; j < n; j++) {
-      const same = Math.abs(lnValue[i]! - lnValue[j]!) < SAME_VALUE;
-      if (!same || source[j]! >= source[i]! || Math.abs(temperatureK[i]! - temperatureK[j]!) > SAME_TEMPERATURE_K)
-        continue;
-      repeated ??= new Uint8Array(n);
-      repeated[i] = 1;
-      break;
-    }
-  }
-  return repeated === undefined ? undefined : onlyCopies(repeated, source);
+/** What the search needs to know of an edition. */
+export interface RepeatContext {
+  readonly written: Written;
+  readonly nSources: number;
+  /** Standard deviation (ln value) of the difference between independent measurements of a system by two sources. */
+  readonly scatter: (system: number) => number;
 }
 
-/** Leaves the marks of blocks that are copies alone. */
-function onlyCopies(repeated: Uint8Array, source: Int32Array): Uint8Array | undefined {
-  const counts = new Map<number, { points: number; pairs: number }>();
-  for (const [i, s] of source.entries()) {
-    const count = counts.get(s) ?? { points: 0, pairs: 0 };
-    counts.set(s, { points: count.points + 1, pairs: count.pairs + repeated[i]! });
+/**
+ * Finds the readings of an edition that are one measurement written more than once, so that each counts once in votes,
+ * curves and grades:
+ *
+ * - the same number at the same temperature twice in a source (replicates that are told apart are not), or one value in
+ *   two units;
+ * - blocks that repeat another source to the digits given, at least three values and half of the block, where independent
+ *   values would do so with a chance below 1 in 1000;
+ * - blocks that give the mean of two or more other sources, by the same measure;
+ * - single values of a source that repeats another one all over the edition ({@link copiedSources}).
+ *
+ * The source that comes first in the edition's list counts.
+ *
+ * @param points points of each system, by position
+ * @param known sources found to repeat others by an earlier search of the whole edition
+ * @returns by position of the system, undefined where every point counts; and the sources that repeat others
+ */
+export function repeatedPoints(
+  points: readonly SystemPoints[],
+  context: RepeatContext,
+  known?: readonly CopiedSource[],
+): { repeats: (Repeats | undefined)[]; sources: readonly CopiedSource[] } {
+  const tally = createSourceTally(context.nSources);
+  const pairs = points.map((of, system) => pairsOf(of, system, context, known === undefined ? tally : undefined));
+  const sources = known ?? copiedSources(tally);
+  const copied = new Map(sources.map((one) => [`${one.source}:${one.from}`, one]));
+  const repeats = points.map((of, system) => {
+    const near = pairs[system]!;
+    const averages = averagedBlocks(of, context.scatter(system), (i) => context.written.rounding(system, i));
+    if (near.length === 0 && averages.length === 0) return undefined;
+    return repeatsOf(of, near, averages, copied, context.scatter(system));
+  });
+  return { repeats, sources };
+}
+
+const NOT_TOLD = (): void => {};
+
+/** Pairs that may be one measurement; counted, where asked for. */
+function pairsOf(
+  of: SystemPoints,
+  system: number,
+  { written }: RepeatContext,
+  tally: SourceTally | undefined,
+): EqualPair[] {
+  if (of.n < 2) return [];
+  const near = equalPairs(of, system, written, tally?.compare ?? NOT_TOLD);
+  for (const pair of near) {
+    const [later, earlier] = [of.source[pair.later]!, of.source[pair.earlier]!];
+    if (later !== earlier) tally?.addPair(later, earlier, pair);
   }
-  const isCopy = (s: number) => {
-    const { points, pairs } = counts.get(s)!;
-    return pairs >= LEAST_PAIRS && 2 * pairs >= points;
+  return near.filter(({ equal, close }) => equal || close);
+}
+
+/** Decides which of a system's equal pairs are one measurement. */
+function repeatsOf(
+  of: SystemPoints,
+  pairs: readonly EqualPair[],
+  averages: readonly CopiedBlock[],
+  copied: ReadonlyMap<string, CopiedSource>,
+  scatter: number,
+): Repeats | undefined {
+  const countedAs = Int32Array.from({ length: of.n }, (_, i) => i);
+  const kind = new Uint8Array(of.n);
+  const mark = (point: number, as: number, why: number) => {
+    if (kind[point] !== RepeatKind.counts) return;
+    kind[point] = why;
+    countedAs[point] = countedAs[as]!;
   };
-  const copied = repeated.map((mark, i) => (mark === 1 && isCopy(source[i]!) ? 1 : 0));
-  return copied.includes(1) ? copied : undefined;
+  const own = (pair: EqualPair) => of.source[pair.later] === of.source[pair.earlier];
+  for (const pair of pairs)
+    if (own(pair) && pair.equal)
+      mark(pair.later, pair.earlier, pair.sameUnit ? RepeatKind.sameReading : RepeatKind.twoUnits);
+  const between = pairs.filter((pair) => !own(pair));
+  const blocks = copiedBlocks(of, between, scatter);
+  const isCopied = new Map(blocks.map((block) => [block, new Set(block.equal)]));
+  for (const [block, equal] of isCopied)
+    for (const pair of between)
+      if (pair.equal && equal.has(pair.later) && of.source[pair.earlier] === block.from[0])
+        mark(pair.later, pair.earlier, RepeatKind.copiedBlock);
+  const used = new Set<CopiedSource>();
+  for (const pair of between) {
+    const source = copied.get(`${of.source[pair.later]}:${of.source[pair.earlier]}`);
+    if (source === undefined || kind[pair.later] !== RepeatKind.counts) continue;
+    mark(pair.later, pair.earlier, RepeatKind.copiedSource);
+    used.add(source);
+  }
+  const means = averages.filter(({ equal }) => equal.every((i) => kind[i] === RepeatKind.counts));
+  for (const { equal, from } of means) for (const i of equal) mark(i, firstOf(of, from, i), RepeatKind.average);
+  if (kind.every((why) => why === RepeatKind.counts)) return undefined;
+  return { countedAs, kind, blocks: [...blocks, ...means], sources: [...used] };
+}
+
+/** First point of the sources behind a mean, at its temperature. */
+function firstOf({ n, source, temperatureK }: SystemPoints, from: readonly number[], point: number): number {
+  let first = point;
+  for (let j = n - 1; j >= 0; j--)
+    if (source[j] === from[0] && Math.abs(temperatureK[j]! - temperatureK[point]!) < 0.011) first = j;
+  return first;
 }

@@ -1,4 +1,4 @@
-import { SCREENING_STRIDE } from "../curves/screening-basis.ts";
+import { SLOPE_CHANGE } from "../curves/screening-basis.ts";
 import { refineStart, residual, robustStart } from "./robust-start.ts";
 import { fillBasis, modelOf, type RobustWorkspace } from "./robust-workspace.ts";
 
@@ -42,6 +42,13 @@ export function startWithBranches(ws: RobustWorkspace, water: boolean): void {
   } else lossWithBreak(ws, bestBreak);
 }
 
+/** Start of one system whose curve is known to break at a temperature, K. */
+export function startAtBreak(ws: RobustWorkspace, breakK: number): void {
+  fillBasis(ws, Number.NaN);
+  robustStart(ws);
+  lossWithBreak(ws, breakK);
+}
+
 function pointsOff(ws: RobustWorkspace, by: number): number {
   let off = 0;
   for (let k = 0; k < ws.rows.n; k++) {
@@ -56,7 +63,7 @@ function lossWithBreak(ws: RobustWorkspace, breakK: number): number {
   ws.use.set(ws.usable.subarray(0, ws.rows.n));
   refineStart(ws, 4 * BREAK_SD, 2);
   const loss = refineStart(ws, BREAK_SD, 3);
-  return modelOf(ws).coefficients[SCREENING_STRIDE - 1]! < 0 ? loss : Number.POSITIVE_INFINITY;
+  return modelOf(ws).coefficients[SLOPE_CHANGE]! < 0 ? loss : Number.POSITIVE_INFINITY;
 }
 
 /**

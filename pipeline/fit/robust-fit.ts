@@ -1,8 +1,12 @@
+import { BROKEN_COEFFICIENTS } from "../curves/screening-basis.ts";
 import { groupVariance } from "../numerics/grouped-model.ts";
 import { medianInPlace } from "../numerics/order-statistics.ts";
 import type { Agreement, PooledScales, RobustFit } from "../records/fits.ts";
+import { type CopiedSource, RepeatKind, type Repeats } from "../records/repeats.ts";
 import type { SystemPoints } from "../records/systems.ts";
+import { AS_COMPUTED, type Written } from "./equal-pairs.ts";
 import { sharedDeviation } from "./lack-of-fit.ts";
+import { apartFromBranches } from "./near-break.ts";
 import {
   addDeviation,
   addOffset,
@@ -15,7 +19,7 @@ import {
   startScales,
 } from "./pooled-scales.ts";
 import { repeatedPoints } from "./repeated-points.ts";
-import { failure, settleSources } from "./robust-keep.ts";
+import { failure, offsetVariance, settleSources } from "./robust-keep.ts";
 import { type PreparedEdition, prepareEdition, type RobustSystem, spanK } from "./robust-prepare.ts";
 import { createRobustWorkspace, fillBasis, loadSystem, modelOf, type RobustWorkspace } from "./robust-workspace.ts";
 import { scaleSample } from "./scale-sample.ts";
@@ -27,8 +31,12 @@ export interface RobustOptions {
   readonly defaults?: Partial<DefaultScales>;
   /** Material threshold of a point: the smallest |deviation| in ln value worth a person's time. Default 0.12. */
   readonly threshold?: (system: number, point: number) => number;
+  /** How values were written, for telling copies; without it only values equal as computed are copies. */
+  readonly written?: Written;
   /** Passes over the edition; the scales are re-estimated between them. Default 4. */
   readonly passes?: number;
+  /** Laboratory of each source, by position in the edition's list; "" = not stated, one of its own. */
+  readonly laboratories?: readonly string[];
   /** What an earlier fit of the whole edition pooled: then nothing is estimated again, for fitting a few systems anew. */
   readonly pooled?: PooledFit;
 }
@@ -39,6 +47,8 @@ export interface PooledFit {
   /** Median stated uncertainty of ln value, by source. */
   readonly typicalU: Float64Array;
   readonly sums: ScaleSums;
+  /** Sources that repeat others all over the edition. */
+  readonly copies: readonly CopiedSource[];
 }
 
 type Threshold = (system: number, point: number) => number;
@@ -81,9 +91,17 @@ export function robustFits(
   const defaults = { ...DEFAULTS, ...options.defaults };
   const threshold = options.threshold ?? (() => LEAVE_OUT);
   const capacity = points.reduce((most, { n }) => Math.max(most, n), 1);
-  const ws = createRobustWorkspace(capacity, nSources);
+  const ws = createRobustWorkspace(capacity, nSources, options.laboratories);
   const { pooled } = options;
-  const systems = perSystem.map((about, s) => onceOnly(about, points[s]!));
+  const { repeats, sources: copies } = repeatedPoints(
+    points,
+    {
+      ...{ written: options.written ?? AS_COMPUTED, nSources },
+      scatter: (s) => independentScatter(defaults, perSystem[s]?.aqueousSalt === true),
+    },
+    pooled?.copies,
+  );
+  const systems = perSystem.map((about, s) => onceOnly(about, repeats[s]));
   const fresh = prepareEdition(ws, points, systems, nSources);
   const prepared = { ...fresh, typicalU: pooled?.typicalU ?? fresh.typicalU };
   const sample = pooled === undefined ? scaleSample(points, prepared.betweenClass, nSources) : [];
@@ -103,27 +121,29 @@ export function robustFits(
   const fits = points.map((system, s) => {
     const camps = settle(ws, system, s, systems[s], prepared, scales, threshold);
     const between = betweenOf(scales, prepared.betweenClass[s]!);
-    const repeated = systems[s]?.repeated;
-    return toFit(ws, system, s, camps, between, sums, repeated, room(prepared.first[s]!, prepared.first[s + 1]!));
+    return toFit(ws, system, s, camps, between, sums, repeats[s], room(prepared.first[s]!, prepared.first[s + 1]!));
   });
-  return { fits, scales, pooled: { scales, typicalU: prepared.typicalU, sums } };
+  return { fits, scales, pooled: { scales, typicalU: prepared.typicalU, sums, copies } };
 }
 
-/** A system in which readings that are written twice take part once. */
-interface OnceOnly extends RobustSystem {
-  readonly repeated?: Uint8Array;
+/** The system with the points left out that count elsewhere. */
+function onceOnly(about: RobustSystem, repeats: Repeats | undefined): RobustSystem {
+  if (repeats === undefined) return about;
+  const excluded = repeats.kind.map((kind, i) => (kind === RepeatKind.counts ? (about.excluded?.[i] ?? 0) : 1));
+  return { ...about, excluded };
 }
 
-function onceOnly(about: RobustSystem, points: SystemPoints): OnceOnly {
-  const repeated = repeatedPoints(points);
-  if (repeated === undefined) return about;
-  return { ...about, repeated, excluded: repeated.map((mark, i) => mark | (about.excluded?.[i] ?? 0)) };
+/** Standard deviation (ln value) of the difference between independent measurements by two sources, by the defaults. */
+function independentScatter({ between, betweenAqueousSalt, within }: DefaultScales, aqueousSalt: boolean): number {
+  const one = aqueousSalt ? betweenAqueousSalt : between;
+  return Math.SQRT2 * Math.hypot(one, Math.min(within, one));
 }
 
 /** Whether a source has nothing of its own here: it is neither sound nor apart. */
-function isCopy(ws: RobustWorkspace, g: number, repeated: Uint8Array | undefined): boolean {
-  if (repeated === undefined) return false;
-  for (let k = ws.groupStart[g]!; k < ws.groupStart[g + 1]!; k++) if (repeated[ws.order[k]!] === 0) return false;
+function isCopy(ws: RobustWorkspace, g: number, repeats: Repeats | undefined): boolean {
+  if (repeats === undefined) return false;
+  for (let k = ws.groupStart[g]!; k < ws.groupStart[g + 1]!; k++)
+    if (repeats.kind[ws.order[k]!] === RepeatKind.counts) return false;
   return true;
 }
 
@@ -144,6 +164,7 @@ function settle(
   threshold: Threshold,
 ): Camps {
   loadSystem(ws, points, about?.excluded);
+  ws.tested = about?.breakK !== undefined;
   fillBasis(ws, prepared.breakK[s]!);
   const at = prepared.first[s]!;
   let usable = 0;
@@ -178,14 +199,16 @@ function gather(ws: RobustWorkspace, sums: ScaleSums, betweenClass: number, betw
   for (let g = 0; g < ws.groups; g++) sound += ws.sound[g]!;
   if (sound < 2) return;
   for (let g = 0; g < ws.groups; g++) {
-    if (ws.sound[g] === 0) continue;
-    const variance = groupVariance(model, NO_ROW, 0, g);
-    addOffset(sums, betweenClass, ws.sourceOf[g]!, model.offsets[g]!, variance, between ** 2);
+    // Two sources of one laboratory say nothing of how far laboratories lie apart.
+    if (ws.sound[g] === 0 || ws.perLaboratory[g]! > 1) continue;
+    const share = between ** 2 / offsetVariance(ws, g, between ** 2);
+    const variance = share ** 2 * groupVariance(model, NO_ROW, 0, g) + (1 - share) * between ** 2;
+    addOffset(sums, betweenClass, ws.sourceOf[g]!, share * model.offsets[g]!, variance, between ** 2);
   }
 }
 
 /** A row of zeros: the variance of a group's offset alone, given the data, is that of this row. */
-const NO_ROW = new Float64Array(4);
+const NO_ROW = new Float64Array(BROKEN_COEFFICIENTS);
 
 /** Columns of results for all points, handed out system by system: one allocation instead of five a system. */
 function fitRoom(total: number) {
@@ -210,13 +233,13 @@ function toFit(
   camps: Camps,
   between: number,
   sums: ScaleSums,
-  repeated: Uint8Array | undefined,
+  repeats: Repeats | undefined,
   fit: ReturnType<ReturnType<typeof fitRoom>>,
 ): RobustFit {
   const n = points.n;
   const sources: [sound: number[], apart: number[]] = [[], []];
   for (let g = 0; g < ws.groups; g++) {
-    if (!isCopy(ws, g, repeated)) sources[ws.sound[g] === 1 ? 0 : 1].push(ws.sourceOf[g]!);
+    if (!isCopy(ws, g, repeats)) sources[ws.sound[g] === 1 ? 0 : 1].push(ws.sourceOf[g]!);
   }
   let kept = 0;
   for (let k = 0; k < n; k++) {
@@ -229,7 +252,8 @@ function toFit(
     if (!Number.isFinite(ws.deviation[k])) continue;
     fit.predicted[i] = points.lnValue[i]! - ws.deviation[k]!;
     fit.deviation[i] = ws.deviation[k]!;
-    fit.deviationSd[i] = Math.sqrt(ws.deviationVariance[k]! + shared * shared);
+    const ofBranches = ws.deviation[k]! - apartFromBranches(ws, k);
+    fit.deviationSd[i] = Math.sqrt(ws.deviationVariance[k]! + shared * shared + ofBranches * ofBranches);
   }
   const ascending = (list: readonly number[]) => [...list].sort((a, b) => a - b);
   return {
@@ -239,10 +263,12 @@ function toFit(
     agreement: camps !== undefined ? "conflict" : agreementOf(ws, kept),
     betweenSd: between,
     breakTemperatureK: ws.breakK,
+    breakTested: ws.tested,
     degreesOfFreedom: freedomOf(ws, sums),
     soundSources: camps === undefined ? ascending(sources[0]) : [],
     apartSources: camps === undefined ? ascending(sources[1]) : [],
     camps: (camps ?? []).map((camp) => ascending(camp.map((g) => ws.sourceOf[g]!))),
+    ...(repeats === undefined ? {} : { repeats }),
   };
 }
 

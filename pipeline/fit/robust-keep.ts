@@ -6,9 +6,10 @@ import {
   fitGroupedModel,
   groupVariance,
 } from "../numerics/grouped-model.ts";
+import { apartFromBranches } from "./near-break.ts";
 import { FREE_OFFSET_VARIANCE } from "./robust-start.ts";
 import { modelOf, type RobustWorkspace } from "./robust-workspace.ts";
-import { voteBySource } from "./source-vote.ts";
+import { isMajority, voteBySource } from "./source-vote.ts";
 
 /** Standardised deviation from which a point that also passes its tolerance is left out. */
 const FAIL_Z = 4;
@@ -27,7 +28,7 @@ export function locateSources(ws: RobustWorkspace): number[] {
   const voters: number[] = [];
   for (let g = 0; g < ws.groups; g++) {
     ws.location[g] = model.coefficients[0]! + model.offsets[g]!;
-    ws.locationVariance[g] = groupVariance(model, reference, 0, g);
+    ws.locationVariance[g] = groupVariance(model, reference, 0, g) + ws.sharedVariance[g]!;
     for (let k = ws.groupStart[g]!; k < ws.groupStart[g + 1]!; k++) {
       if (ws.use[k] === 0) continue;
       voters.push(g);
@@ -72,9 +73,9 @@ export function keepPoints(ws: RobustWorkspace, betweenVariance: number, conflic
   fitSound(ws, betweenVariance, conflict);
 }
 
-/** |z| of a point, or 0 where its deviation is within its tolerance. */
+/** |z| of a point, or 0 where its deviation is within its tolerance, or near a break between the branches. */
 export function failure(ws: RobustWorkspace, k: number): number {
-  const deviation = Math.abs(ws.deviation[k]!);
+  const deviation = Math.abs(apartFromBranches(ws, k));
   return deviation < ws.tolerance[k]! ? 0 : deviation / Math.sqrt(ws.deviationVariance[k]!);
 }
 
@@ -82,9 +83,25 @@ export function failure(ws: RobustWorkspace, k: number): number {
 export function fitSound(ws: RobustWorkspace, betweenVariance: number, conflict: boolean): void {
   const model = modelOf(ws);
   model.groups = ws.groups;
-  model.offsetVariance.fill(conflict ? FREE_OFFSET_VARIANCE : betweenVariance, 0, ws.groups);
+  for (let g = 0; g < ws.groups; g++)
+    model.offsetVariance[g] = conflict ? FREE_OFFSET_VARIANCE : offsetVariance(ws, g, betweenVariance);
   fitGroupedModel(model, ws.rows, ws.use);
   deletedDeviations(model, ws.rows, ws.use, ws.deviation, ws.deviationVariance);
+}
+
+/** Variance of a source's offset: m tau^2 + s^2, as in the published fit, m counting the sound sources and itself. */
+export function offsetVariance(ws: RobustWorkspace, g: number, tau2: number): number {
+  const m = ws.perLaboratory[g] === 1 ? 1 : ofLaboratory(ws, g, (other) => ws.sound[other] === 1);
+  return m * tau2 + ws.sharedVariance[g]!;
+}
+
+/** Groups from the laboratory of one group that `counts` admits, and that group itself. */
+function ofLaboratory({ groups, sourceOf, laboratoryOf }: RobustWorkspace, g: number, counts: (g: number) => boolean) {
+  const own = laboratoryOf[sourceOf[g]!];
+  let count = 1;
+  for (let other = 0; other < groups; other++)
+    if (other !== g && laboratoryOf[sourceOf[other]!] === own && counts(other)) count++;
+  return count;
 }
 
 /**
@@ -119,8 +136,9 @@ export function settleSources(
   const voters = locateSources(ws);
   sound.fill(0, 0, ws.groups);
   for (const g of voters) sound[g] = 1;
+  const weight = voteWeights(ws, voters);
   if (voters.length > 1) {
-    const vote = voteBySource(voters, ws.location, ws.locationVariance, voteTolerance);
+    const vote = voteBySource(voters, ws.location, ws.locationVariance, voteTolerance, weight);
     if (!vote.majority) return conflictOf(ws, betweenVariance, vote.camps);
     sound.fill(0, 0, ws.groups);
     for (const g of vote.camps[0] ?? []) sound[g] = 1;
@@ -131,7 +149,7 @@ export function settleSources(
     if (apart === undefined) break;
     const rest = soundGroups(ws).filter((g) => g !== apart);
     ws.use.set(started);
-    if (rest.length * 2 <= voters.length) {
+    if (!isMajority(rest, voters, weight)) {
       const others = voters.filter((g) => !rest.includes(g));
       return conflictOf(ws, betweenVariance, [rest, ...others.map((g) => [g])]);
     }
@@ -139,6 +157,14 @@ export function settleSources(
   }
   borrowSlope(ws, betweenVariance);
   return undefined;
+}
+
+/** A laboratory has one vote, shared by its sources; undefined where every source is of another laboratory. */
+function voteWeights(ws: RobustWorkspace, voters: readonly number[]): Float64Array | undefined {
+  if (voters.every((g) => ws.perLaboratory[g] === 1)) return undefined;
+  const weight = new Float64Array(ws.groups);
+  for (const g of voters) weight[g] = 1 / ofLaboratory(ws, g, (other) => voters.includes(other));
+  return weight;
 }
 
 function conflictOf(
@@ -206,7 +232,8 @@ function borrowSlope(ws: RobustWorkspace, betweenVariance: number): void {
       const at = k * SCREENING_STRIDE;
       ws.use[k] = 0;
       ws.deviation[k] = response[k]! - expected(model, design, at);
-      ws.deviationVariance[k] = variance[k]! + betweenVariance + expectedVariance(model, design, at);
+      ws.deviationVariance[k] =
+        variance[k]! + offsetVariance(ws, g, betweenVariance) + expectedVariance(model, design, at);
     }
   }
 }

@@ -1,8 +1,8 @@
 import { screeningSlope } from "../curves/screening-basis.ts";
 import { medianInPlace } from "../numerics/order-statistics.ts";
-import type { SystemPoints } from "../records/systems.ts";
+import { ownLnU, type SystemPoints } from "../records/systems.ts";
 import { BetweenClass } from "./pooled-scales.ts";
-import { startWithBranches } from "./robust-branch.ts";
+import { startAtBreak, startWithBranches } from "./robust-branch.ts";
 import { loadSystem, modelOf, type RobustWorkspace } from "./robust-workspace.ts";
 
 /** What the robust fit must know of a system beyond its points. */
@@ -12,6 +12,8 @@ export interface RobustSystem {
   readonly water?: boolean;
   /** 1 = the point takes no part in the fit (outside the liquid range, say); it still gets a deviation. */
   readonly excluded?: Uint8Array;
+  /** Temperature of a break that was tested, or is about to be, K; else one that protects points is looked for. */
+  readonly breakK?: number;
 }
 
 /** What is found once for each system and used in every pass over the edition; points of all systems one after another. */
@@ -20,7 +22,7 @@ export interface PreparedEdition {
   readonly first: Int32Array;
   /** 1 = agrees with its own source's curve in the high-breakdown start. */
   readonly use: Uint8Array;
-  /** Stated standard uncertainty of each point in ln value, that of the temperature included. */
+  /** Stated standard uncertainty of each point in ln value, its own part, that of the temperature included. */
   readonly statedU: Float64Array;
   /** Temperature of the break, K; NaN = none. By system. */
   readonly breakK: Float64Array;
@@ -56,7 +58,9 @@ export function prepareEdition(
   points.forEach((system, s) => {
     const about = perSystem[s];
     loadSystem(ws, system, about?.excluded);
-    startWithBranches(ws, about?.water === true || about?.aqueousSalt === true);
+    ws.tested = about?.breakK !== undefined;
+    if (about?.breakK === undefined) startWithBranches(ws, about?.water === true || about?.aqueousSalt === true);
+    else startAtBreak(ws, about.breakK);
     prepared.breakK[s] = ws.breakK;
     prepared.betweenClass[s] = classOf(ws, about?.aqueousSalt === true);
     for (let k = 0; k < system.n; k++) prepared.use[first[s]! + ws.order[k]!] = ws.use[k]!;
@@ -82,12 +86,12 @@ export function spanK(ws: RobustWorkspace): number {
   return high > low ? high - low : 0;
 }
 
-/** Combines u(ln value) with the slope of the start times u(T). */
+/** Combines a point's own u(ln value) with the slope of the start times u(T). */
 function stateUncertainties(ws: RobustWorkspace, points: SystemPoints, out: Float64Array, at: number): void {
   const { coefficients } = modelOf(ws);
   for (let k = 0; k < points.n; k++) {
     const i = ws.order[k]!;
-    const uValue = points.lnU[i]!;
+    const uValue = ownLnU(points, i);
     const uT = points.temperatureU[i]!;
     const own = uValue > 0 && uValue < 10 ? uValue : UNSTATED_U;
     const slope = screeningSlope(coefficients[1]!, coefficients[2]!, points.temperatureK[i]!, ws.centreK);

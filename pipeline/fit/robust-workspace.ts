@@ -1,7 +1,14 @@
-import { SCREENING_STRIDE, setScreeningPrior, writeScreeningBasis } from "../curves/screening-basis.ts";
+import {
+  BROKEN_COEFFICIENTS,
+  HINGED_COEFFICIENTS,
+  SCREENING_STRIDE,
+  SMOOTH_COEFFICIENTS,
+  setScreeningPrior,
+  writeScreeningBasis,
+} from "../curves/screening-basis.ts";
 import { createGroupedModel, type GroupedModel, type GroupedRows } from "../numerics/grouped-model.ts";
 import { medianInPlace } from "../numerics/order-statistics.ts";
-import type { SystemPoints } from "../records/systems.ts";
+import { type SystemPoints, sharedVarianceOf } from "../records/systems.ts";
 
 /** One system laid out for the robust fit: points ordered by source, sources numbered 0 to `groups` - 1. */
 export interface RobustWorkspace {
@@ -23,6 +30,10 @@ export interface RobustWorkspace {
   readonly groupStart: Int32Array;
   /** 1 = the group belongs to the sound majority. */
   readonly sound: Uint8Array;
+  /** Variance of ln value that the points of each group share. */
+  readonly sharedVariance: Float64Array;
+  /** Sources of this system from the laboratory of each group, itself included. */
+  readonly perLaboratory: Float64Array;
   readonly location: Float64Array;
   readonly locationVariance: Float64Array;
   groups: number;
@@ -30,9 +41,15 @@ export interface RobustWorkspace {
   /** Subtracted from ln value: their median. */
   shift: number;
   breakK: number;
+  /** True if the break was tested. */
+  tested: boolean;
   readonly smooth: GroupedModel;
+  /** With a break that only protects points, and with one that was tested, at which the curvature changes too. */
+  readonly hinged: GroupedModel;
   readonly broken: GroupedModel;
   readonly groupOfSource: Int32Array;
+  /** Laboratory of each source of the edition, as a number of its own. */
+  readonly laboratoryOf: Int32Array;
 }
 
 /** Room temperature, K. */
@@ -40,12 +57,37 @@ const ROOM_K = 296;
 /** ln of the ratio to the usual temperature beyond which a temperature takes no part: K read as °C, say. */
 const FAR_K = Math.log(1.5);
 
-/** A workspace for systems of up to `capacity` points from `nSources` sources. */
-export function createRobustWorkspace(capacity: number, nSources: number): RobustWorkspace {
+/** Laboratories as numbers: equal for sources of one stated laboratory, and a number of its own where none is stated. */
+function laboratoryNumbers(nSources: number, laboratories: readonly string[]): Int32Array {
+  const first = new Map<string, number>();
+  return Int32Array.from({ length: nSources }, (_, source) => {
+    const name = laboratories[source] ?? "";
+    if (name === "") return source;
+    const known = first.get(name);
+    if (known === undefined) first.set(name, source);
+    return known ?? source;
+  });
+}
+
+/**
+ * A workspace for systems of up to `capacity` points from `nSources` sources.
+ *
+ * @param laboratories laboratory of each source; "" = not stated
+ */
+export function createRobustWorkspace(
+  capacity: number,
+  nSources: number,
+  laboratories: readonly string[] = [],
+): RobustWorkspace {
   const reals = () => new Float64Array(capacity);
   const groups = Math.max(1, Math.min(capacity, nSources)) + 1;
-  const [smooth, broken] = [createGroupedModel(3, groups), createGroupedModel(4, groups)];
+  const [smooth, hinged, broken] = [
+    createGroupedModel(SMOOTH_COEFFICIENTS, groups),
+    createGroupedModel(HINGED_COEFFICIENTS, groups),
+    createGroupedModel(BROKEN_COEFFICIENTS, groups),
+  ];
   setScreeningPrior(smooth);
+  setScreeningPrior(hinged);
   setScreeningPrior(broken);
   return {
     rows: {
@@ -67,21 +109,27 @@ export function createRobustWorkspace(capacity: number, nSources: number): Robus
     sourceOf: new Int32Array(groups),
     groupStart: new Int32Array(groups + 1),
     sound: new Uint8Array(groups),
+    sharedVariance: new Float64Array(groups),
+    perLaboratory: new Float64Array(groups),
     location: new Float64Array(groups),
     locationVariance: new Float64Array(groups),
     groups: 0,
     centreK: 298.15,
     shift: 0,
     breakK: Number.NaN,
+    tested: false,
     smooth,
+    hinged,
     broken,
     groupOfSource: new Int32Array(nSources).fill(-1),
+    laboratoryOf: laboratoryNumbers(nSources, laboratories),
   };
 }
 
 /** The model in use: with a break where the system has one. */
 export function modelOf(ws: RobustWorkspace): GroupedModel {
-  return Number.isNaN(ws.breakK) ? ws.smooth : ws.broken;
+  if (Number.isNaN(ws.breakK)) return ws.smooth;
+  return ws.tested ? ws.broken : ws.hinged;
 }
 
 /**
@@ -131,6 +179,22 @@ export function loadSystem(ws: RobustWorkspace, points: SystemPoints, excluded: 
   ws.centreK = finite > 0 ? sumT / finite : 298.15;
   ws.shift = finite > 0 ? medianInPlace(scratch, finite) : 0;
   for (let k = 0; k < n; k++) rows.response[k]! -= ws.shift;
+  loadOffsetParts(ws, points);
+}
+
+/** What is known of the offset of each group: the variance its points share, and how many groups its laboratory has. */
+function loadOffsetParts(ws: RobustWorkspace, points: SystemPoints): void {
+  const { order, groups, groupStart, sharedVariance, perLaboratory, sourceOf, laboratoryOf } = ws;
+  for (let g = 0; g < groups; g++) {
+    const [from, to] = [groupStart[g]!, groupStart[g + 1]!];
+    let sum = 0;
+    for (let k = from; k < to; k++) sum += sharedVarianceOf(points, order[k]!);
+    sharedVariance[g] = sum / (to - from);
+    const laboratory = laboratoryOf[sourceOf[g]!]!;
+    let count = 0;
+    for (let other = 0; other < groups; other++) if (laboratoryOf[sourceOf[other]!] === laboratory) count++;
+    perLaboratory[g] = count;
+  }
 }
 
 /**

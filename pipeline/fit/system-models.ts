@@ -90,6 +90,39 @@ export function limitModel(points: KeptPoints): { readonly model: LinearModel; r
   return { model: MODIFIED_APELBLAT, lastSd: free ? Number.POSITIVE_INFINITY : usualC };
 }
 
+/** What every model of a subject is fitted under, and the model that limits rest on. */
+export interface CommonGround {
+  readonly points: KeptPoints;
+  readonly common: CommonFit;
+  readonly scale: SystemScale;
+  /** Pooled between-source SD of the system's class with its degrees of freedom; 0 = default setting. */
+  readonly between: { readonly sd: number; readonly degreesOfFreedom: number };
+  readonly limiting: ReturnType<typeof limitModel>;
+}
+
+/**
+ * Slopes, expected variances and scales for the points loaded in the workspace.
+ *
+ * @returns undefined where no model can be fitted
+ */
+export function commonGround(
+  ws: FitWorkspace,
+  points: KeptPoints,
+  screened: ScreenedPoints,
+  subject: CurveSubject,
+  context: CurveContext,
+): CommonGround | undefined {
+  const models = admissibleModels(points);
+  if (!firstFit(ws, points, models[1] ?? models[0]!)) return undefined;
+  const within = withinBySource(ws, points, context.scales.within);
+  if (!setStart(ws, points, within, context.weighting)) return undefined;
+  const between = betweenScale(screened, subject, context);
+  const scale = scaleAboutLimitModel(ws, points, context.weighting, between.sd ** 2);
+  const { varianceFactor, betweenVariance } = scale;
+  const common: CommonFit = { points, weighting: context.weighting, within, varianceFactor, betweenVariance };
+  return { points, common, scale, between, limiting: limitModel(points) };
+}
+
 /**
  * Fits and compares all admissible models to the points loaded in the workspace.
  *
@@ -102,14 +135,9 @@ export function fitModels(
   subject: CurveSubject,
   context: CurveContext,
 ): FittedModels | undefined {
-  const models = admissibleModels(points);
-  if (!firstFit(ws, points, models[1] ?? models[0]!)) return undefined;
-  const within = withinBySource(ws, points, context.scales.within);
-  if (!setStart(ws, points, within, context.weighting)) return undefined;
-  const between = betweenScale(screened, subject, context);
-  const scale = scaleAboutLimitModel(ws, points, context.weighting, between.sd ** 2);
-  const { varianceFactor, betweenVariance } = scale;
-  const common: CommonFit = { points, weighting: context.weighting, within, varianceFactor, betweenVariance };
+  const ground = commonGround(ws, points, screened, subject, context);
+  if (ground === undefined) return undefined;
+  const { common, scale, between } = ground;
   const compared = compareModels(ws, common, subject, scale);
   if (compared === undefined) return undefined;
   return {
@@ -128,7 +156,7 @@ export function fitModels(
 function scaleAboutLimitModel(ws: FitWorkspace, points: KeptPoints, weighting: FitWeighting, pooledBetween: number) {
   const { model, lastSd } = limitModel(points);
   setDesignColumns(ws.columns, model, ws.temperatureK, points.n, points.centreK);
-  const basis = { n: points.n, nSources: points.sources.length, p: model.parameterCount, lastSd };
+  const basis = { n: points.n, nSources: points.sources.length, p: model.parameterCount, lastSd, parts: points };
   return systemScale(ws, basis, weighting === "absolute" ? ws.response : ws.lnValue, ws.startVariance, pooledBetween);
 }
 

@@ -2,7 +2,7 @@ import { chiSquareQuantile } from "../numerics/distributions.ts";
 import { leastSquaresInto } from "../numerics/least-squares.ts";
 import type { FitWorkspace } from "./fit-workspace.ts";
 import { generalisedLeastSquares } from "./generalised-least-squares.ts";
-import { setRandomIntercept, whiten } from "./random-intercept.ts";
+import { type OffsetParts, setRandomIntercept, whiten } from "./random-intercept.ts";
 
 /**
  * Degrees of freedom granted to the pooled within-source scatter when a system's own residuals are joined to it.
@@ -23,6 +23,8 @@ export interface ScaleBasis {
   readonly p: number;
   /** Standard deviation of the last coefficient before the data; Infinity where it is fitted freely. */
   readonly lastSd: number;
+  /** What is known of the offsets besides tau^2. */
+  readonly parts: OffsetParts;
 }
 
 /** Scales of one system: pooled ones, moderated by its own residuals. */
@@ -85,12 +87,12 @@ function betweenScale(
   varianceFactor: number,
   pooled: number,
 ): { betweenVariance: number; widened: boolean } {
-  const { n, nSources, p, lastSd } = basis;
+  const { n, nSources, p, lastSd, parts } = basis;
   if (nSources < 2) return { betweenVariance: pooled, widened: false };
   const within = withinSources(ws, basis, response, variance, varianceFactor);
   const apart = n + (lastSd < Number.POSITIVE_INFINITY ? 1 : 0) - p - within.degreesOfFreedom;
   const excess = (tau2: number): number => {
-    setRandomIntercept(ws.common, n, nSources, variance, varianceFactor, tau2);
+    setRandomIntercept(ws.common, n, nSources, variance, varianceFactor, tau2, parts);
     const fit = generalisedLeastSquares(ws, ws.common, response, p, lastSd);
     return fit === undefined ? 0 : fit.residualSumOfSquares - within.sumOfSquares;
   };

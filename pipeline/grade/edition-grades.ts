@@ -1,6 +1,7 @@
 import type { Edition, Grade } from "../records/edition.ts";
 import type { SystemFit } from "../records/fits.ts";
-import { type MeasurementTable, textOf } from "../records/measurements.ts";
+import { type MeasurementTable, RowState, textOf } from "../records/measurements.ts";
+import { RepeatKind } from "../records/repeats.ts";
 import { isDecision, rulingPhrase } from "../records/rulings.ts";
 import type { System } from "../records/systems.ts";
 import { AGREEMENT_SDS, type GradeEvidence, proposeGrade } from "./grade.ts";
@@ -15,6 +16,7 @@ export function gradeEdition(edition: Graded): Grade[] {
     const confirmed = edition.rulings.recommended.get(system.index);
     return proposeGrade({
       ...pointEvidence(fit, edition.table),
+      ...rowCounts(edition, system),
       ...sourceEvidence(edition, fit),
       openFlags: open(system),
       confirmedBy: confirmed && rulingPhrase(confirmed).replace(/^kept/, "confirmed"),
@@ -46,9 +48,11 @@ type PointEvidence = Pick<
 >;
 
 function pointEvidence({ robust }: SystemFit, table: MeasurementTable): PointEvidence {
-  const { points, kept, deviation, deviationSd, agreement } = robust;
+  const { points, kept, deviation, deviationSd, agreement, repeats } = robust;
   let [keptCount, within, judged, solidChecked] = [0, 0, 0, 0];
   for (let i = 0; i < points.n; i++) {
+    // One measurement written twice agrees with itself: it is judged once.
+    if (repeats !== undefined && repeats.kind[i] !== RepeatKind.counts) continue;
     const z = Math.abs((deviation[i] as number) / (deviationSd[i] as number));
     if (Number.isFinite(z)) judged++;
     if (z <= AGREEMENT_SDS) within++;
@@ -67,8 +71,26 @@ function pointEvidence({ robust }: SystemFit, table: MeasurementTable): PointEvi
   };
 }
 
+/** Rows of a system that no fit uses, by why. */
+function rowCounts(
+  { table, rulings }: Graded,
+  { rows }: System,
+): Pick<GradeEvidence, "ranges" | "notFitted" | "setAside"> {
+  let [ranges, notFitted, setAside] = [0, 0, 0];
+  for (const row of rows) {
+    if (rulings.setAside.has(row)) setAside++;
+    else if (table.state[row] === RowState.interval) ranges++;
+    else if (table.state[row] === RowState.notFitted) notFitted++;
+  }
+  return { ranges, notFitted, setAside };
+}
+
+/** Laboratories and methods behind the kept points; a source that mostly repeats another or averages others is none. */
 function sourceEvidence({ sources, table }: Graded, { robust }: SystemFit) {
-  const kept = Array.from(robust.points.row).filter((_, i) => robust.kept[i] === 1);
+  const copying = new Set(robust.repeats?.blocks.map(({ source }) => source));
+  const kept = Array.from(robust.points.row).filter(
+    (row, i) => robust.kept[i] === 1 && !copying.has(table.source[row] as number),
+  );
   const cards = [...new Set(kept.map((row) => table.source[row] as number))].map((source) => sources[source]);
   return {
     laboratories: new Set(cards.map((source) => source?.card?.laboratory || source?.name)).size,

@@ -16,6 +16,11 @@ const SOLID_SHARE = 0.5;
 export interface GradeEvidence {
   /** Points that could be fitted: none set aside, no intervals. */
   readonly points: number;
+  /** Rows known only as a range, and rows with a number that is shown and never fitted; none set aside. */
+  readonly ranges: number;
+  readonly notFitted: number;
+  /** Rows set aside by a ruling. */
+  readonly setAside: number;
   /** Points that stay in the published curve. */
   readonly kept: number;
   /** Points within {@link AGREEMENT_SDS} standard deviations of what the others say, of those that could be judged. */
@@ -45,8 +50,9 @@ interface Criterion {
 /**
  * Proposes a grade in the sense of the IUPAC Solubility Data Series, with each criterion and its number.
  *
- * - rejected: no point is left in the curve
- * - doubtful: sources disagree, an open blocking flag, or a single laboratory with no temperature cover
+ * - rejected: points were reported and none is left in the curve
+ * - doubtful: sources disagree, an open blocking flag, a single laboratory with no temperature cover, or no number at all
+ *   (only ranges, or values that are never fitted): nothing was found wrong, but there is nothing to evaluate
  * - tentative: everything else
  * - recommended: at least 2 laboratories, agreement within uncertainty, temperature cover, solid phase checked at
  *   equilibrium, no open flag, and a ruling with a name that confirms it; never proposed by the program alone
@@ -55,7 +61,7 @@ interface Criterion {
  * standard deviations, half of the points with a checked solid) are common practice.
  */
 export function proposeGrade(evidence: GradeEvidence): Grade {
-  const { points, kept, laboratories, openFlags, agreement, confirmedBy } = evidence;
+  const { kept, laboratories, openFlags, agreement, confirmedBy } = evidence;
   const cover = temperatureCover(evidence);
   const required = [
     laboratoryCriterion(evidence),
@@ -66,14 +72,28 @@ export function proposeGrade(evidence: GradeEvidence): Grade {
   ];
   const texts = required.map(({ text }) => text);
   texts.splice(3, 0, `${counted(evidence.methods, "method")} (more than one rules out an error they share)`);
-  if (kept === 0)
-    return { grade: "rejected", reasons: [points === 0 ? "no point to fit" : "no point is kept", ...texts] };
+  if (kept === 0) return withoutCurve(evidence, texts);
   const several = new Set(evidence.temperatureK).size > 1;
   const doubtful = agreement === "conflict" || openFlags > 0 || (laboratories < LABORATORIES && !cover.met && several);
   const unmet = required.filter(({ met }) => !met).length;
   const reasons = [...texts, ...confirmation(unmet, confirmedBy)];
   if (doubtful) return { grade: "doubtful", reasons };
   return { grade: unmet === 0 && confirmedBy !== undefined ? "recommended" : "tentative", reasons };
+}
+
+/** Grade of a system no point of which stays: what is there instead decides. */
+function withoutCurve({ points, ranges, notFitted, setAside }: GradeEvidence, texts: readonly string[]): Grade {
+  if (points > 0) return { grade: "rejected", reasons: ["no point is kept", ...texts] };
+  if (ranges + notFitted === 0) {
+    const aside = setAside > 0 ? `: ${counted(setAside, "row")} set aside by a ruling` : "";
+    return { grade: "rejected", reasons: [`no point to fit${aside}`, ...texts] };
+  }
+  const there = [
+    ranges > 0 ? `only ${counted(ranges, "range")}` : "",
+    notFitted > 0 ? `${counted(notFitted, "value")} shown and never fitted` : "",
+  ].filter((text) => text !== "");
+  // The other criteria count numbers: of a system without any they would tell nothing but zeros.
+  return { grade: "doubtful", reasons: [`no number to evaluate: ${there.join(" and ")}`, texts.at(-1) as string] };
 }
 
 function confirmation(unmet: number, confirmedBy: string | undefined): string[] {

@@ -8,11 +8,29 @@ export function systemKey(identity: Identity): string {
   return JSON.stringify([solute, solidForm, solvent, composition, medium]);
 }
 
-/** Readable id of the system of an identity. */
-export function systemId(identity: Identity): string {
+/** Readable id of the system of an identity; 16 digits instead of 8 where another system of the edition shares the 8. */
+export function systemId(identity: Identity, digits: 8 | 16 = 8): string {
   const { solute, solidForm, solvent, composition, medium } = identity;
   const form = solidForm === "unspecified" ? "" : solidForm;
-  return readableId([solute, form, "in", solvent, composition, medium], systemKey(identity));
+  return readableId([solute, form, "in", solvent, composition, medium], systemKey(identity), digits);
+}
+
+/** Readable id of the family of an identity: the same for all solid forms. */
+function familyId({ solute, solvent, composition, medium }: Identity, digits: 8 | 16 = 8): string {
+  const key = JSON.stringify([solute, solvent, composition, medium]);
+  return readableId([solute, "in", solvent, composition, medium], key, digits);
+}
+
+type IdOf = (identity: Identity, digits?: 8 | 16) => string;
+
+/** Ids that differ for any two identities of different keys: those whose short ids are the same get long ones, all of them. */
+function uniqueIds(identities: readonly Identity[], keyOf: (identity: Identity) => string, idOf: IdOf): string[] {
+  const keysOf = new Map<string, Set<string>>();
+  const short = identities.map((identity) => idOf(identity));
+  for (const [at, id] of short.entries()) {
+    keysOf.set(id, (keysOf.get(id) ?? new Set()).add(keyOf(identities[at] as Identity)));
+  }
+  return short.map((id, at) => ((keysOf.get(id)?.size ?? 0) > 1 ? idOf(identities[at] as Identity, 16) : id));
 }
 
 /**
@@ -29,17 +47,15 @@ export function groupIntoSystems(table: MeasurementTable, identities: readonly I
     (rowsOf[identity] as Int32Array)[filled[identity]!++] = row;
   }
   const systems: Omit<System, "index">[] = [];
+  const ids = uniqueIds(identities, systemKey, systemId);
+  const families = uniqueIds(identities, (identity) => systemKey({ ...identity, solidForm: "" }), familyId);
   identities.forEach((identity, i) => {
     const rows = rowsOf[i] as Int32Array;
     if (rows.length === 0) return;
-    const { solute, solvent, composition, medium } = identity;
     systems.push({
-      id: systemId(identity),
+      id: ids[i] as string,
       key: systemKey(identity),
-      family: readableId(
-        [solute, "in", solvent, composition, medium],
-        JSON.stringify([solute, solvent, composition, medium]),
-      ),
+      family: families[i] as string,
       identity,
       fitBasis: Number.isNaN(identity.soluteMolarMass) ? "ln r" : "ln x",
       rows,

@@ -1,3 +1,4 @@
+import { formName, otherNumeral, waterCount } from "../properties/form-name.ts";
 import type { SolidForm, Substance, SubstanceIndex } from "../properties/substances.ts";
 import type { CellFault } from "../records/cells.ts";
 import type { KnownSolute } from "./solute.ts";
@@ -20,41 +21,31 @@ export interface ResolvedForm {
 
 /** Spellings of a form that name none. */
 const UNSPECIFIED: ReadonlySet<string> = new Set(["", "unspecified", "unknown", "not stated", "n/a"]);
-const ANHYDROUS = /^(?:anhydrous|anhydrate|unsolvated|ansolvate)$/i;
+const ANHYDROUS = /anhydrous|unsolvated|nonsolvated|ansolvate|solvent-?free/i;
 const SOLVATED = /hydrate|solvate/i;
-const COUNTS: readonly (readonly [prefix: string, count: number])[] = [
-  ...([
-    ["hemi", 0.5],
-    ["mono", 1],
-    ["sesqui", 1.5],
-    ["di", 2],
-    ["tri", 3],
-    ["tetra", 4],
-    ["penta", 5],
-  ] as const),
-  ...([
-    ["hexa", 6],
-    ["hepta", 7],
-    ["octa", 8],
-    ["nona", 9],
-    ["deca", 10],
-    ["dodeca", 12],
-    ["octadeca", 18],
-  ] as const),
-];
 const WATER_MOLAR_MASS = 18.015;
-
-/** Water molecules per solute that a form's name states (`pentahydrate`); undefined where it states none. */
-function waterCount(name: string): number | undefined {
-  const prefix = /^(\w+)hydrate$/i.exec(name.trim())?.[1]?.toLowerCase();
-  return COUNTS.find(([known]) => known === prefix)?.[1];
-}
 
 /** R of a form: from its molar mass in the tables, else from the water count in its name, else unknown. */
 function massFactor(name: string, form: SolidForm | undefined, unsolvatedMolarMass: number): number {
   if (form?.molarMass !== undefined) return form.molarMass / unsolvatedMolarMass;
   const count = waterCount(name);
   return count === undefined ? Number.NaN : 1 + (count * WATER_MOLAR_MASS) / unsolvatedMolarMass;
+}
+
+/**
+ * The listed form that a name stands for. Where only the other kind of numeral is listed (`form I` for `form 1`), it is
+ * taken, and said so.
+ */
+function listedForm(
+  substance: Substance | undefined,
+  stated: string,
+  index: SubstanceIndex,
+): { readonly listed: SolidForm | undefined; readonly taken: boolean } {
+  if (stated === "" || substance === undefined) return { listed: undefined, taken: false };
+  const listed = index.formOf(substance, stated);
+  const numeral = listed === undefined ? otherNumeral(stated) : undefined;
+  const other = numeral === undefined ? undefined : index.formOf(substance, numeral);
+  return { listed: listed ?? other, taken: other !== undefined };
 }
 
 /**
@@ -68,14 +59,15 @@ export function resolveForm(
   index: SubstanceIndex,
 ): ResolvedForm | CellFault {
   const { substance, namedForm, molarMass, key } = solute;
-  const text = cell.trim().replace(/\s+/g, " ");
-  const stated = UNSPECIFIED.has(text.toLowerCase()) ? "" : text;
-  const listed = stated === "" || substance === undefined ? undefined : index.formOf(substance, stated);
-  if (stated !== "" && namedForm !== undefined && listed?.form !== namedForm.form) {
-    const found = `the solute's name stands for the ${namedForm.form}, the solid form says ${stated}`;
+  const text = cell.trim();
+  const stated = UNSPECIFIED.has(text.toLowerCase()) ? "" : formName(text);
+  const { listed, taken } = listedForm(substance, stated, index);
+  const said = listed?.form ?? stated;
+  if (stated !== "" && namedForm !== undefined && said !== namedForm.form && stated !== formName(namedForm.form)) {
+    const found = `the solute's name stands for the ${namedForm.form}, the solid form says ${text}`;
     return { field: "solid_form", code: "contradictory-identity", found };
   }
-  const form = listed ?? (stated === "" ? namedForm : undefined);
+  const form = listed ?? namedForm;
   const name = form?.form ?? (stated === "" ? "unspecified" : stated);
   const solvated = form
     ? form.kind === "hydrate" || form.kind === "solvate"
@@ -83,10 +75,11 @@ export function resolveForm(
   const hydrates = substance?.solidForms.filter(
     ({ kind, guest }) => kind === "hydrate" && (guest ?? "water") === solvent.name,
   );
-  const assumptions =
-    name === "unspecified" && hydrates !== undefined && hydrates.length > 0
-      ? [`solid form not stated: value taken as unsolvated ${key}`]
-      : [];
+  const open = name === "unspecified" && hydrates !== undefined && hydrates.length > 0;
+  const assumptions = [
+    ...(open ? [`solid form not stated: value taken as unsolvated ${key}`] : []),
+    ...(taken ? [`solid form "${text}" taken as the listed ${name}`] : []),
+  ];
   return {
     solute: key,
     substance,

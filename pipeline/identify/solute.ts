@@ -1,25 +1,23 @@
-import { parseFormula } from "../properties/formula.ts";
-import { molarMass as massOfFormula } from "../properties/molar-mass.ts";
-import { isRegistryNumber } from "../properties/registry-number.ts";
+import type { ProblemCode } from "../problems/catalogue.ts";
+import { lookAlikes } from "../properties/look-alikes.ts";
+import { unlistedName } from "../properties/name-key.ts";
 import type { ResolvedName, SolidForm, Substance, SubstanceIndex } from "../properties/substances.ts";
 import type { CellFault } from "../records/cells.ts";
-import { type DecimalMark, parseNumber } from "../records/number-text.ts";
+import { configurationOrRotation } from "./configuration-or-rotation.ts";
+import { decideSolute } from "./decide-solute.ts";
+import { type ReadStructure, readIdentifiers, type SoluteCells } from "./solute-cells.ts";
+import { compositionOf } from "./solute-mass.ts";
 
-/** What a row says of its solute; "" where it says nothing. */
-export interface SoluteCells {
-  readonly solute: string;
-  readonly cas: string;
-  readonly inchikey: string;
-  readonly smiles: string;
-  readonly formula: string;
-  readonly molarMass: string;
-  /** Decimal mark of the row's source. */
-  readonly decimal: DecimalMark;
+/** Something worth telling about an identity that refuses nothing. */
+export interface Remark {
+  readonly code: ProblemCode;
+  readonly found: string;
+  readonly mend?: string;
 }
 
 /** A solute that was told apart from all others. */
 export interface KnownSolute {
-  /** Name in the substance tables, else the strongest identifier given. */
+  /** Name in the substance tables, else the strongest identifier given, in its one spelling. */
   readonly key: string;
   readonly substance?: Substance;
   /** Solid form that the name or identifier itself stands for (`blue vitriol`). */
@@ -28,104 +26,72 @@ export interface KnownSolute {
   readonly molarMass: number;
   /** Identifiers as given, for the table of substances. */
   readonly cells: SoluteCells;
-  /** Name and identifiers that stand for different substances: both readings in words. */
-  readonly contradiction?: string;
-}
-
-/** Molar mass from a SMILES; undefined where it cannot be read. */
-export type SmilesMass = (smiles: string) => number | undefined;
-
-/** Relative difference above which two molar masses are not of one substance: a hydrogen in 200 g/mol is 0.5 %. */
-const MASS_TOLERANCE = 0.003;
-
-const sameSkeleton = (a: string, b: string): boolean => a.slice(0, 14) === b.slice(0, 14);
-
-/** A substance listed under a name of its own for one of its forms, as the unsolvated substance and that form. */
-function unsolvated(substance: Substance | undefined, index: SubstanceIndex): ResolvedName | undefined {
-  if (substance?.formOf === undefined) return substance && { substance, form: undefined };
-  const parent = index.byName(substance.formOf.substance);
-  return parent && { substance: parent, form: index.formOf(parent, substance.formOf.form) };
-}
-
-/** The substance an identifier stands for, strongest first: InChIKey, registry number, SMILES, name. */
-function strongest(
-  { inchikey, cas, smiles, solute }: SoluteCells,
-  index: SubstanceIndex,
-): [string, ResolvedName | undefined] {
-  if (inchikey !== "") return [inchikey, unsolvated(index.byInchikey(inchikey), index)];
-  if (cas !== "") return [cas, unsolvated(index.byCas(cas), index)];
-  if (smiles !== "") return [smiles, unsolvated(index.bySmiles(smiles), index)];
-  const named = index.resolve(solute);
-  return [solute, named ?? unsolvated(index.byCas(solute) ?? index.byInchikey(solute), index)];
-}
-
-/** Both readings where the name stands for another substance than the identifiers do. */
-function contradictionOf(cells: SoluteCells, key: string, index: SubstanceIndex): string | undefined {
-  const named = index.resolve(cells.solute)?.substance;
-  if (named === undefined || named.name === key) return undefined;
-  const stereoOnly =
-    cells.inchikey !== "" && named.inchikey !== undefined && sameSkeleton(cells.inchikey, named.inchikey);
-  if (stereoOnly) return undefined;
-  return `the name "${cells.solute}" stands for ${named.name}, the identifier ${cells.inchikey || cells.cas || cells.smiles} for ${key}`;
-}
-
-/** Molar mass from the formula or SMILES of the row, or from its own cell; a fault where they contradict one another. */
-function molarMassOf(cells: SoluteCells, substance: Substance | undefined, smilesMass: SmilesMass): number | CellFault {
-  let known = substance?.molarMass ?? Number.NaN;
-  if (Number.isNaN(known) && cells.formula !== "") {
-    const read = parseFormula(cells.formula);
-    if ("fault" in read) return { field: "formula", code: "invalid-formula", found: read.fault };
-    known = massOfFormula(read).value;
-  }
-  if (Number.isNaN(known) && cells.smiles !== "") known = smilesMass(cells.smiles) ?? Number.NaN;
-  if (cells.molarMass === "") return known;
-  const read = parseNumber(cells.molarMass, cells.decimal);
-  const stated = read.ok ? read.value : Number.NaN;
-  if (!(stated > 0)) {
-    return { field: "molar_mass", code: "not-a-number", found: `"${cells.molarMass}" is not a molar mass in g/mol` };
-  }
-  if (Number.isNaN(known) || Math.abs(stated / known - 1) <= MASS_TOLERANCE)
-    return Number.isNaN(known) ? stated : known;
-  const found = `molar mass ${stated} g/mol, but ${known.toFixed(3)} g/mol follows from the substance or formula`;
-  return { field: "molar_mass", code: "contradictory-molar-mass", found };
+  /** Contradictions with both readings, and what could not be compared. */
+  readonly remarks: readonly Remark[];
 }
 
 /**
- * Resolves a solute. The strongest identifier decides; an unknown solute is keyed by it and stays usable where no
- * property is needed. Nothing is guessed from a near spelling.
+ * Resolves a solute. The strongest identifier decides: InChIKey, registry number, SMILES, name. An unknown solute is keyed
+ * by it and stays usable where no property is needed. Nothing is guessed from a near spelling.
+ *
+ * Two identifiers of one row that stand for two substances are a fault, and so are a name and an identifier that differ
+ * in stereochemistry only: which of them was dissolved is open. A name that stands for an altogether different substance
+ * is remarked, with both readings.
  */
-export function resolveSolute(
-  cells: SoluteCells,
-  index: SubstanceIndex,
-  smilesMass: SmilesMass,
-): KnownSolute | CellFault {
-  if (cells.solute === "" && cells.cas === "" && cells.inchikey === "" && cells.smiles === "") {
-    return { field: "solute", code: "missing-solute", found: "the cell is empty" };
+export function resolveSolute(cells: SoluteCells, index: SubstanceIndex, read: ReadStructure): KnownSolute | CellFault {
+  const named = unlistedName(cells.solute);
+  if (named === "" && cells.cas === "" && cells.inchikey === "" && cells.smiles === "") {
+    const found = cells.solute === "" ? "the cell is empty" : "the cell holds invisible characters only";
+    return { field: "solute", code: "missing-solute", found };
   }
-  if (cells.cas !== "" && !isRegistryNumber(cells.cas)) {
-    return {
-      field: "cas",
-      code: "invalid-registry-number",
-      found: `"${cells.cas}" is not a valid CAS Registry Number`,
-    };
-  }
-  const namesakes = cells.inchikey || cells.cas || cells.smiles ? [] : index.namesakes(cells.solute);
-  if (namesakes.length > 1) {
-    const found = `"${cells.solute}" can be ${namesakes.map(({ name }) => name).join(" or ")}`;
-    return { field: "solute", code: "unresolved-identity", found };
-  }
-  const [given, resolved] = strongest(cells, index);
-  const substance = resolved?.substance;
-  const key = substance?.name ?? given;
-  const molarMass = molarMassOf(cells, substance, smilesMass);
-  if (typeof molarMass !== "number") return molarMass;
-  const contradiction = contradictionOf(cells, key, index);
+  const told = readIdentifiers(cells, index, read);
+  if ("code" in told) return told;
+  const { identifiers, name, structureFault } = told;
+  const byName = identifiers.length > 0 ? undefined : nameAlone(name, index);
+  if (byName !== undefined && "code" in byName) return byName;
+  const decided = decideSolute(identifiers, name, index, read);
+  if ("code" in decided) return decided;
+  const { base, key } = decided;
+  const composition = compositionOf(cells, base?.substance, identifiers, index);
+  if ("code" in composition) return composition;
+  const form = formOf(base, composition.form);
+  if (form !== undefined && "code" in form) return form;
+  const remarks = [
+    ...lookAlikeRemarks(cells.solute),
+    ...(byName === undefined ? [] : [byName.remark]),
+    ...decided.remarks,
+    ...[structureFault, composition.unread].flatMap((found) =>
+      found === undefined ? [] : [{ code: "identifier-not-checked" as const, found }],
+    ),
+  ];
   return {
-    key,
-    molarMass,
-    cells,
-    ...(substance === undefined ? {} : { substance }),
-    ...(resolved?.form === undefined ? {} : { namedForm: resolved.form }),
-    ...(contradiction === undefined ? {} : { contradiction }),
+    ...{ key, molarMass: composition.molarMass, cells, remarks },
+    ...(base === undefined ? {} : { substance: base.substance }),
+    ...(form === undefined ? {} : { namedForm: form }),
   };
+}
+
+/** What speaks against a name that stands alone: two substances that bear it, or a prefix with two meanings. */
+function nameAlone(name: string, index: SubstanceIndex): { readonly remark: Remark } | CellFault | undefined {
+  const namesakes = index.namesakes(name).map((substance) => substance.name);
+  if (namesakes.length > 1) {
+    return { field: "solute", code: "unresolved-identity", found: `"${name}" can be ${namesakes.join(" or ")}` };
+  }
+  return configurationOrRotation(name, index);
+}
+
+/** The form that the identifiers or the name stand for, and the one that the formula does. */
+function formOf(base: ResolvedName | undefined, ofFormula: SolidForm | undefined): SolidForm | CellFault | undefined {
+  if (base?.form === undefined || ofFormula === undefined || base.form.form === ofFormula.form) {
+    return base?.form ?? ofFormula;
+  }
+  const found = `the solute stands for its ${base.form.form}, the formula for its ${ofFormula.form}`;
+  return { field: "formula", code: "contradictory-identity", found };
+}
+
+/** A remark on a name with letters of another script that look like Latin ones. */
+export function lookAlikeRemarks(name: string): Remark[] {
+  const letters = lookAlikes(name);
+  if (letters.length === 0) return [];
+  return [{ code: "look-alike-letters", found: `"${name}" holds ${letters.join(", ")}` }];
 }

@@ -1,24 +1,32 @@
 import type { Substance, SubstanceIndex } from "../properties/substances.ts";
-import { type CellFault, cellGetter, readingProblem } from "../records/cells.ts";
+import { type CellFault, cellGetter, readingProblem, unitGetter } from "../records/cells.ts";
 import type { Identified, IdentifiedSource } from "../records/identified.ts";
 import type { Reading, SourceTable } from "../records/readings.ts";
 import type { Identity } from "../records/systems.ts";
-import { IDENTITY_FIELDS, type ResolvedIdentity, resolveIdentity } from "./identity.ts";
-import type { KnownSolute, SmilesMass } from "./solute.ts";
+import { countsSolute, IDENTITY_FIELDS, type ResolvedIdentity, resolveIdentity } from "./identity.ts";
+import { type RegisteredSolute, rememberSolute } from "./registered-solutes.ts";
+import type { RowValue } from "./row-value.ts";
+import { lookAlikeRemarks, type Remark } from "./solute.ts";
+import type { ReadStructure } from "./solute-cells.ts";
 
 /** Identities met so far over all sources of an edition, each once, in order of first use. */
 export interface IdentityRegister {
   readonly identities: Identity[];
-  readonly solutes: Map<string, KnownSolute>;
+  readonly solutes: Map<string, RegisteredSolute>;
   readonly solvents: Map<string, Substance>;
   readonly positions: Map<string, number>;
-  /** Names and identifiers that stand for different substances, with the place of first use. */
-  readonly contradictions: { readonly source: string; readonly line: number; readonly text: string }[];
+  /** What is worth telling about the identity of a row and refuses nothing, with its place. */
+  readonly remarks: (Remark & { readonly source: string; readonly line: number })[];
+  /** Exact compositions of the mixtures met, by position of the identity: mass fractions by name. */
+  readonly compositions: Map<number, Map<string, ReadonlyMap<string, number>>>;
 }
 
 /** An empty register. */
 export function createIdentityRegister(): IdentityRegister {
-  return { identities: [], solutes: new Map(), solvents: new Map(), positions: new Map(), contradictions: [] };
+  return {
+    ...{ identities: [], solutes: new Map(), solvents: new Map(), positions: new Map() },
+    ...{ remarks: [], compositions: new Map() },
+  };
 }
 
 /** Position of an identity in the register, added on first use. */
@@ -37,17 +45,26 @@ function positionOf(register: IdentityRegister, identity: Identity): number {
 }
 
 /** Registers what was resolved, and gives the record that normalising works with. */
-export function register(all: IdentityRegister, { solute, form, solvent, identity }: ResolvedIdentity): Identified {
-  if (!all.solutes.has(identity.solute)) all.solutes.set(identity.solute, { ...solute, key: identity.solute });
-  all.solvents.set(solvent.name, solvent);
+export function register(
+  all: IdentityRegister,
+  { solute, form, solvent, identity, assumptions }: ResolvedIdentity,
+): Identified {
+  rememberSolute(all.solutes, solute);
+  for (const { substance } of solvent.parts) all.solvents.set(substance.name, substance);
+  const index = positionOf(all, identity);
+  if (solvent.parts.length > 1) {
+    const exact = new Map(solvent.parts.map(({ substance, massFraction }) => [substance.name, massFraction]));
+    const known = all.compositions.get(index) ?? new Map();
+    all.compositions.set(index, known.set(JSON.stringify([...exact]), exact));
+  }
   return {
-    index: positionOf(all, identity),
+    index,
     solute: form.substance,
     solvent,
     form: form.form,
     crystalMassFactor: form.crystalMassFactor,
     solvated: form.solvated,
-    assumptions: form.assumptions,
+    assumptions,
   };
 }
 
@@ -58,7 +75,7 @@ export function register(all: IdentityRegister, { solute, form, solvent, identit
 export function identifySource(
   source: SourceTable,
   index: SubstanceIndex,
-  smilesMass: SmilesMass,
+  structure: ReadStructure,
   all: IdentityRegister,
 ): IdentifiedSource {
   const get = Object.fromEntries(IDENTITY_FIELDS.map((field) => [field, cellGetter(source.places, field)]));
@@ -66,12 +83,22 @@ export function identifySource(
   const varying = IDENTITY_FIELDS.filter(
     (field) => source.places[field]?.kind === "column" || source.readings.some((reading) => reading.own?.[field]),
   ).map((field) => get[field] as (reading: Reading) => string);
-  const resolve = (reading: Reading): Identified | CellFault => {
-    const found = resolveIdentity((field) => text(field, reading), index, smilesMass, source.decimal);
+  const unit = unitGetter(source.places, "solubility");
+  const soluteBasis = cellGetter(source.places, "solute_basis");
+  const rowValue = (reading: Reading): RowValue => ({
+    text: reading.cells[reading.valueIndex] ?? "",
+    unit: unit(reading),
+    soluteBasis: soluteBasis(reading),
+  });
+  /** Keys of rows whose solvent follows from their own value: it becomes a part of the key. */
+  const ofValue = new Set<string>();
+  const resolve = (reading: Reading, key: string): Identified | CellFault => {
+    const found = resolveIdentity((field) => text(field, reading), index, structure, source.decimal, rowValue(reading));
+    if ("code" in found ? countsSolute(text("composition_basis", reading)) : found.ofValue) ofValue.add(key);
     if ("code" in found) return found;
-    const { contradiction } = found.solute;
-    if (contradiction !== undefined) {
-      all.contradictions.push({ source: source.name, line: reading.line, text: contradiction });
+    const others = ["solvent", "solid_form"].flatMap((field) => lookAlikeRemarks(text(field, reading)));
+    for (const remark of [...found.solute.remarks, ...others]) {
+      all.remarks.push({ ...remark, source: source.name, line: reading.line });
     }
     return register(all, found);
   };
@@ -81,10 +108,11 @@ export function identifySource(
   for (const reading of source.readings) {
     let key = "";
     for (const cell of varying) key += `${cell(reading)}\u0000`;
-    let found = resolved.get(key);
+    const whole = ofValue.has(key) ? key + JSON.stringify(rowValue(reading)) : key;
+    let found = resolved.get(whole);
     if (found === undefined) {
-      found = resolve(reading);
-      resolved.set(key, found);
+      found = resolve(reading, key);
+      resolved.set(ofValue.has(key) ? key + JSON.stringify(rowValue(reading)) : key, found);
     }
     if ("code" in found) refused.push(readingProblem(source, reading, found));
     else {

@@ -1,9 +1,9 @@
 import { type Problem, problem } from "../problems/catalogue.ts";
-import { loadSmilesReader } from "../properties/smiles-formula.ts";
+import { loadStructureReader } from "../properties/smiles-structure.ts";
 import { substanceIndex } from "../properties/substance-index.ts";
 import type { SubstanceIndex } from "../properties/substances.ts";
 import type { SourceTable, TableRow } from "../records/readings.ts";
-import type { SmilesMass } from "./solute.ts";
+import type { ReadStructure } from "./solute-cells.ts";
 
 /** Tables of substances as they were read: the program's own, or a group's. */
 export interface SubstanceTables {
@@ -39,12 +39,7 @@ export function indexSubstances(
   return { index, notices };
 }
 
-/** Molar masses from SMILES; the reader behind it is loaded only where a source has structures. */
-export async function massFromSmiles(sources: readonly SourceTable[]): Promise<SmilesMass> {
-  if (!sources.some(({ places }) => places.smiles !== undefined)) return () => undefined;
-  const read = await loadSmilesReader();
-  return (smiles) => {
-    const found = read(smiles);
-    return found.ok ? found.molarMass.value : undefined;
-  };
+/** A reader of SMILES; the library behind it is loaded only where a source has structures. */
+export async function structureReader(sources: readonly SourceTable[]): Promise<ReadStructure> {
+  return sources.some(({ places }) => places.smiles !== undefined) ? loadStructureReader() : () => undefined;
 }

@@ -4,7 +4,8 @@ import type { Identified, IdentifiedSource } from "../records/identified.ts";
 import { createMeasurementTable, type MeasurementTable } from "../records/measurements.ts";
 import type { Settings } from "../records/settings.ts";
 import type { Identity, System } from "../records/systems.ts";
-import { type LiquorModel, liquorModel } from "./liquor.ts";
+import type { LiquorModel } from "./liquor.ts";
+import { createLiquors } from "./liquors.ts";
 import { collectMeasuredDensities } from "./measured-densities.ts";
 import { normaliseSource } from "./source.ts";
 import { systemLiquor } from "./system-liquor.ts";
@@ -19,6 +20,8 @@ export interface Normalised {
   readonly modelOf: (who: Identified) => LiquorModel;
   /** An identified reading of each identity, by position. */
   readonly whoOf: readonly (Identified | undefined)[];
+  /** The identified reading behind a row of a table: in a mixed solvent that of the row's own exact composition. */
+  readonly whoOfRow: (table: MeasurementTable, row: number) => Identified | undefined;
 }
 
 /**
@@ -34,19 +37,9 @@ export function normaliseEdition(
 ): Normalised {
   const capacity = sources.reduce((sum, { readings }) => sum + readings.length, 0);
   const table = createMeasurementTable(capacity);
-  const models = new Map<number, LiquorModel>();
-  const whoOf: (Identified | undefined)[] = [];
-  const modelOf = (who: Identified): LiquorModel => {
-    let model = models.get(who.index);
-    if (model === undefined) {
-      model = liquorModel(who, identities[who.index] as Identity);
-      models.set(who.index, model);
-      whoOf[who.index] = who;
-    }
-    return model;
-  };
+  const { modelOf, whoOf, whoOfRow } = createLiquors(identities, settings);
   const context = { identities, liquorOf: modelOf, settings };
-  for (const source of sources) collectMeasuredDensities(source, context);
+  for (const source of sources) collectMeasuredDensities(source, context, whoOfRow);
   const refused = sources.flatMap((source, i) => normaliseSource(source, sourcePositions[i] as number, table, context));
   const position = new Map(identities.map((identity, i) => [identity, i]));
   return {
@@ -54,6 +47,7 @@ export function normaliseEdition(
     refused,
     modelOf,
     whoOf,
+    whoOfRow,
     liquorOf: ({ identity }) => {
       const who = whoOf[position.get(identity) as number] as Identified;
       return systemLiquor(who, identity, modelOf(who));

@@ -6,12 +6,17 @@ import {
   type SolutionDensity,
 } from "../bases/solution-density.ts";
 import { liquidDensity } from "../properties/liquid-density.ts";
-import { ATOMIC_WEIGHTS_REFERENCE } from "../properties/molar-mass.ts";
 import { solutionDensityModel } from "../properties/solution-density-model.ts";
 import type { Substance } from "../properties/substances.ts";
 import type { Identified } from "../records/identified.ts";
 import type { Identity } from "../records/systems.ts";
 import { densityFromNearby, type MeasuredSolution } from "./density-nearby.ts";
+import {
+  type CompositionSettings,
+  massReference,
+  type SolventProperties,
+  solventProperties,
+} from "./solvent-properties.ts";
 
 /** Relative uncertainty of the density of a solution of an electrolyte without coefficients (common practice). */
 const ELECTROLYTE_U = 0.04;
@@ -39,14 +44,21 @@ export interface LiquorModel {
   readonly massConcentration: (massRatio: number) => number;
   /** Which density is not known under the conditions set, in words; undefined where none is missing. */
   readonly missingDensity: () => string | undefined;
+  /** Exact mass fractions of the first and second component of the solvent and the standard uncertainty of the first. */
+  readonly fractions: readonly [first: number, second: number, firstU: number];
+  /** What is to be said on a row about volumes of a mixed solvent; "" for a pure one. */
+  readonly volumeRemark: string;
 }
 
 /**
  * Apparent density of the dissolved solute at a temperature: that of the liquid where it is one there, else from the
  * density of the solid, which is computed once.
  */
-function apparentDensityModel(solute: Substance | undefined, solvent: Substance): (temperatureK: number) => Quantity {
-  const ofSolid = apparentDensityFromSolid(solute?.solidDensity, solvent.name === "water");
+function apparentDensityModel(
+  solute: Substance | undefined,
+  { mainlyWater }: SolventProperties,
+): (temperatureK: number) => Quantity {
+  const ofSolid = apparentDensityFromSolid(solute?.solidDensity, mainlyWater);
   if (solute === undefined || solute.liquidDensities.length === 0) return () => ofSolid;
   return (temperatureK) => {
     const liquid = temperatureK >= (solute.meltingPointK ?? 0) ? liquidDensity(solute, temperatureK) : undefined;
@@ -57,26 +69,22 @@ function apparentDensityModel(solute: Substance | undefined, solvent: Substance)
 /** Density model of the solution at a temperature: published, else additive volumes; undefined without a solvent density. */
 function solutionDensity(
   solute: Substance | undefined,
-  solvent: Substance,
+  pure: Substance | undefined,
+  { densityAt, holdsWater }: SolventProperties,
   apparent: (temperatureK: number) => Quantity,
   temperatureK: number,
 ): SolutionDensity | undefined {
-  const published = solute && solutionDensityModel(solute, solvent, temperatureK);
+  const published = solute && pure && solutionDensityModel(solute, pure, temperatureK);
   if (published !== undefined) return published;
-  const pure = liquidDensity(solvent, temperatureK);
-  if (pure === undefined) return undefined;
-  const electrolyte = (solute?.electrolyte ?? false) && solvent.name === "water";
+  const solventDensity = densityAt(temperatureK);
+  if (solventDensity === undefined) return undefined;
+  const electrolyte = (solute?.electrolyte ?? false) && holdsWater;
   return {
     kind: "additive volumes",
     apparentSoluteDensity: apparent(temperatureK),
-    solventDensity: pure,
+    solventDensity,
     ...(electrolyte ? { modelRelativeUncertainty: ELECTROLYTE_U } : {}),
   };
-}
-
-/** Where a molar mass comes from: the formula where there is one, else what the tables or the row state. */
-function massReference(substance: Substance | undefined): string {
-  return substance?.formula === undefined ? "as stated" : ATOMIC_WEIGHTS_REFERENCE;
 }
 
 /** True for a form in which the solute has a counter-ion or co-former: nothing of it joins the solvent. */
@@ -96,15 +104,16 @@ const KEPT = 4096;
  * The liquor of one identity. Densities are evaluated once per distinct temperature; nothing is extrapolated beyond the
  * range of a correlation.
  */
-export function liquorModel(who: Identified, identity: Identity): LiquorModel {
+export function liquorModel(who: Identified, identity: Identity, settings: CompositionSettings): LiquorModel {
   const { solute, solvent, form } = who;
-  const apparent = apparentDensityModel(solute, solvent);
+  const properties = solventProperties(solvent, settings);
+  const [first, second] = solvent.parts;
+  const pure = second === undefined ? first?.substance : undefined;
+  const apparent = apparentDensityModel(solute, properties);
   const known = new Map<number, SolutionDensity | undefined>();
   const measured: MeasuredSolution[] = [];
   const quantity = (value: number, relative: number, reference?: string): Quantity | undefined =>
     Number.isNaN(value) ? undefined : { value, standardUncertainty: relative * value, reference };
-  const solventAt20 = liquidDensity(solvent, DISPENSED_K);
-  const solventMass = solvent.molarMass ?? identity.solventMolarMass;
   const needs: { -readonly [K in keyof Needs]: Needs[K] } = {
     soluteMolarMass: quantity(
       identity.soluteMolarMass,
@@ -112,14 +121,14 @@ export function liquorModel(who: Identified, identity: Identity): LiquorModel {
       massReference(solute),
     ),
     crystalMolarMass: quantity(crystalMass(who, identity.soluteMolarMass), 0, form?.reference),
-    solventMolarMass: quantity(solventMass, (solvent.molarMassUncertainty ?? 0) / solventMass, massReference(solvent)),
-    solventDensityAt20C: solventAt20,
+    solventMolarMass: properties.molarMass,
+    solventDensityAt20C: properties.addedDensityAt(DISPENSED_K),
   };
   let volumeAtK = Number.NaN;
   const modelAt = (temperatureK: number) => {
     const before = known.get(temperatureK);
     if (before !== undefined || known.has(temperatureK)) return before;
-    const model = solutionDensity(solute, solvent, apparent, temperatureK);
+    const model = solutionDensity(solute, pure, properties, apparent, temperatureK);
     if (known.size < KEPT) known.set(temperatureK, model);
     return model;
   };
@@ -130,7 +139,7 @@ export function liquorModel(who: Identified, identity: Identity): LiquorModel {
       volumeAtK = Number.isNaN(volumeTemperatureK) ? temperatureK : volumeTemperatureK;
       needs.solventDensityAtVolumeTemperature = Number.isNaN(volumeTemperatureK)
         ? undefined
-        : liquidDensity(solvent, volumeTemperatureK);
+        : properties.addedDensityAt(volumeTemperatureK);
       needs.solutionDensity = Number.isNaN(measuredDensity)
         ? modelAt(volumeAtK)
         : { kind: "measured", density: quantity(measuredDensity, MEASURED_DENSITY_U, "measured") as Quantity };
@@ -147,5 +156,16 @@ export function liquorModel(who: Identified, identity: Identity): LiquorModel {
       needs.solutionDensity === undefined
         ? `no density of ${solvent.name} is known at ${(volumeAtK - 273.15).toFixed(1)} °C`
         : undefined,
+    fractions:
+      second === undefined
+        ? [Number.NaN, Number.NaN, properties.fractionU]
+        : [first?.massFraction ?? Number.NaN, second.massFraction, properties.fractionU],
+    volumeRemark: second === undefined ? "" : volumeRemark(needs.solventDensityAt20C),
   };
+}
+
+/** How volumes of a mixed solvent are taken, with the origin of its density. */
+function volumeRemark(density: Quantity | undefined): string {
+  const of = density?.reference === undefined ? "" : ` (${density.reference})`;
+  return `density of the mixed solvent as one liquid${of}; a volume of solvent is that of the mixture, dispensed at 20 °C unless stated`;
 }

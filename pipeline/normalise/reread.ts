@@ -5,6 +5,7 @@ import { type MeasurementTable, textOf } from "../records/measurements.ts";
 import type { Change, RereadRow } from "../records/reread.ts";
 import type { Identity, System } from "../records/systems.ts";
 import type { Normalised } from "./edition.ts";
+import type { LiquorModel } from "./liquor.ts";
 import { createRowBinder } from "./row-binder.ts";
 import type { UnitContext } from "./unit-context.ts";
 
@@ -19,9 +20,10 @@ export interface Rereader {
   readonly inReportedUnit: (row: number, lnValue: number) => number | undefined;
 }
 
-/** r [g/g] of ln x or ln r. */
-function massRatioOf(lnValue: number, { soluteMolarMass, solventMolarMass }: Identity): number {
+/** r [g/g] of ln x or ln r; the molar mass of a mixed solvent is that of the row's exact composition. */
+function massRatioOf(lnValue: number, { soluteMolarMass }: Identity, { needs }: LiquorModel): number {
   const value = Math.exp(lnValue);
+  const solventMolarMass = needs.solventMolarMass?.value ?? Number.NaN;
   return Number.isNaN(soluteMolarMass) ? value : (value * soluteMolarMass) / ((1 - value) * solventMolarMass);
 }
 
@@ -30,10 +32,10 @@ export function createRereader(
   table: MeasurementTable,
   identities: readonly Identity[],
   systems: readonly System[],
-  normalised: Pick<Normalised, "whoOf" | "modelOf">,
+  normalised: Pick<Normalised, "whoOf" | "whoOfRow" | "modelOf">,
 ): Rereader {
   const position = new Map(identities.map((identity, i) => [identity, i]));
-  const { bind, unitOf, basisOf, setConditions } = createRowBinder(table, normalised);
+  const { bind, whoOfRow, unitOf, basisOf, setConditions } = createRowBinder(table, normalised);
   const isLog = (unit: Unit) => unit.scale.kind === "ln" || unit.scale.kind === "log10";
 
   /** Reported number times a factor, in a unit that may be a logarithm. */
@@ -44,10 +46,10 @@ export function createRereader(
 
   const inReportedUnit = (row: number, lnValue: number): number | undefined => {
     const identity = table.identity[row] as number;
-    const context = bind(identity, unitOf(row), basisOf(row));
+    const context = bind(whoOfRow(row), unitOf(row), basisOf(row));
     if (context === undefined) return undefined;
     setConditions(context.liquor, row, table.temperatureK[row] as number);
-    const r = massRatioOf(lnValue, identities[identity] as Identity);
+    const r = massRatioOf(lnValue, identities[identity] as Identity, context.liquor);
     context.liquor.takeNearby(r);
     const value = context.converter.fromHub(r);
     return Number.isFinite(value) ? value : undefined;
@@ -70,7 +72,8 @@ export function createRereader(
     const identity = table.identity[row] as number;
     const value = table.reportedValue[row] as number;
     const temperatureK = table.temperatureK[row] as number;
-    const own = bind(identity, unitOf(row), basisOf(row));
+    const who = whoOfRow(row);
+    const own = bind(who, unitOf(row), basisOf(row));
     if (own === undefined || Number.isNaN(value)) return undefined;
     switch (change.kind) {
       case "factor":
@@ -82,17 +85,17 @@ export function createRereader(
       case "temperature scale":
         return temperatureScale(row, identity, own, value, change.scale);
       case "unit": {
-        const other = bind(identity, change.unit, basisOf(row));
+        const other = bind(who, change.unit, basisOf(row));
         if (other === undefined || other.unit.canonical === own.unit.canonical) return undefined;
         return readAgain(row, identity, other, value, temperatureK);
       }
       case "solute basis": {
-        const other = change.basis === own.soluteBasis ? undefined : bind(identity, unitOf(row), change.basis);
+        const other = change.basis === own.soluteBasis ? undefined : bind(who, unitOf(row), change.basis);
         return other && readAgain(row, identity, other, value, temperatureK);
       }
       case "solvent": {
         const elsewhere = position.get(systems[change.system]?.identity as Identity) as number;
-        const other = elsewhere === identity ? undefined : bind(elsewhere, unitOf(row), basisOf(row));
+        const other = elsewhere === identity ? undefined : bind(normalised.whoOf[elsewhere], unitOf(row), basisOf(row));
         return other && readAgain(row, elsewhere, other, value, temperatureK);
       }
     }

@@ -1,4 +1,5 @@
 import type { SoluteBasis } from "../bases/hydrate.ts";
+import type { Identified } from "../records/identified.ts";
 import { type MeasurementTable, textOf } from "../records/measurements.ts";
 import type { Normalised } from "./edition.ts";
 import type { LiquorModel } from "./liquor.ts";
@@ -6,8 +7,10 @@ import { bindUnit, readUnit, type UnitContext } from "./unit-context.ts";
 
 /** What is needed to convert a row of the table again. */
 export interface RowBinder {
-  /** A unit bound to the liquor of an identity, kept once made; undefined where a property is missing. */
-  readonly bind: (identity: number, unitText: string, basis: SoluteBasis) => UnitContext | undefined;
+  /** A unit bound to the liquor of a reading, kept once made; undefined where a property is missing. */
+  readonly bind: (who: Identified | undefined, unitText: string, basis: SoluteBasis) => UnitContext | undefined;
+  /** The identified reading of a row, with its exact composition. */
+  readonly whoOfRow: (row: number) => Identified | undefined;
   readonly unitOf: (row: number) => string;
   readonly basisOf: (row: number) => SoluteBasis;
   /** Sets the densities of a liquor to the row's own conditions at a temperature, K. */
@@ -17,20 +20,24 @@ export interface RowBinder {
 /** Makes the binder of one table. */
 export function createRowBinder(
   table: MeasurementTable,
-  { whoOf, modelOf }: Pick<Normalised, "whoOf" | "modelOf">,
+  { whoOfRow, modelOf }: Pick<Normalised, "whoOfRow" | "modelOf">,
 ): RowBinder {
-  const bound = new Map<string, UnitContext | undefined>();
+  const bound = new Map<LiquorModel, Map<string, UnitContext | undefined>>();
   return {
-    bind: (identity, unitText, basis) => {
-      const key = `${identity}\u0000${unitText}\u0000${basis}`;
-      if (bound.has(key)) return bound.get(key);
-      const who = whoOf[identity];
+    bind: (who, unitText, basis) => {
+      if (who === undefined) return undefined;
+      const liquor = modelOf(who);
+      const ofLiquor = bound.get(liquor) ?? new Map<string, UnitContext | undefined>();
+      bound.set(liquor, ofLiquor);
+      const key = `${unitText}\u0000${basis}`;
+      if (ofLiquor.has(key)) return ofLiquor.get(key);
       const unit = readUnit(unitText);
-      const context = who === undefined || "code" in unit ? undefined : bindUnit(unit, basis, modelOf(who));
+      const context = "code" in unit ? undefined : bindUnit(unit, basis, liquor);
       const usable = context === undefined || "code" in context ? undefined : context;
-      bound.set(key, usable);
+      ofLiquor.set(key, usable);
       return usable;
     },
+    whoOfRow: (row) => whoOfRow(table, row),
     unitOf: (row) => textOf(table, table.reportedUnit[row] as number),
     basisOf: (row) => textOf(table, table.soluteBasis[row] as number) as SoluteBasis,
     setConditions: (liquor, row, temperatureK) =>

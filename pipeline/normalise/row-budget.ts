@@ -24,13 +24,13 @@ export type RowBudgetOf = (row: number, slopePerK?: number) => readonly BudgetPa
  */
 export function createRowBudget(
   table: MeasurementTable,
-  normalised: Pick<Normalised, "whoOf" | "modelOf">,
+  normalised: Pick<Normalised, "whoOfRow" | "modelOf">,
 ): RowBudgetOf {
-  const { bind, unitOf, basisOf, setConditions } = createRowBinder(table, normalised);
+  const { bind, whoOfRow, unitOf, basisOf, setConditions } = createRowBinder(table, normalised);
 
   return (row, slopePerK = Number.NaN) => {
     const value = table.reportedValue[row] as number;
-    const context = Number.isNaN(value) ? undefined : bind(table.identity[row] as number, unitOf(row), basisOf(row));
+    const context = Number.isNaN(value) ? undefined : bind(whoOfRow(row), unitOf(row), basisOf(row));
     const r = table.massRatio[row] as number;
     if (context === undefined || !(r > 0)) return [];
     const { unit, liquor, converter, soluteBasis } = context;

@@ -7,7 +7,7 @@ import type { UncertaintyKind } from "./value-uncertainty.ts";
 const FIELDS = [
   ...["temperature", "solute_basis", "uncertainty", "coverage_factor", "n"],
   ...["temperature_uncertainty", "temperature_probe", "solution_density", "volume_temperature"],
-  ...["heating_rate_K_per_min", "excess_solid", "method", "reference", "doi"],
+  ...["heating_rate_K_per_min", "excess_solid", "method", "replicate", "reference", "doi"],
   ...["solid_form", "solid_check", "solid_after"],
 ] as const;
 type Field = (typeof FIELDS)[number];

@@ -1,5 +1,5 @@
 import { moleFractionAt } from "../bases/hub-values.ts";
-import { isOpenAt } from "../bases/unit.ts";
+import { isOpenAt, type Unit } from "../bases/unit.ts";
 import type { Problem } from "../problems/catalogue.ts";
 import { type CellFault, readingProblem } from "../records/cells.ts";
 import type { Identified, IdentifiedSource } from "../records/identified.ts";
@@ -21,6 +21,8 @@ import { impossibleValue } from "./value-checks.ts";
 import { rowUncertainty } from "./value-uncertainty.ts";
 
 const TERM_UNIT = "pharmacopoeia term";
+/** Unit of the limits of a term, for tables and messages. */
+const TERM_LIMITS_UNIT = "mL solvent/g";
 
 /** What normalising a source needs besides its rows. */
 export interface NormaliseContext {
@@ -44,6 +46,12 @@ interface Row {
 }
 
 const isFault = (value: object): value is CellFault => "code" in value;
+
+/** True for a descriptive term, whose range is in mL solvent per g whatever the unit of the column. */
+const isTerm = (reported: ReportedValue): boolean => reported.kind === "range" && reported.term;
+
+/** True for a unit whose number falls as the solubility grows: mL solvent per g, -ln x. */
+const isDescending = ({ scale }: Unit): boolean => scale.kind === "reciprocal" || scale.sign < 0;
 
 /**
  * Normalises one source: every identified reading becomes a row of the table on the common basis, or is refused with its
@@ -84,7 +92,7 @@ export function normaliseSource(
     const density = readDensity(cells, reading);
     if (typeof density !== "number") return density;
     liquor.setConditions(temperature.kelvin, volume, density);
-    const unitText = reported.kind === "range" && reported.term ? TERM_UNIT : cells.unitOf.solubility(reading);
+    const unitText = isTerm(reported) ? TERM_UNIT : cells.unitOf.solubility(reading);
     const context = contextOf(who, unitText, reading, text);
     return isFault(context)
       ? context
@@ -122,7 +130,12 @@ export function normaliseSource(
     }
     const r = context.converter.toHub(reported.value);
     if (!(r > 0)) return noRatio(row);
-    if (cells.text.excess_solid(row.reading) === "no") return writeRange(row, reported.value, Number.NaN);
+    if (cells.text.excess_solid(row.reading) === "no") {
+      // At least this much dissolves: of mL solvent per g, or of -ln x, that is at most the number.
+      return isDescending(context.unit)
+        ? writeRange(row, Number.NaN, reported.value)
+        : writeRange(row, reported.value, Number.NaN);
+    }
     return context.liquor.takeNearby(r) ? writeNearby(row, reported.value) : writePoint(row, reported.value, r);
   }
 
@@ -179,13 +192,14 @@ export function normaliseSource(
   /** An interval: limits in the reported unit, and as mass ratios in ascending order. */
   function writeRange(row: Row, low: number, high: number): CellFault | undefined {
     const { converter, unit } = row.context;
+    const descending = isDescending(unit);
     for (const limit of [low, high]) {
       const impossible = Number.isNaN(limit) ? undefined : impossibleValue(limit, unit, String(limit));
-      if (impossible !== undefined && !(limit === 0)) return impossible;
+      // A range may start at nothing (0-0.5); none ends there.
+      if (impossible !== undefined && !(limit === 0 && high > 0 && !descending)) return impossible;
     }
     const [a, b] = [converter.toHub(low), converter.toHub(high)];
     if (Number.isNaN(a) && Number.isNaN(b)) return noRatio(row);
-    const descending = unit.scale.kind === "reciprocal" || unit.scale.sign < 0;
     const at = startRow(row);
     table.state[at] = RowState.interval;
     table.reportedText[at] = codeOf(table.texts, row.text);
@@ -217,20 +231,34 @@ export function normaliseSource(
   }
 
   /** Appends a row with what every row has; returns its number. */
-  function startRow({ reading, who, temperature, method, context, volumeTemperatureK, solutionDensity }: Row): number {
+  function startRow({
+    reading,
+    reported,
+    who,
+    temperature,
+    method,
+    context,
+    volumeTemperatureK,
+    solutionDensity,
+  }: Row): number {
     const at = table.count++;
     table.source[at] = sourceIndex;
     table.line[at] = reading.line;
     table.column[at] = columnCode[reading.valueIndex] ?? 0;
     table.identity[at] = who.index;
+    const { fractions } = context.liquor;
+    table.firstFraction[at] = fractions[0];
+    table.secondFraction[at] = fractions[1];
+    table.fractionU[at] = fractions[2];
     table.temperatureK[at] = temperature.kelvin;
     table.temperatureU[at] = temperature.u;
     table.temperatureUnit[at] = codeOf(table.texts, cells.unitOf.temperature(reading));
-    table.reportedUnit[at] = codeOf(table.texts, unitShown(reading));
+    table.reportedUnit[at] = codeOf(table.texts, isTerm(reported) ? TERM_LIMITS_UNIT : unitShown(reading));
     table.soluteBasis[at] = codeOf(table.texts, context.soluteBasis);
     table.volumeTemperatureK[at] = volumeTemperatureK;
     table.solutionDensity[at] = solutionDensity;
     table.method[at] = codeOf(table.texts, method);
+    table.replicate[at] = codeOf(table.texts, cells.text.replicate(reading));
     table.reference[at] = codeOf(table.texts, cells.text.reference(reading) || (source.card.reference ?? ""));
     table.doi[at] = codeOf(table.texts, cells.text.doi(reading) || (source.card.doi ?? ""));
     table.carried[at] = codeOf(table.texts, carriedText(reading));

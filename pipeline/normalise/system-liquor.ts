@@ -1,7 +1,7 @@
 import { massConcentration } from "../bases/solution-density.ts";
 import type { SolidForm } from "../properties/substances.ts";
 import type { Liquor } from "../records/edition.ts";
-import type { Identified } from "../records/identified.ts";
+import type { Identified, SolventPart } from "../records/identified.ts";
 import type { Identity } from "../records/systems.ts";
 import type { LiquorModel } from "./liquor.ts";
 
@@ -19,12 +19,31 @@ function stableSolvate(forms: readonly SolidForm[], temperatureK: number): Solid
   return first !== undefined && second !== undefined && reach(first) === reach(second) ? "open" : first;
 }
 
+/** Properties of the azeotrope of a solvent with water. */
+const AZEOTROPE = "azeotrope_with_water_boiling_point";
+
+/** Boiling point where boiling can begin, K: that of the lowest boiler, or of a listed azeotrope with water. */
+function lowestBoilingPoint(parts: readonly SolventPart[]): number {
+  const water = parts.some(({ substance }) => substance.name === "water");
+  const points = parts.flatMap(({ substance }) => [
+    substance.boilingPointK ?? Number.NaN,
+    (water && substance.properties.get(AZEOTROPE)?.value) || Number.POSITIVE_INFINITY,
+  ]);
+  return Math.min(...points);
+}
+
+/** Lowest of the freezing points of the components, K: a mixture freezes below its own, how far is not known. */
+function lowestFreezingPoint(parts: readonly SolventPart[]): number {
+  return Math.min(...parts.map(({ substance }) => substance.meltingPointK ?? Number.NaN));
+}
+
 /** What the writers need to know of a system's liquor, with every density evaluated inside its range only. */
 export function systemLiquor(who: Identified, identity: Identity, model: LiquorModel): Liquor {
   const { solute, solvent, form, crystalMassFactor } = who;
   const unspecified = identity.solidForm === "unspecified";
   const solvates = (solute?.solidForms ?? []).filter(
-    ({ kind, guest }) => (kind === "hydrate" || kind === "solvate") && guest === solvent.name,
+    ({ kind, guest }) =>
+      (kind === "hydrate" || kind === "solvate") && identity.solventComponents.some(({ name }) => name === guest),
   );
   const polymorphs = (solute?.solidForms ?? []).filter(({ kind }) => kind === "polymorph");
   const factor = ({ molarMass }: SolidForm) => (molarMass ?? Number.NaN) / identity.soluteMolarMass;
@@ -36,8 +55,11 @@ export function systemLiquor(who: Identified, identity: Identity, model: LiquorM
       return density === undefined ? Number.NaN : massConcentration(density, massRatio);
     },
     solventDensity20C: model.needs.solventDensityAt20C?.value ?? Number.NaN,
-    solventBoilingPointK: solvent.boilingPointK ?? Number.NaN,
-    solventFreezingPointK: solvent.meltingPointK ?? Number.NaN,
+    solventBoilingPointK: lowestBoilingPoint(solvent.parts),
+    solventHighestBoilingPointK: Math.max(
+      ...solvent.parts.map(({ substance }) => substance.boilingPointK ?? Number.NaN),
+    ),
+    solventFreezingPointK: lowestFreezingPoint(solvent.parts),
     formMeltingPointK: form?.meltingPointK ?? (unspecified ? (solute?.meltingPointK ?? Number.NaN) : Number.NaN),
     formFusionEnthalpy: form?.fusionEnthalpy ?? (unspecified ? (solute?.fusionEnthalpy ?? Number.NaN) : Number.NaN),
     electrolyte: solute?.electrolyte ?? false,
@@ -49,7 +71,9 @@ export function systemLiquor(who: Identified, identity: Identity, model: LiquorM
           ? undefined
           : { form: identity.solidForm, massFactor: crystalMassFactor };
       }
-      const stable = stableSolvate(solvates, temperatureK);
+      // Transitions are those in the pure solvent: in a mixture the activity of the guest moves them, nobody knows where.
+      const mixed = identity.solventComponents.length > 1 && solvates.length > 0;
+      const stable = mixed ? "open" : stableSolvate(solvates, temperatureK);
       if (stable === "open") return undefined;
       if (stable === undefined) return { form: "unspecified", massFactor: 1 };
       return Number.isNaN(factor(stable)) ? undefined : { form: stable.form, massFactor: factor(stable) };
@@ -57,7 +81,12 @@ export function systemLiquor(who: Identified, identity: Identity, model: LiquorM
     transitionsK: transitions.filter((t) => t !== undefined),
     hazards: [
       ...(solute?.hazards ?? []).filter((word) => MARKED.test(word)).map((word) => `solute: ${word}`),
-      ...solvent.hazards.filter((word) => MARKED.test(word)).map((word) => `solvent: ${word}`),
+      ...new Set(
+        solvent.parts
+          .flatMap(({ substance }) => substance.hazards)
+          .filter((word) => MARKED.test(word))
+          .map((word) => `solvent: ${word}`),
+      ),
     ],
   };
 }

@@ -99,7 +99,7 @@ export function codeOfMissing(missing: readonly NeedName[]): "no-density" | "unk
  */
 export function foreignGuest({ solvated, form, solvent }: Identified): string | undefined {
   const guest = form?.guest ?? "water";
-  if (!solvated || solvent.name.split(" + ").includes(guest)) return undefined;
+  if (!solvated || solvent.parts.some(({ substance }) => substance.name === guest)) return undefined;
   return `the crystal's ${guest} is no part of ${solvent.name}: the liquor is a mixture, its ${guest} counted as solvent by mass`;
 }
 
@@ -118,6 +118,7 @@ export function bindUnit(
   const { needs } = liquor;
   const links = [linkOf(unit.basis, soluteBasis), linkOf("mass ratio")] as const;
   const assumptions = assumptionsOf(unit, needs, links[0], hub, needs, links[1]);
-  const all = remark === undefined ? assumptions : [...assumptions, remark];
+  const mixed = unit.basis.includes("volume") ? liquor.volumeRemark : "";
+  const all = [...assumptions, mixed, remark ?? ""].filter((text) => text !== "");
   return { unit, soluteBasis, liquor, converter: result.converter, assumptions: all };
 }

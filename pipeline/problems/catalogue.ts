@@ -1,12 +1,13 @@
 import { cellKinds } from "./cell-kinds.ts";
 import { commandKinds } from "./command-kinds.ts";
 import { fileKinds } from "./file-kinds.ts";
+import { identityKinds } from "./identity-kinds.ts";
 import type { Kind } from "./kind.ts";
 import { rulingKinds } from "./ruling-kinds.ts";
 import { safeText } from "./safe-text.ts";
 
 /** Every problem an input can have, by its code. Codes are stable; wording may improve. */
-export const kinds = { ...fileKinds, ...cellKinds, ...rulingKinds, ...commandKinds };
+export const kinds = { ...fileKinds, ...cellKinds, ...identityKinds, ...rulingKinds, ...commandKinds };
 
 export type ProblemCode = keyof typeof kinds;
 

@@ -2,12 +2,6 @@ import type { Kind } from "./kind.ts";
 
 /** Problems of single cells and of what they say together. Each stops one reading unless it says otherwise. */
 export const cellKinds = {
-  "missing-solute": {
-    stops: "reading",
-    meaning: "The row names no solute.",
-    expected: "a name, registry number, structure or formula of the solute",
-    mend: "fill the cell, or state the solute as a constant in the card",
-  },
   "missing-solvent": {
     stops: "reading",
     meaning: "The row names no solvent.",
@@ -107,68 +101,81 @@ export const cellKinds = {
     stops: "reading",
     meaning: "The composition of the solvent does not say on which basis it is.",
     expected: "composition_basis: mass, mole, volume before mixing, or % vol",
-    mend: "state composition_basis in a column or as a constant of the card",
+    mend: "state composition_basis in a column or as a constant of the card, or write w/w, v/v, mol/mol or % vol in the cell",
   },
   "unsupported-composition": {
     stops: "reading",
     meaning: "This way of giving a solvent mixture cannot be followed.",
-    expected: "a pure solvent, or two solvents with their fractions",
+    expected: "up to three listed solvents with their fractions, such as ethanol/water 70:30 v/v",
     mend: "give the mixture as components with a composition and its basis",
+  },
+  "missing-composition": {
+    stops: "reading",
+    meaning: "The row names a mixture of solvents but not how much of each, or a fraction but not of what with what.",
+    expected: "all components, with a fraction for each of them or for all but one",
+    mend: "write the components and their proportion into the solvent cell, or fill composition and composition_basis",
+  },
+  "contradictory-composition": {
+    stops: "reading",
+    meaning: "The row states the composition of its solvent twice, and the two do not agree.",
+    expected: "one composition, or the same one in both places",
+    mend: "find out which is right and leave the other out",
+  },
+  "fractions-do-not-add-up": {
+    stops: "reading",
+    meaning: "The fractions of the components do not add up to 1 or 100 %.",
+    expected: "fractions whose sum is 1 or 100 %, or a ratio such as 7:3",
+    mend: "correct the fractions; where the solute is counted among them, say so in composition_basis",
+  },
+  "composition-out-of-range": {
+    stops: "reading",
+    meaning: "A fraction of a solvent lies above 100 % or below 0.",
+    expected: "a fraction from 0 to 1, or 0 to 100 %",
+    mend: "correct the fraction; check whether it is in percent or a fraction of 1",
+  },
+  "unknown-mixture-partner": {
+    stops: "reading",
+    meaning: "A component of the solvent mixture is no solvent of the tables.",
+    expected: "names, synonyms or registry numbers of listed solvents",
+    mend: "correct the name, or add the solvent to substances.csv of the collection",
+  },
+  "ambiguous-mixture": {
+    stops: "reading",
+    meaning: "The name of the mixture can be divided into components in more than one way.",
+    expected: "components with / or + between them",
+    mend: "write the components out with / between them",
+  },
+  "too-many-components": {
+    stops: "reading",
+    meaning: "The solvent is a mixture of more than three components.",
+    expected: "at most three solvents",
+    mend: "leave the row out, or name the smallest component under medium if it is no solvent",
+  },
+  "miscibility-gap": {
+    stops: "reading",
+    meaning: "The components do not mix in this proportion: there are two liquids, and it is open which was measured.",
+    expected: "a composition outside the miscibility gap",
+    mend: "check the components and their basis; give the composition of the one liquid that was analysed",
+  },
+  "composition-counts-solute": {
+    stops: "reading",
+    meaning: "The fractions count the solute, and the row does not allow to take it out.",
+    expected:
+      "fractions of all solvents, or a solubility that gives the solute's own fraction on the same basis (mass or mole)",
+    mend: "give the composition free of solute, or the fractions of all solvents of the solution",
+  },
+  "nearby-compositions": {
+    stops: "nothing",
+    meaning:
+      "Two compositions of one mixture are nearly the same but lie on two sides of an edge between composition keys, so they are two systems.",
+    expected: "one composition for measurements that belong together",
+    mend: "correct the composition where the difference is only rounding; otherwise nothing is to be done",
   },
   "unknown-solvent": {
     stops: "reading",
     meaning: "The solvent is not in the tables of substances.",
     expected: "a name, synonym or registry number of a listed solvent",
     mend: "correct the name, or add the solvent to substances.csv of the collection",
-  },
-  "unknown-solute": {
-    stops: "nothing",
-    meaning:
-      "The solute is in no table of substances but its name is close to one that is; it stays a substance of its own.",
-    expected: "a name, synonym or identifier of a listed substance, or a substance that is really new",
-    mend: "correct the name, or add the solute to substances.csv of the collection",
-  },
-  "identifier-over-name": {
-    stops: "nothing",
-    meaning: "Name and identifier of one row stand for different substances; the identifier decided.",
-    expected: "name and identifier of one substance",
-    mend: "find out which of them is right and correct the other",
-  },
-  "unresolved-identity": {
-    stops: "reading",
-    meaning: "It cannot be told which substance is meant.",
-    expected: "a name or identifier that stands for exactly one substance",
-    mend: "add a registry number or InChIKey to the row, or a synonym to substances.csv",
-  },
-  "contradictory-identity": {
-    stops: "reading",
-    meaning: "Name and identifiers of one row stand for different substances.",
-    expected: "name, registry number, InChIKey and structure of one substance",
-    mend: "find out which of them is right and correct the others",
-  },
-  "solvent-is-solute": {
-    stops: "reading",
-    meaning: "Solute and solvent are the same substance.",
-    expected: "two different substances",
-    mend: "correct the row; in the card, check that the two columns were not exchanged",
-  },
-  "invalid-registry-number": {
-    stops: "reading",
-    meaning: "The CAS Registry Number has a wrong form or a wrong check digit.",
-    expected: "a number such as 7732-18-5 whose last digit agrees with the others",
-    mend: "copy the number again from its origin; a spreadsheet may have turned it into a date",
-  },
-  "invalid-formula": {
-    stops: "reading",
-    meaning: "The formula cannot be read.",
-    expected: "element symbols with counts, such as CuSO4·5H2O or Ca(NO3)2",
-    mend: "correct the formula",
-  },
-  "contradictory-molar-mass": {
-    stops: "reading",
-    meaning: "The molar mass stated does not belong to the formula or substance.",
-    expected: "the molar mass that follows from the formula",
-    mend: "check whether the mass is that of a hydrate, a salt or the free base, and correct the row",
   },
   "no-molar-mass": {
     stops: "reading",

@@ -1,6 +1,7 @@
 import { cellKinds } from "./cell-kinds.ts";
 import { commandKinds } from "./command-kinds.ts";
 import { fileKinds } from "./file-kinds.ts";
+import { identityKinds } from "./identity-kinds.ts";
 import type { Kind, Stops } from "./kind.ts";
 import { rulingKinds } from "./ruling-kinds.ts";
 
@@ -33,6 +34,7 @@ the code in brackets is stable. Where a message is more precise than the general
     intro,
     part("Files and their structure", fileKinds),
     part("Cells and what they say together", cellKinds),
+    part("Which substance and which solid", identityKinds),
     part("Rulings", rulingKinds),
     part("Commands and their output", commandKinds),
   ].join("\n");

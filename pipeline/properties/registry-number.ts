@@ -1,3 +1,5 @@
+import { digitsOnly, originalsOfDate } from "./registry-number-originals.ts";
+
 /** A CAS Registry Number that passed its check digit, in its usual spelling. */
 export interface RegistryNumber {
   readonly ok: true;
@@ -9,18 +11,17 @@ export interface RegistryNumberFault {
   readonly ok: false;
   readonly fault: "shape" | "check digit" | "date";
   readonly message: string;
-  /** Registry numbers the text may have been before a spreadsheet made a date of it: to be confirmed, never assumed. */
+  /** Registry numbers the text may have been, with the right check digit: to be confirmed, never assumed. */
   readonly suggestions: readonly string[];
 }
 
-const MONTHS = "jan feb mar apr may jun jul aug sep oct nov dec".split(" ");
-
 /**
- * Reads a CAS Registry Number: 2 to 7 digits, 2 digits, check digit. Dashes of every kind, blanks around it and a
- * leading "CAS" are folded; nothing else is.
+ * Reads a CAS Registry Number: 2 to 7 digits, 2 digits, check digit. Dashes of every kind, blanks around it, a leading
+ * "CAS" and the apostrophe by which a spreadsheet marks a text are folded; nothing else is.
  *
  * Check digit: the digits left of it, numbered 1, 2, 3 ... from right to left; the sum of digit times number, modulo 10.
- * A spreadsheet reads `7758-02-3` as a date; such cells are recognised and the likely originals suggested.
+ * A spreadsheet reads `7758-02-3` as a date; such cells are recognised, in any way of writing a date, and the likely
+ * originals suggested. So are numbers that lost their hyphens or were padded with zeros.
  *
  * @example readRegistryNumber("7732-18-5") // { ok: true, cas: "7732-18-5" }
  * @example readRegistryNumber("03/02/7758") // fault "date", suggestions ["7758-02-3"]
@@ -31,9 +32,10 @@ export function readRegistryNumber(text: string): RegistryNumber | RegistryNumbe
     .replace(/[‐‑‒–—−﹣－]/g, "-")
     .replace(/\p{Cf}/gu, "")
     .trim()
+    .replace(/^['’]\s*/, "")
     .replace(/^CAS(?:[ -]?RN|[ -]?No\.?|[ -]?number|-?#)?[ :.]*/i, "")
     .replace(/^\[(.*)\]$/, "$1");
-  const shape = /^([1-9]\d{1,6})-(\d\d)-(\d)$/.exec(folded);
+  const shape = SHAPE.exec(folded);
   if (shape === null) return notOfShape(folded);
   const [, first = "", second = "", digit = ""] = shape;
   const expected = checkDigit(first + second);
@@ -41,6 +43,8 @@ export function readRegistryNumber(text: string): RegistryNumber | RegistryNumbe
   const message = `the check digit of ${folded} should be ${expected}: a digit is wrong or two are exchanged`;
   return { ok: false, fault: "check digit", message, suggestions: [] };
 }
+
+const SHAPE = /^([1-9]\d{1,6})-(\d\d)-(\d)$/;
 
 /** True for a CAS Registry Number of the right shape and check digit (see {@link readRegistryNumber}). */
 export function isRegistryNumber(text: string): boolean {
@@ -56,44 +60,30 @@ function checkDigit(digits: string): number {
   return sum % 10;
 }
 
+/** Registry number of a first and second block with its check digit. */
+const completed = (first: string, second: string): string => `${first}-${second}-${checkDigit(first + second)}`;
+
+/** The text as a registry number if its digits are one once the hyphens are set, else nothing. */
+function hyphenated(digits: string): string[] {
+  const cas = `${digits.slice(0, -3)}-${digits.slice(-3, -1)}-${digits.slice(-1)}`;
+  return SHAPE.test(cas) && completed(digits.slice(0, -3), digits.slice(-3, -1)) === cas ? [cas] : [];
+}
+
 function notOfShape(text: string): RegistryNumberFault {
-  const suggestions = originalsOfDate(text);
-  if (suggestions !== undefined) {
+  const originals = originalsOfDate(text)?.flatMap(({ first, second, digit }) => {
+    const cas = completed(first, second);
+    // A spreadsheet knows no day 0.
+    return !cas.endsWith("-0") && (digit === undefined || cas.endsWith(`-${digit}`)) ? [cas] : [];
+  });
+  const suggestions = [...new Set(originals ?? [])];
+  const bare = hyphenated(digitsOnly(text));
+  // A whole number can be both: a number without its hyphens, or the day count by which a spreadsheet keeps a date.
+  const plainDate = originals !== undefined && /[A-Za-z]|\d{4}/.test(text) && !/^\d+$/.test(text);
+  if (plainDate || (suggestions.length > 0 && bare.length === 0)) {
     const likely = suggestions.length === 0 ? "" : `, likely ${suggestions.join(" or ")}`;
     const message = `a registry number that a spreadsheet turned into a date${likely}: format the column as text`;
     return { ok: false, fault: "date", message, suggestions };
   }
   const message = "not of the shape of a registry number: 2 to 7 digits, hyphen, 2 digits, hyphen, 1 digit";
-  return { ok: false, fault: "shape", message, suggestions: [] };
+  return { ok: false, fault: "shape", message, suggestions: [...bare, ...suggestions] };
 }
-
-/** Registry numbers Y-MM-D that a spreadsheet would show as this date; undefined if the text is no date. */
-function originalsOfDate(text: string): string[] | undefined {
-  const date = /^(\d{1,4})[-/. ]+(\d{1,2}|[A-Za-z]{3,9})[-/. ]+(\d{1,4})(?:[ T]0{1,2}:00(?::00)?)?$/.exec(text);
-  if (date === null) return undefined;
-  const [, first = "", middle = "", last = ""] = date;
-  const month = MONTHS.indexOf(middle.slice(0, 3).toLowerCase()) + 1;
-  const m = month > 0 ? month : Number(middle);
-  const readings =
-    first.length === 4
-      ? [{ year: first, month: m, day: Number(last) }]
-      : [
-          { year: last, month: m, day: Number(first) },
-          ...(month > 0 ? [] : [{ year: last, month: Number(first), day: m }]),
-        ];
-  const possible = readings.filter((r) => r.year.length === 4 && isMonth(r.month) && r.day >= 1 && r.day <= 31);
-  if (possible.length === 0) return undefined;
-  // The day was the check digit, so that it is one digit.
-  const candidates = possible.flatMap(({ year, month: number, day }) => {
-    const second = String(number).padStart(2, "0");
-    const blocks = firstBlocks(year).filter((block) => checkDigit(block + second) === day);
-    return blocks.map((block) => `${block}-${second}-${day}`);
-  });
-  return [...new Set(candidates)];
-}
-
-const isMonth = (month: number): boolean => month >= 1 && month <= 12;
-
-/** A year from 1930 to 2029 may stand for a two-digit first block that the spreadsheet completed. */
-const firstBlocks = (year: string): string[] =>
-  Number(year) >= 1930 && Number(year) <= 2029 ? [year, year.slice(2)] : [year];

@@ -1,10 +1,12 @@
+import { formInName } from "./form-in-name.ts";
+import { formName } from "./form-name.ts";
 import { parseFormula } from "./formula.ts";
 import { hydrateParts } from "./hydrate-parts.ts";
 import { type Draft, layerTables } from "./layered-tables.ts";
 import { hillFormula } from "./molar-mass.ts";
-import { nameKey } from "./name-key.ts";
+import { nameKey, racemateKeys } from "./name-key.ts";
 import { type NameTable, nameTable } from "./name-table.ts";
-import { nearNames } from "./near-names.ts";
+import { type ComparedName, comparedNames, nearest } from "./near-names.ts";
 import { readRegistryNumber } from "./registry-number.ts";
 import { solidFormFromRow } from "./solid-form-rows.ts";
 import { type BareSubstance, substanceFromDraft } from "./substance-from-draft.ts";
@@ -87,13 +89,15 @@ function lookups(substances: readonly Substance[], names: NameTable): Omit<Subst
     const at = names.only(text);
     return at === undefined ? undefined : substances[at];
   };
+  let spellings: readonly ComparedName[] | undefined;
   let formNames: ReadonlyMap<string, ResolvedName> | undefined;
   const resolve = (text: string): ResolvedName | undefined => {
     const named = byName(text);
     if (named !== undefined) return unsolvated(named, byName);
     // Few texts name a form: the table of form names is made when the first one does.
     formNames ??= formNameTable(substances);
-    return formNames.get(nameKey(text)) ?? resolveHydrateFormula(text, byName);
+    const found = formNames.get(nameKey(text)) ?? resolveHydrateFormula(text, byName);
+    return found ?? racemateOf(text, byName) ?? formInName(text, byName, formOf);
   };
   return {
     byName,
@@ -107,7 +111,10 @@ function lookups(substances: readonly Substance[], names: NameTable): Omit<Subst
     resolve,
     unsolvated: (substance) => unsolvated(substance, byName),
     formOf,
-    nearNames: (text) => nearNames(text, names.spellings()),
+    nearNames: (text) => {
+      spellings ??= comparedNames(names.spellings());
+      return nearest(text, spellings);
+    },
   };
 }
 
@@ -163,17 +170,26 @@ function resolveHydrateFormula(text: string, byName: SubstanceIndex["byName"]): 
   return form === undefined ? undefined : { substance, form };
 }
 
+/** The substance listed as a racemate under another of the usual prefixes; undefined where these lead to several. */
+function racemateOf(text: string, byName: SubstanceIndex["byName"]): ResolvedName | undefined {
+  const found = new Set(racemateKeys(text).flatMap((key) => byName(key) ?? []));
+  const [only] = found;
+  return only === undefined || found.size > 1 ? undefined : unsolvated(only, byName);
+}
+
 function hillOf(text: string): string | undefined {
   const formula = parseFormula(text);
   return "fault" in formula ? undefined : hillFormula(formula.elements);
 }
 
-/** A form by its name; "II" finds "form II", and a lone "form" or "polymorph" in front is no difference. */
-function formOf(substance: Substance, form: string): SolidForm | undefined {
-  const bare = (text: string) => nameKey(text).replace(/^(?:form|polymorph|modification)-?/, "");
-  const wanted = nameKey(form);
+/** A form by its name, however it is written; "IV" finds "phase IV" too, where it is the only form with that label. */
+function formOf({ solidForms }: Substance, form: string): SolidForm | undefined {
+  const wanted = formName(form);
+  const bare = (text: string) => formName(text).replace(/^(?:form|phase|type) (?=.)/, "");
+  const only = (found: readonly SolidForm[]) => (found.length === 1 ? found[0] : undefined);
   return (
-    substance.solidForms.find((listed) => nameKey(listed.form) === wanted) ??
-    substance.solidForms.find((listed) => bare(listed.form) === bare(form) && bare(form) !== "")
+    solidForms.find((listed) => nameKey(listed.form) === nameKey(form)) ??
+    only(solidForms.filter((listed) => formName(listed.form) === wanted)) ??
+    only(solidForms.filter((listed) => bare(listed.form) === bare(form) && bare(form) !== ""))
   );
 }

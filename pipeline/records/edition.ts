@@ -101,7 +101,10 @@ export interface Liquor {
   readonly massConcentration: (massRatio: number, temperatureK: number) => number;
   /** Density of the solvent at 20 °C, kg/m3; NaN where unknown. */
   readonly solventDensity20C: number;
+  /** Where boiling can begin, K: the lowest boiler of a mixture, or its listed azeotrope. NaN where unknown. */
   readonly solventBoilingPointK: number;
+  /** Where nothing of the solvent is liquid any more at normal pressure, K: the highest boiler. NaN where unknown. */
+  readonly solventHighestBoilingPointK: number;
   readonly solventFreezingPointK: number;
   /** Melting point of the solid form, K; NaN where unknown. */
   readonly formMeltingPointK: number;

@@ -1,3 +1,4 @@
+import type { Repeats } from "./repeats.ts";
 import type { FitBasis, SystemPoints } from "./systems.ts";
 
 /** Scales pooled over the whole edition. All are standard deviations of ln value. */
@@ -37,6 +38,8 @@ export interface RobustFit {
   readonly betweenSd: number;
   /** Temperature at which the screening curve was allowed to break, K; NaN = nowhere. */
   readonly breakTemperatureK: number;
+  /** True if that break was tested and the curvature may change there too; else it only protects points near it. */
+  readonly breakTested?: boolean;
   /** Degrees of freedom for judging z = deviation / deviationSd. */
   readonly degreesOfFreedom: number;
   /** Sources (positions in the edition's list) whose blocks are sound: they agree and form the majority. Ascending. */
@@ -45,6 +48,8 @@ export interface RobustFit {
   readonly apartSources: readonly number[];
   /** In a conflict: the groups of sources that agree within themselves, largest first. */
   readonly camps: readonly (readonly number[])[];
+  /** Points that count once though they are written more than once; absent where there are none. */
+  readonly repeats?: Repeats;
 }
 
 /** Names of the curve models. */
@@ -95,7 +100,7 @@ export interface Curve {
   }[];
   /** Covariance of the coefficients, row-major, in the same order. */
   readonly covariance: readonly number[];
-  /** Lowest and highest temperature of the kept points, K. */
+  /** Lowest and highest temperature of the kept points, K; a branch reaches to the transition. */
   readonly temperatureRangeK: readonly [number, number];
   readonly n: number;
   readonly nSources: number;
@@ -134,62 +139,54 @@ export interface Transition {
   readonly probability: number;
 }
 
+/** A change of slope that no equilibrium transition makes: d ln value/dT rises on heating. */
+export interface RisingKink {
+  readonly temperatureK: number;
+  /** p of no change by parametric bootstrap. */
+  readonly probability: number;
+  /** d ln value/dT (1/K) of straight lines through the three nearest temperatures on either side. */
+  readonly slopeBelow: number;
+  readonly slopeAbove: number;
+}
+
+/** A curve fitted without one source: the published model, or the simplest where the other points do not carry it. */
+export interface CurveWithout {
+  readonly model: CurveModel;
+  /** In the usual published form, as of a {@link Curve}. */
+  readonly coefficients: readonly { readonly name: string; readonly value: number }[];
+  readonly temperatureRangeK: readonly [number, number];
+  readonly n: number;
+  readonly nSources: number;
+  /** ln value at a temperature inside the range. */
+  readonly evaluate: (temperatureK: number) => number;
+}
+
 /** How one source of a system of several stands to the others. */
 export interface SourceStanding {
   /** Position in the edition's list. */
   readonly source: number;
-  /** Number of its kept points. */
+  /** Branch of the curve, 1 and up. */
+  readonly branch: number;
+  /** Number of its points in the curve; 0 where the fit leaves out the whole source. */
   readonly n: number;
-  /** Mean deviation of its points, ln value, from the curve of the other sources, with 95 % limits. */
+  /** Points that the offset rests on: those within the temperatures of the others; 0 = no temperature in common. */
+  readonly compared: number;
+  /** Mean deviation of its points, ln value, from the curve of the other sources, with 95 % limits; NaN where none. */
   readonly offset: number;
   readonly low: number;
   readonly high: number;
   /** Largest change of the published curve, ln value, over its range when the source is left out; NaN where no curve remains. */
   readonly influence: number;
-  /** The curve without the source; absent where none can be fitted. */
-  readonly without?: Curve;
+  /** The curve without the source; absent where none can be fitted, or the source is not in it anyway. */
+  readonly without?: CurveWithout;
 }
 
-/** Jouyban-Acree-van 't Hoff model of one solute in one solid form over a binary solvent. */
-export interface MixtureModel {
-  /** Readable id, unique in the edition. */
-  readonly id: string;
-  readonly solute: string;
-  readonly solidForm: string;
-  readonly medium: string;
-  /** The two solvents in the order of the systems' `solvent`. */
-  readonly solvents: readonly [string, string];
-  /** Positions of the systems behind it, pure solvents included, ascending by mass fraction of the first solvent. */
-  readonly systems: readonly number[];
-  readonly fitBasis: FitBasis;
-  readonly coefficients: readonly {
-    readonly name: string;
-    readonly value: number;
-    readonly standardUncertainty: number;
-  }[];
-  /** Row-major, in the order of the coefficients. */
-  readonly covariance: readonly number[];
-  /** Mass fraction of the first solvent, free of solute: lowest and highest of the data. */
-  readonly fractionRange: readonly [number, number];
-  readonly temperatureRangeK: readonly [number, number];
-  readonly n: number;
-  readonly nSources: number;
-  readonly rmsd: number;
-  readonly ardPercent: number;
-  /** Solubility passes through a maximum inside the composition range at these temperatures; empty where none. */
-  readonly innerMaxima: readonly {
-    readonly temperatureK: number;
-    readonly fraction: number;
-    readonly lnValue: number;
-  }[];
-  readonly notices: readonly string[];
-  /** ln value inside the range of compositions and temperatures. @throws RangeError outside it. */
-  readonly evaluate: (fraction: number, temperatureK: number) => number;
-  /** Half-widths, in ln value, of the 95 % limits of the surface and of a new measurement from a new source. */
-  readonly limits: (
-    fraction: number,
-    temperatureK: number,
-  ) => { readonly curve: number; readonly newMeasurement: number };
+/** What one group of agreeing sources says in a system whose sources disagree without a majority. */
+export interface CampReading {
+  /** Positions in the edition's list, ascending. */
+  readonly sources: readonly number[];
+  /** Curve of these sources alone; absent where none can be fitted. */
+  readonly curve?: Curve;
 }
 
 /** Why a system has no curve. */
@@ -206,8 +203,11 @@ export interface SystemFit {
   readonly noCurve?: string;
   /** Where the two branches of two curves meet. */
   readonly transition?: Transition;
-  /** By source, ascending; empty where a single source is left. */
-  readonly standings?: readonly SourceStanding[];
+  readonly kink?: RisingKink;
+  /** Works out how the sources stand to one another, by branch and source; absent where a single source is left. */
+  readonly standings?: () => readonly SourceStanding[];
+  /** In a conflict: what each group of sources that agree says. */
+  readonly campReadings?: readonly CampReading[];
 }
 
 /** A remark on a measurement, block, source or system, as `flags.csv` lists it. */

@@ -84,10 +84,13 @@ export interface MeasurementTable {
   readonly soluteBasis: Int32Array;
   /** 1 = the solid in equilibrium was looked at and was the one stated. */
   readonly solidChecked: Uint8Array;
-  /** Exact mass fractions of the first and second component of a mixed solvent, free of solute; NaN in a pure solvent. */
+  /**
+   * Exact mass fractions of the first and second component of a mixed solvent, free of solute, a trace too small for the
+   * composition key among them; NaN in a pure solvent.
+   */
   readonly firstFraction: Float64Array;
   readonly secondFraction: Float64Array;
-  /** Standard uncertainty of `firstFraction`. */
+  /** Standard uncertainty of `firstFraction`; also of ethanol taken absolute, whose fraction is 1. NaN in other pure solvents. */
   readonly fractionU: Float64Array;
   /** Measured density of the solution, kg/m3, and temperature of the stated volume, K; NaN where not given. */
   readonly solutionDensity: Float64Array;
@@ -95,6 +98,8 @@ export interface MeasurementTable {
   /** Assumptions made, `; ` between them (`texts`). */
   readonly assumptions: Int32Array;
   readonly method: Int32Array;
+  /** Number or letter of the replicate, where the source states one (`texts`). */
+  readonly replicate: Int32Array;
   readonly reference: Int32Array;
   readonly doi: Int32Array;
   /** Carried columns as `heading=value; heading=value` (`texts`). */
@@ -104,7 +109,7 @@ export interface MeasurementTable {
 
 const WHOLE = [
   ...["source", "line", "column", "identity", "reportedText", "reportedUnit"],
-  ...["temperatureUnit", "soluteBasis", "assumptions", "method", "reference", "doi", "carried"],
+  ...["temperatureUnit", "soluteBasis", "assumptions", "method", "replicate", "reference", "doi", "carried"],
 ] as const;
 const REAL = [
   ...["temperatureK", "temperatureU", "reportedValue", "valueLow", "valueHigh", "massRatioLow", "massRatioHigh"],

@@ -56,6 +56,11 @@ export interface SystemPoints {
   readonly lnValue: Float64Array;
   /** Standard uncertainty of lnValue as reported or by default, temperature not included. */
   readonly lnU: Float64Array;
+  /**
+   * The part of `lnU` that all points of one source share here, standard uncertainty of lnValue; absent or not finite: none.
+   * It moves a source as a whole and does not average out over its points.
+   */
+  readonly sharedLnU?: Float64Array;
   /** Position of the source in the edition's list. */
   readonly source: Int32Array;
   /** Level for the material threshold: mg per mL of solution, or 1000 r where no density is known. */
@@ -80,7 +85,25 @@ export function systemPoints(table: MeasurementTable, system: System, omit?: Rea
     temperatureU: of(table.temperatureU),
     lnValue: value,
     lnU: of(table.relativeU),
+    sharedLnU: of(table.sharedU),
     source: Int32Array.from(rows, (row) => table.source[row] as number),
     level,
   };
+}
+
+/** Part of a stated variance that a point always keeps for itself: shares are not known to more digits. */
+const LEAST_OWN_SHARE = 0.01;
+
+/** Variance of lnValue that a point shares with the other points of its source here, from the stated uncertainties. */
+export function sharedVarianceOf({ lnU, sharedLnU }: SystemPoints, i: number): number {
+  if (sharedLnU === undefined) return 0;
+  const shared = sharedLnU[i]! ** 2;
+  const whole = lnU[i]! ** 2;
+  return shared > 0 && whole > 0 && whole < Number.POSITIVE_INFINITY ? Math.min(shared, whole) : 0;
+}
+
+/** Standard uncertainty of lnValue that is a point's own: the stated one without what it shares; NaN where none is stated. */
+export function ownLnU(points: SystemPoints, i: number): number {
+  const whole = points.lnU[i]! ** 2;
+  return Math.sqrt(Math.max(whole - sharedVarianceOf(points, i), LEAST_OWN_SHARE * whole));
 }

@@ -9,20 +9,25 @@ import { counted, inCelsius, offBy } from "./wording.ts";
 
 /** A lower block up to this factor could be a more stable solid; a larger one hardly. Common practice. */
 const LARGEST_FORM_RATIO = Math.log(10);
+/** Points from which a drift can be told from scatter. */
+const LEAST_FOR_DRIFT = 4;
+/** Enthalpies of transition between solids, hydrates included, up to 40 kJ/mol over R, K. Common practice. */
+const LARGEST_DRIFT_K = 40000 / 8.314;
+/** Share of the points that lie below the curve. */
+const MOSTLY_BELOW = 0.75;
 const MORE_STABLE_FORM =
   "Look at the solid at the end of the measurement (XRPD, Raman): the lower values may be those of a more stable form.";
 
 /** One flag for each block that is off as a whole. */
 export function blockFlags(input: ScreenInput, blocks: readonly OffBlock[]): Flag[] {
   const verdicts = blocks.map(verdictOf);
-  const unexplained = blocks.filter((_, j) => verdicts[j]!.cause === undefined);
-  const across = competeAcrossSystems(input, unexplained);
+  const across = competeAcrossSystems(input, blocks);
   return blocks.map((block, j) => blockFlag(input, block, across.get(block) ?? verdicts[j]!));
 }
 
 function blockFlag(input: ScreenInput, block: OffBlock, verdict: Verdict): Flag {
   const fit = input.fits[block.system]!;
-  const lower = couldBeStableForm(block);
+  const lower = couldBeStableForm(fit, block);
   const flag = {
     scope: "block",
     code: lower ? "possible-more-stable-form" : "block-off-curve",
@@ -58,10 +63,33 @@ function verdictOf({ readings, posterior }: OffBlock): Verdict {
   return decided(best, bestSum);
 }
 
-/** A coherent lower block: every deviation alike, below by less than an order of magnitude. */
-function couldBeStableForm({ deviations, offset, threshold }: OffBlock): boolean {
+/**
+ * A coherent lower block: below by less than an order of magnitude, and either parallel to the curve or drifting from it
+ * smoothly. Of two solids ln(ratio) is nearly linear in 1/T, with the enthalpy of transition over R as its slope.
+ */
+function couldBeStableForm({ points }: RobustFit, { points: own, deviations, offset, threshold }: OffBlock): boolean {
   if (offset >= 0 || offset < -LARGEST_FORM_RATIO) return false;
-  return middle(deviations.map((deviation) => Math.abs(deviation - offset))) < threshold;
+  if (middle(deviations.map((deviation) => Math.abs(deviation - offset))) < threshold) return true;
+  const below = deviations.filter((deviation) => deviation < 0).length;
+  if (own.length < LEAST_FOR_DRIFT || below < MOSTLY_BELOW * own.length) return false;
+  const line = straightLine(
+    own.map((point) => 1 / points.temperatureK[point]!),
+    deviations,
+  );
+  return Math.abs(line.slope) < LARGEST_DRIFT_K && middle(line.residuals.map(Math.abs)) < threshold;
+}
+
+/** Least-squares line through a few values, with what it leaves over. */
+function straightLine(x: readonly number[], y: readonly number[]) {
+  const mean = (values: readonly number[]) => values.reduce((sum, value) => sum + value, 0) / values.length;
+  const [centre, level] = [mean(x), mean(y)];
+  let [products, squares] = [0, 0];
+  x.forEach((value, i) => {
+    products += (value - centre) * (y[i]! - level);
+    squares += (value - centre) ** 2;
+  });
+  const slope = squares > 0 ? products / squares : 0;
+  return { slope, residuals: y.map((value, i) => value - level - slope * (x[i]! - centre)) };
 }
 
 function evidence(input: ScreenInput, fit: RobustFit, block: OffBlock, lower: boolean): string {

@@ -1,5 +1,6 @@
 import type { Flag, RobustFit } from "../records/fits.ts";
 import { textOf } from "../records/measurements.ts";
+import type { System } from "../records/systems.ts";
 import type { Suspects } from "./causes/cause.ts";
 import { reconciling } from "./conflict-causes.ts";
 import { type ScreenInput, sourceName } from "./screen-input.ts";
@@ -31,24 +32,40 @@ export function conflictFlags(
 
 function evidence(input: ScreenInput, fit: RobustFit, model: SystemModel): string {
   const temperatureK = commonTemperature(fit);
-  const row = fit.points.row[0]!;
-  const unit = textOf(input.table, input.table.reportedUnit[row]!);
+  const { table } = input;
   const readings = fit.camps.map((camp) => {
     const members = new Set(camp);
     fitSources(model, fit, (source) => members.has(source));
     const means = camp.map((source) => predict(model, temperatureK, source).mean);
     const mean = means.reduce((sum, value) => sum + value, 0) / means.length;
-    const points = fit.points.source.filter((source) => members.has(source)).length;
-    return { names: listed(camp.map((source) => sourceName(input, source))), points, mean };
+    const rows = fit.points.row.filter((_, i) => members.has(fit.points.source[i]!));
+    const methods = new Set(Array.from(rows, (row) => textOf(table, table.method[row]!)).filter((name) => name !== ""));
+    const how = [counted(rows.length, "point"), ...[...methods].sort()].join(", ");
+    return { names: listed(camp.map((source) => sourceName(input, source))), how, row: rows[0]!, mean };
   });
   const first = readings[0]!;
-  const told = readings.map(({ names, points, mean }, c) => {
+  const told = readings.map(({ names, how, row, mean }, c) => {
     const value = input.inReportedUnit(row, mean);
-    const reads = value === undefined ? "" : ` reads ${threeDigits(value)} ${unit}`;
+    const unit = textOf(table, table.reportedUnit[row]!);
+    const common = commonBases(input.systems[fit.system], mean, unit);
+    const reads = value === undefined ? common : `${threeDigits(value)} ${unit} (${common})`;
     const apart = c === 0 ? "" : `, ${offBy(mean - first.mean)} the first`;
-    return `${names} (${counted(points, "point")})${reads}${apart}`;
+    return `${names} (${how}) reads ${reads}${apart}`;
   });
   return `no majority among the sources: at ${inCelsius(temperatureK)} ${told.join("; ")}`;
+}
+
+/** The same on the common bases, mole fraction and g/100 g solvent, without the one it is told in already. */
+function commonBases(system: System | undefined, lnValue: number, unit: string): string {
+  const value = Math.exp(lnValue);
+  if (system === undefined || system.fitBasis === "ln r") return `${threeDigits(100 * value)} g/100 g solvent`;
+  const { soluteMolarMass, solventMolarMass } = system.identity;
+  const percent = (100 * value * soluteMolarMass) / ((1 - value) * solventMolarMass);
+  const told = [
+    ...(unit === "mole fraction" ? [] : [`x = ${threeDigits(value)}`]),
+    ...(unit === "g/100 g solvent" ? [] : [`${threeDigits(percent)} g/100 g solvent`]),
+  ];
+  return told.join(", ");
 }
 
 /** Middle of the range that the first two camps share, or between their ranges, K. */

@@ -1,4 +1,5 @@
-import type { PooledScales, RobustFit } from "../records/fits.ts";
+import type { Liquor } from "../records/edition.ts";
+import type { Curve, PooledScales, RobustFit } from "../records/fits.ts";
 import type { MeasurementTable } from "../records/measurements.ts";
 import type { InReportedUnit, Reread } from "../records/reread.ts";
 import type { Settings } from "../records/settings.ts";
@@ -11,6 +12,8 @@ export interface ScreenedSystem {
   /** Normal boiling and freezing point of the solvent, K; NaN where unknown. */
   readonly boilingPointK: number;
   readonly freezingPointK: number;
+  /** Melting data of the solid and densities of the solution; absent where nothing is known of them. */
+  readonly liquor?: Liquor;
 }
 
 /** Everything screening looks at. Rulings are not among it: flags depend on sources and settings only. */
@@ -19,12 +22,14 @@ export interface ScreenInput {
   readonly systems: readonly System[];
   /** By position of the system. */
   readonly fits: readonly RobustFit[];
+  /** Curves by position of the system, before any ruling. */
+  readonly curves: readonly (readonly Curve[])[];
   readonly about: readonly ScreenedSystem[];
   readonly scales: PooledScales;
   readonly sourceNames: readonly string[];
   readonly reread: Reread;
   readonly inReportedUnit: InReportedUnit;
-  readonly settings: ThresholdSettings & Pick<Settings, "false_discovery_rate">;
+  readonly settings: ThresholdSettings & Pick<Settings, "false_discovery_rate" | "pharmacopoeia_factor">;
 }
 
 /** Material threshold of a point of a system, ln value. */

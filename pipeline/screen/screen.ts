@@ -4,9 +4,13 @@ import { screenBlocks } from "./block-screen.ts";
 import { calculatedFlags } from "./causes/calculated-value-copied.ts";
 import { createSuspectFinder } from "./causes/suspects.ts";
 import { conflictFlags } from "./conflicts.ts";
+import { familyFlags } from "./families.ts";
+import { intervalFlags } from "./intervals.ts";
 import { isOutsideLiquid, liquidRangeFlags } from "./liquid-range.ts";
+import { plausibilityFlags } from "./plausibility.ts";
 import { pointFlags, type SuspectFinder } from "./point-flags.ts";
 import { type OffPoint, screenPoints } from "./point-screen.ts";
+import { redundantColumnFlags } from "./redundant-columns.ts";
 import { repeatFlags } from "./repeats.ts";
 import { type ScreenInput, thresholdOf } from "./screen-input.ts";
 import { createSystemModel, type SystemModel } from "./system-model.ts";
@@ -35,6 +39,10 @@ export function screen(input: ScreenInput): Flag[] {
     ...repeatFlags(input),
     ...calculatedFlags(input),
     ...liquidRangeFlags(input),
+    ...plausibilityFlags(input, blocked, points),
+    ...intervalFlags(input),
+    ...familyFlags(input),
+    ...redundantColumnFlags(input),
   ];
 }
 

@@ -3,6 +3,9 @@ import { AS_READ, type BlockReading, FREE_OFFSET } from "./causes/compete-block.
 /** Blocks that the prior counts for beside the other blocks of a source. */
 const PRIOR_BLOCKS = 4;
 
+/** Share of the mistakes of a block that say nothing about the other blocks of its source: one sample, one day, one table. */
+const ONE_OFF_SHARE = 0.5;
+
 /** A tested block, as far as this needs it. */
 interface Judged {
   readonly source: number;
@@ -34,7 +37,8 @@ export function sourceWidePosteriors(blocks: readonly Judged[], blocksOfSource: 
       posteriors[j] = normalised(blocks[j]!.readings, ({ key, logPrior }) => {
         if (key === FREE_OFFSET) return Math.exp(logPrior);
         const same = Math.max(0, (counts.get(key) ?? 0) - own.get(key)!);
-        return (PRIOR_BLOCKS * Math.exp(logPrior) + same) / (PRIOR_BLOCKS + others);
+        const shared = (PRIOR_BLOCKS * Math.exp(logPrior) + same) / (PRIOR_BLOCKS + others);
+        return Math.max(shared, ONE_OFF_SHARE * Math.exp(logPrior));
       });
     }
   }

@@ -1,4 +1,11 @@
-import { SCREENING_STRIDE, setScreeningPrior, writeScreeningBasis } from "../curves/screening-basis.ts";
+import {
+  BROKEN_COEFFICIENTS,
+  HINGED_COEFFICIENTS,
+  SCREENING_STRIDE,
+  SMOOTH_COEFFICIENTS,
+  setScreeningPrior,
+  writeScreeningBasis,
+} from "../curves/screening-basis.ts";
 import {
   createGroupedModel,
   expected,
@@ -11,12 +18,14 @@ import {
   priorFromPosterior,
 } from "../numerics/grouped-model.ts";
 import type { RobustFit } from "../records/fits.ts";
+import { type SystemPoints, sharedVarianceOf } from "../records/systems.ts";
 
 /** The screening model of one system at a time, rebuilt from its robust fit: a workspace that is filled again and again. */
 export interface SystemModel {
   readonly rows: GroupedRows;
   readonly use: Uint8Array;
   readonly smooth: GroupedModel;
+  readonly hinged: GroupedModel;
   readonly broken: GroupedModel;
   /** Source behind each group; the last group is empty and stands for a new source. */
   readonly groupOfSource: Map<number, number>;
@@ -37,9 +46,11 @@ export interface Prediction {
 /** Room for systems of up to `capacity` points. */
 export function createSystemModel(capacity: number): SystemModel {
   const groups = capacity + 1;
-  const smooth = createGroupedModel(3, groups);
-  const broken = createGroupedModel(4, groups);
+  const smooth = createGroupedModel(SMOOTH_COEFFICIENTS, groups);
+  const hinged = createGroupedModel(HINGED_COEFFICIENTS, groups);
+  const broken = createGroupedModel(BROKEN_COEFFICIENTS, groups);
   setScreeningPrior(smooth);
+  setScreeningPrior(hinged);
   setScreeningPrior(broken);
   return {
     rows: {
@@ -52,6 +63,7 @@ export function createSystemModel(capacity: number): SystemModel {
     },
     use: new Uint8Array(capacity),
     smooth,
+    hinged,
     broken,
     groupOfSource: new Map(),
     model: smooth,
@@ -79,7 +91,7 @@ export function fitSources(
   groupOfSource.clear();
   rows.n = points.n;
   target.breakK = fit.breakTemperatureK;
-  target.model = Number.isNaN(target.breakK) ? target.smooth : target.broken;
+  target.model = Number.isNaN(target.breakK) ? target.smooth : fit.breakTested ? target.broken : target.hinged;
   target.centreK = meanOfKept(points.temperatureK, kept, 298.15);
   target.shift = meanOfKept(points.lnValue, kept, 0);
   for (let i = 0; i < points.n; i++) {
@@ -99,7 +111,18 @@ export function fitSources(
   target.model.groups = groupOfSource.size + 1;
   const conflict = fit.agreement === "conflict";
   target.model.offsetVariance.fill(conflict ? 25 : fit.betweenSd ** 2, 0, target.model.groups);
+  if (!conflict) addSharedVariance(target, points);
   fitGroupedModel(target.model, rows, use);
+}
+
+/** Adds to each source's offset the mean variance of ln value that its points share. */
+function addSharedVariance({ rows, model }: SystemModel, points: SystemPoints): void {
+  const count = new Float64Array(model.groups);
+  for (let i = 0; i < points.n; i++) count[rows.group[i]!]!++;
+  for (let i = 0; i < points.n; i++) {
+    const g = rows.group[i]!;
+    model.offsetVariance[g]! += sharedVarianceOf(points, i) / count[g]!;
+  }
 }
 
 function meanOfKept(values: Float64Array, kept: Uint8Array, otherwise: number): number {

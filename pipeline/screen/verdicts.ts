@@ -4,6 +4,14 @@ import type { Curve } from "../records/fits.ts";
 import { type MeasurementTable, RowState } from "../records/measurements.ts";
 import type { Settings } from "../records/settings.ts";
 import type { System } from "../records/systems.ts";
+import {
+  contradictionLimit,
+  intervalOf,
+  type KnownValue,
+  knownFromCurves,
+  lookAtOf,
+  outsideBy,
+} from "./interval-gap.ts";
 import { materialThreshold } from "./material-threshold.ts";
 import { inCelsius, offBy, threeDigits } from "./wording.ts";
 
@@ -58,7 +66,12 @@ function lnValueOf(table: MeasurementTable, row: number, { fitBasis }: System): 
 }
 
 /** Judges a row for which statistics decide later, or at once where no curve can. */
-function candidateOf(table: MeasurementTable, row: number, known: KnownSystem | undefined): Candidate | JudgedRow {
+function candidateOf(
+  table: MeasurementTable,
+  row: number,
+  known: KnownSystem | undefined,
+  settings: Settings,
+): Candidate | JudgedRow {
   const simple = (verdict: Verdict, evidence: string, lookAt: string): JudgedRow => ({
     ...{ row, verdict, evidence, lookAt },
     ...(known === undefined ? {} : { system: known.system.index }),
@@ -66,9 +79,8 @@ function candidateOf(table: MeasurementTable, row: number, known: KnownSystem | 
   if (known === undefined) return simple("new system", "the collection has no measurement of this system", "");
   if (known.curves.length === 0)
     return simple("cannot tell", `no curve to hold it against: ${known.noCurve}`, "the system's page");
-  if (table.state[row] !== RowState.point) {
-    return simple("cannot tell", "a range, or a value that is shown and never fitted, is not judged here", "");
-  }
+  if (table.state[row] === RowState.notFitted)
+    return simple("cannot tell", "a value that is shown and never fitted is not judged here", "");
   const T = table.temperatureK[row] as number;
   const curve = known.curves.find(({ temperatureRangeK: [low, high] }) => T >= low && T <= high);
   if (curve === undefined) {
@@ -79,6 +91,7 @@ function candidateOf(table: MeasurementTable, row: number, known: KnownSystem | 
       "",
     );
   }
+  if (table.state[row] === RowState.interval) return judgeInterval(table, row, known, settings);
   const expectedLn = curve.evaluate(T);
   const deviation = lnValueOf(table, row, known.system) - expectedLn;
   if (!Number.isFinite(deviation)) return simple("cannot tell", "the row has no value on the basis of the curve", "");
@@ -86,6 +99,26 @@ function candidateOf(table: MeasurementTable, row: number, known: KnownSystem | 
   const sd = Math.max(newMeasurement / NORMAL_95, table.relativeU[row] as number);
   const halfWidth = NORMAL_95 * sd;
   return { row, known, expectedLn, halfWidth, deviation, z: deviation / sd, weak: curve.n < FEW_POINTS };
+}
+
+/**
+ * A value known only as a range is off the curve where the curve lies outside it beyond the 95 % limits of a new measurement
+ * and the material threshold; it has no deviation and takes no part in the false-discovery count.
+ */
+function judgeInterval(table: MeasurementTable, row: number, known: KnownSystem, settings: Settings): JudgedRow {
+  const { system, curves } = known;
+  const interval = intervalOf(table, row, system);
+  const { ln, half } = knownFromCurves(curves, interval.temperatureK, table.temperatureU[row] as number) as KnownValue;
+  const outside = outsideBy(interval, ln);
+  const kind = system.identity.aqueousSalt ? "aqueous salt" : "general";
+  const common = { row, system: system.index, expectedLn: ln, halfWidth: half };
+  if (outside === 0) return { ...common, verdict: "fits", evidence: "the curve lies within the range", lookAt: "" };
+  const side = `${outside > 0 ? "above its upper" : "below its lower"} limit`;
+  const told = `the curve lies a factor ${threeDigits(Math.exp(Math.abs(outside)))} ${side}`;
+  if (Math.abs(outside) <= contradictionLimit(interval, { ln, half }, kind, settings)) {
+    return { ...common, verdict: "fits", evidence: `${told}, within what a new measurement may differ`, lookAt: "" };
+  }
+  return { ...common, verdict: "off the curve", evidence: told, lookAt: lookAtOf(interval, outside > 0) };
 }
 
 /**
@@ -99,7 +132,7 @@ export function judgeRows(
   systemOf: (row: number) => KnownSystem | undefined,
   settings: Settings,
 ): JudgedRow[] {
-  const outcomes = Array.from({ length: table.count }, (_, row) => candidateOf(table, row, systemOf(row)));
+  const outcomes = Array.from({ length: table.count }, (_, row) => candidateOf(table, row, systemOf(row), settings));
   const candidates = outcomes.filter((outcome): outcome is Candidate => "known" in outcome);
   const pOf = ({ z }: Candidate) => 2 * normalSurvival(Math.abs(z));
   const limit = benjaminiHochbergThreshold(candidates.map(pOf), settings.false_discovery_rate, candidates.length);

@@ -16,22 +16,21 @@ export interface Converting {
 
 /** Number in a unit that says ln x, the solute weighed as said. */
 export function write(
-  b: Converting,
-  system: number,
+  needs: Needs,
   unit: string,
   lnX: number,
   basis: "anhydrous" | "hydrate equivalent per total solvent",
 ): number {
-  return converter(b, system, unit, basis)!.fromHub(massRatio(b.needs[system]!, Math.exp(lnX)));
+  return converter(needs, unit, basis)!.fromHub(massRatio(needs, Math.exp(lnX)));
 }
 
 const units = new Map<string, ReturnType<typeof parseUnit>>();
 
-function converter(b: Converting, system: number, unit: string, basis: Parameters<typeof hubConverter>[2]) {
+function converter(needs: Needs, unit: string, basis: Parameters<typeof hubConverter>[2]) {
   const parsed = units.get(unit) ?? parseUnit(unit);
   units.set(unit, parsed);
   if (parsed.kind !== "unit") return undefined;
-  const found = hubConverter(parsed.unit, b.needs[system]!, basis);
+  const found = hubConverter(parsed.unit, needs, basis);
   return found.kind === "converter" ? found.converter : undefined;
 }
 
@@ -46,11 +45,11 @@ const moleFraction = (needs: Needs, r: number) => {
 export function setValue(b: Converting, row: number, value: number): void {
   const { table } = b;
   const system = table.identity[row]!;
-  const r = converter(b, system, table.texts.texts[table.reportedUnit[row]!]!, "anhydrous")!.toHub(value);
+  const r = converter(b.needs[system]!, table.texts.texts[table.reportedUnit[row]!]!, "anhydrous")!.toHub(value);
   table.reportedValue[row] = value;
   table.massRatio[row] = r;
   table.moleFraction[row] = moleFraction(b.needs[system]!, r);
-  table.massConcentration[row] = converter(b, system, "mg/mL solution", "anhydrous")!.fromHub(r);
+  table.massConcentration[row] = converter(b.needs[system]!, "mg/mL solution", "anhydrous")!.fromHub(r);
   if (!(r > 0)) table.state[row] = 2;
 }
 
@@ -76,9 +75,9 @@ export function reread(b: Converting, row: number, change: Change): RereadRow | 
   }
   if (basis !== "anhydrous" && b.needs[own]!.crystalMolarMass === undefined) return undefined;
   if (change.kind === "solute basis" && basis === "anhydrous") return undefined;
-  const r = converter(b, system, read, basis)?.toHub(number);
+  const r = converter(b.needs[system]!, read, basis)?.toHub(number);
   if (r === undefined || !(r > 0)) return undefined;
   const lnValue = Math.log(moleFraction(b.needs[system]!, r));
-  const reportedValue = converter(b, own, unit, "anhydrous")!.fromHub(r);
+  const reportedValue = converter(b.needs[own]!, unit, "anhydrous")!.fromHub(r);
   return Number.isFinite(lnValue) && T > 0 ? { lnValue, temperatureK: T, reportedValue } : undefined;
 }

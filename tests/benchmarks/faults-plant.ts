@@ -1,6 +1,6 @@
 import type { RandomSource } from "../../pipeline/numerics/random.ts";
 import type { System } from "../../pipeline/records/systems.ts";
-import { type Converting, setValue, write } from "./faults-conversions.ts";
+import { type Converting, setValue } from "./faults-conversions.ts";
 
 /** An invented world while single faults are planted in it. */
 export interface Planting extends Converting {
@@ -32,23 +32,33 @@ export function faultRow(b: Planting, random: RandomSource, row: number, kind: s
       b.faultOfRow[next] = kind;
       put(other);
     }
-  } else {
-    const same = [...b.systems.keys()].filter(
-      (other) =>
-        other !== system &&
-        b.systems[other]!.identity.solute === b.systems[system]!.identity.solute &&
-        b.systems[other]!.rows.some((r) => table.source[r] === table.source[row]),
-    );
-    const other = same[random.integerBelow(same.length)];
-    if (other !== undefined) {
-      const there = b.systems[other]!.rows.find(
-        (r) => table.source[r] === table.source[row] && Math.abs(table.temperatureK[r]! - table.temperatureK[row]!) < 1,
-      );
-      const unit = table.texts.texts[table.reportedUnit[row]!]!;
-      if (there !== undefined) put(table.reportedValue[there]!);
-      else put(write(b, other, unit, b.truths[other]!(table.temperatureK[row]!) + 0.02 * random.normal(), "anhydrous"));
-    }
-  }
+  } else put(valueBeside(b, random, row, kind));
+}
+
+/** A value that this source has in another solvent, or another proportion of the same: copied, or read off between two. */
+function valueBeside(b: Planting, random: RandomSource, row: number, kind: string): number | undefined {
+  const { table } = b;
+  const system = table.identity[row]!;
+  const T = table.temperatureK[row]!;
+  const { solute, solvent } = b.systems[system]!.identity;
+  const ofSource = (other: number) => b.systems[other]!.rows.filter((r) => table.source[r] === table.source[row]);
+  const beside = [...b.systems.keys()].filter((other) => {
+    const { identity } = b.systems[other]!;
+    const sameSolvents = identity.solvent === solvent;
+    if (other === system || identity.solute !== solute || sameSolvents !== (kind === "composition mix-up"))
+      return false;
+    const there = [...ofSource(other)].map((r) => table.temperatureK[r]!);
+    return there.some((t) => t > T - 1) && there.some((t) => t < T + 1);
+  });
+  const other = beside[random.integerBelow(beside.length)];
+  if (other === undefined) return undefined;
+  const there = [...ofSource(other)].sort((a, c) => table.temperatureK[a]! - table.temperatureK[c]!);
+  const same = there.find((r) => Math.abs(table.temperatureK[r]! - T) < 1);
+  if (same !== undefined) return table.reportedValue[same]!;
+  const above = there.findIndex((r) => table.temperatureK[r]! > T);
+  const [cold, hot] = [there[above - 1]!, there[above]!];
+  const part = (T - table.temperatureK[cold]!) / (table.temperatureK[hot]! - table.temperatureK[cold]!);
+  return table.reportedValue[cold]! ** (1 - part) * table.reportedValue[hot]! ** part;
 }
 
 /** A shift of ln value from 15 % to a factor of 6, log-uniform, to either side. */

@@ -17,6 +17,7 @@ export function screenWorld(world: World): Flag[] {
     ...world,
     fits,
     scales,
+    curves: [],
     about: world.systems.map(() => ({ kind: "general", boilingPointK: Number.NaN, freezingPointK: Number.NaN })),
     settings: DEFAULT_SETTINGS,
   });
@@ -148,7 +149,7 @@ function scoreCause({ world, add, miss }: Scored, flag: Flag, fault: string, lev
     add("cause given to random faults", flag.suspectedCause !== NO_CAUSE);
     add(`  cause given to random faults, ${level}s`, flag.suspectedCause !== NO_CAUSE);
     if (flag.suspectedCause !== NO_CAUSE)
-      miss(`random named ${flag.suspectedCause}: ${flag.causeDetail} ${flag.causeProbability}`);
+      miss(`random ${level} named ${flag.suspectedCause}: ${flag.causeDetail} ${flag.causeProbability}`);
     return;
   }
   const right = flag.suspectedCause === fault;

@@ -3,8 +3,8 @@ import { type Score, scoreWorld, type Tally } from "./faults-score.ts";
 import { makeWorld, USUAL, type WorldOptions } from "./faults-world.ts";
 
 /**
- * Prints what screening finds in invented worlds of known faults: `tsx faults.ts [SEEDS] [SCENE] [FIRST SEED] [--misses]`.
- * The same seeds give the same figures on every machine.
+ * Prints what screening finds in invented worlds of known faults, scene by scene and in all:
+ * `tsx faults.ts [SEEDS] [SCENE] [FIRST SEED] [--misses] [--pooled]`. The same seeds give the same figures on every machine.
  */
 const SCENES: Readonly<Record<string, Partial<WorldOptions>>> = {
   usual: {},
@@ -13,10 +13,15 @@ const SCENES: Readonly<Record<string, Partial<WorldOptions>>> = {
   "few points": { temperatures: [2, 4] },
   "three to five sources": { sources: [3, 5] },
   "many faulty blocks": { sources: [3, 5], blockFaults: 0.15, singleFaults: 0.01 },
+  "forms, bottles, days": { sources: [2, 4], blockFaults: 0.05, rareKinds: true, forms: 0.06, wet: 0.08 },
+  "a source off everywhere": { sources: [2, 4], blockFaults: 0.02, offEverywhere: true },
+  mixtures: { sources: [2, 4], solutes: 15, mixtures: true },
 };
 
 const [seeds = "5", only = "", from = "1"] = process.argv.slice(2).filter((argument) => !argument.startsWith("--"));
 const verbose = process.argv.includes("--misses");
+const pooledOnly = process.argv.includes("--pooled");
+const all: Score = new Map();
 for (const [name, scene] of Object.entries(SCENES)) {
   if (!name.startsWith(only)) continue;
   const score: Score = new Map();
@@ -24,9 +29,18 @@ for (const [name, scene] of Object.entries(SCENES)) {
   const last = Number(from) + Number(seeds) - 1;
   for (let seed = Number(from); seed <= last; seed++)
     scoreWorld(makeWorld({ ...USUAL, ...scene, seed }), score, misses);
-  console.log(`\n${name} (seeds ${from} to ${last})`);
-  for (const [line, tally] of [...score].sort((a, b) => (a[0] < b[0] ? -1 : 1))) console.log(`${line}: ${told(tally)}`);
+  if (!pooledOnly) print(`${name} (seeds ${from} to ${last})`, score);
+  for (const [line, { hits, cases }] of score) {
+    const tally = all.get(line) ?? { hits: 0, cases: 0 };
+    all.set(line, { hits: tally.hits + hits, cases: tally.cases + cases });
+  }
   if (verbose) for (const miss of misses) console.log(`- ${miss}`);
+}
+print("all scenes", all);
+
+function print(name: string, score: Score): void {
+  console.log(`\n${name}`);
+  for (const [line, tally] of [...score].sort((a, b) => (a[0] < b[0] ? -1 : 1))) console.log(`${line}: ${told(tally)}`);
 }
 
 /** `97 of 100 (97.00 %, 91.48 to 99.38)`: share with its 95 % limits by Clopper and Pearson. */

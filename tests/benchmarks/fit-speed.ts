@@ -9,6 +9,7 @@ import { uniformFloat64 } from "pure-rand/distribution/uniformFloat64";
 import { xoroshiro128plus } from "pure-rand/generator/xoroshiro128plus";
 import { isCurve, publishedCurve } from "../../pipeline/fit/published-curve.ts";
 import { robustFits } from "../../pipeline/fit/robust-fit.ts";
+import { sourceStandings } from "../../pipeline/fit/source-standing.ts";
 import type { SystemPoints } from "../../pipeline/records/systems.ts";
 import { plainPoints, plainSystem } from "../fit/plain-system.ts";
 
@@ -63,12 +64,21 @@ const limits = timed(() => {
   for (const outcome of curves) if (isCurve(outcome)) for (let T = 280; T < 330; T += 5) outcome.limits(T);
 });
 
+const standings = timed(() => {
+  for (const [s, robust] of fits.entries()) {
+    const outcome = curves[s];
+    const subject = { system: plainSystem(robust.system), meltingPointK: Number.NaN };
+    sourceStandings(robust, outcome !== undefined && isCurve(outcome) ? [outcome] : [], subject, context);
+  }
+});
+
 const total = screening + curve;
 console.log(`fit of a system of ${POINTS} points, CPU milliseconds (Node ${process.version}, ${SYSTEMS} systems)`);
 console.log(`  robust screening, three passes            ${screening.toFixed(4)}`);
 console.log(`  published curve, choice of three models   ${curve.toFixed(4)}`);
 console.log(`  the same with lambda-h besides            ${withLambdaH.toFixed(4)}`);
 console.log(`  limits at ten temperatures                ${limits.toFixed(4)}`);
+console.log(`  how two sources stand (asked for only)    ${standings.toFixed(4)}`);
 console.log(`  screening and curve                       ${total.toFixed(4)}  (budget ${BUDGET_MS})`);
 printPeer("Python, numpy.linalg.lstsq of three models", "python3", ["-c", pythonProgram()]);
 printPeer("R, lm() of three models", "Rscript", ["-e", rProgram()]);

@@ -3,7 +3,8 @@
  *
  * Every edition holds ten systems of each kind: 6, 10, 20 or 40 points by 1 to 4 of its twelve sources. The truth is a
  * van 't Hoff line with a heat-capacity term in two of three systems; sources scatter by 1 to 3 % and lie 2.5 to 4 %
- * (standard deviation) off the truth; one point in 25 is off by a blunder. The program sees none of this: it estimates
+ * (standard deviation) off the truth; every third block has besides a stated uncertainty of 1 to 3 % that its points share
+ * (a density, a molar mass), drawn once for the block; one point in 25 is off by a blunder. The program sees none of this: it estimates
  * the scales from the edition, decides which points stay, chooses the model and gives limits. Counted is how often the
  * true curve, and a measurement by a source not yet seen, lie inside them, at eleven temperatures of the fitted range.
  */
@@ -21,6 +22,8 @@ const SYSTEMS_PER_KIND = 10;
 const SOURCES_PER_EDITION = 12;
 const PLACES = 11;
 const BLUNDER_PROBABILITY = 0.04;
+/** Stated repeatability of every point, standard uncertainty of ln value. */
+const STATED_U = 0.02;
 
 /** What the simulation knows and the program does not. */
 interface Truth {
@@ -91,12 +94,14 @@ function drawPoints(truth: Truth, noise: Float64Array, between: number): SystemP
   const k = SOURCES[truth.kind % SOURCES.length] as number;
   const sources = drawSources(k);
   const [temperatureK, lnValue, source] = [new Float64Array(n), new Float64Array(n), new Int32Array(n)];
+  const sharedLnU = new Float64Array(n);
   let at = 0;
   for (let b = 0; b < k; b++) {
     const count = Math.floor(n / k) + (b < n % k ? 1 : 0);
     const width = k === 1 ? 55 : uniform(30, 55);
     const low = k === 1 ? 278.15 : uniform(278.15, 333.15 - width);
-    const offset = between * gaussian();
+    const shared = sharedUncertainty();
+    const offset = between * gaussian() + shared * gaussian();
     const s = sources[b] as number;
     for (let i = 0; i < count; i++, at++) {
       const T = low + (count === 1 ? uniform(0, width) : (width * i) / (count - 1)) + uniform(-0.5, 0.5);
@@ -104,14 +109,21 @@ function drawPoints(truth: Truth, noise: Float64Array, between: number): SystemP
       temperatureK[at] = T;
       lnValue[at] = truth.lnValue(T) + offset + (noise[s] as number) * gaussian() + blunder;
       source[at] = s;
+      sharedLnU[at] = shared;
     }
   }
   return {
     ...{ n, temperatureK, lnValue, source, row: Int32Array.from({ length: n }, (_, i) => i) },
     temperatureU: new Float64Array(n).fill(0.1),
-    lnU: new Float64Array(n).fill(0.02),
+    lnU: sharedLnU.map((shared) => Math.hypot(STATED_U, shared)),
+    sharedLnU,
     level: new Float64Array(n).fill(50),
   };
+}
+
+/** Standard uncertainty of ln value that the points of a block share. */
+function sharedUncertainty(): number {
+  return uniform() < 1 / 3 ? uniform(0.01, 0.03) : 0;
 }
 
 function drawSources(count: number): number[] {
@@ -137,7 +149,7 @@ function countSystem(fit: RobustFit, scales: PooledScales, truth: Truth, between
     const T = Math.min(high, low + ((high - low) * place) / (PLACES - 1));
     const limits = curve.limits(T);
     const error = truth.lnValue(T) - curve.evaluate(T);
-    const measured = error + between * gaussian() + uniform(0.01, 0.03) * gaussian();
+    const measured = error + between * gaussian() + sharedUncertainty() * gaussian() + uniform(0.01, 0.03) * gaussian();
     if (Math.abs(error) <= limits.curve) kind.curve[place]!++;
     if (Math.abs(measured) <= limits.newMeasurement) kind.newMeasurement[place]!++;
     kind.halfWidth += limits.curve / PLACES;

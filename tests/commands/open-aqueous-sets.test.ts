@@ -80,6 +80,28 @@ describe.skipIf(absent)("nine open aqueous sets, merged", () => {
     expect(listed.length).toBe(usable - 1);
   });
 
+  test("re-report one another, and what is one measurement counts once", () => {
+    const told = readTable(out, "flags.csv").rows.filter(({ code }) => code === "re-reporting-source");
+    const pairs = told.flatMap(({ source = "", evidence = "" }) =>
+      [...evidence.matchAll(/(\d+) of (\d+) of (set-[a-i]) \(by chance about (\d+)\)/g)].map(
+        ([, equal, compared, from, chance]) => ({
+          pair: `${from} ${source}`,
+          ...{ equal: Number(equal), compared: Number(compared), chance: Number(chance) },
+        }),
+      ),
+    );
+    console.info(
+      `aqueous sets, equal of compared: ${pairs.map(({ pair, equal, compared }) => `${pair} ${equal}/${compared}`).join(", ")}`,
+    );
+    // Set D is mostly made of set B, as the authors of the collection say of values within 0.01 log unit.
+    expect(pairs.find(({ pair }) => pair === "set-b set-d")?.equal).toBeGreaterThan(1_600);
+    expect(pairs.reduce((sum, { equal }) => sum + equal, 0)).toBeGreaterThan(2_800);
+    for (const { equal, chance } of pairs) expect(chance).toBeLessThanOrEqual(0.1 * equal + 1);
+    // 3,292 solutes stand in several sets; a third of them rest on one measurement written more than once.
+    const several = readTable(out, "curves.csv").rows.filter(({ n_sources }) => Number(n_sources) > 1);
+    expect(several.length).toBeLessThan(2_400);
+  });
+
   test("take well under 20 CPU seconds", () => {
     expect(cpuSeconds).toBeLessThan(20);
   });

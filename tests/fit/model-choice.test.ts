@@ -55,7 +55,10 @@ test("With too few points for AICc the fewest coefficients are taken", () => {
   expect(runnersUp[0]?.aicc).toBeNaN();
 });
 
-const range = { n: 9, sources: [0], distinctTemperatures: 9, lowK: 280, highK: 330, centreK: 304, unusable: 0 };
+const range = {
+  ...{ n: 9, sources: [0], perLaboratory: [1], sharedVariance: [0] },
+  ...{ distinctTemperatures: 9, lowK: 280, highK: 330, centreK: 304, unusable: 0 },
+};
 
 test("A turn inside the data is passed over where the scatter explains it and believed where it does not", () => {
   const turning: Candidate = {

@@ -8,11 +8,15 @@ interface Case extends Partial<Omit<GradeEvidence, "temperatureK">> {
 const SPRING = [5, 15, 25, 35, 45];
 const CONFIRMED = "confirmed by head of quality on 2026-04-01: agreed (R0007)";
 
+/** A system without a point. */
+const NOTHING = { celsius: [], points: 0, kept: 0, judged: 0, withinUncertainty: 0, laboratories: 0, methods: 0 };
+
 /** The grade of a system that meets every criterion, some of it changed: ten points of two laboratories that agree. */
 function graded({ celsius = SPRING, ...given }: Case = {}) {
   return proposeGrade({
     ...{ points: 10, kept: 10, withinUncertainty: 10, judged: 10, agreement: "agreed" },
-    ...{ laboratories: 2, methods: 2, solidChecked: 10, openFlags: 0, confirmedBy: undefined, ...given },
+    ...{ laboratories: 2, methods: 2, solidChecked: 10, openFlags: 0, confirmedBy: undefined },
+    ...{ ranges: 0, notFitted: 0, setAside: 0, ...given },
     temperatureK: Float64Array.from(celsius, (t) => t + 273.15),
   });
 }
@@ -68,12 +72,28 @@ describe("the proposed grade", () => {
   });
 
   test("is rejected where no point is left to fit, or none is kept", () => {
-    const nothing = { celsius: [], points: 0, kept: 0, judged: 0, withinUncertainty: 0, laboratories: 0, methods: 0 };
-    expect(graded(nothing)).toMatchObject({ grade: "rejected", reasons: expect.arrayContaining(["no point to fit"]) });
-    expect(graded({ kept: 0 })).toMatchObject({
+    expect(graded({ ...NOTHING, setAside: 3 })).toMatchObject({
+      grade: "rejected",
+      reasons: expect.arrayContaining(["no point to fit: 3 rows set aside by a ruling"]),
+    });
+    expect(graded({ kept: 0, ranges: 4 })).toMatchObject({
       grade: "rejected",
       reasons: expect.arrayContaining(["no point is kept"]),
     });
+  });
+
+  test("is doubtful where there is no number, and says what there is instead", () => {
+    expect(graded({ ...NOTHING, ranges: 2, openFlags: 1 })).toEqual({
+      grade: "doubtful",
+      reasons: ["no number to evaluate: only 2 ranges", "1 open flag needs a person"],
+    });
+    expect(graded({ ...NOTHING, ranges: 1, notFitted: 3, confirmedBy: CONFIRMED })).toEqual({
+      grade: "doubtful",
+      reasons: ["no number to evaluate: only 1 range and 3 values shown and never fitted", "no open flag"],
+    });
+    expect(graded({ ...NOTHING, notFitted: 1 }).reasons[0]).toBe(
+      "no number to evaluate: 1 value shown and never fitted",
+    );
   });
 });
 

@@ -47,7 +47,7 @@ describe("the part of an uncertainty that the rows of a source share", () => {
 
   test("holds no density that was measured on the very solution: that is the row's own", async () => {
     const measured = { ...columns, solution_density: { column: "d", unit: "g/mL" } };
-    const { table } = await normaliseTable("s,l,T,c,u,d\nparacetamol,ethanol,25,200,1,0.86\n", { columns: measured });
+    const { table } = await normaliseTable("s,l,T,c,u,d\nparacetamol,absolute ethanol,25,200,1,0.86\n", { columns: measured });
     // What is left are the two molar masses.
     expect(table.sharedU[0]).toBeLessThan(1e-4);
     expect(table.relativeU[0]).toBeGreaterThan(0.01);
@@ -66,7 +66,7 @@ describe("the part of an uncertainty that the rows of a source share", () => {
 
   test("of a mass per mass is nothing but molar masses", async () => {
     const mass = { ...columns, solubility: { column: "c", unit: "g/100 g solvent" } };
-    const { table } = await normaliseTable("s,l,T,c,u\nparacetamol,ethanol,25,20,1\n", { columns: mass });
+    const { table } = await normaliseTable("s,l,T,c,u\nparacetamol,absolute ethanol,25,20,1\n", { columns: mass });
     expect(table.sharedU[0]).toBeGreaterThan(0);
     expect(table.sharedU[0]).toBeLessThan(1e-4);
   });

@@ -44,6 +44,43 @@ describe("published consensus values", () => {
     expect(relativeError(mean, 26.7121287483)).toBeLessThan(1e-11);
   });
 
+  test("the heats of vaporisation of cadmium give the DerSimonian-Laird value 0.0413 and 26.767 too", () => {
+    // R metafor 3.8-1, rma(method = "DL") of the same five values.
+    const { betweenVariance, mean, standardError, cochranQ } = derSimonianLaird(
+      [27.044, 26.022, 26.34, 26.787, 26.796],
+      [0.003, 0.076, 0.464, 0.003, 0.014],
+    );
+    expect(relativeError(betweenVariance, 0.0412699114641)).toBeLessThan(1e-9);
+    expect(relativeError(mean, 26.7674823295)).toBeLessThan(1e-11);
+    expect(relativeError(standardError, 0.116423259544)).toBeLessThan(1e-9);
+    expect(relativeError(cochranQ, 22.6310745873)).toBeLessThan(1e-9);
+  });
+
+  test("two laboratories of Paule and Mandel give tau^2 112.74 and 209.04, the means of 6 and 2 results", () => {
+    // Paule and Mandel, J. Res. Natl. Bur. Stand. 87 (1982) 377-385; digits from R metafor 3.8-1.
+    const { betweenVariance, mean, standardError } = pauleMandel([201.533, 216.55], [0.154 ** 2 / 6, 0.25 ** 2 / 2]);
+    expect(relativeError(betweenVariance, 112.737543167)).toBeLessThan(1e-9);
+    expect(relativeError(mean, 209.040591119)).toBeLessThan(1e-9);
+    expect(relativeError(standardError, 7.50849994499)).toBeLessThan(1e-9);
+  });
+
+  test("the eleven results for lead in wine give both estimates, far apart for the sake of one result", () => {
+    // CCQM-K30, Hearn et al., Metrologia 45 (2008) Tech. Suppl. 08001; digits from R metafor 3.8-1.
+    const y = [1.62, 2.893, 2.936, 2.94, 2.96, 2.98, 3, 3.001, 3.07, 3.13, 7.71];
+    const v = [
+      ...[0.001936, 0.000426723092861, 0.00015625, 0.00027225, 0.00111111111111, 0.0101007550314],
+      ...[0.0025, 0.004624, 0.007225, 0.0036, 0.9801],
+    ];
+    const [pm, dl] = [pauleMandel(y, v), derSimonianLaird(y, v)];
+    expect(relativeError(pm.betweenVariance, 1.52721063981)).toBeLessThan(1e-9);
+    expect(relativeError(pm.mean, 3.13223996212)).toBeLessThan(1e-9);
+    expect(relativeError(pm.standardError, 0.379784326222)).toBeLessThan(1e-9);
+    expect(relativeError(dl.betweenVariance, 0.0830452950532)).toBeLessThan(1e-9);
+    expect(relativeError(dl.mean, 2.88907815819)).toBeLessThan(1e-9);
+    expect(relativeError(dl.standardError, 0.0924330193945)).toBeLessThan(1e-9);
+    expect(relativeError(dl.cochranQ, 912.474034329)).toBeLessThan(1e-9);
+  });
+
   interface Estimate {
     tau2: number;
     estimate: number;

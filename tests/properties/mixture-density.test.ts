@@ -47,6 +47,18 @@ describe("Densities of solvent mixtures", () => {
     expect((aqueous?.standardUncertainty ?? 0) / (aqueous?.value ?? 1)).toBeGreaterThan(0.015);
   });
 
+  test("a trace of a third component leaves what is known of the other two", () => {
+    // OIML R 22: w = 0.7 of ethanol, 867.611 kg/m3 at 20 °C; ideal mixing would give 842.2.
+    const { value, standardUncertainty } = mixture({ ethanol: 0.6993, water: 0.2997, acetone: 0.001 }, 293.15) ?? {
+      value: Number.NaN,
+      standardUncertainty: Number.NaN,
+    };
+    expect(Math.abs(value - 867.55)).toBeLessThan(0.2);
+    expect(standardUncertainty / value).toBeLessThan(0.001);
+    const even = mixture({ ethanol: 0.3, water: 0.3, acetone: 0.4 }, 293.15);
+    expect((even?.standardUncertainty ?? 0) / (even?.value ?? 1)).toBeGreaterThan(0.015);
+  });
+
   test("a component of unknown density leaves the mixture unknown", () => {
     expect(mixture({ ethanol: 0.5, "diethyl ether": 0.5 }, 600)).toBeUndefined();
     expect(mixtureDensity([], 293.15)).toBeUndefined();

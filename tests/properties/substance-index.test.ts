@@ -74,6 +74,12 @@ describe("Forms are resolved to their unsolvated substance", () => {
     ["paracetamol form II", "paracetamol", "form II", 151.165],
     ["α-lactose monohydrate", "lactose", "monohydrate", 360.312],
     ["caffeine monohydrate", "caffeine", "hydrate", 208.606],
+    ["Theophylline (monohydrate)", "theophylline", "monohydrate", 198.182],
+    ["sulfamerazine, form II", "sulfamerazine", "form II", 264.303],
+    ["Sulfamerazine (II)", "sulfamerazine", "form II", 264.303],
+    ["anhydrous theophylline", "theophylline", "anhydrous", 180.167],
+    ["γ-Glycine", "glycine", "gamma", 75.067],
+    ["alpha-glycine", "glycine", "alpha", 75.067],
   ])("%s is %s, %s", (text, name, form, molarMass) => {
     const resolved = programIndex.resolve(text);
     expect(resolved?.substance.name).toBe(name);
@@ -92,6 +98,27 @@ describe("Forms are resolved to their unsolvated substance", () => {
   test("a hydrate that is not listed is not made up", () => {
     expect(programIndex.resolve("NaCl·7H2O")).toBeUndefined();
   });
+
+  test.each(["beta-alanine", "paracetamol (form IX)", "paracetamol, see note", "anhydrous paracetamol"])(
+    "%s names no listed form and is not made one",
+    (text) => {
+      expect(programIndex.resolve(text)).toBeUndefined();
+    },
+  );
+
+  test.each(["Form I", "i", "polymorph I", "modification I", "FORM-I", "Form (I)"])(
+    "%s is one listed form, however it is written",
+    (text) => {
+      expect(programIndex.formOf(substance("paracetamol"), text)?.form).toBe("form I");
+    },
+  );
+
+  test.each(["rac-ibuprofen", "(±)-ibuprofen", "(+/-)-Ibuprofen", "DL-ibuprofen", "(RS)-ibuprofen"])(
+    "%s is the racemate that is listed under another prefix",
+    (text) => {
+      expect(programIndex.resolve(text)?.substance.name).toBe("ibuprofen");
+    },
+  );
 
   test("a form is found by its short name", () => {
     expect(programIndex.formOf(substance("paracetamol"), "II")?.form).toBe("form II");

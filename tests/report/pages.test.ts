@@ -87,7 +87,7 @@ describe.skipIf(!hasChromium)("the report in a browser", () => {
     await page.setViewportSize({ width: 703, height: 990 });
     await page.emulateMedia({ media: "print", colorScheme: "dark" });
     expect(await page.locator("nav:visible").count()).toBe(0);
-    expect(await page.locator("svg.plot:visible").count()).toBe(3);
+    expect(await page.locator("svg.plot:visible").count()).toBe(5);
     expect(await overflowOf(page)).toBeLessThanOrEqual(0);
     expect(await page.evaluate("getComputedStyle(document.body).backgroundColor")).toBe("rgb(255, 255, 255)");
     await page.context().close();

@@ -51,7 +51,8 @@ describe("the schemas", () => {
   test("cover every file kind of a collection, of the tables and of the machine-readable results", () => {
     expect(schemas.map(({ name }) => name)).toEqual([
       ...["check-result", "collection", "compare-result", "convert-result", "curves", "curves-json", "edition"],
-      ...["flags", "grid", "measurements", "merge-result", "planning-cooling", "property-values", "publish-result"],
+      ...["flags", "grid", "measurements", "merge-result", "mixtures", "planning-cooling", "property-values"],
+      "publish-result",
       ...["refused", "rule-result", "rulings", "solid-forms", "source-card", "sources", "substances"],
       ...["substances-out", "summary", "systems"],
     ]);
@@ -119,7 +120,7 @@ describe("the schemas", () => {
 
   test("say of each schema of a table's row which columns are never empty", () => {
     const tables = schemas.filter(({ schema }) => isTable(schema));
-    expect(tables).toHaveLength(13);
+    expect(tables).toHaveLength(14);
     for (const { name, schema } of tables) expect(schema.required?.length ?? 0, name).toBeGreaterThan(0);
   });
 });

@@ -13,7 +13,7 @@ function suspects(rows: readonly number[], unit = "g/100 g solvent"): Suspects {
     soluteMolarMass: 180,
     otherCompositions: [{ system: 9, name: "solvent A + solvent B, 0.4", sameSource: true }],
     otherReadingK: (row) => (row === 1 ? 301 : undefined),
-    numberStandsIn: (_, system) => system === 4,
+    cellIn: (_, system) => (system === 4 ? "the same number" : "nothing"),
     temperatureK: (row) => 280 + 10 * row,
     reportedValue: (row) => values[row]!,
     neighbour: (row, step) => (row + step in values ? row + step : undefined),
@@ -127,9 +127,17 @@ describe("the changes that undo a cause", () => {
     expect(changes("cloud point for clear point", suspects([0]), 0)).toEqual([undefined]);
   });
 
-  test("hold it for likelier that a value was taken from a column in which the very number stands", () => {
-    const ways = EVERY_CAUSE.find(({ name }) => name === "value of another solvent")!.explanations(suspects([1]));
-    expect(ways.map(({ odds }) => odds?.(1))).toEqual([30, 1]);
+  test("hold it for likelier that a value was taken from a column in which the very number stands, by all its digits", () => {
+    const ways = (value: number) =>
+      EVERY_CAUSE.find(({ name }) => name === "value of another solvent")!.explanations({
+        ...suspects([1]),
+        reportedValue: () => value,
+      });
+    // Half a unit of the last digit is 1/30 of 15 and 1/302 of 15.1; 0.7 of copies stand as they were.
+    expect(ways(15).map(({ exactly }) => exactly?.(1))).toEqual([0.7 * 15, undefined]);
+    expect(ways(15.1)[0]!.exactly?.(1)).toBeCloseTo(0.7 * 151, 9);
+    // No number is finer than 0.05 %, whatever its digits.
+    expect(ways(15.123456)[0]!.exactly?.(1)).toBeCloseTo(0.7 / 5e-4, 9);
     expect(changes("composition mix-up", suspects([1]), 1)).toEqual([{ kind: "solvent", system: 9 }]);
   });
 

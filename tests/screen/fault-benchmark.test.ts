@@ -4,7 +4,8 @@ import { makeWorld, USUAL } from "../benchmarks/faults-world.ts";
 
 /**
  * A quick run of the fault benchmark: two small invented worlds with faults enough to count. Floors lie below the figures
- * of the full run (tests/benchmarks/README.md) by what so few cases scatter.
+ * of the full run (tests/benchmarks/README.md) by what so few cases scatter; misses come in clusters, for a system whose
+ * sources are in conflict hides all single faults in it.
  */
 test("of known faults in invented worlds nearly all are found, nearly no clean row is flagged, causes are mostly right", () => {
   const score: Score = new Map();
@@ -14,14 +15,14 @@ test("of known faults in invented worlds nearly all are found, nearly no clean r
     expect(cases, name).toBeGreaterThanOrEqual(least);
     return hits / cases;
   };
-  expect(share("recall, points")).toBeGreaterThanOrEqual(0.97);
+  expect(share("recall, points")).toBeGreaterThanOrEqual(0.96);
   expect(share("recall, blocks")).toBeGreaterThanOrEqual(0.95);
-  expect(share("recall, bent series")).toBeGreaterThanOrEqual(0.75);
+  expect(share("recall, bent series")).toBeGreaterThanOrEqual(0.85);
   expect(share("two-source conflicts reported", 8)).toBeGreaterThanOrEqual(0.85);
   expect(share("false flags, clean rows", 3000)).toBeLessThanOrEqual(0.002);
-  expect(share("false flags, transition rows", 300)).toBeLessThanOrEqual(0.015);
-  expect(share("cause right")).toBeGreaterThanOrEqual(0.82);
-  expect(share("cause given to random faults")).toBeLessThanOrEqual(0.18);
-  expect(share("clean rows given a cause", 3000)).toBeLessThanOrEqual(0.0015);
-  expect(share("proposed value within 5 %")).toBeGreaterThanOrEqual(0.95);
+  expect(share("false flags, transition rows", 300)).toBeLessThanOrEqual(0.012);
+  expect(share("cause right")).toBeGreaterThanOrEqual(0.86);
+  expect(share("cause given to random faults")).toBeLessThanOrEqual(0.16);
+  expect(share("clean rows given a cause", 3000)).toBeLessThanOrEqual(0.001);
+  expect(share("proposed value within 5 %")).toBeGreaterThanOrEqual(0.97);
 });

@@ -1,6 +1,6 @@
 import { describe, expect, test } from "vitest";
+import { relativeRounding } from "../../pipeline/numerics/decimal-rounding.ts";
 import { codeOf, createMeasurementTable } from "../../pipeline/records/measurements.ts";
-import { roundingOf } from "../../pipeline/screen/rounding.ts";
 import { screen } from "../../pipeline/screen/screen.ts";
 import { thresholdKind } from "../../pipeline/screen/threshold-kind.ts";
 import { inputOf, type Reading, screened, series, thousandX } from "./support.ts";
@@ -63,10 +63,10 @@ describe("copies", () => {
 
 describe("half a unit of the last digit", () => {
   test("is taken from the number as written", () => {
-    expect(roundingOf(12.5)).toBeCloseTo(0.05 / 12.5, 12);
-    expect(roundingOf(-0.0042)).toBeCloseTo(0.00005 / 0.0042, 12);
-    expect(roundingOf(250)).toBeCloseTo(5 / 250, 12);
-    expect(roundingOf(3e-7)).toBeCloseTo(0.5 / 3, 12);
+    expect(relativeRounding(12.5)).toBeCloseTo(0.05 / 12.5, 12);
+    expect(relativeRounding(-0.0042)).toBeCloseTo(0.00005 / 0.0042, 12);
+    expect(relativeRounding(250)).toBeCloseTo(5 / 250, 12);
+    expect(relativeRounding(3e-7)).toBeCloseTo(0.5 / 3, 12);
   });
 });
 

@@ -178,7 +178,7 @@ describe("two sources that disagree", () => {
     const flags = screen(input);
     expect(flags).toMatchObject([{ scope: "system", code: "sources-disagree", severity: "blocking", system: 0 }]);
     expect(flags[0]?.evidence).toMatch(
-      /^no majority among the sources: at 30\.0 °C a \(5 points\) reads 2\d\.\d 1000 x; b \(5 points\) reads 3\d(\.\d)? 1000 x, \d\d % above the first$/,
+      /^no majority among the sources: at 30\.0 °C a \(5 points\) reads 2\d\.\d 1000 x \(x = 0\.02\d+, 6\.\d+ g\/100 g solvent\); b \(5 points\) reads 3\d(\.\d)? 1000 x \(x = 0\.03\d+, 1\d(\.\d)? g\/100 g solvent\), \d\d % above the first$/,
     );
     expect(flags[0]).not.toHaveProperty("suspectedCause");
   });
@@ -202,7 +202,7 @@ describe("notices", () => {
         code: "exact-repeat",
         severity: "notice",
         row: 5,
-        evidence: "the same value at the same temperature stands in line 3 of this source",
+        evidence: "the same value at the same temperature stands in line 3 of this source: it counts once",
       },
     ]);
   });

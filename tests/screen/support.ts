@@ -1,4 +1,5 @@
 import { robustFits } from "../../pipeline/fit/robust-fit.ts";
+import { writtenValues } from "../../pipeline/fit/written-values.ts";
 import type { Flag } from "../../pipeline/records/fits.ts";
 import { DEFAULT_SETTINGS } from "../../pipeline/records/generated/collection.ts";
 import { codeOf, createMeasurementTable } from "../../pipeline/records/measurements.ts";
@@ -99,6 +100,7 @@ export function inputOf(systems: readonly Sources[], about: More = {}): ScreenIn
     made.map(() => ({ aqueousSalt: false })),
     sourceNames.length,
     {
+      written: writtenValues(table, made, points),
       threshold: (system, point) =>
         materialThreshold(points[system]!.level[point]!, points[system]!.lnU[point]!, "general", DEFAULT_SETTINGS),
     },
@@ -121,6 +123,7 @@ export function inputOf(systems: readonly Sources[], about: More = {}): ScreenIn
     return undefined;
   };
   return {
+    curves: [],
     ...{ table, systems: made, fits, scales, sourceNames, reread, settings: DEFAULT_SETTINGS },
     inReportedUnit: (_, lnValue) => 1000 * Math.exp(lnValue),
     about: made.map(

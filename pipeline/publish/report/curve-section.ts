@@ -1,4 +1,4 @@
-import type { Curve, CurveModel } from "../../records/fits.ts";
+import type { Curve, CurveModel, Transition } from "../../records/fits.ts";
 import type { GridRow } from "../../records/generated/grid.ts";
 import { celsius, fixed, plainNumber, significant } from "./figures.ts";
 import { type Html, html, raw, short } from "./html.ts";
@@ -72,13 +72,14 @@ function idealFacts({ edition, system }: SystemView): Html {
   return html`<dt>Ideal solubility at ${celsius(ideal.temperatureK)} °C</dt><dd><var>x</var> ${span(ideal.low, ideal.high)}; activity coefficient ${span(ideal.gammaLow, ideal.gammaHigh)} (without and with the full heat-capacity term)</dd>`;
 }
 
-function curvePart(curve: Curve, more: Html): Html {
+function curvePart(curve: Curve, curves: number, more: Html): Html {
   const letter = curve.fitBasis === "ln x" ? "x" : "r";
   const [low, high] = curve.temperatureRangeK;
   const enthalpy = curve.dissolutionEnthalpy;
   const scatter = curve.withinSd === undefined ? "too few points to tell" : `${significant(100 * curve.withinSd, 3)} %`;
   const between = `${significant(100 * curve.betweenSd, 3)} % (${curve.betweenDegreesOfFreedom > 0 ? `pooled over the collection, ${significant(curve.betweenDegreesOfFreedom, 3)} degrees of freedom` : "default setting: too few sources to estimate it"})`;
-  return html`<h3>${curve.model}, ${celsius(low)} to ${celsius(high)} °C</h3>
+  const branch = curves > 1 ? `Branch ${curve.branch}: ` : "";
+  return html`<h3>${branch}${curve.model}, ${celsius(low)} to ${celsius(high)} °C</h3>
 <p class="eq">${equationHtml(curve.model, letter)}, <var>T</var> in K</p>
 <div class="cols"><div>${wideTable(`Coefficients, ${curve.model}`, coefficientTable(curve))}
 <p>In a spreadsheet, <code>t</code> in °C, gives <var>${letter}</var>: <code>${spreadsheetFormula(curve)}</code></p></div>
@@ -112,11 +113,18 @@ function valueTable(grid: readonly GridRow[]): Html {
   return html`<table><caption>The curve at round temperatures inside its range; nothing is extrapolated${step > 1 ? `; every ${step}th row of grid.csv` : ""}</caption><thead><tr><th scope="col" class="n">°C</th><th scope="col" class="n">x</th><th scope="col" class="n">g/100 g solvent</th><th scope="col" class="n">95 % limits, curve</th><th scope="col" class="n">95 % limits, new measurement</th><th scope="col" class="n">mg/mL solution</th>${gaps ? html`<th scope="col">Gap</th>` : ""}</tr></thead><tbody>${rows}</tbody></table>`;
 }
 
+/** Where the two branches of a system meet, in words. */
+function transitionWords(transition: Transition | undefined): Html {
+  if (transition === undefined) return html``;
+  const { temperatureK, low, high, probability } = transition;
+  return html`<p>The solid in equilibrium changes at <strong>${celsius(temperatureK)} °C</strong> (95 % limits ${celsius(low)} to ${celsius(high)} °C): two branches meet there, and the slope falls on heating. Probability of one smooth curve, by parametric bootstrap: ${probability.toFixed(3)}. Which form each branch is, solubility alone does not tell.</p>`;
+}
+
 /** Curve with equation, coefficients, quality, runners-up, and values at round temperatures; or why there is none. */
 export function curveSection(view: SystemView, grid: readonly GridRow[]): Html {
   const { fit } = view;
   const curves = fit?.curves ?? [];
   if (curves.length === 0) return html`<h2 id="curve">Curve</h2><p>No curve: ${fit?.noCurve ?? "not fitted"}.</p>`;
   const values = grid.length === 0 ? "" : wideTable("Values at round temperatures", valueTable(grid));
-  return html`<h2 id="curve">Curve</h2>${curves.map((curve, i) => curvePart(curve, i === 0 ? idealFacts(view) : html``))}${values}`;
+  return html`<h2 id="curve">Curve</h2>${transitionWords(fit?.transition)}${curves.map((curve, i) => curvePart(curve, curves.length, i === 0 ? idealFacts(view) : html``))}${values}`;
 }

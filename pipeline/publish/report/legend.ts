@@ -1,3 +1,4 @@
+import { campKey } from "./camp-layer.ts";
 import { counted, sourceLetter } from "./figures.ts";
 import { type Html, html, raw, short } from "./html.ts";
 import { markPicture } from "./marks.ts";
@@ -41,7 +42,7 @@ export function legend(view: SystemView): Html {
           ([svg, text]) =>
             html`<li><svg class="key" viewBox="-11 -11 22 22" width="22" height="22" aria-hidden="true">${raw(svg)}</svg><span>${text}</span></li>`,
         );
-  return html`<ul class="legend">${sources}</ul><ul class="legend">${states}${ringed}${lines}</ul>`;
+  return html`<ul class="legend">${sources}</ul><ul class="legend">${states}${ringed}${lines}${campKey(view)}</ul>`;
 }
 
 const intervalKey = raw(

@@ -67,11 +67,37 @@ export function markPicture(source: number, state: PointState, flagged = false):
   return html`<svg class="key" viewBox="-11 -11 22 22" width="22" height="22" aria-hidden="true"><g class="${pointClass(source, state)}">${pointMark(source, state, flagged)}</g></svg>`;
 }
 
-/** An interval from `low` to `high` (heights, NaN where open) at one place: a bar with caps, or an arrow where one side is open. */
-export function intervalMark(x: number, low: number, high: number): Html {
+/** Length of the arrow of an open side, and the least that still shows one. */
+const ARROW = 24;
+const SHORT_ARROW = 9;
+
+/**
+ * An interval from `low` to `high` (heights, NaN where open) at one place: a bar with caps, or an arrow where one side is
+ * open. Nothing is drawn beyond the edges: a bar that goes on ends there without a cap.
+ */
+export function intervalMark(x: number, low: number, high: number, { top, bottom }: Edges): Html {
   const at = px(x);
   const cap = (y: number) => `M${at - 5},${px(y)}h10`;
-  if (Number.isNaN(low)) return raw(`<path d="${cap(high)}M${at},${px(high)}v24m-4,-6l4,6l4,-6"/>`);
-  if (Number.isNaN(high)) return raw(`<path d="${cap(low)}M${at},${px(low)}v-24m-4,6l4,-6l4,6"/>`);
-  return raw(`<path d="${cap(low)}M${at},${px(low)}V${px(high)}${cap(high)}"/>`);
+  const arrow = (y: number, room: number, way: 1 | -1) => {
+    const length = px(way * Math.min(ARROW, Math.max(SHORT_ARROW, room)));
+    return `${cap(y)}M${at},${px(y)}v${length}m-4,${-6 * way}l4,${6 * way}l4,${-6 * way}`;
+  };
+  if (Number.isNaN(low)) return raw(`<path d="${arrow(high, bottom - high, 1)}"/>`);
+  if (Number.isNaN(high)) return raw(`<path d="${arrow(low, low - top, -1)}"/>`);
+  const [from, to] = [Math.min(low, bottom), Math.max(high, top)];
+  return raw(`<path d="${from === low ? cap(low) : ""}M${at},${px(from)}V${px(to)}${to === high ? cap(high) : ""}"/>`);
+}
+
+/** Upper and lower edge of the room for a mark. */
+export interface Edges {
+  readonly top: number;
+  readonly bottom: number;
+}
+
+/** What stands at an edge for an interval that lies beyond it as a whole: a cap with an arrow, up or down. */
+export function beyondMark(x: number, { top, bottom }: Edges, above: boolean): Html {
+  const [y, way] = above ? [top + ARROW, -1] : [bottom - ARROW, 1];
+  return raw(
+    `<path d="M${px(x) - 5},${px(y)}h10M${px(x)},${px(y)}v${way * ARROW}m-4,${-6 * way}l4,${6 * way}l4,${-6 * way}m-4,${-4 * way}m-4,${-6 * way}l4,${6 * way}l4,${-6 * way}"/>`,
+  );
 }

@@ -1,7 +1,8 @@
 import type { Edition } from "../../records/edition.ts";
 import { equationHtml } from "./curve-section.ts";
-import { counted, significant } from "./figures.ts";
+import { counted } from "./figures.ts";
 import { type Html, html } from "./html.ts";
+import { statistics } from "./methods-statistics.ts";
 import { page } from "./page.ts";
 import { cite, referenceList } from "./references.ts";
 
@@ -32,14 +33,6 @@ function models(): Html {
 <p>Models with three coefficients need at least 6 temperatures over at least 30 K; λh needs the melting point of the solid form. A curve that reaches a mole fraction above 1, or turns where the points do not show it, is passed over. Of the rest the smallest corrected Akaike criterion wins${cite("aicc", "burnham")}; below a difference of 2 the leave-one-out residual decides. The apparent enthalpy of dissolution, −<var>R</var> d ln <var>x</var>/d(1/<var>T</var>), is given at the harmonic mean temperature${cite("krug")}. Where the melting data of the form are known the curve is held against the ideal solubility${cite("prausnitz")}; an activity coefficient near 1 means nearly ideal mixing.</p>`;
 }
 
-function fitting({ scales }: Edition): Html {
-  const between = (sd: number, freedom: number) =>
-    `${significant(100 * sd, 3)} % (${freedom > 0 ? `${significant(freedom, 3)} degrees of freedom` : "default setting"})`;
-  return html`<h2 id="fit">Fit and limits</h2>
-<p>First a robust fit decides which points stay: slopes come from pairs of points within a source, each source has one vote, and points are dropped or taken back on their deleted deviations. A point that does not stay has weight 0 and is drawn hollow; only a ruling sets a measurement aside. The published curve comes from the points that stay, by generalised least squares with a random offset for each source${cite("henderson", "fellner", "paule")}, so that laboratories carry the weight and not points.</p>
-<p>The 95 % limits rest on the largest admissible model, whichever model is published, with Student’s <var>t</var> and effective degrees of freedom${cite("satterthwaite")}. They contain the scatter between sources, also for a curve from one source. The inner limits hold for the curve; the outer ones for one new measurement by a source that is not among these. In this edition the scatter between sources (SD) is ${between(scales.between, scales.betweenDegreesOfFreedom)}, for salts in water ${between(scales.betweenAqueousSalt, scales.betweenAqueousSaltDegreesOfFreedom)}.</p>`;
-}
-
 function screening({ settings }: Edition): Html {
   const threshold = settings.material_threshold_percent;
   return html`<h2 id="screening">Screening</h2>
@@ -61,7 +54,7 @@ export function methodsPage(edition: Edition): string {
   return page(edition, {
     title: "Methods",
     name: "methods.html",
-    body: html`<h1>Methods</h1>${bases()}${uncertainties(edition)}${models()}${fitting(edition)}${screening(edition)}${grades()}
+    body: html`<h1>Methods</h1>${bases()}${uncertainties(edition)}${models()}${statistics(edition)}${screening(edition)}${grades()}
 <h2 id="references">References</h2>${referenceList()}`,
   });
 }

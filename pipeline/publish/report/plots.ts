@@ -1,9 +1,11 @@
+import { campLayer } from "./camp-layer.ts";
 import { type CurveLine, curveLayer } from "./curve-layer.ts";
 import { significant } from "./figures.ts";
 import { bottomAxis, celsiusAxisOnTop, clipped, domainOf, drawing, frameOf, leftAxis } from "./frame.ts";
 import { type Html, html } from "./html.ts";
 import { pointLayer } from "./point-layer.ts";
 import { type DrawnCurve, type DrawnPoint, percentFromLn, type SystemView, titleOf } from "./system-view.ts";
+import { transitionLayer } from "./transition-layer.ts";
 
 /** A drawing with what its caption must say. */
 export interface PlotPicture {
@@ -81,11 +83,11 @@ export function vantHoffPlot(view: SystemView): PlotPicture {
     bottomAxis(frame, html`1000 K / <tspan class="i">T</tspan>`),
     leftAxis(frame, yLabel),
     celsiusAxisOnTop(frame),
-    clipped(
-      "plot-ln",
-      frame,
-      curves.map((curve) => curveLayer(curve, frame)),
-    ),
+    clipped("plot-ln", frame, [
+      ...curves.map((curve) => curveLayer(curve, frame)),
+      campLayer(view, frame, inverse, (ln) => ln),
+      transitionLayer(view, frame, inverse),
+    ]),
     layer.marks,
   ]);
   return { svg, beyond: layer.beyond, thinned: layer.thinned };
@@ -127,11 +129,11 @@ export function solubilityPlot(view: SystemView): PlotPicture {
   const svg = drawing("plot-mass", 400, name, describe(view, "Grams of solute per 100 g of solvent against °C"), [
     bottomAxis(frame, html`temperature, °C`),
     leftAxis(frame, html`g / 100 g solvent`),
-    clipped(
-      "plot-mass",
-      frame,
-      curves.map((curve) => curveLayer(curve, frame)),
-    ),
+    clipped("plot-mass", frame, [
+      ...curves.map((curve) => curveLayer(curve, frame)),
+      campLayer(view, frame, inCelsius, (ln) => percentFromLn(ln, system)),
+      transitionLayer(view, frame, inCelsius),
+    ]),
     layer.marks,
   ]);
   return { svg, beyond: layer.beyond, thinned: layer.thinned };

@@ -3,7 +3,7 @@ import { directLabels, type Spot } from "./direct-labels.ts";
 import { celsius, sourceLetter } from "./figures.ts";
 import { type Frame, LEFT, RIGHT } from "./frame.ts";
 import { escapeText, type Html, html, raw } from "./html.ts";
-import { intervalMark, pointClass, pointMark, px } from "./marks.ts";
+import { beyondMark, intervalMark, pointClass, pointMark, px } from "./marks.ts";
 import type { DrawnPoint, SystemView } from "./system-view.ts";
 
 /** Most points drawn in one plot: every one that is not kept, and an even choice of the rest. */
@@ -76,7 +76,10 @@ export function pointLayer(view: SystemView, frame: Frame, place: (point: DrawnP
       const open = (height: number) => (Number.isFinite(height) ? height : Number.NaN);
       if (Number.isNaN(open(low)) && Number.isNaN(open(high))) return raw("");
       if (x < LEFT || x > RIGHT) return raw("");
-      return html`<g class="${kind}">${raw(name)}${intervalMark(x, open(low), open(high))}</g>`;
+      const [above, below] = [open(low) < frame.top - 1, open(high) > frame.bottom + 1];
+      if (above || below) beyond++;
+      const mark = above || below ? beyondMark(x, frame, above) : intervalMark(x, open(low), open(high), frame);
+      return html`<g class="${kind}${above || below ? " beyond" : ""}">${raw(name)}${mark}</g>`;
     }
     const y = frame.y(at.y);
     if (!Number.isFinite(x) || !Number.isFinite(y)) return raw("");

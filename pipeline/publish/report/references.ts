@@ -37,6 +37,7 @@ const REFERENCES = {
   henderson: cited("C. R. Henderson, Biometrics 31 (1975) 423-447."),
   fellner: cited("W. H. Fellner, Technometrics 28 (1986) 51-60."),
   paule: cited("R. C. Paule, J. Mandel, J. Res. Natl. Bur. Stand. 87 (1982) 377-385."),
+  smyth: cited("G. K. Smyth, Stat. Appl. Genet. Mol. Biol. 3 (2004) 3."),
   satterthwaite: cited("F. E. Satterthwaite, Biometrics Bull. 2 (1946) 110-114."),
   benjamini: cited("Y. Benjamini, Y. Hochberg, J. R. Stat. Soc. B 57 (1995) 289-300."),
   series: fromMemory(

@@ -79,10 +79,13 @@ figcaption{font-size:.9rem;line-height:1.4}
 .plot{display:block;width:100%;height:auto}
 svg text{fill:var(--ink);font:13px system-ui,"Segoe UI","DejaVu Sans",sans-serif}
 svg .tick{fill:var(--soft)}svg .fine{font-size:11px;fill:var(--soft);text-anchor:middle}svg .bx,svg .tx,svg .label{text-anchor:middle}svg .ly{text-anchor:end}
+svg .leader{fill:none;stroke:var(--soft);stroke-width:.8}svg .end{paint-order:stroke;stroke:var(--paper);stroke-width:3px}
 svg .letter{font-weight:700;font-size:14px;text-anchor:middle;paint-order:stroke;stroke:var(--paper);stroke-width:3px}
 svg .axis{fill:none;stroke:var(--soft)}svg .grid{fill:none;stroke:var(--hair)}svg .zero{stroke:var(--rule)}
+svg .transition path{fill:none;stroke:var(--ink);stroke-width:1;stroke-dasharray:2 4}svg .transition .limits{stroke-dasharray:none;stroke-width:1.5}svg .transition text{fill:var(--ink);font-size:12px}
 svg .curve{fill:none;stroke:var(--ink);stroke-width:1.5}
 svg .band{fill:var(--band);fill-opacity:.17}svg .new{fill:none;stroke:var(--ink);stroke-width:1;stroke-dasharray:5 4;stroke-opacity:.75}
+svg .camp{fill:none;stroke:currentColor;stroke-width:1.8;stroke-dasharray:7 4}svg .whisker{fill:none;stroke:currentColor;stroke-width:2}svg .campname{font-weight:600;text-anchor:end;paint-order:stroke;stroke:var(--paper);stroke-width:3px}
 svg .pt,svg .rs,.key g{stroke-width:1.4;stroke:currentColor;fill:var(--paper)}
 svg .kept{fill:currentColor}
 svg .notfitted{stroke-dasharray:2 1.6}

@@ -2,6 +2,7 @@ import type { GridRow } from "../../records/generated/grid.ts";
 import type { PlanningCoolingRow } from "../../records/generated/planning-cooling.ts";
 import type { System } from "../../records/systems.ts";
 import { curveSection } from "./curve-section.ts";
+import { familySection } from "./family-section.ts";
 import { counted, fixed } from "./figures.ts";
 import { flagSection, flagWords } from "./flag-section.ts";
 import { type Html, html, short } from "./html.ts";
@@ -11,6 +12,7 @@ import { page } from "./page.ts";
 import { planningSection } from "./planning-section.ts";
 import { type PlotPicture, solubilityPlot, vantHoffPlot } from "./plots.ts";
 import { residualPlot } from "./residual-plot.ts";
+import { sourcesSection } from "./sources-section.ts";
 import { type SystemView, titleOf, waits } from "./system-view.ts";
 import { rowBudgets, uncertaintySection } from "./uncertainty-section.ts";
 
@@ -96,6 +98,8 @@ ${summons(view)}${facts(view, neighbours)}
 ${pictures(view)}
 ${flagSection(view)}
 ${curveSection(view, tables.grid)}
+${sourcesSection(view)}
+${familySection(view, neighbours.family)}
 ${planningSection(tables.cooling)}
 ${measurementSection(view, budgets)}
 ${uncertaintySection(view, budgets)}

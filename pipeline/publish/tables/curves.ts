@@ -1,8 +1,10 @@
 import { curvesOf, type Edition, measurementId } from "../../records/edition.ts";
-import type { Curve, CurveModel } from "../../records/fits.ts";
+import type { Curve, CurveModel, Transition } from "../../records/fits.ts";
 import type { CurveRow } from "../../records/generated/curves.ts";
 import type { CurveDocument } from "../../records/generated/curves-json.ts";
+import { crossingsPart } from "../form-crossings.ts";
 import type { Loose } from "./account.ts";
+import { disagreements, sourcesOfCurve } from "./source-standings.ts";
 
 /** Equations with the coefficients named a, b, c in the order of the columns; y is x or r. */
 const EQUATIONS: Readonly<Record<CurveModel, string>> = {
@@ -46,12 +48,18 @@ function shared(curve: Curve, edition: Edition) {
   };
 }
 
+/** The transition at the warm end of a branch; undefined where it has none. */
+function transitionOf({ system, branch }: Curve, edition: Edition): Transition | undefined {
+  return branch === 1 ? edition.fits[system]?.transition : undefined;
+}
+
 /** One row of `curves.csv`. */
 function curveRow(curve: Curve, edition: Edition): Loose<CurveRow> {
   const [a, b, c] = curve.coefficients;
   const p = curve.coefficients.length;
   const covariance = (i: number, j: number) => (i < p && j < p ? curve.covariance[i * p + j] : undefined);
   const enthalpy = curve.dissolutionEnthalpy;
+  const transition = transitionOf(curve, edition);
   return {
     ...shared(curve, edition),
     a: a?.value,
@@ -68,6 +76,10 @@ function curveRow(curve: Curve, edition: Edition): Loose<CurveRow> {
     dissolution_enthalpy_low: kilo(enthalpy?.low),
     dissolution_enthalpy_high: kilo(enthalpy?.high),
     dissolution_enthalpy_temperature_K: enthalpy?.temperatureK,
+    transition_K: transition?.temperatureK,
+    transition_low_K: transition?.low,
+    transition_high_K: transition?.high,
+    transition_probability: transition?.probability,
     notices: curve.notices.join("; ") || undefined,
     grade_reasons: edition.grades[curve.system]?.reasons.join("; "),
   } as Loose<CurveRow>;
@@ -99,6 +111,7 @@ function curveDocument(curve: Curve, edition: Edition): Loose<CurveDocument> {
   });
   const enthalpy = curve.dissolutionEnthalpy;
   const p = curve.coefficients.length;
+  const transition = transitionOf(curve, edition);
   return {
     ...shared(curve, edition),
     coefficients: curve.coefficients.map((c) => ({
@@ -119,7 +132,15 @@ function curveDocument(curve: Curve, edition: Edition): Loose<CurveDocument> {
       high: enthalpy.high / 1000,
       temperature_K: enthalpy.temperatureK,
     },
-    ...idealPart(edition.ideals[curve.system]),
+    transition: transition && {
+      temperature_K: transition.temperatureK,
+      low_K: transition.low,
+      high_K: transition.high,
+      probability: transition.probability,
+    },
+    ...(curve.branch === 1 ? idealPart(edition.ideals[curve.system]) : {}),
+    ...sourcesOfCurve(edition, curve),
+    ...crossingsPart(edition, curve),
     notices: [...curve.notices],
     grade_reasons: [...(edition.grades[curve.system]?.reasons ?? [])],
     measurement_ids: ids,
@@ -134,5 +155,5 @@ export function* curvesJson(edition: Edition): Generator<string> {
     yield mark + JSON.stringify(curveDocument(curve, edition));
     mark = ",\n";
   }
-  yield "\n]}\n";
+  yield `\n],"disagreements":${JSON.stringify(disagreements(edition))}}\n`;
 }

@@ -1,5 +1,5 @@
 import type { Edition, Liquor } from "../../records/edition.ts";
-import type { Curve } from "../../records/fits.ts";
+import type { Curve, SystemFit } from "../../records/fits.ts";
 import type { PlanningCoolingRow } from "../../records/generated/planning-cooling.ts";
 import type { System } from "../../records/systems.ts";
 import { massRatioFromLn } from "../mass-ratio.ts";
@@ -8,18 +8,38 @@ import { type CoolingPlan, planCooling } from "../planning/cooling.ts";
 /** What no planning figure holds. */
 const NOTE = "equilibrium, pure solute, this solid form; no kinetics, cake hold-up or impurity effect";
 
-function coolingPlan(curve: Curve, system: System, liquor: Liquor, excessSolventPercent: number): CoolingPlan {
-  return planCooling(curve, {
-    massRatioAt: (temperatureK) => massRatioFromLn(curve.evaluate(temperatureK), system),
-    halfWidthAt: (temperatureK) => curve.limits(temperatureK).curve,
-    boilingPointK: liquor.solventBoilingPointK,
-    freezingPointK: liquor.solventFreezingPointK,
-    formMeltingPointK: liquor.formMeltingPointK,
-    crystalAt: liquor.crystalAt,
-    transitionsK: liquor.transitionsK,
-    solventDensity20C: liquor.solventDensity20C,
-    excessSolventPercent,
-  });
+/**
+ * Plan of a branch: it crystallises at the cold end of this branch, and may be dissolved on the warmer one, whose curve
+ * then holds. A branch below its transition ends 5 K short of it for the cold end, as any plan does.
+ */
+function coolingPlan(
+  curve: Curve,
+  { curves, transition }: SystemFit,
+  system: System,
+  liquor: Liquor,
+  excessSolventPercent: number,
+): CoolingPlan {
+  const warmer = curves.filter(({ branch }) => branch >= curve.branch);
+  const at = (temperatureK: number) =>
+    warmer.find(({ temperatureRangeK: [, high] }) => temperatureK <= high) ?? (warmer.at(-1) as Curve);
+  const reach = [curve.temperatureRangeK[0], (warmer.at(-1) as Curve).temperatureRangeK[1]] as const;
+  const plan = planCooling(
+    { ...curve, temperatureRangeK: reach },
+    {
+      massRatioAt: (temperatureK) => massRatioFromLn(at(temperatureK).evaluate(temperatureK), system),
+      halfWidthAt: (temperatureK) => at(temperatureK).limits(temperatureK).curve,
+      boilingPointK: liquor.solventBoilingPointK,
+      freezingPointK: liquor.solventFreezingPointK,
+      formMeltingPointK: liquor.formMeltingPointK,
+      crystalAt: liquor.crystalAt,
+      transitionsK: [...liquor.transitionsK, ...(transition === undefined ? [] : [transition.temperatureK])],
+      solventDensity20C: liquor.solventDensity20C,
+      excessSolventPercent,
+    },
+  );
+  return plan.coldK !== undefined && plan.coldK > curve.temperatureRangeK[1]
+    ? { cautions: [], blankReason: "the cold end would lie on the warmer branch" }
+    : plan;
 }
 
 const percent = (ratio: number | undefined) => (ratio === undefined ? undefined : 100 * ratio);
@@ -66,7 +86,13 @@ export function* coolingRows(edition: Edition): Generator<PlanningCoolingRow> {
       yield planRow(system, undefined, blank, excess, []);
     }
     for (const curve of fit?.curves ?? []) {
-      yield planRow(system, curve, coolingPlan(curve, system, liquor, excess), excess, liquor.hazards);
+      yield planRow(
+        system,
+        curve,
+        coolingPlan(curve, fit as SystemFit, system, liquor, excess),
+        excess,
+        liquor.hazards,
+      );
     }
   }
 }

@@ -141,6 +141,10 @@ export interface CurveRow {
    */
   transition_high_K?: number;
   /**
+   * Probability of no change by parametric bootstrap, 1; below 0.01 where a transition is published.
+   */
+  transition_probability?: number;
+  /**
    * Remarks on the fit, `; ` between them. No unit.
    */
   notices?: string;
@@ -190,6 +194,7 @@ export const CURVES_COLUMNS = [
   "transition_K",
   "transition_low_K",
   "transition_high_K",
+  "transition_probability",
   "notices",
   "grade",
   "grade_reasons"

@@ -170,7 +170,7 @@ export interface Columns {
    */
   composition?: TextColumn;
   /**
-   * What the composition is per: mass, mole, volume before mixing, or alcoholometric volume. Words, no unit.
+   * What the composition is per: mass, mole, volume before mixing, or alcoholometric volume (% vol); solute-free unless it adds `including solute`. Words, no unit.
    */
   composition_basis?: TextColumn;
   /**
@@ -398,7 +398,7 @@ export interface Constants {
    */
   composition?: string | number;
   /**
-   * What the composition is per: mass, mole, volume before mixing, or alcoholometric volume. Words, no unit.
+   * What the composition is per: mass, mole, volume before mixing, or alcoholometric volume (% vol); solute-free unless it adds `including solute`. Words, no unit.
    */
   composition_basis?: string;
   /**

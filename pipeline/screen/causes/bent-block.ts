@@ -1,5 +1,5 @@
 import { middle } from "../middle.ts";
-import { curveSlope, type Series, type SystemModel } from "../system-model.ts";
+import { curveSlope, predictCurve, type Series, type SystemModel } from "../system-model.ts";
 import type { Cause } from "./cause.ts";
 import { bentSeries } from "./pattern-density.ts";
 
@@ -29,7 +29,8 @@ export function bentReadings({ model, series, method, threshold, between }: Bloc
     noiseVariance: ascending(series.noiseVariance),
   };
   const slope = sorted.temperatureK.map((T) => curveSlope(model, T));
-  return cause.bending.patterns({ ...sorted, slope, method }).flatMap((pattern) => {
+  const curve = (T: number) => predictCurve(model, T).mean;
+  return cause.bending.patterns({ ...sorted, slope, curve, method }).flatMap((pattern) => {
     const { logDensity, left, leftSd } = bentSeries(model, sorted, between, pattern);
     const offset = middle(left);
     const away = middle(left.map((e) => Math.abs(e - offset)));

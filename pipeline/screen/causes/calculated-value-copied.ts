@@ -1,4 +1,5 @@
 import { SCREENING_STRIDE, writeScreeningBasis } from "../../curves/screening-basis.ts";
+import { relativeRounding } from "../../numerics/decimal-rounding.ts";
 import {
   createGroupedModel,
   expected,
@@ -8,7 +9,6 @@ import {
 } from "../../numerics/grouped-model.ts";
 import type { Flag, RobustFit } from "../../records/fits.ts";
 import { blocksOf } from "../block-screen.ts";
-import { roundingOf } from "../rounding.ts";
 import { type ScreenInput, sourceName } from "../screen-input.ts";
 import { counted, threeDigits } from "../wording.ts";
 
@@ -99,6 +99,6 @@ function rmsLeft(model: GroupedModel, rows: GroupedRows, { points }: RobustFit, 
 
 /** Root mean square of the rounding errors that the digits of a block's values leave, ln value. */
 function rmsRounding({ table }: ScreenInput, { points }: RobustFit, of: readonly number[]): number {
-  const squares = of.map((point) => roundingOf(table.reportedValue[points.row[point]!]!) ** 2 / 3);
+  const squares = of.map((point) => relativeRounding(table.reportedValue[points.row[point]!]!) ** 2 / 3);
   return Math.sqrt(squares.reduce((sum, square) => sum + square, 0) / of.length);
 }

@@ -33,6 +33,9 @@ export interface Neighbouring {
   readonly sameSource: boolean;
 }
 
+/** What a source reports in another system near the temperature of a row, in the same unit. */
+export type CellThere = "the same number" | "another number" | "nothing";
+
 /** What a cause may look at: one point, or one block whose rows stand in the order of its file. */
 export interface Suspects {
   /** Suspected rows: one for a point, all rows of the block otherwise. */
@@ -53,8 +56,8 @@ export interface Suspects {
   readonly otherCompositions: readonly Neighbouring[];
   /** Temperature (K) of another reading of the same solution that no fit uses, such as the cloud point of a clear point. */
   readonly otherReadingK: (row: number) => number | undefined;
-  /** Whether this source reports the very number of a row, in the same unit, in another system near this temperature. */
-  readonly numberStandsIn: (row: number, system: number) => boolean;
+  /** What this source reports in another system near the temperature of a row, in the same unit. */
+  readonly cellIn: (row: number, system: number) => CellThere;
 }
 
 /** One way a cause may have worked. */
@@ -71,6 +74,11 @@ export interface Explanation {
   readonly proposes?: (row: number) => number | undefined;
   /** How many times likelier than by chance something exact is that goes with it for a row, such as equal numbers. */
   readonly odds?: (row: number) => number;
+  /**
+   * Density per ln unit of the very number of a row, where the mistake would have put exactly this number there; then no
+   * curve is asked. Undefined where it would not.
+   */
+  readonly exactly?: (row: number) => number | undefined;
   /** System whose curve the re-read value must fit, where not the row's own. */
   readonly system?: number;
 }

@@ -4,7 +4,7 @@ import { isPossibleTemperature } from "../possible-temperature.ts";
 import type { ScreenInput } from "../screen-input.ts";
 import { fitSources, predict, predictCurve, type Series, type SystemModel, seriesLogDensity } from "../system-model.ts";
 import { bentReadings, LEFT_OVER } from "./bent-block.ts";
-import type { CauseName, Explanation, Suspects } from "./cause.ts";
+import type { Cause, CauseName, Explanation, Suspects } from "./cause.ts";
 import { EVERY_CAUSE } from "./every-cause.ts";
 import { logSum } from "./log-sum.ts";
 import type { Pattern } from "./pattern.ts";
@@ -13,6 +13,7 @@ import { bentSeries } from "./pattern-density.ts";
 /** Readings of a block that are no mistake of a known kind. */
 export const AS_READ = "as read";
 export const FREE_OFFSET = "free offset";
+export const DRIFTING_OFFSET = "drifting offset";
 
 /** One reading of a whole block: its weight before the sources are compared (ln), and what it says. */
 export interface BlockReading {
@@ -39,7 +40,15 @@ export interface BlockCase {
 
 /** Prior probability that a block is sound as read, and that an off block has no known cause. Common practice. */
 const AS_READ_PRIOR = 0.9;
-const NONE_PRIOR = 0.12;
+const NONE_PRIOR = 0.35;
+/** Prior probability of a free offset, as its reading has it. */
+export const FREE_PRIOR = (1 - AS_READ_PRIOR) * NONE_PRIOR;
+/**
+ * Another solid: the ratio of two forms shrinks on heating by this part a kelvin, its size at 298 K, and the prior of an off
+ * block of that kind when nothing else is known of its source. Common practice.
+ */
+const [DRIFT_PER_K, DRIFTING_SD, DRIFTING_SHARE] = [0.005, 0.6, 0.006];
+export const DRIFTING_PRIOR = (1 - AS_READ_PRIOR) * DRIFTING_SHARE;
 /** Share of such blocks that are tilted too, by how much at the ends, and how irregularly, part of that. */
 const [TILTED_SHARE, TILT_SD, TILT_IRREGULAR] = [0.3, 0.15, 0.3];
 /** Variances of the offset of a block that is off for no known cause, ln units squared: a little or a lot, equally often. */
@@ -62,7 +71,6 @@ const ALIKE_SHARE = 0.7;
 export function blockReadings(of: BlockCase): BlockReading[] {
   const between = of.fit.betweenSd ** 2;
   const asRead = seriesOf(of, undefined);
-  const offPrior = Math.log(1 - AS_READ_PRIOR);
   const none = { cause: undefined, detail: "", lookAt: "" };
   const density = (offsetVariance: number) => asRead && densityOf(of, of.models[0], asRead, offsetVariance);
   const strayDensity = of.points.length * STRAY_LOG_DENSITY;
@@ -72,16 +80,20 @@ export function blockReadings(of: BlockCase): BlockReading[] {
     {
       ...none,
       key: FREE_OFFSET,
-      logPrior: offPrior + Math.log(NONE_PRIOR),
+      logPrior: Math.log(FREE_PRIOR),
       logDensity: asRead === undefined ? strayDensity : freeDensity(of, asRead, between),
     },
   ];
+  if (asRead !== undefined) {
+    const logDensity = driftingDensity(of, asRead, between);
+    readings.push({ ...none, key: DRIFTING_OFFSET, logPrior: Math.log(DRIFTING_PRIOR), logDensity });
+  }
   for (const cause of EVERY_CAUSE) {
     if (cause.blockPrior === 0) continue;
     const read = (detail: string, weight: number, logDensity: number | undefined) => {
       if (logDensity === undefined) return;
       const { name, lookAt } = cause;
-      const logPrior = offPrior + Math.log(cause.blockPrior * weight);
+      const logPrior = Math.log(blockReadingPrior(cause, weight));
       readings.push({ key: `${name}: ${detail}`, cause: name, detail, lookAt, logPrior, logDensity });
     };
     for (const how of cause.explanations(of.suspects)) read(how.detail, how.weight, explained(of, how, between));
@@ -90,6 +102,11 @@ export function blockReadings(of: BlockCase): BlockReading[] {
     for (const { detail, weight, logDensity } of bentReadings(block, cause)) read(detail, weight, logDensity);
   }
   return joined(readings);
+}
+
+/** Prior probability of a reading of a block by a way of a cause that has the share `weight`. */
+export function blockReadingPrior({ blockPrior }: Pick<Cause, "blockPrior">, weight: number): number {
+  return (1 - AS_READ_PRIOR) * blockPrior * weight;
 }
 
 /** Log density of a block with an offset of its own, a little or a lot, and perhaps a bend of its own. */
@@ -107,6 +124,16 @@ function freeDensity(of: BlockCase, asRead: Series, between: number): number {
     Math.log(TILTED_SHARE) + bentSeries(model, asRead, variance + between, tilt).logDensity,
   ]);
   return logSum(ways) - Math.log(FREE_VARIANCES.length);
+}
+
+/** Log density of a block whose offset shrinks on heating, as the ratio of two solids does. */
+function driftingDensity({ models: [model] }: BlockCase, asRead: Series, between: number): number {
+  const ratio: Pattern = {
+    ...({ kind: "growing", detail: "", weight: 1, sign: 0 } as const),
+    ...{ sd: DRIFTING_SD, irregular: 0 },
+    shape: asRead.temperatureK.map((T) => 1 - DRIFT_PER_K * (T - 298)),
+  };
+  return bentSeries(model, asRead, between, ratio).logDensity;
 }
 
 /** Readings of one key as one: the ways in which a cause may bend a series differ in nothing that could be named. */

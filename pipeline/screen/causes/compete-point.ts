@@ -33,7 +33,7 @@ export const LOOK_AGAIN =
   "Look the value and its temperature up in the notebook or the original table; if they stand, measure again.";
 
 /** Prior probability of a random error, and how its size in ln value is spread. Common practice. */
-const NONE_PRIOR = 0.85;
+const NONE_PRIOR = 0.9;
 const [NONE_LEAST, NONE_MOST] = [0.14, 2];
 const NONE_WIDEST = 10;
 /** Share of random errors of any size at all. */
@@ -42,6 +42,10 @@ const NONE_WIDE_SHARE = 0.25;
 const IMPOSSIBLE_DENSITY = 0.005;
 /** A re-read value must come this near, in standard deviations. */
 const NEAR_Z = 3;
+
+/** Where the source's own curve in another system does not fit, that of sources in general may; less likely by this. */
+const ANY_SOURCE = -1;
+const ANY_SOURCE_SHARE = 0.3;
 
 /** A point to be explained, with what is expected of it. */
 export interface PointCase {
@@ -101,23 +105,33 @@ interface Evaluated {
 
 /** Likelihood of one explanation times its share; undefined where it is impossible or leaves the point off. */
 function evaluate(of: PointCase, how: Explanation): Evaluated | undefined {
-  const { input, models, suspects } = of;
+  const { input, models, fit, point, suspects } = of;
   const row = suspects.rows[0]!;
+  const exact = how.exactly?.(row);
+  if (exact !== undefined)
+    return { detail: how.detail, density: how.weight * exact, proposedValue: undefined, moved: undefined };
   const change = how.change(row);
   if (change === undefined) return undefined;
   const model = models[how.system === undefined ? 0 : 1];
   if (how.system !== undefined) fitSources(model, input.fits[how.system]!, () => true);
-  const fitting = fits(of, model, row, change);
+  const { source } = fit.points;
+  const own = fits(of, model, row, change, source[point]!);
+  const fitting = own ?? (how.system === undefined ? undefined : fits(of, model, row, change, ANY_SOURCE));
   if (fitting === undefined) return undefined;
   const partner = how.partner?.(row);
-  const partnerFits = partner === undefined ? undefined : fits(of, model, partner.row, partner.change);
+  const partnerFits = partner === undefined ? undefined : fits(of, model, partner.row, partner.change, source[point]!);
   if (partner !== undefined && partnerFits === undefined) return undefined;
   // That the partner fits too would be chance if the error were random.
   const ofPartner = partnerFits === undefined ? 1 : oddsOfFit(partnerFits.deviation, partnerFits.variance);
   const says = SAYS_VALUE.has(change.kind) ? fitting.reportedValue : how.proposes?.(row);
   return {
     detail: how.detail,
-    density: how.weight * ofPartner * (how.odds?.(row) ?? 1) * normalDensity(fitting.deviation, fitting.variance),
+    density:
+      how.weight *
+      ofPartner *
+      (how.odds?.(row) ?? 1) *
+      (own === undefined ? ANY_SOURCE_SHARE : 1) *
+      normalDensity(fitting.deviation, fitting.variance),
     proposedValue: says,
     moved: change.kind === "temperature" || change.kind === "temperature scale" ? fitting : undefined,
   };
@@ -127,10 +141,16 @@ function evaluate(of: PointCase, how: Explanation): Evaluated | undefined {
 const SAYS_VALUE: ReadonlySet<Change["kind"]> = new Set(["factor", "value", "unit", "solute basis"]);
 
 /** Deviation of a row under a change, where it is possible and within the limits. */
-function fits({ input, fit, point, threshold }: PointCase, model: SystemModel, row: number, change: Change) {
+function fits(
+  { input, fit, point, threshold }: PointCase,
+  model: SystemModel,
+  row: number,
+  change: Change,
+  source: number,
+) {
   const reread = input.reread(row, change);
   if (reread === undefined || !isPossibleTemperature(reread.temperatureK)) return undefined;
-  const expected = predict(model, reread.temperatureK, fit.points.source[point]!);
+  const expected = predict(model, reread.temperatureK, source);
   const deviation = reread.lnValue - expected.mean;
   const variance = expected.variance + fit.noiseSd[point]! ** 2;
   if (!(Math.abs(deviation) < Math.min(threshold, NEAR_Z * Math.sqrt(variance)))) return undefined;

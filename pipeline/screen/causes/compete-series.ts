@@ -43,6 +43,8 @@ const SINGLE_RATE = 0.03;
 const CHANGE_OF_SOLID_RATE = 0.1;
 /** Rate of series of a salt in water that are of another hydrate at one end than those of the other sources. */
 const HYDRATE_RATE = 0.05;
+/** Rate of series of which a stretch is off by one amount, and that amount, ln value. Common practice. */
+const [STRETCH_RATE, STRETCH_SD] = [0.01, 0.4];
 /** Part of the material threshold from which a point sides with those that are off. */
 const SIDES_SHARE = 0.4;
 /** An off point farther than this from the bent series, in standard deviations, is off for its own reason. */
@@ -78,11 +80,16 @@ export function competeForSeries(of: SeriesCase): SeriesVerdict | undefined {
   const witnessed = hasWitness(fit, others, off);
   const { temperatureK, lnValue } = seriesOf(fit, order);
   const slope = others.size === 0 ? undefined : temperatureK.map((T) => curveSlope(model, T));
+  const curve = others.size === 0 ? undefined : (T: number) => predictCurve(model, T).mean;
   let total = 1 + Math.exp(otherwise - none);
   const changeOfSolid = witnessed ? (of.mayHydrate ? HYDRATE_RATE : 0) : CHANGE_OF_SOLID_RATE;
   for (const pattern of changeOfSolid === 0 ? [] : eitherEnd({ temperatureK })) {
     const tried = tryPattern(of, order, off, pattern);
     if (tried !== undefined) total += changeOfSolid * pattern.weight * Math.exp(tried.logWeight - none);
+  }
+  for (const pattern of stretches(order, off)) {
+    const tried = tryPattern(of, order, off, pattern);
+    if (tried !== undefined) total += STRETCH_RATE * pattern.weight * Math.exp(tried.logWeight - none);
   }
   let best: { cause: Cause; pattern: Pattern; explained: readonly number[] } | undefined;
   let bestSum = 0;
@@ -90,7 +97,7 @@ export function competeForSeries(of: SeriesCase): SeriesVerdict | undefined {
     let sum = 0;
     let top = 0;
     let winner: typeof best;
-    for (const pattern of cause.bending?.patterns({ temperatureK, lnValue, slope, method: of.method }) ?? []) {
+    for (const pattern of cause.bending?.patterns({ temperatureK, lnValue, slope, curve, method: of.method }) ?? []) {
       const tried = witnessed || pattern.kind === "level" ? tryPattern(of, order, off, pattern) : undefined;
       if (tried === undefined) continue;
       const weight = cause.bending!.rate * pattern.weight * Math.exp(tried.logWeight - none);
@@ -133,8 +140,9 @@ function logWeightOfOtherBent(of: SeriesCase, others: ReadonlySet<number>): numb
   fitSources(model, { ...fit, kept }, (s) => s === source);
   const { temperatureK, lnValue } = seriesOf(fit, theirs);
   const slope = temperatureK.map((T) => curveSlope(model, T));
+  const curve = (T: number) => predictCurve(model, T).mean;
   const ways = EVERY_CAUSE.flatMap(({ bending }) =>
-    (bending?.patterns({ temperatureK, lnValue, slope, method: of.method }) ?? []).map(
+    (bending?.patterns({ temperatureK, lnValue, slope, curve, method: of.method }) ?? []).map(
       (pattern) =>
         Math.log(bending!.rate * pattern.weight) +
         bentSeries(model, seriesOf(fit, theirs), variance, pattern).logDensity,
@@ -194,9 +202,31 @@ function eitherEnd(series: Pick<BlockSeries, "temperatureK">): Pattern[] {
   return ends.map((pattern) => ({ ...pattern, weight: pattern.weight / 2 }));
 }
 
+/** Runs of neighbouring off points that share one offset: a day, a stock, a calibration; no cause of the list. */
+function stretches(order: readonly number[], off: readonly number[]): Pattern[] {
+  const isOff = new Set(off);
+  const runs: number[][] = [];
+  for (const [i, point] of order.entries()) {
+    if (!isOff.has(point)) continue;
+    const last = runs.at(-1);
+    if (last?.at(-1) === i - 1) last.push(i);
+    else runs.push([i]);
+  }
+  const long = runs.filter((run) => run.length > 1 && run.length < order.length);
+  return long.map((run) => ({
+    ...({ kind: "growing", detail: "", weight: 1 / long.length, sign: 0, irregular: 0 } as const),
+    ...{ sd: STRETCH_SD, shape: order.map((_, i) => (run.includes(i) ? 1 : 0)) },
+  }));
+}
+
 /** The pattern on a series that lacks some points; undefined where too little of it is left. */
 function withoutPoints(pattern: Pattern, order: readonly number[], strays: ReadonlySet<number>): Pattern | undefined {
-  if (pattern.kind === "growing") return { ...pattern, shape: pattern.shape.filter((_, i) => !strays.has(order[i]!)) };
+  if (pattern.kind === "growing") {
+    const { shape, shapeAt } = pattern;
+    const left = (values: readonly number[]) => values.filter((_, i) => !strays.has(order[i]!));
+    const at = shapeAt === undefined ? {} : { shapeAt: (amplitude: number) => left(shapeAt(amplitude)) };
+    return { ...pattern, shape: left(shape), ...at };
+  }
   const from = order.slice(0, pattern.from).filter((point) => !strays.has(point)).length;
   return from === 0 || order.length - strays.size - from < 2 ? undefined : { ...pattern, from };
 }

@@ -13,5 +13,5 @@ export const compositionMixUp: Cause = {
   blockPrior: 0.15,
   lookAt:
     "Look at the proportion of the solvents: which one it counts, and whether it is that of the row or column beside.",
-  explanations: ({ otherCompositions, numberStandsIn }) => takenFrom(otherCompositions, numberStandsIn),
+  explanations: (suspects) => takenFrom(suspects.otherCompositions, suspects),
 };

@@ -2,6 +2,8 @@ import { normalSurvival } from "../../numerics/distributions.ts";
 import { predictCurve, type Series, type SystemModel, seriesDensity } from "../system-model.ts";
 import type { Pattern } from "./pattern.ts";
 
+/** Amplitudes, in standard deviations, between which a deviation is not taken to be in proportion to it. */
+const REFINED = [0.2, 4] as const;
 /** A plateau lies this far above the last value below it, ln value, give or take. */
 const [STEP_TO_PLATEAU, STEP_SD] = [0.2, 0.3];
 
@@ -22,7 +24,22 @@ export interface Bent {
 export function bentSeries(of: SystemModel, series: Series, offsetVariance: number, pattern: Pattern): Bent {
   const deviations = series.lnValue.map((y, i) => y - predictCurve(of, series.temperatureK[i]!).mean);
   if (pattern.kind === "level") return levelSeries(of, series, deviations, offsetVariance, pattern.from);
-  const { shape, sd, sign, irregular } = pattern;
+  const linear = grownSeries(of, series, deviations, offsetVariance, pattern);
+  const { shapeAt, sd } = pattern;
+  const size = Math.abs(linear.amplitude) / sd;
+  if (shapeAt === undefined || size < REFINED[0] || size > REFINED[1]) return linear;
+  return grownSeries(of, series, deviations, offsetVariance, { ...pattern, shape: shapeAt(linear.amplitude) });
+}
+
+type Growing = Extract<Pattern, { kind: "growing" }>;
+
+function grownSeries(
+  of: SystemModel,
+  series: Series,
+  deviations: readonly number[],
+  offsetVariance: number,
+  { shape, sd, sign, irregular }: Growing,
+): Bent & { readonly amplitude: number } {
   const noise = series.noiseVariance.map((variance, i) => variance + (irregular * sd * shape[i]!) ** 2);
   const density = seriesDensity(of, series.temperatureK, noise, offsetVariance);
   const zero = density(shape.map(() => 0));
@@ -38,6 +55,7 @@ export function bentSeries(of: SystemModel, series: Series, offsetVariance: numb
     logDensity: plain + 0.5 * Math.log(slack) + 0.5 * sd * sd * crossed * crossed * slack + toSide,
     left: deviations.map((e, i) => e - amplitude * shape[i]!),
     leftSd: noise.map(Math.sqrt),
+    amplitude,
   };
 }
 

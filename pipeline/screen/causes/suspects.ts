@@ -5,7 +5,7 @@ import type { ScreenInput } from "../screen-input.ts";
 import type { Suspects } from "./cause.ts";
 
 /** Two tables list the same temperatures to within this, K. */
-const SAME_TEMPERATURE_K = 1;
+const SAME_TEMPERATURE_K = 0.5;
 
 const canonicalUnits = new Map<string, string>();
 
@@ -38,13 +38,14 @@ export function createSuspectFinder(input: ScreenInput) {
       const texts = new Set(rows.map((row) => spelling(textOf(table, column[row]!))));
       return texts.size === 1 ? ([...texts][0] ?? "") : "";
     };
-    const siblings = (bySolute.get(keyOf(own.identity)) ?? []).filter(
-      (other) => other.index !== system && fits[other.index]?.agreement === "agreed",
-    );
-    const neighbouring = (name: (identity: Identity) => string) => (other: System) => ({
-      system: other.index,
-      name: name(other.identity),
-      sameSource: fits[other.index]?.points.source.includes(source) === true,
+    const neighbouring = (name: (identity: Identity) => string) => (other: System) => {
+      const sameSource = fits[other.index]!.points.source.includes(source);
+      return { system: other.index, name: name(other.identity), sameSource };
+    };
+    // Where the sources are in conflict, the curve of this source is still its own.
+    const siblings = (bySolute.get(keyOf(own.identity)) ?? []).filter((other) => {
+      const fit = fits[other.index];
+      return other.index !== system && (fit?.agreement === "agreed" || fit?.points.source.includes(source) === true);
     });
     const sameSolvents = (other: System) => other.identity.solvent === own.identity.solvent;
     return {
@@ -73,14 +74,18 @@ export function createSuspectFinder(input: ScreenInput) {
         );
         return twin === undefined ? undefined : table.temperatureK[twin]!;
       },
-      numberStandsIn: (row, other) =>
-        systems[other]!.rows.some(
+      cellIn: (row, other) => {
+        const beside = systems[other]!.rows.filter(
           (there) =>
             table.source[there] === source &&
-            table.reportedValue[there] === table.reportedValue[row] &&
             table.reportedUnit[there] === table.reportedUnit[row] &&
             Math.abs(table.temperatureK[there]! - table.temperatureK[row]!) < SAME_TEMPERATURE_K,
-        ),
+        );
+        if (beside.length === 0) return "nothing";
+        return beside.some((there) => table.reportedValue[there] === table.reportedValue[row])
+          ? "the same number"
+          : "another number";
+      },
     };
   };
 }

@@ -1,7 +1,11 @@
-import type { AcrossSystems } from "./across-systems.ts";
+import type { AcrossSystems, SideBySide } from "./across-systems.ts";
+import { soundThough } from "./across-systems.ts";
+import { FREE_OFFSET, FREE_PRIOR } from "./compete-block.ts";
 
 /** How much likelier it is that another solute in the same solvent is off to the same side, or the other. */
-const [SAME_SIDE, OTHER_SIDE] = [12, 4];
+const [SAME_SIDE, OTHER_SIDE] = [3, 1];
+/** Share of solutes that the water hardly moves. */
+const UNMOVED = 0.2;
 
 /**
  * The solvent of one source held water (or another solvent): everything it measured in that solvent is off, one solute
@@ -14,9 +18,12 @@ const [SAME_SIDE, OTHER_SIDE] = [12, 4];
 export const wetSolvent: AcrossSystems = {
   name: "wet solvent",
   lookAt: "Look at the grade and water content (Karl Fischer) of this solvent in this source.",
-  applies: (_, { identity }) => identity.composition === "" && identity.solvent !== "water",
-  together: (a, b) => a.identity.solvent === b.identity.solvent && a.identity.solute !== b.identity.solute,
-  likelihoodRatio: (first, second) => (first.offset * second.offset > 0 ? SAME_SIDE : OTHER_SIDE),
-  priorOdds: 0.15,
+  readings: [[FREE_OFFSET, FREE_PRIOR, 1]],
+  applies: ({ system: { identity } }) => identity.composition === "" && identity.solvent !== "water",
+  together: ({ system: a }, { system: b }) =>
+    a.identity.solvent === b.identity.solvent && a.identity.solute !== b.identity.solute,
+  likelihoodRatio: (first, other) => (first.offset * other.offset > 0 ? SAME_SIDE : OTHER_SIDE),
+  ratioIfSound: (first: SideBySide, other) => UNMOVED + (1 - UNMOVED) * soundThough(first.offset, other),
+  priorOdds: 0.01,
   detail: (blocks) => `${blocks.length} solutes of this source are off in this solvent`,
 };

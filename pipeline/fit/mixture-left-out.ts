@@ -1,0 +1,85 @@
+import { quadraticForm } from "../curves/coefficient-transformation.ts";
+import { isInside, type MixtureRange, mixtureRange } from "../curves/mixture-range.ts";
+import type { LeftOutPrediction } from "../records/mixtures.ts";
+import type { MemberSums } from "./mixture-information.ts";
+import type { MixturePoints } from "./mixture-points.ts";
+import { fitMembers, type MixtureScales, rowAt, rowValue } from "./mixture-regression.ts";
+import { FLEXIBLE_SURFACE } from "./mixture-surfaces.ts";
+
+/**
+ * What the other systems of a mixture say of one: the flexible surface fitted without it.
+ *
+ * @param use 1 = the point takes part in the surface
+ * @param sums sums of all members over those points
+ * @param where inside the compositions and temperatures of the others only, so that a pure solvent, beyond which nothing
+ *   lies, is never judged; or anywhere, with a standard deviation that grows outside as the priors allow
+ * @param fractionOf mass fraction at which a point is judged; its own where absent
+ * @returns undefined where the other systems determine no surface, or reach none of the points
+ */
+export function leftOutPrediction(
+  points: MixturePoints,
+  use: Uint8Array,
+  sums: readonly MemberSums[],
+  member: number,
+  centreK: number,
+  scales: MixtureScales,
+  where: "inside" | "anywhere" = "inside",
+  fractionOf: (point: number) => number = (i) => points.fraction[i]!,
+): LeftOutPrediction | undefined {
+  const fit = fitMembers(points, except(sums, member), FLEXIBLE_SURFACE, centreK, scales);
+  if (fit === undefined) return undefined;
+  const others = Int32Array.from(use.keys()).filter((i) => use[i] === 1 && points.member[i] !== member);
+  const at = (column: Float64Array) => Float64Array.from(others, (i) => column[i]!);
+  const inside =
+    where === "anywhere" ? () => true : insideOf(mixtureRange(at(points.fraction), at(points.temperatureK)));
+  const own = Int32Array.from(
+    { length: points.start[member + 1]! - points.start[member]! },
+    (_, k) => points.start[member]! + k,
+  );
+  const predicted = new Float64Array(own.length).fill(Number.NaN);
+  const [sd, sharedSd] = [predicted.slice(), predicted.slice()];
+  // A single slip among its points says nothing of the composition.
+  const counts =
+    [use, points.candidate].map((set) => (i: number) => set[i] === 1).find((c) => own.some(c)) ?? (() => true);
+  const mean = { row: new Float64Array(fit.columns), deviation: 0, noise: 0, n: 0 };
+  own.forEach((i, k) => {
+    const fraction = fractionOf(i);
+    if (!inside(fraction, points.temperatureK[i]!)) return;
+    const row = rowAt(fit, fraction, points.temperatureK[i]!, points.source[i]!);
+    predicted[k] = rowValue(fit, row);
+    const shared = quadraticForm(fit.covariance, row, fit.columns) + scales.lackOfFitVariance;
+    sharedSd[k] = Math.sqrt(shared);
+    sd[k] = Math.sqrt(shared + scales.variance[i]!);
+    if (!counts(i)) return;
+    for (let j = 0; j < row.length; j++) mean.row[j]! += row[j]!;
+    mean.deviation += points.lnValue[i]! - predicted[k]!;
+    mean.noise += scales.variance[i]!;
+    mean.n++;
+  });
+  if (mean.n === 0) return undefined;
+  for (let j = 0; j < fit.columns; j++) mean.row[j]! /= mean.n;
+  return {
+    ...{ predicted, sd, sharedSd, n: mean.n },
+    meanDeviation: mean.deviation / mean.n,
+    meanSd: Math.sqrt(
+      quadraticForm(fit.covariance, mean.row, fit.columns) + scales.lackOfFitVariance + mean.noise / mean.n ** 2,
+    ),
+    degreesOfFreedom: judgingDegreesOfFreedom(sums.filter(({ n }, m) => n > 0 && m !== member).length),
+  };
+}
+
+/**
+ * Degrees of freedom of a deviation of a whole composition: those of the scatter of so many other compositions about
+ * their common surface, to which the weak knowledge of that scatter adds two.
+ */
+export function judgingDegreesOfFreedom(compositions: number): number {
+  return Math.max(3, compositions - 2 + 2);
+}
+
+function except(sums: readonly MemberSums[], member: number): MemberSums[] {
+  return sums.filter((_, m) => m !== member);
+}
+
+function insideOf(range: MixtureRange): (fraction: number, temperatureK: number) => boolean {
+  return (fraction, temperatureK) => isInside(range, fraction, temperatureK);
+}

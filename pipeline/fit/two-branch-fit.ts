@@ -1,0 +1,208 @@
+import { chiSquareQuantile } from "../numerics/distributions.ts";
+import type { RobustFit } from "../records/fits.ts";
+import { bestBreak, bootstrapBreak, leastStatistic, type Sense } from "./break-bootstrap.ts";
+import { breakHint } from "./break-hint.ts";
+import {
+  type BreakPoints,
+  type BreakScan,
+  breakScan,
+  type DistinctTemperature,
+  distinctTemperatures,
+  smoothRival,
+} from "./break-scan.ts";
+
+/** A break that the points of a system show. */
+export interface FoundBreak {
+  readonly sense: Sense;
+  /** Temperature at which it fits best, K. */
+  readonly breakK: number;
+  /** p of no break by parametric bootstrap. */
+  readonly probability: number;
+}
+
+/** Distinct temperatures needed on either side of a break. */
+export const breakSide = 3;
+/** A break is published only below this probability. */
+const LEVEL = 0.01;
+/** Without any one point, and without any one source where the rest can show it, the break must pass this level. */
+const LEFT_OUT_LEVEL = 0.05;
+/** Statistic of a change of slope alone from which a closer look is worth its time. */
+const HINT = 5;
+/** Coefficients of the smooth curve that a broken one is held against. */
+const RIVAL_COEFFICIENTS = 5;
+/** Share of the least statistic that the search with one position a gap must reach. */
+const COARSE = 0.8;
+/** Positions tried over all temperatures; fewer a gap where there are many. */
+const MOST_POSITIONS = 28;
+
+/** Positions between two temperatures. */
+function perGap(temperatures: number): number {
+  return Math.max(1, Math.min(4, Math.round(MOST_POSITIONS / Math.max(1, temperatures - 2 * breakSide + 1))));
+}
+
+/** The kept points of a robust fit as the search for a break wants them. */
+export function breakPoints(
+  { points, kept, noiseSd, betweenSd }: RobustFit,
+  takesPart: (point: number) => boolean = () => true,
+): BreakPoints {
+  let n = 0;
+  const order = new Int32Array(points.n);
+  for (let i = 0; i < points.n; i++) {
+    const finite = points.temperatureK[i]! > 0 && Number.isFinite(points.lnValue[i]) && noiseSd[i]! > 0;
+    if (kept[i] === 1 && finite && takesPart(i)) order[n++] = i;
+  }
+  const [temperatureK, lnValue, variance] = [new Float64Array(n), new Float64Array(n), new Float64Array(n)];
+  const block = new Int32Array(n);
+  const sources: number[] = [];
+  for (let k = 0; k < n; k++) {
+    const i = order[k]!;
+    temperatureK[k] = points.temperatureK[i]!;
+    lnValue[k] = points.lnValue[i]!;
+    variance[k] = noiseSd[i]! ** 2;
+    const known = sources.lastIndexOf(points.source[i]!);
+    block[k] = known >= 0 ? known : sources.push(points.source[i]!) - 1;
+  }
+  return { n, temperatureK, lnValue, variance, block, nBlocks: sources.length, betweenVariance: betweenSd ** 2 };
+}
+
+/**
+ * Looks for a break in the points of one system whose solid form is not specified: two branches that meet, with three
+ * distinct temperatures a side. A break in which the slope falls on heating is what an equilibrium transition of the
+ * solid makes; where none is found, one in which it rises.
+ *
+ * It must have p < 0.01 by parametric bootstrap against the smooth model with curvature; follow the points better
+ * than a smooth curve of as many coefficients, because tables that were smoothed by a polynomial leave residuals that
+ * are no noise; be seen within sources; and still be there at the 5 % level with any one point left out, and with any one
+ * source left out where the rest can show it.
+ *
+ * @param seed starts the random numbers of the bootstrap
+ * @param knownK transitions of the solid that are listed, K: they do not lower what is asked for, but are tried as
+ *   positions, and the search is made even where nothing in the points suggests it
+ */
+export function findBreak(points: BreakPoints, seed: number, knownK: readonly number[] = []): FoundBreak | undefined {
+  const { distinct, inside, worth } = whetherToSearch(points, knownK);
+  if (!worth) return undefined;
+  const scan = breakScan(points, { side: breakSide, perGap: perGap(distinct.length), alsoK: inside });
+  if (scan === undefined) return undefined;
+  for (const sense of ["falls", "rises"] as const) {
+    const found = judge(points, scan, sense, seed);
+    if (found !== undefined) return found;
+  }
+  return undefined;
+}
+
+/**
+ * Where a falling slope fits best, K, if the points or a listed transition suggest that there is one; else NaN. Claims
+ * nothing.
+ */
+export function likelyBreak(points: BreakPoints, knownK: readonly number[]): number {
+  const { distinct, inside, worth } = whetherToSearch(points, knownK);
+  if (!worth) return Number.NaN;
+  const scan = breakScan(points, { side: breakSide, perGap: perGap(distinct.length), alsoK: inside });
+  if (scan === undefined) return Number.NaN;
+  const { position, statistic } = bestBreak(scan, scan.residuals, scan.smoothSum, "falls");
+  return position >= 0 && statistic > leastStatistic(points.n, LEVEL) ? scan.breakK[position]! : Number.NaN;
+}
+
+/** Whether a search is worth its time: for a listed transition always, else where a quick one finds anything. */
+export function whetherToSearch(points: BreakPoints, knownK: readonly number[]) {
+  const distinct = distinctTemperatures(points);
+  const inside = knownK.filter((T) => T > distinct[0]!.highK && T < distinct.at(-1)!.lowK);
+  const enough = distinct.length >= 2 * breakSide;
+  return { distinct, inside, worth: enough && (inside.length > 0 || worthTrying(points, distinct)) };
+}
+
+/** Whether a quick search finds anything. */
+function worthTrying(points: BreakPoints, distinct: readonly DistinctTemperature[]): boolean {
+  if (breakHint(points, distinct, breakSide) < HINT) return false;
+  const scan = breakScan(points, { side: breakSide, perGap: 1 });
+  if (scan === undefined) return false;
+  const best = (sense: Sense) => bestBreak(scan, scan.residuals, scan.smoothSum, sense).statistic;
+  return Math.max(best("falls"), best("rises")) > COARSE * leastStatistic(points.n, LEVEL);
+}
+
+function judge(points: BreakPoints, scan: BreakScan, sense: Sense, seed: number): FoundBreak | undefined {
+  const best = bestBreak(scan, scan.residuals, scan.smoothSum, sense);
+  if (best.position < 0 || best.statistic < leastStatistic(points.n, LEVEL)) return undefined;
+  if (sense === "rises" && fallsNearAnEnd(points, best.gain)) return undefined;
+  const breakK = scan.breakK[best.position]!;
+  if (!seenWithinSources(points, breakK)) return undefined;
+  const rival = smoothRival(points);
+  if (rival <= scan.smoothSum - best.gain || (sense === "rises" && withinScatter(points.n, rival))) return undefined;
+  const { probability, replicates } = bootstrapBreak(scan, best.statistic, sense, LEVEL, seed);
+  if (probability >= LEVEL) return undefined;
+  const critical = replicates[Math.ceil((1 - LEFT_OUT_LEVEL) * replicates.length) - 1]!;
+  if (carriedByOnePoint(points, critical, sense) || carriedByOneSource(points, breakK, sense, seed)) return undefined;
+  return { sense, breakK, probability };
+}
+
+/**
+ * Whether the residuals of the smooth rival are no larger than the scatter of the sources at the 1 % level. A falling slope
+ * is what hydrates are known to do; for a rising one there must be no smooth explanation at all.
+ */
+function withinScatter(n: number, rivalSum: number): boolean {
+  return n <= RIVAL_COEFFICIENTS || rivalSum <= chiSquareQuantile(1 - LEVEL, n - RIVAL_COEFFICIENTS);
+}
+
+/**
+ * Whether a falling slope with two temperatures on one side explains as much: it is too near an end to be published, and
+ * makes the points before it look as if their slope rose.
+ */
+function fallsNearAnEnd(points: BreakPoints, gain: number): boolean {
+  const scan = breakScan(points, { side: breakSide - 1, perGap: 2 });
+  return scan !== undefined && bestBreak(scan, scan.residuals, scan.smoothSum, "falls").gain >= gain;
+}
+
+/**
+ * Whether sources that cross the break, each with two points on either side, have three temperatures a side between
+ * them: sources that lie wholly on one side differ in slope for other reasons too.
+ */
+function seenWithinSources(points: BreakPoints, breakK: number): boolean {
+  const crossing: number[] = [];
+  for (let b = 0; b < points.nBlocks; b++) {
+    const sides = [0, 0];
+    for (let i = 0; i < points.n; i++) if (points.block[i] === b) sides[points.temperatureK[i]! <= breakK ? 0 : 1]!++;
+    if (sides[0]! >= 2 && sides[1]! >= 2) crossing.push(b);
+  }
+  const ofCrossing = (cold: boolean) =>
+    distinctTemperatures(
+      without(points, (i) => !crossing.includes(points.block[i]!) || points.temperatureK[i]! <= breakK !== cold),
+    ).length >= breakSide;
+  return ofCrossing(true) && ofCrossing(false);
+}
+
+function carriedByOnePoint(points: BreakPoints, critical: number, sense: Sense): boolean {
+  for (let i = 0; i < points.n; i++) {
+    const rest = without(points, (k) => k === i);
+    const scan = breakScan(rest, { side: breakSide - 1, perGap: 2 });
+    if (scan === undefined || bestBreak(scan, scan.residuals, scan.smoothSum, sense).statistic <= critical) return true;
+  }
+  return false;
+}
+
+function carriedByOneSource(points: BreakPoints, breakK: number, sense: Sense, seed: number): boolean {
+  for (let b = 0; points.nBlocks > 1 && b < points.nBlocks; b++) {
+    const rest = without(points, (i) => points.block[i] === b);
+    if (!seenWithinSources(rest, breakK)) continue;
+    const scan = breakScan(rest, { side: breakSide, perGap: 2 });
+    if (scan === undefined) continue;
+    const { statistic } = bestBreak(scan, scan.residuals, scan.smoothSum, sense);
+    if (bootstrapBreak(scan, statistic, sense, LEFT_OUT_LEVEL, seed).probability >= LEFT_OUT_LEVEL) return true;
+  }
+  return false;
+}
+
+/** The points without some of them; sources are numbered anew. */
+function without(points: BreakPoints, leftOut: (i: number) => boolean): BreakPoints {
+  const use = Array.from({ length: points.n }, (_, i) => i).filter((i) => !leftOut(i));
+  const blocks = [...new Set(use.map((i) => points.block[i]!))];
+  return {
+    ...points,
+    n: use.length,
+    temperatureK: Float64Array.from(use, (i) => points.temperatureK[i]!),
+    lnValue: Float64Array.from(use, (i) => points.lnValue[i]!),
+    variance: Float64Array.from(use, (i) => points.variance[i]!),
+    block: Int32Array.from(use, (i) => blocks.indexOf(points.block[i]!)),
+    nBlocks: blocks.length,
+  };
+}
