@@ -1,5 +1,6 @@
 import { type FitContext, fitAgain, fitEdition } from "./fit/edition-fits.ts";
 import { idealComparison } from "./fit/ideal-comparison.ts";
+import { fitMixtures } from "./fit/mixture-fit.ts";
 import { rowResults } from "./fit/row-results.ts";
 import { gradeEdition } from "./grade/edition-grades.ts";
 import { groupIntoSystems } from "./group/systems.ts";
@@ -17,6 +18,7 @@ import type { SubstanceIndex } from "./properties/substances.ts";
 import { openAccounts } from "./read/accounts.ts";
 import type { Collection } from "./read/collection.ts";
 import type { Edition, Liquor, SourceAccount } from "./records/edition.ts";
+import type { SystemFit } from "./records/fits.ts";
 import { settingsInForce } from "./records/settings.ts";
 import { applyRulings } from "./rule/apply-rulings.ts";
 import { createTargets } from "./rule/targets.ts";
@@ -78,11 +80,13 @@ export async function curate(
   };
   const first = fitEdition(table, systems, context);
   const { scales } = first;
+  const mixtures = fitMixtures(table, systems, robustOf(first.fits), scales);
 
   onStage("screen");
   const flags = screen({
     ...{ table, systems, scales, settings },
-    fits: first.fits.map(({ robust }) => robust),
+    fits: robustOf(first.fits),
+    mixtures: mixtures.models,
     curves: first.fits.map(({ curves }) => curves),
     about: systems.map(({ index: i }) => ({
       kind: kinds[i] ?? "general",
@@ -135,6 +139,7 @@ export async function curate(
     systems,
     fits,
     scales,
+    mixtures: touched.length === 0 ? mixtures : fitMixtures(decided, systems, robustOf(fits), scales),
     flags,
     rulings,
     refused,
@@ -154,6 +159,8 @@ export async function curate(
   };
   return { edition, index, register, normalised };
 }
+
+const robustOf = (fits: readonly SystemFit[]) => fits.map(({ robust }) => robust);
 
 /** Order of refused readings: by source, then line, then column, in code units. */
 function byPlace({ place: a }: Problem, { place: b }: Problem): number {

@@ -7,6 +7,9 @@ const SHOWN = 8;
 /** Changes below this, percent, are told as none. */
 const NO_CHANGE = 0.05;
 
+/** Offsets that differ between systems by more than this, percent, have no mean worth telling where it may be none. */
+const NO_COMMON_OFFSET = 5;
+
 const signed = (percent: number) => `${percent >= 0 ? "+" : ""}${percent.toFixed(1)} %`;
 const digits = (value: number) => String(Number(value.toPrecision(4)));
 
@@ -44,7 +47,12 @@ function offsetLines({ offsets, pooled_offset: pooled }: CheckResult): string[] 
     }),
   );
   if (pooled === undefined) return told;
-  const { systems, offset_percent, low_percent, high_percent } = pooled;
+  const { systems, offset_percent, low_percent, high_percent, between_systems_percent: between } = pooled;
+  if (between > NO_COMMON_OFFSET && low_percent < 0 && high_percent > 0)
+    return [
+      ...told,
+      `  over ${systems} systems: no common offset, they differ by ${between.toFixed(0)} % (standard deviation)`,
+    ];
   return [...told, `  over ${systems} systems: ${signed(offset_percent)} ${limits(low_percent, high_percent)}`];
 }
 

@@ -64,9 +64,7 @@ export function createSourceTally(nSources: number): SourceTally {
 
 /**
  * Sources whose values are those of a source before them far more often than chance would have it: at least five, and
- * nine tenths of them beyond chance. Chance is the larger of two figures: what the scatter of the pairs that are not equal
- * says (1.4826 times their median distance, as of a normal distribution), and what the number of pairs says that lie near
- * without being equal.
+ * nine tenths of them beyond chance ({@link expectedByChance}).
  */
 export function copiedSources(tally: SourceTally): CopiedSource[] {
   return tally
@@ -79,18 +77,29 @@ export function copiedSources(tally: SourceTally): CopiedSource[] {
     .sort((a, b) => a.source - b.source || a.from - b.from);
 }
 
-function expectedByChance({ distances, compared, near, widths, equal, apart }: Counts): number {
+/** Density at its middle over that between half a and one and a half standard deviations: what a flat density leaves out. */
+const PEAKED = 1.6;
+
+/**
+ * Equal pairs expected among independent values, from the pairs that are plainly no copies, {@link APART_WIDTHS} widths apart
+ * and more. Where most of those lie beyond {@link NEAR_WIDTHS} widths the density is flat in between, and the near ones
+ * tell it; where they lie nearer, as in tables that agree closely, their median distance tells the scatter
+ * (1.4826 times the median, as of a normal distribution).
+ */
+function expectedByChance({ distances, compared, near, widths, apart }: Counts): number {
   if (near === 0) return 0;
   const fromNeighbours = apart / (NEAR_WIDTHS - APART_WIDTHS);
-  const unequal = compared - equal;
-  if (unequal === 0) return fromNeighbours;
-  // Equal pairs are the nearest ones: the median of the others lies so far up.
-  let rank = equal + unequal / 2;
-  const bin = distances.findIndex((count) => {
+  const width = widths / near;
+  const first = Math.max(0, Math.ceil((Math.log(APART_WIDTHS * width) - LOWEST) * BINS_PER_UNIT));
+  const beyond = distances.subarray(first);
+  let rank = beyond.reduce((sum, count) => sum + count, 0) / 2;
+  if (rank === 0) return fromNeighbours;
+  const bin = beyond.findIndex((count) => {
     rank -= count;
     return rank <= 0;
   });
-  const scatter = 1.4826 * Math.exp(LOWEST + (bin + 0.5) / BINS_PER_UNIT);
-  const each = Math.min(1, (2 * widths) / near / (Math.sqrt(2 * Math.PI) * scatter));
-  return Math.max(fromNeighbours, each * compared);
+  const median = Math.exp(LOWEST + (first + bin + 0.5) / BINS_PER_UNIT);
+  if (median > NEAR_WIDTHS * width) return fromNeighbours;
+  const each = Math.min(1, (2 * width) / (Math.sqrt(2 * Math.PI) * 1.4826 * median));
+  return Math.max(fromNeighbours, PEAKED * each * compared);
 }

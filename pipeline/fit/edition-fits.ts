@@ -8,7 +8,7 @@ import { isCurve, publishedCurve } from "./published-curve.ts";
 import { type PooledFit, robustFits } from "./robust-fit.ts";
 import { twoBranchCurves } from "./two-branch-curves.ts";
 import { breakPoints } from "./two-branch-fit.ts";
-import { searchBreaks } from "./two-branch-search.ts";
+import { type SearchedBreak, searchBreaks } from "./two-branch-search.ts";
 import { withStandings } from "./with-standings.ts";
 import { writtenValues } from "./written-values.ts";
 
@@ -120,11 +120,17 @@ function fitSystems(
     const fitted: SystemFit = {
       ...{ robust: fit, curves },
       ...(isCurve(outcome) ? {} : { noCurve: outcome.reason }),
-      ...(found?.sense === "rises" ? { kink: kinkOf(breakPoints(fit), found) } : {}),
+      ...(found?.sense === "rises" ? risingKink(found) : {}),
     };
     return withStandings(fitted, subject, curveContext);
   });
   return { fits, scales, pooled };
+}
+
+/** The kink where the slopes beside it rise as well: a step in a falling one is something else. */
+function risingKink(found: SearchedBreak): Pick<SystemFit, "kink"> {
+  const kink = kinkOf(breakPoints(found.robust), found);
+  return kink.slopeAbove > kink.slopeBelow ? { kink } : {};
 }
 
 /** Robust fits of some of the systems, named by their position, with a break where one is wanted. */

@@ -100,7 +100,7 @@ function withRange(curve: Curve, range: readonly [number, number]): Curve {
 }
 
 function aboutTransition({ temperatureK, low, high, probability }: Transition, branch: 1 | 2, apart: number): string[] {
-  const where = `the solid changes at ${temperatureK.toFixed(1)} K (95 % limits ${low.toFixed(1)} to ${high.toFixed(1)} K; p = ${probability.toFixed(3)} of no change): this is the branch ${branch === 1 ? "below" : "above"} it`;
+  const where = `the solid changes at ${temperatureK.toFixed(1)} K (95 % limits ${low.toFixed(1)} to ${high.toFixed(1)} K; p = ${probability.toFixed(3)} under one smooth curve): this is the branch ${branch === 1 ? "below" : "above"} it`;
   return apart > 0.001 ? [where, `the branches miss each other there by ${(100 * apart).toFixed(1)} %`] : [where];
 }
 

@@ -8,6 +8,7 @@ import {
   breakScan,
   type DistinctTemperature,
   distinctTemperatures,
+  inner,
   smoothRival,
 } from "./break-scan.ts";
 
@@ -16,7 +17,7 @@ export interface FoundBreak {
   readonly sense: Sense;
   /** Temperature at which it fits best, K. */
   readonly breakK: number;
-  /** p of no break by parametric bootstrap. */
+  /** p of as strong a break under one smooth curve, by parametric bootstrap. */
   readonly probability: number;
 }
 
@@ -129,10 +130,13 @@ function judge(points: BreakPoints, scan: BreakScan, sense: Sense, seed: number)
   if (!seenWithinSources(points, breakK)) return undefined;
   const rival = smoothRival(points);
   if (rival <= scan.smoothSum - best.gain || (sense === "rises" && withinScatter(points.n, rival))) return undefined;
+  const enough = leastStatistic(points.n, LEFT_OUT_LEVEL);
+  const withoutOne = leastWithoutOne(points, scan, best.position, sense, enough);
+  if (withoutOne === 0) return undefined;
   const { probability, replicates } = bootstrapBreak(scan, best.statistic, sense, LEVEL, seed);
   if (probability >= LEVEL) return undefined;
   const critical = replicates[Math.ceil((1 - LEFT_OUT_LEVEL) * replicates.length) - 1]!;
-  if (carriedByOnePoint(points, critical, sense) || carriedByOneSource(points, breakK, sense, seed)) return undefined;
+  if (withoutOne <= critical || carriedByOneSource(points, breakK, sense, seed)) return undefined;
   return { sense, breakK, probability };
 }
 
@@ -171,13 +175,28 @@ function seenWithinSources(points: BreakPoints, breakK: number): boolean {
   return ofCrossing(true) && ofCrossing(false);
 }
 
-function carriedByOnePoint(points: BreakPoints, critical: number, sense: Sense): boolean {
-  for (let i = 0; i < points.n; i++) {
-    const rest = without(points, (k) => k === i);
-    const scan = breakScan(rest, { side: breakSide - 1, perGap: 2 });
-    if (scan === undefined || bestBreak(scan, scan.residuals, scan.smoothSum, sense).statistic <= critical) return true;
+/**
+ * The least statistic with any one point left out; 0 as soon as one is at most `enough`. Points that bring most of the gain are
+ * left out first: they are the ones that may carry the break alone.
+ */
+function leastWithoutOne(points: BreakPoints, scan: BreakScan, position: number, sense: Sense, enough: number): number {
+  const { rows, directions, residuals } = scan;
+  const at = 2 * rows * position;
+  const along = [at, at + rows].map((from) => inner(directions, from, residuals, 0, rows));
+  const brought = (i: number) =>
+    Math.abs(residuals[i]! * (along[0]! * directions[at + i]! + along[1]! * directions[at + rows + i]!));
+  const order = Array.from({ length: points.n }, (_, i) => i).sort((i, k) => brought(k) - brought(i) || i - k);
+  let least = Number.POSITIVE_INFINITY;
+  for (const left of order) {
+    const rest = breakScan(
+      without(points, (k) => k === left),
+      { side: breakSide - 1, perGap: 2 },
+    );
+    if (rest === undefined) return 0;
+    least = Math.min(least, bestBreak(rest, rest.residuals, rest.smoothSum, sense).statistic);
+    if (least <= enough) return 0;
   }
-  return false;
+  return least;
 }
 
 function carriedByOneSource(points: BreakPoints, breakK: number, sense: Sense, seed: number): boolean {

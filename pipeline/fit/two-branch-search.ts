@@ -16,7 +16,7 @@ export interface BranchSubject {
 
 /** What the search says of one system. */
 export interface SearchedBreak extends FoundBreak {
-  /** The screening fit that the break stands in: for a falling slope one whose curve breaks there. */
+  /** Falling: the screening fit whose curve breaks there. Rising: the smooth one, with the points that show the kink kept. */
   readonly robust: RobustFit;
 }
 
@@ -27,7 +27,7 @@ export type RefitAtBreaks = (
 
 /** Breaks nearer than this are one, K. */
 const SAME_BREAK_K = 0.5;
-/** Points left out by the smooth fit from which it may be the curve that is wrong, and not they. */
+/** Points left out from which it may be the curve that is wrong, and not they; one, where the curve may break elsewhere. */
 const SEVERAL = 2;
 
 /**
@@ -81,8 +81,9 @@ function searchOne(
     const confirmed = again.agreement === "conflict" ? undefined : judged(again);
     if (confirmed?.sense === "falls") return { ...confirmed, robust: again };
   }
-  const found = judged(leftOut(smooth) >= SEVERAL ? withAllSound(smooth, excluded?.()) : smooth);
-  return found?.sense === "rises" ? { ...found, robust: smooth } : undefined;
+  const whole = leftOut(smooth) >= SEVERAL ? withAllSound(smooth, excluded?.()) : smooth;
+  const found = judged(whole);
+  return found?.sense === "rises" ? { ...found, robust: whole } : undefined;
 }
 
 function keptCount({ kept }: RobustFit): number {
@@ -116,7 +117,9 @@ function withAllSound(robust: RobustFit, excluded: Uint8Array | undefined): Robu
 /** Temperatures at which a break is likely enough for a robust fit of its own, K. */
 function placesToTry(robust: RobustFit, { knownK, excluded }: BranchSubject): number[] {
   const places = [robust.breakTemperatureK, likelyBreak(breakPoints(robust), knownK)];
-  if (leftOut(robust) >= SEVERAL) places.push(likelyBreak(breakPoints(withAllSound(robust, excluded?.())), knownK));
+  const protectedAt = robust.breakTemperatureK;
+  if (leftOut(robust) >= (Number.isNaN(protectedAt) ? SEVERAL : 1))
+    places.push(likelyBreak(breakPoints(withAllSound(robust, excluded?.())), knownK));
   const different: number[] = [];
   for (const place of places) {
     if (Number.isFinite(place) && !different.some((other) => Math.abs(other - place) < SAME_BREAK_K))

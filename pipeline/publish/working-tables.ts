@@ -3,6 +3,7 @@ import { CURVES_COLUMNS } from "../records/generated/curves.ts";
 import { FLAGS_COLUMNS } from "../records/generated/flags.ts";
 import { GRID_COLUMNS } from "../records/generated/grid.ts";
 import { MEASUREMENTS_COLUMNS } from "../records/generated/measurements.ts";
+import { MIXTURES_COLUMNS } from "../records/generated/mixtures.ts";
 import { PLANNING_COOLING_COLUMNS } from "../records/generated/planning-cooling.ts";
 import { REFUSED_COLUMNS } from "../records/generated/refused.ts";
 import { SOURCES_COLUMNS } from "../records/generated/sources.ts";
@@ -16,6 +17,7 @@ import { curveRows, curvesJson } from "./tables/curves.ts";
 import { flagRows, refusedRows } from "./tables/flags.ts";
 import { gridRows } from "./tables/grid.ts";
 import { measurementRecords } from "./tables/measurements.ts";
+import { mixtureRows } from "./tables/mixtures.ts";
 import { coolingRows } from "./tables/planning-cooling.ts";
 import { summaryOf } from "./tables/summary.ts";
 
@@ -43,6 +45,13 @@ export function writeWorkingTables(edition: Edition, folder: OutputFolder, withR
   write("systems.csv", csvTable(SYSTEMS_COLUMNS, inOrder(SYSTEMS_COLUMNS, systemRows(edition))));
   write("curves.csv", csvTable(CURVES_COLUMNS, inOrder(CURVES_COLUMNS, curveRows(edition))));
   write("curves.json", curvesJson(edition));
+  write(
+    "mixtures.csv",
+    csvTable(
+      MIXTURES_COLUMNS,
+      inOrder(MIXTURES_COLUMNS, mixtureRows(edition, edition.mixtures.models, edition.mixtures.without)),
+    ),
+  );
   write("grid.csv", csvTable(GRID_COLUMNS, gridRows(edition)));
   write(
     "planning-cooling.csv",

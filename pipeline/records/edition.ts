@@ -2,6 +2,7 @@ import type { Problem } from "../problems/catalogue.ts";
 import type { Curve, Flag, IdealComparison, PooledScales, SystemFit } from "./fits.ts";
 import type { SourceCard } from "./generated/source-card.ts";
 import { type MeasurementTable, RowState, textOf } from "./measurements.ts";
+import type { Mixtures } from "./mixtures.ts";
 import type { Rulings } from "./rulings.ts";
 import type { Settings } from "./settings.ts";
 import type { System } from "./systems.ts";
@@ -77,6 +78,8 @@ export interface Edition {
   /** By position of the system. */
   readonly fits: readonly SystemFit[];
   readonly scales: PooledScales;
+  /** Models over the composition of binary solvents, after the rulings. */
+  readonly mixtures: Mixtures;
   readonly flags: readonly Flag[];
   /** What people have decided; flags do not depend on it. */
   readonly rulings: Rulings;

@@ -135,14 +135,14 @@ export interface Transition {
   readonly temperatureK: number;
   readonly low: number;
   readonly high: number;
-  /** p of no break by parametric bootstrap. */
+  /** p of as strong a break under one smooth curve, by parametric bootstrap. */
   readonly probability: number;
 }
 
 /** A change of slope that no equilibrium transition makes: d ln value/dT rises on heating. */
 export interface RisingKink {
   readonly temperatureK: number;
-  /** p of no change by parametric bootstrap. */
+  /** p of as strong a kink under one smooth curve, by parametric bootstrap. */
   readonly probability: number;
   /** d ln value/dT (1/K) of straight lines through the three nearest temperatures on either side. */
   readonly slopeBelow: number;

@@ -38,12 +38,8 @@ interface JudgedPoint extends Judged {
  * compositions, then over points of the others; the material threshold holds besides.
  * @param told systems that have a finding of their own already
  */
-export function judgeByMixtures(
-  input: ScreenInput,
-  models: readonly MixtureModel[],
-  told: ReadonlySet<number>,
-): MixtureJudgement {
-  const candidates = models.flatMap((model) =>
+export function judgeByMixtures(input: ScreenInput, told: ReadonlySet<number>): MixtureJudgement {
+  const candidates = (input.mixtures ?? []).flatMap((model) =>
     model.members.flatMap((member): Judged[] => {
       const { leftOut, system } = member;
       const fit = input.fits[system];

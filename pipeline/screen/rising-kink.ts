@@ -17,7 +17,7 @@ export function risingKinkFlags(fits: readonly Pick<SystemFit, "robust" | "kink"
         code: "rising-kink",
         severity: "notice",
         system: robust.system,
-        evidence: `the slope rises on heating near ${inCelsius(temperatureK)}, from ${perKelvin(slopeBelow)} below to ${perKelvin(slopeAbove)} above (p = ${probability.toFixed(3)} of one smooth curve); at an equilibrium transition of the solid it falls`,
+        evidence: `the slope rises on heating near ${inCelsius(temperatureK)}, from ${perKelvin(slopeBelow)} below to ${perKelvin(slopeAbove)} above (p = ${probability.toFixed(3)} under one smooth curve); at an equilibrium transition of the solid it falls`,
         lookAt:
           "Look at the solid at both ends: two forms mixed in one series, the form of the cold end not yet converted, decomposition or loss of " +
           "solvent when hot, or loss on cold filters. A solid that melts or a liquor that splits in two also bends a curve upwards.",

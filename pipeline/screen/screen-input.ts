@@ -1,6 +1,7 @@
 import type { Liquor } from "../records/edition.ts";
 import type { Curve, PooledScales, RobustFit } from "../records/fits.ts";
 import type { MeasurementTable } from "../records/measurements.ts";
+import type { MixtureModel } from "../records/mixtures.ts";
 import type { InReportedUnit, Reread } from "../records/reread.ts";
 import type { Settings } from "../records/settings.ts";
 import type { System } from "../records/systems.ts";
@@ -25,6 +26,8 @@ export interface ScreenInput {
   /** Curves by position of the system, before any ruling. */
   readonly curves: readonly (readonly Curve[])[];
   readonly about: readonly ScreenedSystem[];
+  /** Models over the composition of binary solvents, before any ruling; absent where there is none. */
+  readonly mixtures?: readonly MixtureModel[];
   readonly scales: PooledScales;
   readonly sourceNames: readonly string[];
   readonly reread: Reread;

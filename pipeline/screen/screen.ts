@@ -7,6 +7,7 @@ import { conflictFlags } from "./conflicts.ts";
 import { familyFlags } from "./families.ts";
 import { intervalFlags } from "./intervals.ts";
 import { isOutsideLiquid, liquidRangeFlags } from "./liquid-range.ts";
+import { judgeByMixtures } from "./mixture-screen.ts";
 import { plausibilityFlags } from "./plausibility.ts";
 import { pointFlags, type SuspectFinder } from "./point-flags.ts";
 import { type OffPoint, screenPoints } from "./point-screen.ts";
@@ -30,12 +31,14 @@ export function screen(input: ScreenInput): Flag[] {
   const blocks = screenBlocks(input, models, suspectsOf);
   const blocked = new Set(blocks.map(({ system, source }) => `${system}:${source}`));
   const points = screenPoints(input, blocked);
+  const mixtures = judgeByMixtures(input, new Set(blocks.map(({ system }) => system)));
   return [
     ...conflictFlags(input, models, suspectsOf),
     ...blockFlags(input, blocks),
     ...pointFlags(input, models, points, suspectsOf),
     ...misreadTemperatures(input, models, points, blocked, suspectsOf),
-    ...cannotTellFlags(input, new Set(points.map(({ system }) => system))),
+    ...mixtures.flags,
+    ...cannotTellFlags(input, new Set([...points.map(({ system }) => system), ...mixtures.judged])),
     ...repeatFlags(input),
     ...calculatedFlags(input),
     ...liquidRangeFlags(input),

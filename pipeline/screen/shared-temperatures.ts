@@ -48,17 +48,23 @@ export function comparablePoints(input: ScreenInput, { system, points, repeats }
   );
 }
 
+/** Other points at the temperature of one of them, in points sorted by temperature. */
+function atTemperatureOf({ points: { temperatureK } }: RobustFit, sorted: readonly number[], at: number): number[] {
+  const T = temperatureK[sorted[at]!]!;
+  const same = (k: number) => Math.abs((temperatureK[sorted[k]!] ?? Number.NaN) - T) < SAME_TEMPERATURE_K;
+  let [from, to] = [at, at + 1];
+  while (from > 0 && same(from - 1)) from--;
+  while (to < sorted.length && same(to)) to++;
+  return to - from < 3 ? [] : sorted.slice(from, to);
+}
+
 function partedPoints(input: ScreenInput, fit: RobustFit): Parted[] {
   const { points, noiseSd, betweenSd } = fit;
   // A source that scatters widely is judged by what is usual: its own scatter must not excuse it.
   const usualNoise = middle([...noiseSd]);
-  const usable = comparablePoints(input, fit);
-  return usable.flatMap((i): Parted[] => {
-    const others = usable.filter(
-      (j) =>
-        points.source[j] !== points.source[i] &&
-        Math.abs(points.temperatureK[j]! - points.temperatureK[i]!) < SAME_TEMPERATURE_K,
-    );
+  const usable = comparablePoints(input, fit).sort((a, b) => points.temperatureK[a]! - points.temperatureK[b]!);
+  return usable.flatMap((i, at): Parted[] => {
+    const others = atTemperatureOf(fit, usable, at).filter((j) => points.source[j] !== points.source[i]);
     if (new Set(others.map((j) => points.source[j])).size < 2) return [];
     const values = others.map((j) => points.lnValue[j]!);
     const mean = values.reduce((sum, value) => sum + value, 0) / values.length;

@@ -39,22 +39,30 @@ export function temperatureEffectFlags(input: ScreenInput): Flag[] {
 
 /** The straight line of ln value over 1/T by least squares; none where a series is too short. */
 function effectOf({ points, noiseSd }: RobustFit, source: number, of: readonly number[]): Effect[] {
-  const inverse = of.map((i) => 1 / points.temperatureK[i]!);
-  const [low, high] = [1 / Math.max(...inverse), 1 / Math.min(...inverse)];
-  if (of.length < LEAST_POINTS || !(high - low >= LEAST_SPAN_K)) return [];
-  const mean = (values: readonly number[]) => values.reduce((sum, value) => sum + value, 0) / values.length;
-  const [centre, level] = [mean(inverse), mean(of.map((i) => points.lnValue[i]!))];
+  const n = of.length;
+  if (n < LEAST_POINTS) return [];
+  const { temperatureK, lnValue } = points;
+  let [low, high, centre, level] = [Number.POSITIVE_INFINITY, 0, 0, 0];
+  for (const i of of) {
+    const T = temperatureK[i]!;
+    low = Math.min(low, T);
+    high = Math.max(high, T);
+    centre += 1 / T / n;
+    level += lnValue[i]! / n;
+  }
+  if (!(high - low >= LEAST_SPAN_K)) return [];
   let [xx, xy, noise] = [0, 0, 0];
-  for (const [k, i] of of.entries()) {
-    xx += (inverse[k]! - centre) ** 2;
-    xy += (inverse[k]! - centre) * (points.lnValue[i]! - level);
+  for (const i of of) {
+    const x = 1 / temperatureK[i]! - centre;
+    xx += x * x;
+    xy += x * (lnValue[i]! - level);
   }
   const slope = xy / xx;
-  for (const [k, i] of of.entries())
-    noise += Math.max(noiseSd[i]! ** 2, (points.lnValue[i]! - level - slope * (inverse[k]! - centre)) ** 2);
-  return [
-    { source, points: of, enthalpy: -GAS_CONSTANT * slope, sd: GAS_CONSTANT * Math.sqrt(noise / of.length / xx) },
-  ];
+  for (const i of of) {
+    const residual = lnValue[i]! - level - slope * (1 / temperatureK[i]! - centre);
+    noise += Math.max(noiseSd[i]! ** 2, residual * residual);
+  }
+  return [{ source, points: of, enthalpy: -GAS_CONSTANT * slope, sd: GAS_CONSTANT * Math.sqrt(noise / n / xx) }];
 }
 
 /** Whether a series differs from every other that knows its own effect well, those being of one mind among themselves. */

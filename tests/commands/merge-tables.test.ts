@@ -19,6 +19,7 @@ const SCHEMA_OF: Readonly<Record<string, string>> = {
   "systems.csv": "systems",
   "curves.csv": "curves",
   "grid.csv": "grid",
+  "mixtures.csv": "mixtures",
   "planning-cooling.csv": "planning-cooling",
 };
 

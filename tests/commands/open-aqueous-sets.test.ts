@@ -95,11 +95,11 @@ describe.skipIf(absent)("nine open aqueous sets, merged", () => {
     );
     // Set D is mostly made of set B, as the authors of the collection say of values within 0.01 log unit.
     expect(pairs.find(({ pair }) => pair === "set-b set-d")?.equal).toBeGreaterThan(1_600);
-    expect(pairs.reduce((sum, { equal }) => sum + equal, 0)).toBeGreaterThan(2_800);
+    expect(pairs.reduce((sum, { equal }) => sum + equal, 0)).toBeGreaterThan(7_500);
     for (const { equal, chance } of pairs) expect(chance).toBeLessThanOrEqual(0.1 * equal + 1);
-    // 3,292 solutes stand in several sets; a third of them rest on one measurement written more than once.
+    // 3,292 solutes stand in several sets; half of them rest on one measurement written more than once.
     const several = readTable(out, "curves.csv").rows.filter(({ n_sources }) => Number(n_sources) > 1);
-    expect(several.length).toBeLessThan(2_400);
+    expect(several.length).toBeLessThan(1_800);
   });
 
   test("take well under 20 CPU seconds", () => {

@@ -21,7 +21,7 @@ describe("Of 400 smooth systems with curvature and a scatter of 1 to 3 %, by one
   });
 });
 
-describe("Of 60 systems whose slope falls by 116 kJ/mol at a transition, 20 points by two sources,", () => {
+describe("Of 60 systems whose dissolution enthalpy falls by 35 kJ/mol at a transition, 20 points by two sources,", () => {
   const { points, breakK } = world({ systems: 60, seed: 12, points: () => 20, fall: 14 });
   const pairs = branchesOf(points, 6, general).map(({ pair }) => pair);
   const found = pairs.flatMap((pair, i) => (pair === undefined ? [] : [{ ...pair, trueK: breakK[i]! }]));

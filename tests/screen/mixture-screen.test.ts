@@ -24,7 +24,7 @@ function judged(readings: readonly MixtureReading[], told: ReadonlySet<number> =
     ...{ sourceNames: ["first", "second"], settings: DEFAULT_SETTINGS },
     ...{ reread: () => undefined, inReportedUnit: () => undefined },
   };
-  return judgeByMixtures(input, fitsOf(world).models, told);
+  return judgeByMixtures({ ...input, mixtures: fitsOf(world).models }, told);
 }
 
 const moved = (readings: readonly MixtureReading[], fraction: number, by: number) =>

@@ -126,6 +126,33 @@ describe("one measurement written twice", () => {
   });
 });
 
+describe("two collections of log S at one temperature", () => {
+  const SOLUTES = ["benzoic acid", "salicylic acid", "paracetamol", "caffeine", "succinic acid", "adipic acid", "urea"];
+  const FIRST = [-1.55, -1.82, -1.02, -0.97, -0.21, -0.81, 0.3];
+  const collection = (values: readonly number[]): SmallSource => ({
+    rows: SOLUTES.map((solute, i) => [solute, "water", 25, values[i]!.toFixed(3)]),
+    unit: "log10(mol/L)",
+  });
+  const sourcesOfCurves = (edition: Awaited<ReturnType<typeof curated>>) =>
+    edition.fits.map(({ curves }) => curves[0]?.nSources ?? 0);
+
+  test("of which one repeats the other within 0.01 for most solutes are told once, and those values count once", async () => {
+    const again = FIRST.map((value, i) => value + [0, 0.004, -0.006, 0, 0.008, 0.002, 0.6][i]!);
+    const edition = await curated({ a: collection(FIRST), b: collection(again) });
+    const told = edition.flags.filter(({ code }) => code === "re-reporting-source");
+    expect(told).toMatchObject([{ scope: "source", severity: "notice", source: 1 }]);
+    expect(told[0]?.evidence).toMatch(/ 6 of 7 of a \(by chance about 0\)$/);
+    expect(sourcesOfCurves(edition).filter((n) => n === 1)).toHaveLength(6);
+  });
+
+  test("which differ as collections do count each", async () => {
+    const apart = FIRST.map((value, i) => value + [0.12, -0.3, 0.05, 0.44, -0.16, 0.21, 0.004][i]!);
+    const edition = await curated({ a: collection(FIRST), b: collection(apart) });
+    expect(edition.flags.filter(({ code }) => code === "re-reporting-source")).toEqual([]);
+    expect(sourcesOfCurves(edition)).not.toContain(1);
+  });
+});
+
 describe("a source that averages others", () => {
   const mean = A.map(([T, S], i): [number, number] => [T, Number(((S + B[i]![1]) / 2).toPrecision(4))]);
 

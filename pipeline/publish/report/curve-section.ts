@@ -117,7 +117,7 @@ function valueTable(grid: readonly GridRow[]): Html {
 function transitionWords(transition: Transition | undefined): Html {
   if (transition === undefined) return html``;
   const { temperatureK, low, high, probability } = transition;
-  return html`<p>The solid in equilibrium changes at <strong>${celsius(temperatureK)} °C</strong> (95 % limits ${celsius(low)} to ${celsius(high)} °C): two branches meet there, and the slope falls on heating. Probability of one smooth curve, by parametric bootstrap: ${probability.toFixed(3)}. Which form each branch is, solubility alone does not tell.</p>`;
+  return html`<p>The solid in equilibrium changes at <strong>${celsius(temperatureK)} °C</strong> (95 % limits ${celsius(low)} to ${celsius(high)} °C): two branches meet there, and the slope falls on heating. One smooth curve would show as strong a break with p = ${probability.toFixed(3)} (parametric bootstrap, 999 replicates). Which form each branch is, solubility alone does not tell.</p>`;
 }
 
 /** Curve with equation, coefficients, quality, runners-up, and values at round temperatures; or why there is none. */

@@ -15,6 +15,7 @@ const WORDS: Readonly<Record<string, string>> = {
   "exact-repeat": "Exact repeat",
   "re-reported": "Reported again",
   "cannot-tell": "Cannot tell",
+  "off-mixture": "Off the other compositions",
 };
 
 /** A flag's code in words. */

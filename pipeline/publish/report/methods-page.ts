@@ -2,6 +2,7 @@ import type { Edition } from "../../records/edition.ts";
 import { equationHtml } from "./curve-section.ts";
 import { counted } from "./figures.ts";
 import { type Html, html } from "./html.ts";
+import { mixtureMethods } from "./methods-mixtures.ts";
 import { statistics } from "./methods-statistics.ts";
 import { page } from "./page.ts";
 import { cite, referenceList } from "./references.ts";
@@ -54,7 +55,7 @@ export function methodsPage(edition: Edition): string {
   return page(edition, {
     title: "Methods",
     name: "methods.html",
-    body: html`<h1>Methods</h1>${bases()}${uncertainties(edition)}${models()}${statistics(edition)}${screening(edition)}${grades()}
+    body: html`<h1>Methods</h1>${bases()}${uncertainties(edition)}${models()}${mixtureMethods()}${statistics(edition)}${screening(edition)}${grades()}
 <h2 id="references">References</h2>${referenceList()}`,
   });
 }

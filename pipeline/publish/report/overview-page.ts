@@ -5,6 +5,7 @@ import { massRatioFromLn } from "../mass-ratio.ts";
 import { celsius, counted, fixed, significant } from "./figures.ts";
 import { byUrgency, flagItem } from "./flags-page.ts";
 import { type Html, html, raw, short } from "./html.ts";
+import { mixtureList } from "./mixture-page.ts";
 import { OVERVIEW_SCRIPT } from "./overview-script.ts";
 import { page, wideTable } from "./page.ts";
 import { waits } from "./system-view.ts";
@@ -137,6 +138,7 @@ ${steward === "" ? "" : html`<p class="soft">Looked after by ${short(steward, 16
 ${accountOf(edition)}
 <h2>What needs a person first</h2>
 ${urgent(edition)}
+${mixtureList(edition.mixtures.models)}
 <h2 id="systems">Systems</h2>
 <div class="search" id="search" hidden><label for="filter">Show systems with</label><input id="filter" type="search" autocomplete="off" spellcheck="false" aria-describedby="told"><span id="told" role="status"></span></div>
 ${ordered.length === 0 ? html`<p>None: no reading became a measurement.</p>` : wideTable("Systems by solute", systemTable(edition, ordered, flagsOf))}`,

@@ -25,6 +25,9 @@ const REFERENCES = {
   grant: fromMemory("D. J. W. Grant, M. Mehdizadeh, A. H.-L. Chow, J. E. Fairbrother, Int. J. Pharm. 18 (1984) 25-38."),
   apelblat: cited("A. Apelblat, E. Manzurola, J. Chem. Thermodyn. 31 (1999) 85-91."),
   buchowski: cited("H. Buchowski, A. Ksiazczak, S. Pietrzyk, J. Phys. Chem. 84 (1980) 975-979."),
+  acree: fromMemory(
+    "W. E. Acree, Thermochim. Acta 198 (1992) 71-79; A. Jouyban, J. Pharm. Pharm. Sci. 11 (2008) 32-58.",
+  ),
   prausnitz: fromMemory(
     "J. M. Prausnitz, R. N. Lichtenthaler, E. Gomes de Azevedo, Molecular Thermodynamics of Fluid-Phase Equilibria, 3rd ed. (1999), chapter 11; S. H. Neau, G. L. Flynn, Pharm. Res. 7 (1990) 1157-1162.",
   ),

@@ -7,6 +7,7 @@ import { coolingRows } from "../tables/planning-cooling.ts";
 import { cautionsPage } from "./cautions-page.ts";
 import { flagsPage } from "./flags-page.ts";
 import { methodsPage } from "./methods-page.ts";
+import { mixturePages } from "./mixture-page.ts";
 import { overviewPage, systemFile } from "./overview-page.ts";
 import { refusedPage } from "./refused-page.ts";
 import { settingsPage } from "./settings-page.ts";
@@ -63,6 +64,7 @@ export function* reportPages(edition: Edition): Generator<readonly [name: string
   yield ["methods.html", methodsPage(edition)];
   yield ["settings.html", settingsPage(edition)];
   yield ["cautions.html", cautionsPage(edition)];
+  yield* mixturePages(edition, edition.mixtures.models);
   const gridOf = systemBySystem(namedGridRows(edition));
   const coolingOf = systemBySystem(coolingRows(edition));
   for (const system of edition.systems) {

@@ -8,6 +8,7 @@ import { flagSection, flagWords } from "./flag-section.ts";
 import { type Html, html, short } from "./html.ts";
 import { legend } from "./legend.ts";
 import { measurementSection } from "./measurement-section.ts";
+import { mixtureLinks } from "./mixture-page.ts";
 import { page } from "./page.ts";
 import { planningSection } from "./planning-section.ts";
 import { type PlotPicture, solubilityPlot, vantHoffPlot } from "./plots.ts";
@@ -35,7 +36,7 @@ export interface SystemTables {
 /** A link to the page of a system, from the page of another. */
 const systemLink = (system: System, text: Html): Html => html`<a href="${system.id}.html">${text}</a>`;
 
-function facts({ system, grade }: SystemView, { family }: Neighbours): Html {
+function facts({ edition, system, grade }: SystemView, { family }: Neighbours): Html {
   const { identity } = system;
   const mass = (value: number) => (Number.isNaN(value) ? "unknown" : `${fixed(value, 3)} g/mol`);
   const others = family.filter(({ index }) => index !== system.index);
@@ -45,6 +46,7 @@ function facts({ system, grade }: SystemView, { family }: Neighbours): Html {
   return html`<dl class="facts">
 <dt>Solid form</dt><dd>${short(identity.solidForm, NAME)}${others.length > 0 ? html` (of this family also: ${forms}${others.length > 20 ? ` and ${others.length - 20} more` : ""})` : ""}</dd>
 ${identity.composition === "" ? "" : html`<dt>Composition</dt><dd>${short(identity.composition, NAME)} (mass fractions)</dd>`}
+${mixtureLinks(edition.mixtures.models, system.index)}
 ${identity.medium === "" ? "" : html`<dt>Medium</dt><dd>${short(identity.medium, NAME)}</dd>`}
 <dt>Molar masses</dt><dd>solute ${mass(identity.soluteMolarMass)}, solvent ${mass(identity.solventMolarMass)}</dd>
 <dt>Proposed grade</dt><dd><b>${grade?.grade ?? "none"}</b>: ${grade?.reasons.join("; ") ?? ""}</dd></dl>`;

@@ -4,6 +4,7 @@ import type { CurveRow } from "../../records/generated/curves.ts";
 import type { CurveDocument } from "../../records/generated/curves-json.ts";
 import { crossingsPart } from "../form-crossings.ts";
 import type { Loose } from "./account.ts";
+import { mixtureDocuments } from "./mixtures.ts";
 import { disagreements, sourcesOfCurve } from "./source-standings.ts";
 
 /** Equations with the coefficients named a, b, c in the order of the columns; y is x or r. */
@@ -155,5 +156,5 @@ export function* curvesJson(edition: Edition): Generator<string> {
     yield mark + JSON.stringify(curveDocument(curve, edition));
     mark = ",\n";
   }
-  yield `\n],"disagreements":${JSON.stringify(disagreements(edition))}}\n`;
+  yield `\n],"disagreements":${JSON.stringify(disagreements(edition))},"mixtures":${JSON.stringify(mixtureDocuments(edition, edition.mixtures.models))}}\n`;
 }

@@ -176,7 +176,7 @@ export interface CurveDocument {
      */
     high_K: number;
     /**
-     * Probability of no change by parametric bootstrap, 1.
+     * p of as strong a break under one smooth curve, by parametric bootstrap, 1.
      */
     probability?: number;
   };

@@ -141,7 +141,7 @@ export interface CurveRow {
    */
   transition_high_K?: number;
   /**
-   * Probability of no change by parametric bootstrap, 1; below 0.01 where a transition is published.
+   * p of as strong a break under one smooth curve, by parametric bootstrap, 1; below 0.01 where a transition is published.
    */
   transition_probability?: number;
   /**

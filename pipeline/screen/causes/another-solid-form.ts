@@ -1,6 +1,6 @@
 import { threeDigits } from "../wording.ts";
-import { type AcrossSystems, isParallel, oneOffset, soundThough } from "./across-systems.ts";
 import { DRIFTING_OFFSET, DRIFTING_PRIOR, FREE_OFFSET, FREE_PRIOR } from "./compete-block.ts";
+import { type AcrossSystems, isParallel, oneOffset, soundThough } from "./side-by-side.ts";
 
 /** Two forms of a solute differ by at most about this factor in solubility. Common practice. */
 const LARGEST_RATIO = Math.log(5);

@@ -1,6 +1,6 @@
-import { type AcrossSystems, isParallel, oneOffset, soundThough } from "./across-systems.ts";
 import { FREE_OFFSET, FREE_PRIOR } from "./compete-block.ts";
 import { LOOK_AGAIN } from "./compete-point.ts";
+import { type AcrossSystems, isParallel, oneOffset, soundThough } from "./side-by-side.ts";
 
 /** Offsets by one wrong stock or balance agree to about this, ln value. */
 const ONE_SD = 0.02;

@@ -1,6 +1,6 @@
 import { counted, threeDigits } from "../wording.ts";
-import { type AcrossSystems, type SideBySide, soundThough } from "./across-systems.ts";
 import { blockReadingPrior } from "./compete-block.ts";
+import { type AcrossSystems, type SideBySide, soundThough } from "./side-by-side.ts";
 import { BY_CONSTANT, CONSTANT_SD_K, FROM_ROOM, JACKET_SD, ROOM_K, temperatureOffset } from "./temperature-offset.ts";
 
 /** Noise of a deviation about the pattern, and offset of a source, ln value: what an amplitude is uncertain by. */

@@ -1,6 +1,6 @@
-import type { AcrossSystems, SideBySide } from "./across-systems.ts";
-import { soundThough } from "./across-systems.ts";
 import { FREE_OFFSET, FREE_PRIOR } from "./compete-block.ts";
+import type { AcrossSystems, SideBySide } from "./side-by-side.ts";
+import { soundThough } from "./side-by-side.ts";
 
 /** How much likelier it is that another solute in the same solvent is off to the same side, or the other. */
 const [SAME_SIDE, OTHER_SIDE] = [3, 1];
