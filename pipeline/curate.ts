@@ -24,6 +24,7 @@ import { applyRulings } from "./rule/apply-rulings.ts";
 import { createTargets } from "./rule/targets.ts";
 import { touchedSystems } from "./rule/touched-systems.ts";
 import { materialThreshold } from "./screen/material-threshold.ts";
+import { risingKinkFlags } from "./screen/rising-kink.ts";
 import { screen } from "./screen/screen.ts";
 import { thresholdKind } from "./screen/threshold-kind.ts";
 
@@ -75,6 +76,7 @@ export async function curate(
       liquors[i]?.solventFreezingPointK ?? Number.NaN,
       liquors[i]?.solventHighestBoilingPointK ?? Number.NaN,
     ],
+    transitionsK: ({ index: i }) => liquors[i]?.transitionsK ?? [],
     threshold: ({ index: i }, level, lnU) => materialThreshold(level, lnU, kinds[i] ?? "general", settings),
     settings,
   };
@@ -83,20 +85,23 @@ export async function curate(
   const mixtures = fitMixtures(table, systems, robustOf(first.fits), scales);
 
   onStage("screen");
-  const flags = screen({
-    ...{ table, systems, scales, settings },
-    fits: robustOf(first.fits),
-    mixtures: mixtures.models,
-    curves: first.fits.map(({ curves }) => curves),
-    about: systems.map(({ index: i }) => ({
-      kind: kinds[i] ?? "general",
-      boilingPointK: liquors[i]?.solventHighestBoilingPointK ?? Number.NaN,
-      freezingPointK: liquors[i]?.solventFreezingPointK ?? Number.NaN,
-      ...(liquors[i] === undefined ? {} : { liquor: liquors[i] }),
-    })),
-    sourceNames: accounts.map(({ name }) => name),
-    ...createRereader(table, register.identities, systems, normalised),
-  });
+  const flags = [
+    ...screen({
+      ...{ table, systems, scales, settings },
+      fits: robustOf(first.fits),
+      mixtures: mixtures.models,
+      curves: first.fits.map(({ curves }) => curves),
+      about: systems.map(({ index: i }) => ({
+        kind: kinds[i] ?? "general",
+        boilingPointK: liquors[i]?.solventHighestBoilingPointK ?? Number.NaN,
+        freezingPointK: liquors[i]?.solventFreezingPointK ?? Number.NaN,
+        ...(liquors[i] === undefined ? {} : { liquor: liquors[i] }),
+      })),
+      sourceNames: accounts.map(({ name }) => name),
+      ...createRereader(table, register.identities, systems, normalised),
+    }),
+    ...risingKinkFlags(first.fits),
+  ];
 
   onStage("rule");
   const named = { sources: accounts, table, systems, flags };

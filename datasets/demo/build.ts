@@ -6,6 +6,7 @@ import { mkdirSync, readFileSync, writeFileSync } from "node:fs";
 import { chromatography, clearPoints, gravimetry } from "./harbour-laboratories.ts";
 import { formulationNotes, northWorks, report, titration } from "./other-sites.ts";
 import { notebook, salts } from "./salts.ts";
+import { kiloLaboratory, solventScreen } from "./solvent-mixtures.ts";
 import { cardText, lineOfRow, type SourceFile, tableText } from "./source-file.ts";
 
 interface Planted {
@@ -60,7 +61,7 @@ function plantedList(planted: readonly Planted[]): string {
 function build(): void {
   const files = [
     ...[gravimetry(), chromatography(), clearPoints(), report(), titration(), northWorks(), formulationNotes()],
-    ...[salts(), notebook()],
+    ...[salts(), notebook(), kiloLaboratory(), solventScreen()],
   ];
   mkdirSync(folder("sources/"), { recursive: true });
   for (const file of files) {

@@ -75,6 +75,7 @@ export function gravimetry(): SourceFile {
         "none",
         "below the balance, not weighed out",
       ]),
+      ...rows(measure(plan("harbour31Water", [5, 15, 25, 32, 38, 44, 50, 60, 70]))),
     ],
   };
 }

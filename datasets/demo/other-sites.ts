@@ -114,6 +114,16 @@ export function titration(): SourceFile {
   };
 }
 
+const REGISTRY_NUMBERS: ReadonlyMap<string, string> = new Map([
+  ["paracetamol", "103-90-2"],
+  ["benzoic acid", "65-85-0"],
+  ["succinic acid", "110-15-6"],
+  ["adipic acid", "124-04-9"],
+  ["nicotinamide", "98-92-0"],
+  ["copper(II) sulfate", "7758-98-7"],
+  ["sodium sulfate", "7757-82-6"],
+]);
+
 /** The north works writes decimal commas, semicolons and its own headings; % of the solution by mass. */
 export function northWorks(): SourceFile {
   const source = "werk-nord-2025-trockenrueckstand";
@@ -128,7 +138,10 @@ export function northWorks(): SourceFile {
   const cells = (r: Reported) => {
     const { solute, form, solvent, crystalRatio } = SYSTEMS[r.system];
     const basis = crystalRatio > 1 ? "anhydrous" : "";
-    return [solute.name, form, basis, solvent.name, comma(r.temperature), comma(r.value), ""];
+    return [
+      ...[solute.name, REGISTRY_NUMBERS.get(solute.name) ?? "", form, basis],
+      ...[solvent.name, comma(r.temperature), comma(r.value), ""],
+    ];
   };
   const tens = [10, 20, 30, 40, 50, 60, 70];
   const series = [
@@ -140,6 +153,7 @@ export function northWorks(): SourceFile {
     measure(plan("copperWater", tens)),
     measure(plan("sulfateWater", [5, 10, 15, 20, 25, 30])),
   ];
+  const later = measuredRows(measure(plan("harbour31Water", tens)), cells);
   return {
     delimiter: ";",
     lineEnd: "\r\n",
@@ -159,6 +173,7 @@ export function northWorks(): SourceFile {
       table: { encoding: "auto", delimiter: ";", decimal: ",", header_line: 1, missing: ["", "-"] },
       columns: {
         solute: { column: "Stoff" },
+        cas: { column: "CAS-Nr." },
         solid_form: { column: "Bodenkörper" },
         solute_basis: { column: "Bezug" },
         solvent: { column: "Lösemittel" },
@@ -168,14 +183,29 @@ export function northWorks(): SourceFile {
       constants: { temperature_probe: "bath" },
       carry: ["Bemerkung"],
     },
-    headings: ["Stoff", "Bodenkörper", "Bezug", "Lösemittel", "Temp. in °C", "Massenanteil in %", "Bemerkung"],
+    headings: [
+      "Stoff",
+      "CAS-Nr.",
+      "Bodenkörper",
+      "Bezug",
+      "Lösemittel",
+      "Temp. in °C",
+      "Massenanteil in %",
+      "Bemerkung",
+    ],
     rows: [
       ...series.flatMap((readings) => measuredRows(readings, cells)),
-      typedRow(["salicylic acid", "", "", "Essigester", "25", "19,2", "nur ein Ansatz"], {
+      typedRow(["salicylic acid", "69-72-7", "", "", "Essigester", "25", "19,2", "nur ein Ansatz"], {
         cause: "refused",
         done: "solvent under a name the tables do not know",
         truth: "ethyl acetate, 19.12",
       }),
+      typedRow(["caffeine", "02.08.1958", "", "", "ethyl acetate", "25", "0,77", "Einzelwert"], {
+        cause: "refused",
+        done: "CAS number turned into a date by the spreadsheet",
+        truth: "58-08-2, 0.77",
+      }),
+      ...later,
     ],
   };
 }
@@ -227,6 +257,15 @@ export function formulationNotes(): SourceFile {
       ),
       typedRow(["caffeine", "ethyl acetate", "25", "7.7", "mg/g", ""], openUnit),
       typedRow(["caffeine", "ethyl acetate", "37", "11.2", "mg/g", ""], openUnit),
+      typedRow(["benzoic acid", "water", "25", "slightly soluble", "pharmacopoeia term", "from the monograph"]),
+      typedRow(
+        ["salicylic acid", "ethyl acetate", "25", "slightly soluble", "pharmacopoeia term", "from the monograph"],
+        {
+          cause: "contradicted range",
+          done: "term of the monograph for water",
+          truth: "freely soluble",
+        },
+      ),
     ],
   };
 }

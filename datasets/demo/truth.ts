@@ -32,6 +32,8 @@ export interface System {
   readonly curvature: number;
   /** Molar mass of the crystal over that of the unsolvated solute. */
   readonly crystalRatio: number;
+  /** Another solid of the same solute, which takes over where its solubility is the lower one. */
+  readonly otherSolid?: { readonly moleFraction25: number; readonly enthalpy: number };
 }
 
 const GAS_CONSTANT = 8.314462618e-3;
@@ -46,6 +48,7 @@ const SOLUTES = {
   caffeine: { name: "caffeine", molarMass: 194.194, solidDensity: 1230 },
   nicotinamide: { name: "nicotinamide", molarMass: 122.127, solidDensity: 1400 },
   harbour14: { name: "HBR-14", molarMass: 312.325, solidDensity: 1310 },
+  harbour31: { name: "HBR-31", molarMass: 265.309, solidDensity: 1290 },
   copper: { name: "copper(II) sulfate", molarMass: 159.602, solidDensity: 3600 },
   sulfate: { name: "sodium sulfate", molarMass: 142.036, solidDensity: 2700 },
 } as const satisfies Record<string, Solute>;
@@ -98,6 +101,11 @@ export const SYSTEMS = {
   formAPropanol: system("harbour14", "propanol", 0.00412, 36.4, 0, "form A"),
   formBPropanol: system("harbour14", "propanol", 0.00537, 34.2, 0, "form B"),
   formAEthylAcetate: system("harbour14", "ethylAcetate", 0.0128, 29.8, 0, "form A"),
+  // A hydrate in the cold, the anhydrous solid above 41 °C; nobody says which one was at the bottom.
+  harbour31Water: {
+    ...system("harbour31", "water", 0.00236, 47.5),
+    otherSolid: { moleFraction25: 0.00424, enthalpy: 18.7 },
+  },
   copperWater: system("copper", "water", 0.02486, 12.6, 10, "pentahydrate", 249.677 / 159.602),
   sulfateWater: system("sulfate", "water", 0.03405, 50.3, 0, "decahydrate", 322.186 / 142.036),
 } as const satisfies Record<string, System>;
@@ -107,12 +115,40 @@ export type SystemName = keyof typeof SYSTEMS;
 
 /** g unsolvated solute per g total solvent at a temperature in °C. */
 export function trueMassRatio(name: SystemName, celsius: number): number {
-  const { solute, solvent, moleFraction25, enthalpy, curvature } = SYSTEMS[name];
-  const kelvin = celsius + 273.15;
-  const step = 298.15 / kelvin;
-  const slope = (enthalpy / GAS_CONSTANT / 298.15) * (1 - step);
-  const x = Math.exp(Math.log(moleFraction25) + slope + curvature * (step - 1 - Math.log(step)));
+  const { solute, solvent, moleFraction25, enthalpy, curvature, otherSolid }: System = SYSTEMS[name];
+  const step = 298.15 / (celsius + 273.15);
+  const bent = curvature * (step - 1 - Math.log(step));
+  const level = (x25: number, heat: number) => x25 * Math.exp((heat / GAS_CONSTANT / 298.15) * (1 - step));
+  const own = level(moleFraction25, enthalpy) * Math.exp(bent);
+  const x = otherSolid ? Math.min(own, level(otherSolid.moleFraction25, otherSolid.enthalpy)) : own;
   return ((x / (1 - x)) * solute.molarMass) / solvent.molarMass;
+}
+
+/** Mass fraction of the first solvent in a mixture of two volumes measured at 20 °C. */
+export function massFractionOfVolumes(first: SystemName, second: SystemName, volumeFraction: number): number {
+  const mass = volumeFraction * SYSTEMS[first].solvent.density20;
+  return mass / (mass + (1 - volumeFraction) * SYSTEMS[second].solvent.density20);
+}
+
+/**
+ * g solute per g of a mixture of the solvents of two systems, from the volume fraction f of the first: ln x lies on the
+ * straight line between both, and f (1 - f) (2.9 + 1.1 (2 f - 1)) 298.15/T above it.
+ */
+export function mixedMassRatio(first: SystemName, second: SystemName, massFraction: number, celsius: number): number {
+  const [one, other] = [SYSTEMS[first], SYSTEMS[second]];
+  const perMole = (ratio: number, { solute, solvent }: System) => {
+    const moles = ratio / solute.molarMass;
+    return moles / (moles + 1 / solvent.molarMass);
+  };
+  const volume = massFraction / one.solvent.density20;
+  const f = volume / (volume + (1 - massFraction) / other.solvent.density20);
+  const line =
+    f * Math.log(perMole(trueMassRatio(first, celsius), one)) +
+    (1 - f) * Math.log(perMole(trueMassRatio(second, celsius), other));
+  const excess = f * (1 - f) * (2.9 + 1.1 * (2 * f - 1)) * (298.15 / (celsius + 273.15));
+  const x = Math.exp(line + excess);
+  const moles = massFraction / one.solvent.molarMass + (1 - massFraction) / other.solvent.molarMass;
+  return (x / (1 - x)) * one.solute.molarMass * moles;
 }
 
 /** Temperature in °C at which a mass ratio is saturated, by bisection between -20 and 120 °C. */
