@@ -101,6 +101,7 @@ svg text.s0{fill:var(--s0)}svg text.s1{fill:var(--s1)}svg text.s2{fill:var(--s2)
 .legend li{display:flex;gap:.45rem;align-items:baseline;min-width:0}
 .legend span{min-width:0;overflow-wrap:anywhere}
 .legend .key{align-self:center}
+.legend b{flex:none}
 `;
 
 const NARROW = `
