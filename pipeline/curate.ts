@@ -158,7 +158,7 @@ export async function curate(
     ],
     grades: gradeEdition({ table: decided, systems, fits, flags, sources, rulings }),
     rowResults: rowResults(fits, table.count, omitted.size === 0 ? undefined : { fits: first.fits, touched, omitted }),
-    ideals: systems.map(({ index: i }) => idealComparison(fits[i]?.curves[0], liquors[i] as Liquor)),
+    ideals: systems.map(({ index: i }) => idealComparison(fits[i]?.curves ?? [], liquors[i] as Liquor)),
     liquors,
     budgetOf: createRowBudget(table, normalised),
   };

@@ -1,6 +1,7 @@
 /** The mistakes planted in the demo: each takes honest readings and returns them as somebody got them wrong. */
 
 import { type Mistake, type Reported, type SeriesPlan, significant, trueValue } from "./measure.ts";
+import type { Row } from "./source-file.ts";
 import { hydratePerAddedSolvent, inWords, SYSTEMS, type SystemName, trueMassRatio } from "./truth.ts";
 
 type Spoil = (reading: Reported, index: number, all: readonly Reported[]) => Partial<Reported> & { mistake: Mistake };
@@ -121,5 +122,18 @@ export function hydrateCalledAnhydrous(readings: readonly Reported[], plan: Seri
     const ratio = scale * trueMassRatio(r.system, r.celsius);
     const perHydrate = (Number(r.value) * hydratePerAddedSolvent(r.system, ratio)) / ratio;
     return changed(r, perHydrate, "hydrate basis", "g pentahydrate per solvent added, called anhydrous");
+  });
+}
+
+/** The share of the other solvent in the column of per cents, for a whole series of rows. */
+export function compositionReversed(rows: readonly Row[], column: number): Row[] {
+  return rows.map(({ cells, about }) => {
+    const truth = cells[column] ?? "";
+    const mistake = {
+      cause: "composition mix-up",
+      done: "per cent of water in the column of ethanol",
+      truth: `${truth} %`,
+    };
+    return { cells: cells.with(column, String(100 - Number(truth))), about, mistake };
   });
 }

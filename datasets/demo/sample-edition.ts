@@ -114,6 +114,11 @@ const DECISIONS: readonly Decision[] = [
     ...steward("2026-04-10"),
   },
   {
+    target: "solvent-screen-2025-refractometry@paracetamol-form-i-in-ethanol-water-25-75-w-w-0de46f5c",
+    ...{ action: "set aside", reason: "25 % was the water: to be mended in the source" },
+    ...{ by: "solvent-screening chemist", date: "2026-04-10" },
+  },
+  {
     target: "recommended@copper-ii-sulfate-pentahydrate-in-water-5696e841",
     ...{ action: "keep", reason: "two laboratories agree, and the crystal water was checked" },
     ...{ by: "head of analytics", date: "2026-04-13" },

@@ -1,37 +1,36 @@
 /** Paracetamol over ethanol + water: a kilo laboratory that mixes volumes, and a solvent screen that weighs. */
 import { normalStream, significant } from "./measure.ts";
+import * as mistakes from "./mistakes.ts";
 import { COMMA_TABLE, laboratoryCard, type Row, type SourceFile, typedRow } from "./source-file.ts";
-import { massFractionOfVolumes, mixedMassRatio } from "./truth.ts";
+import { massFractionOfVolumes, mixedMassRatio, mixedMoleFraction } from "./truth.ts";
 
 const SOLVENTS = ["paracetamolEthanol", "paracetamolWater"] as const;
-/** Standard deviations of what a source is off as a whole, of a composition it made up, and of one reading. */
+/** Standard deviations of what a source is off as a whole, and of what each composition it made up is off besides. */
 const [SOURCE_SD, COMPOSITION_SD] = [0.025, 0.012];
 
-/** One composition at several temperatures: mass fraction of ethanol, and what a reading gives, g per g solvent. */
+/** One composition, mass fraction of ethanol, at several temperatures: the mole fractions read. */
 function series(source: string, fraction: number, temperatures: readonly number[], noise: number) {
   const bias = SOURCE_SD * normalStream(source)() + COMPOSITION_SD * normalStream(`${source} ${fraction}`)();
   const normal = normalStream(`${source} ${fraction} readings`);
   return temperatures.map((celsius) => {
-    const ratio = mixedMassRatio(...SOLVENTS, fraction, celsius + 0.1 * normal());
-    return { celsius, ratio: ratio * Math.exp(bias + noise * normal()) };
+    const x = mixedMoleFraction(...SOLVENTS, fraction, celsius + 0.1 * normal());
+    return { celsius, x: x * Math.exp(bias + noise * normal()) };
   });
 }
 
 const about = (composition: string, celsius: number) =>
   `paracetamol (form I) in ethanol + water ${composition} at ${celsius} °C`;
 
-/** The kilo laboratory mixes volumes and writes them into the solvent cell; one series bears the proportion reversed. */
+/** The kilo laboratory mixes volumes and writes them into the solvent cell. */
 export function kiloLaboratory(): SourceFile {
   const source = "kilo-lab-2026-antisolvent";
   const rows = [90, 80, 70, 50].flatMap((volumes): Row[] => {
+    const composition = `${volumes}:${100 - volumes} v/v`;
     const fraction = massFractionOfVolumes(...SOLVENTS, volumes / 100);
-    const truth = `${volumes}:${100 - volumes} v/v`;
-    const written = volumes === 70 ? "30:70 v/v" : truth;
-    return series(source, fraction, [10, 20, 30, 40, 50], 0.012).map(({ celsius, ratio }) => {
-      const cells = ["paracetamol", `ethanol/water ${written}`, String(celsius), significant(100 * ratio, 4), ""];
-      const row = { cells, about: about(written, celsius) };
-      const done = "the two volumes of the whole series exchanged";
-      return written === truth ? row : { ...row, mistake: { cause: "composition mix-up", done, truth } };
+    return series(source, fraction, [10, 20, 30, 40, 50], 0.012).map(({ celsius, x }) => {
+      const value = significant(100 * mixedMassRatio(...SOLVENTS, fraction, x), 4);
+      const cells = ["paracetamol", `ethanol/water ${composition}`, String(celsius), value, ""];
+      return { cells, about: about(composition, celsius) };
     });
   });
   return {
@@ -53,33 +52,29 @@ export function kiloLaboratory(): SourceFile {
     headings: ["product", "solvent", "T", "g/100 g", "remark"],
     rows: [
       ...rows,
-      typedRow(["paracetamol", "95 % ethanol", "25", "22.1", "from the drum"], {
+      typedRow(["paracetamol", "95 % ethanol", "25", "22.8", "from the drum"], {
         cause: "refused",
         done: "95 % of what? by volume and by mass are two liquids",
-        truth: "95 % vol; 22.1",
+        truth: "95 % vol, 22.8",
       }),
     ],
   };
 }
 
-/** The solvent screen weighs its mixtures: mass per cent of ethanol in a column, per 100 g of solution. */
+/** The solvent screen weighs its mixtures: per cent of ethanol by mass in a column, one series counted the water. */
 export function solventScreen(): SourceFile {
   const source = "solvent-screen-2025-refractometry";
-  const rows = [85, 65, 45, 20].flatMap((percent): Row[] =>
-    series(source, percent / 100, [10, 20, 25, 30, 40], 0.015).map(({ celsius, ratio }) => ({
-      cells: [
-        "paracetamol",
-        "ethanol + water",
-        ...[percent, celsius].map(String),
-        significant((100 * ratio) / (1 + ratio), 4),
-      ],
+  const rows = [85, 75, 45, 20].flatMap((percent): Row[] => {
+    const honest = series(source, percent / 100, [10, 20, 25, 30, 40], 0.015).map(({ celsius, x }) => ({
+      cells: ["paracetamol", "ethanol + water", String(percent), String(celsius), significant(1000 * x, 4)],
       about: about(`${percent}:${100 - percent} w/w`, celsius),
-    })),
-  );
+    }));
+    return percent === 75 ? mistakes.compositionReversed(honest, 2) : honest;
+  });
   return {
     ...COMMA_TABLE,
     card: {
-      ...laboratoryCard(source, "Solvent screen", "solvent-screening chemist", "crystal laboratory", "2025-12-04"),
+      ...laboratoryCard(source, "Solvent screen", "solvent-screening chemist", "screening laboratory", "2025-12-04"),
       method: "refractive-index",
       file: `${source}.csv`,
       shape: "long",
@@ -88,12 +83,12 @@ export function solventScreen(): SourceFile {
         solvent: { column: "solvent" },
         composition: { column: "% EtOH" },
         temperature: { column: "T/°C", unit: "°C" },
-        solubility: { column: "% in solution", unit: "g/100 g solution" },
+        solubility: { column: "1000 x", unit: "10^3 x" },
       },
-      constants: { solid_form: "form I", composition_basis: "mass %", excess_solid: "yes", temperature_probe: "bath" },
+      constants: { solid_form: "form I", composition_basis: "mass", excess_solid: "yes", temperature_probe: "bath" },
       carry: [],
     },
-    headings: ["solute", "solvent", "% EtOH", "T/°C", "% in solution"],
+    headings: ["solute", "solvent", "% EtOH", "T/°C", "1000 x"],
     rows,
   };
 }

@@ -131,24 +131,26 @@ export function massFractionOfVolumes(first: SystemName, second: SystemName, vol
 }
 
 /**
- * g solute per g of a mixture of the solvents of two systems, from the volume fraction f of the first: ln x lies on the
- * straight line between both, and f (1 - f) (2.9 + 1.1 (2 f - 1)) 298.15/T above it.
+ * Mole fraction of the solute in a mixture of the solvents of two systems, from the volume fraction f of the first: ln x
+ * lies f (1 - f) (3.6 + 1.9 (2 f - 1)) 298.15/T above the straight line between both.
  */
-export function mixedMassRatio(first: SystemName, second: SystemName, massFraction: number, celsius: number): number {
-  const [one, other] = [SYSTEMS[first], SYSTEMS[second]];
-  const perMole = (ratio: number, { solute, solvent }: System) => {
-    const moles = ratio / solute.molarMass;
-    return moles / (moles + 1 / solvent.molarMass);
+export function mixedMoleFraction(first: SystemName, second: SystemName, massFraction: number, celsius: number) {
+  const lnX = (name: SystemName) => {
+    const { solute, solvent }: System = SYSTEMS[name];
+    const moles = trueMassRatio(name, celsius) / solute.molarMass;
+    return Math.log(moles / (moles + 1 / solvent.molarMass));
   };
-  const volume = massFraction / one.solvent.density20;
-  const f = volume / (volume + (1 - massFraction) / other.solvent.density20);
-  const line =
-    f * Math.log(perMole(trueMassRatio(first, celsius), one)) +
-    (1 - f) * Math.log(perMole(trueMassRatio(second, celsius), other));
-  const excess = f * (1 - f) * (2.9 + 1.1 * (2 * f - 1)) * (298.15 / (celsius + 273.15));
-  const x = Math.exp(line + excess);
+  const volume = massFraction / SYSTEMS[first].solvent.density20;
+  const f = volume / (volume + (1 - massFraction) / SYSTEMS[second].solvent.density20);
+  const excess = f * (1 - f) * (3.6 + 1.9 * (2 * f - 1)) * (298.15 / (celsius + 273.15));
+  return Math.exp(f * lnX(first) + (1 - f) * lnX(second) + excess);
+}
+
+/** g solute per g of a mixture of two solvents, of a mole fraction in it. */
+export function mixedMassRatio(first: SystemName, second: SystemName, massFraction: number, moleFraction: number) {
+  const [one, other] = [SYSTEMS[first], SYSTEMS[second]];
   const moles = massFraction / one.solvent.molarMass + (1 - massFraction) / other.solvent.molarMass;
-  return (x / (1 - x)) * one.solute.molarMass * moles;
+  return (moleFraction / (1 - moleFraction)) * one.solute.molarMass * moles;
 }
 
 /** Temperature in °C at which a mass ratio is saturated, by bisection between -20 and 120 °C. */

@@ -3,7 +3,7 @@ import { celsius, counted, percentOff, plainNumber, sourceLetter } from "../publ
 import { percentFromLn, type SystemView, titleOf } from "../publish/report/system-view.ts";
 import { equationOf } from "../publish/tables/curves.ts";
 import { type Edition, flagId } from "../records/edition.ts";
-import type { Curve } from "../records/fits.ts";
+import type { Curve, Transition } from "../records/fits.ts";
 import { rulingPhrase } from "../records/rulings.ts";
 import { valuesOf } from "./shown-values.ts";
 import { textPlot } from "./text-plot.ts";
@@ -57,7 +57,7 @@ function curveLines(view: SystemView, curve: Curve): string[] {
   const values = valuesOf(view, curve);
   const cell = (text: string) => text.padStart(11);
   return [
-    `curve: ${curve.model}, ${celsius(low)} to ${celsius(high)} °C, ${counted(curve.n, "point")} of ${counted(curve.nSources, "source")}`,
+    `curve${view.curves.length > 1 ? ` of branch ${curve.branch}` : ""}: ${curve.model}, ${celsius(low)} to ${celsius(high)} °C, ${counted(curve.n, "point")} of ${counted(curve.nSources, "source")}`,
     `  ${equationOf(curve)}, T in K`,
     `  ${coefficients.join(", ")}`,
     `  average relative deviation ${plainNumber(curve.ardPercent, 3)} %`,
@@ -68,6 +68,18 @@ function curveLines(view: SystemView, curve: Curve): string[] {
         from === undefined ? "" : `${digits(from, 3)} to ${digits(to, 3) || "no limit"}`;
       return `${cell(celsius(v.temperature_K))}${cell(digits(v.mole_fraction, 4))}${cell(digits(v.g_per_100g_solvent, 4))}   ${limits(v.curve_low, v.curve_high).padEnd(20)}   ${limits(v.new_low, v.new_high)}`.trimEnd();
     }),
+  ];
+}
+
+/** Where the two branches of a system meet, in words. */
+function transitionLines(transition: Transition | undefined): string[] {
+  if (transition === undefined) return [];
+  const { temperatureK, low, high, probability } = transition;
+  return [
+    `the solid changes at ${celsius(temperatureK)} °C (95 % limits ${celsius(low)} to ${celsius(high)} °C): two branches meet there`,
+    `  one smooth curve would show as strong a break with p = ${probability.toFixed(3)} (parametric bootstrap);`,
+    "  which form each branch is, solubility alone does not tell",
+    "",
   ];
 }
 
@@ -105,6 +117,7 @@ export function textOf(view: SystemView): string[] {
     ...sourceLines(view),
     ...(left > 0 ? [`  ${counted(left, "measurement")} not in the curve: ${outsiders(view)}`] : []),
     "",
+    ...transitionLines(fit?.transition),
     ...(fit?.curves.length
       ? fit.curves.flatMap((curve) => [...curveLines(view, curve), ""])
       : [`no curve: ${safeText(fit?.noCurve ?? "not fitted", 400)}`, ""]),

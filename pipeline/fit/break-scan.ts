@@ -28,6 +28,8 @@ export interface BreakSearch {
   readonly perGap: number;
   /** Temperatures tried besides, K: known transitions of the solid. */
   readonly alsoK?: readonly number[];
+  /** Whether the change of curvature is left to the points alone; else what is usual for it is known beforehand. */
+  readonly freeCurvatureChange?: boolean;
 }
 
 /**
@@ -172,7 +174,7 @@ export function breakScan(points: BreakPoints, search: BreakSearch): BreakScan |
     );
     const bend = (x: number) => x - ub - Math.log((1 + x) / (1 + ub)) - ((x - ub) * ub) / (1 + ub);
     write(directions, at + rows, above(bend));
-    directions[at + rows + n + 1] = 1 / USUAL_C_CHANGE;
+    directions[at + rows + n + 1] = search.freeCurvatureChange ? 0 : 1 / USUAL_C_CHANGE;
     for (let k = 0; k < 3; k++) {
       removeTwice(directions, at, smooth, k * rows, rows);
       removeTwice(directions, at + rows, smooth, k * rows, rows);

@@ -116,7 +116,7 @@ function fitSystems(
       return withStandings({ robust: found.robust, ...pair }, subject, curveContext);
     const fit = robust[i] as (typeof robust)[number];
     const outcome = publishedCurve(fit, subject, curveContext);
-    const curves: Curve[] = isCurve(outcome) ? [outcome] : [];
+    const curves: Curve[] = isCurve(outcome) ? [withSuspectedBreak(outcome, found)] : [];
     const fitted: SystemFit = {
       ...{ robust: fit, curves },
       ...(isCurve(outcome) ? {} : { noCurve: outcome.reason }),
@@ -125,6 +125,13 @@ function fitSystems(
     return withStandings(fitted, subject, curveContext);
   });
   return { fits, scales, pooled };
+}
+
+/** The one curve of a system that seems to break, where two branches could not be drawn: said in its notices. */
+function withSuspectedBreak(curve: Curve, found: SearchedBreak | undefined): Curve {
+  if (found?.sense !== "falls") return curve;
+  const notice = `the points break near ${found.breakK.toFixed(1)} K as where the solid changes (p = ${found.probability.toFixed(3)} under one smooth curve), but curves through the points on either side do not meet: one curve spans both, and may follow neither`;
+  return { ...curve, notices: [notice, ...curve.notices] };
 }
 
 /** The kink where the slopes beside it rise as well: a step in a falling one is something else. */

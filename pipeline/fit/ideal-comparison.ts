@@ -2,11 +2,18 @@ import type { Liquor } from "../records/edition.ts";
 import type { Curve, IdealComparison } from "../records/fits.ts";
 import { activityCoefficient, idealSolubility, whyNoIdealSolubility } from "./ideal-solubility.ts";
 
-/** A curve held against the ideal solubility at the middle of its range, or why it is not. */
+/**
+ * The curve of a system held against the ideal solubility at the middle of its range, or why it is not.
+ *
+ * Of two branches it is the one above the transition: the melting data are those of the form that is stable up to its
+ * melting point, and of a form with solvent and one without, the latter is the one above.
+ * @param curves branches of one system, the coldest first
+ */
 export function idealComparison(
-  curve: Curve | undefined,
+  curves: readonly Curve[],
   liquor: Liquor,
 ): IdealComparison | { readonly whyNot: string } {
+  const curve = curves.at(-1);
   if (curve === undefined) return { whyNot: "there is no curve" };
   if (curve.fitBasis !== "ln x") return { whyNot: "no molar mass is known" };
   const melting = { meltingPointK: liquor.formMeltingPointK, fusionEnthalpy: liquor.formFusionEnthalpy };

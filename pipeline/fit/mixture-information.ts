@@ -21,12 +21,36 @@ export function createMemberSums(q: number): MemberSums {
   return { normal: new Float64Array(q * q), right: new Float64Array(q), squares: 0, logDeterminant: 0, n: 0 };
 }
 
-/** Where whitened rows are written, besides being summed: from row `at` on. */
+/** Where whitened rows are written instead of being summed: from row `at` on. */
 export interface WhitenedRows {
   readonly design: Float64Array;
   readonly response: Float64Array;
   readonly at: number;
 }
+
+/** Rows of all points of a mixture for one surface, in the order of the points: its p columns, row-major. */
+interface SurfaceRows {
+  readonly surface: Surface;
+  readonly centreK: number;
+  readonly design: Float64Array;
+}
+
+/** The rows last asked for: many sets of points and scales are tried over the same ones. */
+const rowsOf = new WeakMap<MixturePoints, SurfaceRows>();
+
+function surfaceRows(points: MixturePoints, surface: Surface, centreK: number): Float64Array {
+  const known = rowsOf.get(points);
+  if (known?.surface === surface && known.centreK === centreK) return known.design;
+  const design = new Float64Array(points.n * surface.p);
+  for (let i = 0; i < points.n; i++)
+    surface.writeRow(design, i * surface.p, points.fraction[i]!, points.temperatureK[i]!, centreK);
+  rowsOf.set(points, { surface, centreK, design });
+  return design;
+}
+
+/** Whitened rows with the response as last column, and their weighted mean; grown where a member needs more. */
+let scratch = new Float64Array(0);
+let mean = new Float64Array(0);
 
 /**
  * Sets the sums of a member from its points that take part, by rows whitened with K^(-1/2), which is known in closed form
@@ -44,52 +68,64 @@ export function setMemberSums(
   { variance, lackOfFitVariance }: MixtureScales,
   out?: WhitenedRows,
 ): number {
-  const q = sums.right.length;
-  const rows: Float64Array[] = [];
-  const [mean, weights] = [new Float64Array(q + 1), [] as number[]];
-  let precision = 0;
+  const [q, { p }] = [sums.right.length, surface];
+  const [from, to, width] = [points.start[member]!, points.start[member + 1]!, q + 1];
+  const design = surfaceRows(points, surface, centreK);
+  if (scratch.length < (to - from) * width) scratch = new Float64Array(2 * (to - from) * width);
+  if (mean.length < width) mean = new Float64Array(width);
+  mean.fill(0);
+  scratch.fill(0, 0, (to - from) * width);
+  let [precision, n] = [0, 0];
   sums.logDeterminant = 0;
-  for (let i = points.start[member]!; i < points.start[member + 1]!; i++) {
+  for (let i = from; i < to; i++) {
     if (use[i] !== 1) continue;
-    const row = new Float64Array(q + 1);
-    surface.writeRow(row, 0, points.fraction[i]!, points.temperatureK[i]!, centreK);
-    if (q > surface.p) row[surface.p + points.source[i]!] = 1;
-    row[q] = points.lnValue[i]!;
-    const weight = 1 / variance[i]!;
-    for (let j = 0; j <= q; j++) mean[j]! += weight * row[j]!;
+    const [at, weight] = [n++ * width, 1 / variance[i]!];
+    for (let j = 0; j < p; j++) scratch[at + j] = design[i * p + j]!;
+    if (q > p) scratch[at + p + points.source[i]!] = 1;
+    scratch[at + q] = points.lnValue[i]!;
+    for (let j = 0; j <= q; j++) mean[j]! += weight * scratch[at + j]!;
     precision += weight;
     sums.logDeterminant += Math.log(variance[i]!);
-    weights.push(weight);
-    rows.push(row);
   }
   sums.logDeterminant += Math.log1p(lackOfFitVariance * precision);
-  sums.n = rows.length;
+  sums.n = n;
   const share = (1 - 1 / Math.sqrt(1 + lackOfFitVariance * precision)) / precision;
-  rows.forEach((row, k) => {
-    const root = Math.sqrt(weights[k]!);
-    for (let j = 0; j <= q; j++) row[j] = root * (row[j]! - share * mean[j]!);
-    if (out === undefined) return;
-    out.design.set(row.subarray(0, q), (out.at + k) * q);
-    out.response[out.at + k] = row[q]!;
-  });
-  if (out === undefined) add(sums, rows, q);
-  return rows.length;
+  for (let i = from, at = 0; i < to; i++) {
+    if (use[i] !== 1) continue;
+    const root = Math.sqrt(1 / variance[i]!);
+    for (let j = 0; j <= q; j++) scratch[at + j] = root * (scratch[at + j]! - share * mean[j]!);
+    at += width;
+  }
+  if (out === undefined) add(sums, q);
+  else write(out, n, q);
+  return n;
 }
 
-function add(sums: MemberSums, rows: readonly Float64Array[], q: number): void {
-  sums.normal.fill(0);
-  sums.right.fill(0);
-  sums.squares = 0;
-  for (const row of rows) {
-    for (let i = 0; i < q; i++) {
-      const value = row[i]!;
-      if (value === 0) continue;
-      for (let j = 0; j <= i; j++) sums.normal[i * q + j]! += value * row[j]!;
-      sums.right[i]! += value * row[q]!;
-    }
-    sums.squares += row[q]! ** 2;
+function write({ design, response, at }: WhitenedRows, n: number, q: number): void {
+  for (let k = 0; k < n; k++) {
+    const from = k * (q + 1);
+    for (let j = 0; j < q; j++) design[(at + k) * q + j] = scratch[from + j]!;
+    response[at + k] = scratch[from + q]!;
   }
-  for (let i = 0; i < q; i++) for (let j = 0; j < i; j++) sums.normal[j * q + i] = sums.normal[i * q + j]!;
+}
+
+/** Sums the whitened rows. */
+function add(sums: MemberSums, q: number): void {
+  const { normal, right, n } = sums;
+  normal.fill(0);
+  right.fill(0);
+  sums.squares = 0;
+  for (let at = 0; at < n * (q + 1); at += q + 1) {
+    const y = scratch[at + q]!;
+    for (let i = 0; i < q; i++) {
+      const value = scratch[at + i]!;
+      if (value === 0) continue;
+      for (let j = 0; j <= i; j++) normal[i * q + j]! += value * scratch[at + j]!;
+      right[i]! += value * y;
+    }
+    sums.squares += y ** 2;
+  }
+  for (let i = 0; i < q; i++) for (let j = 0; j < i; j++) normal[j * q + i] = normal[i * q + j]!;
 }
 
 /** Sums of every member. */

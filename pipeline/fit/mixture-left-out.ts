@@ -28,10 +28,7 @@ export function leftOutPrediction(
 ): LeftOutPrediction | undefined {
   const fit = fitMembers(points, except(sums, member), FLEXIBLE_SURFACE, centreK, scales);
   if (fit === undefined) return undefined;
-  const others = Int32Array.from(use.keys()).filter((i) => use[i] === 1 && points.member[i] !== member);
-  const at = (column: Float64Array) => Float64Array.from(others, (i) => column[i]!);
-  const inside =
-    where === "anywhere" ? () => true : insideOf(mixtureRange(at(points.fraction), at(points.temperatureK)));
+  const inside = where === "anywhere" ? () => true : insideOf(rangeOfOthers(points, use, member));
   const own = Int32Array.from(
     { length: points.start[member + 1]! - points.start[member]! },
     (_, k) => points.start[member]! + k,
@@ -78,6 +75,17 @@ export function judgingDegreesOfFreedom(compositions: number): number {
 
 function except(sums: readonly MemberSums[], member: number): MemberSums[] {
   return sums.filter((_, m) => m !== member);
+}
+
+/** Compositions and temperatures of the other members' points that take part. */
+function rangeOfOthers({ n, start, fraction, temperatureK }: MixturePoints, use: Uint8Array, member: number) {
+  const [fractions, temperatures]: [number[], number[]] = [[], []];
+  for (let i = 0; i < n; i++) {
+    if (use[i] !== 1 || (i >= start[member]! && i < start[member + 1]!)) continue;
+    fractions.push(fraction[i]!);
+    temperatures.push(temperatureK[i]!);
+  }
+  return mixtureRange(fractions, temperatures);
 }
 
 function insideOf(range: MixtureRange): (fraction: number, temperatureK: number) => boolean {

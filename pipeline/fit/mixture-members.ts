@@ -29,7 +29,10 @@ export function mixtureMembers(mixture: FittedMixture): MixtureMember[] {
 
 function memberOf(mixture: FittedMixture, m: number): MixtureMember {
   const { group, points, kept, sums, published, centreK, scales } = mixture;
-  const own = Int32Array.from(points.member.keys()).filter((i) => points.member[i] === m);
+  const own = Int32Array.from(
+    { length: points.start[m + 1]! - points.start[m]! },
+    (_, k) => (points.start[m] as number) + k,
+  );
   const used = own.filter((i) => kept.use[i] === 1);
   const residuals = Array.from(
     used,

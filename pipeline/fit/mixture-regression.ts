@@ -1,3 +1,4 @@
+import { MOST_TERMS, PURE_COEFFICIENTS } from "../curves/jouyban-acree.ts";
 import { choleskyFactorise, choleskyInvert, choleskyLogDeterminant } from "../numerics/cholesky.ts";
 import { createLeastSquaresWorkspace, leastSquaresCovariance, leastSquaresInto } from "../numerics/least-squares.ts";
 import { createMemberSums, type MemberSums, setMemberSums } from "./mixture-information.ts";
@@ -47,9 +48,19 @@ export function rowAt(
   return row;
 }
 
+/** Room for one row of a surface, whose value is asked for at thousands of places. */
+const oneRow = new Float64Array(PURE_COEFFICIENTS + MOST_TERMS + 2);
+
 /** ln value of the surface alone, offsets left out, at a composition and temperature (K). */
-export function surfaceValue(fit: MixtureRegression, fraction: number, temperatureK: number): number {
-  return rowValue(fit, rowAt(fit, fraction, temperatureK));
+export function surfaceValue(
+  { surface, centreK, coefficients }: MixtureRegression,
+  fraction: number,
+  temperatureK: number,
+): number {
+  surface.writeRow(oneRow, 0, fraction, temperatureK, centreK);
+  let sum = 0;
+  for (let j = 0; j < surface.p; j++) sum += oneRow[j]! * coefficients[j]!;
+  return sum;
 }
 
 /** Row times coefficients. */

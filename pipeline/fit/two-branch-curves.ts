@@ -1,6 +1,7 @@
 import { requireInside } from "../curves/fitted-range.ts";
 import type { Curve, Transition } from "../records/fits.ts";
-import { breakProfile } from "./break-profile.ts";
+import { type BreakProfile, breakProfile } from "./break-profile.ts";
+import type { BreakPoints } from "./break-scan.ts";
 import { isCurve, publishedCurve } from "./published-curve.ts";
 import type { CurveContext, CurveSubject } from "./system-models.ts";
 import { breakPoints, breakSide, findBreak } from "./two-branch-fit.ts";
@@ -19,8 +20,9 @@ export interface BranchPair {
  * points, the crossing is the least-squares position of the break: where it lies within the limits of the profile it is
  * the transition, and the branches meet there exactly. Else a branch is too stiff for its points (a straight line, because
  * they are few); then the transition is where the profile of the likelihood is best, and the branches meet within
- * their limits or are not published. The limits of the transition are those of the profile. Which form a branch is, is not known: a melting point of
- * the solute is not used.
+ * their limits. Where they do not, because a branch has too few points for the curvature that the profile gives it, the
+ * profile with no more than the usual curvature is tried; else the branches are not published. The limits of the transition
+ * are those of the profile. Which form a branch is, is not known: a melting point of the solute is not used.
  *
  * @returns undefined where a branch has no curve, or the branches do not meet
  * @see D. J. Hudson, J. Am. Stat. Assoc. 61 (1966) 1097-1129, for the join of two least-squares curves.
@@ -31,10 +33,25 @@ export function twoBranchCurves(
   context: CurveContext,
   seed: number,
 ): BranchPair | undefined {
+  const points = breakPoints(found.robust);
+  for (const curvature of ["as asked for", "usual"] as const) {
+    const profile = breakProfile(points, "falls", breakSide, curvature);
+    const pair = profile === undefined ? undefined : pairAt(profile, points, found, { system }, context, seed);
+    if (pair !== undefined) return pair;
+  }
+  return undefined;
+}
+
+/** The branches on either side of a break, where both have a curve and these meet. */
+function pairAt(
+  profile: BreakProfile,
+  points: BreakPoints,
+  found: SearchedBreak,
+  { system }: Pick<CurveSubject, "system">,
+  context: CurveContext,
+  seed: number,
+): BranchPair | undefined {
   const { robust, probability } = found;
-  const points = breakPoints(robust);
-  const profile = breakProfile(points, "falls", breakSide);
-  if (profile === undefined) return undefined;
   const gap = gapAround(points.temperatureK, profile.breakK);
   const curveOf = (branch: 1 | 2): Curve | undefined => {
     const own = (T: number) => T <= profile.breakK === (branch === 1);

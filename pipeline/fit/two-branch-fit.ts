@@ -1,6 +1,14 @@
 import { chiSquareQuantile } from "../numerics/distributions.ts";
 import type { RobustFit } from "../records/fits.ts";
-import { bestBreak, bootstrapBreak, leastStatistic, type Sense } from "./break-bootstrap.ts";
+import {
+  type BestBreak,
+  bestBreak,
+  bootstrapBreak,
+  brokenDegreesOfFreedom,
+  brokenVariance,
+  leastStatistic,
+  type Sense,
+} from "./break-bootstrap.ts";
 import { breakHint } from "./break-hint.ts";
 import {
   type BreakPoints,
@@ -11,6 +19,7 @@ import {
   inner,
   smoothRival,
 } from "./break-scan.ts";
+import { limitFactor } from "./limit-factor.ts";
 
 /** A break that the points of a system show. */
 export interface FoundBreak {
@@ -27,6 +36,8 @@ export const breakSide = 3;
 const LEVEL = 0.01;
 /** Without any one point, and without any one source where the rest can show it, the break must pass this level. */
 const LEFT_OUT_LEVEL = 0.05;
+/** Share of the usual variance so small that a system's own residuals alone tell its scatter. */
+const QUIET = 0.02;
 /** Statistic of a change of slope alone from which a closer look is worth its time. */
 const HINT = 5;
 /** Coefficients of the smooth curve that a broken one is held against. */
@@ -71,9 +82,11 @@ export function breakPoints(
  * distinct temperatures a side. A break in which the slope falls on heating is what an equilibrium transition of the
  * solid makes; where none is found, one in which it rises.
  *
- * It must have p < 0.01 by parametric bootstrap against the smooth model with curvature; follow the points better
+ * It must have p < 0.01 by parametric bootstrap against the smooth model with curvature (see {@link judge} for the scatter
+ * assumed); follow the points better
  * than a smooth curve of as many coefficients, because tables that were smoothed by a polynomial leave residuals that
- * are no noise; be seen within sources; and still be there at the 5 % level with any one point left out, and with any one
+ * are no noise; and better than any break of a rising slope, else it is the curvature alone that changes; be seen
+ * within sources; and still be there at the 5 % level with any one point left out, and with any one
  * source left out where the rest can show it.
  *
  * @param seed starts the random numbers of the bootstrap
@@ -95,10 +108,12 @@ export function findBreak(points: BreakPoints, seed: number, knownK: readonly nu
 /**
  * Where a falling slope fits best, K, if the points or a listed transition suggest that there is one; else NaN. Claims
  * nothing.
+ *
+ * @param thoroughly makes the search even where a quick one finds nothing
  */
-export function likelyBreak(points: BreakPoints, knownK: readonly number[]): number {
-  const { distinct, inside, worth } = whetherToSearch(points, knownK);
-  if (!worth) return Number.NaN;
+export function likelyBreak(points: BreakPoints, knownK: readonly number[], thoroughly = false): number {
+  const { distinct, inside, enough, worth } = whetherToSearch(points, knownK);
+  if (!worth && !(thoroughly && enough)) return Number.NaN;
   const scan = breakScan(points, { side: breakSide, perGap: perGap(distinct.length), alsoK: inside });
   if (scan === undefined) return Number.NaN;
   const { position, statistic } = bestBreak(scan, scan.residuals, scan.smoothSum, "falls");
@@ -110,7 +125,7 @@ export function whetherToSearch(points: BreakPoints, knownK: readonly number[]) 
   const distinct = distinctTemperatures(points);
   const inside = knownK.filter((T) => T > distinct[0]!.highK && T < distinct.at(-1)!.lowK);
   const enough = distinct.length >= 2 * breakSide;
-  return { distinct, inside, worth: enough && (inside.length > 0 || worthTrying(points, distinct)) };
+  return { distinct, inside, enough, worth: enough && (inside.length > 0 || worthTrying(points, distinct)) };
 }
 
 /** Whether a quick search finds anything. */
@@ -122,10 +137,44 @@ function worthTrying(points: BreakPoints, distinct: readonly DistinctTemperature
   return Math.max(best("falls"), best("rises")) > COARSE * leastStatistic(points.n, LEVEL);
 }
 
+/** The points as if their sources scattered by a seventh of the usual only. */
+function quieter(points: BreakPoints): BreakPoints {
+  return { ...points, variance: points.variance.map((variance) => QUIET * variance) };
+}
+
+/**
+ * A falling slope is judged twice, because systems of one source differ in their scatter more than the moderated variance
+ * allows for: with the scatter usual in the sources, and with the system's own, which is much smaller in many a table that
+ * somebody smoothed or rounded, and then shows smaller breaks. Each of the two takes half the level, and the published
+ * probability is twice the smaller one (Bonferroni).
+ */
 function judge(points: BreakPoints, scan: BreakScan, sense: Sense, seed: number): FoundBreak | undefined {
+  const { position, statistic } = bestBreak(scan, scan.residuals, scan.smoothSum, sense);
+  if (position < 0 || statistic < leastStatistic(points.n, LEVEL)) return undefined;
+  if (sense === "rises") return judgeAt(points, scan, sense, LEVEL, seed);
+  const quiet = quieter(points);
+  const asUsual = judgeAt(points, scan, sense, LEVEL / 2, seed);
+  const found = asUsual ?? judgeAt(quiet, rescanned(quiet, scan), sense, LEVEL / 2, seed);
+  return found === undefined ? undefined : { ...found, probability: 2 * found.probability };
+}
+
+/** The same search, laid out for other variances. */
+function rescanned(points: BreakPoints, { breakK }: BreakScan): BreakScan | undefined {
+  return breakScan(points, { side: breakSide, perGap: 1, alsoK: [...breakK] });
+}
+
+function judgeAt(
+  points: BreakPoints,
+  scan: BreakScan | undefined,
+  sense: Sense,
+  level: number,
+  seed: number,
+): FoundBreak | undefined {
+  if (scan === undefined) return undefined;
   const best = bestBreak(scan, scan.residuals, scan.smoothSum, sense);
-  if (best.position < 0 || best.statistic < leastStatistic(points.n, LEVEL)) return undefined;
-  if (sense === "rises" && fallsNearAnEnd(points, best.gain)) return undefined;
+  if (best.position < 0 || best.statistic < leastStatistic(points.n, level)) return undefined;
+  if (fallsNearAnEnd(points, scan, best, sense)) return undefined;
+  if (sense === "falls" && mayRise(points.n, scan, best)) return undefined;
   const breakK = scan.breakK[best.position]!;
   if (!seenWithinSources(points, breakK)) return undefined;
   const rival = smoothRival(points);
@@ -133,8 +182,8 @@ function judge(points: BreakPoints, scan: BreakScan, sense: Sense, seed: number)
   const enough = leastStatistic(points.n, LEFT_OUT_LEVEL);
   const withoutOne = leastWithoutOne(points, scan, best.position, sense, enough);
   if (withoutOne === 0) return undefined;
-  const { probability, replicates } = bootstrapBreak(scan, best.statistic, sense, LEVEL, seed);
-  if (probability >= LEVEL) return undefined;
+  const { probability, replicates } = bootstrapBreak(scan, best.statistic, sense, level, seed);
+  if (probability >= level) return undefined;
   const critical = replicates[Math.ceil((1 - LEFT_OUT_LEVEL) * replicates.length) - 1]!;
   if (withoutOne <= critical || carriedByOneSource(points, breakK, sense, seed)) return undefined;
   return { sense, breakK, probability };
@@ -149,12 +198,23 @@ function withinScatter(n: number, rivalSum: number): boolean {
 }
 
 /**
- * Whether a falling slope with two temperatures on one side explains as much: it is too near an end to be published, and
- * makes the points before it look as if their slope rose.
+ * Whether a falling slope with two temperatures on one side explains the points better: it is too near an end to be
+ * published. It makes the points before it look as if their slope rose, and a break farther inside seem to lie where it
+ * does not; for one that falls itself, the nearer one must exclude it at the 5 % level.
  */
-function fallsNearAnEnd(points: BreakPoints, gain: number): boolean {
-  const scan = breakScan(points, { side: breakSide - 1, perGap: 2 });
-  return scan !== undefined && bestBreak(scan, scan.residuals, scan.smoothSum, "falls").gain >= gain;
+function fallsNearAnEnd(points: BreakPoints, scan: BreakScan, best: BestBreak, sense: Sense): boolean {
+  const wide = breakScan(points, { side: breakSide - 1, perGap: 2 });
+  if (wide === undefined) return false;
+  const { gain } = bestBreak(wide, wide.residuals, wide.smoothSum, "falls");
+  if (sense === "rises") return gain >= best.gain;
+  const freedom = brokenDegreesOfFreedom(points.n);
+  return gain - best.gain > limitFactor(freedom) ** 2 * brokenVariance(points.n, scan.smoothSum - gain);
+}
+
+/** Whether the points do not exclude a rising slope at the 5 % level: then it is the curvature alone that changes. */
+function mayRise(n: number, scan: BreakScan, { gain }: BestBreak): boolean {
+  const rising = bestBreak(scan, scan.residuals, scan.smoothSum, "rises").gain;
+  return gain - rising <= limitFactor(brokenDegreesOfFreedom(n)) ** 2 * brokenVariance(n, scan.smoothSum - gain);
 }
 
 /**

@@ -116,7 +116,7 @@ function withAllSound(robust: RobustFit, excluded: Uint8Array | undefined): Robu
 
 /** Temperatures at which a break is likely enough for a robust fit of its own, K. */
 function placesToTry(robust: RobustFit, { knownK, excluded }: BranchSubject): number[] {
-  const places = [robust.breakTemperatureK, likelyBreak(breakPoints(robust), knownK)];
+  const places = [robust.breakTemperatureK, likelyBreak(breakPoints(robust), knownK, leftOut(robust) >= SEVERAL)];
   const protectedAt = robust.breakTemperatureK;
   if (leftOut(robust) >= (Number.isNaN(protectedAt) ? SEVERAL : 1))
     places.push(likelyBreak(breakPoints(withAllSound(robust, excluded?.())), knownK));

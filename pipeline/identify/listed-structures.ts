@@ -23,7 +23,8 @@ export function listedStructure(
   }
   const same = (isomers.get(structure.formula) ?? []).filter(({ smiles = "" }) => {
     const listed = read(smiles);
-    return listed?.ok === true && listed.code === structure.code;
+    // One structure has one skeleton, which takes a fraction of the time of its stereochemistry.
+    return listed?.ok === true && listed.skeleton === structure.skeleton && listed.code === structure.code;
   });
   return same.length === 1 ? same[0] : undefined;
 }

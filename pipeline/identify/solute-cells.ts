@@ -143,7 +143,10 @@ function smilesOf(
     kind: "SMILES",
     field: "smiles",
     text,
-    key: known?.smiles() ?? text.trim(),
+    // A canonical SMILES takes long and is the key of few.
+    get key() {
+      return known?.smiles() ?? text.trim();
+    },
     structure: known,
     listed: unsolvated(found, index),
   };

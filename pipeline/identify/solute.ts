@@ -39,8 +39,8 @@ export interface KnownSolute {
  * is remarked, with both readings.
  */
 export function resolveSolute(cells: SoluteCells, index: SubstanceIndex, read: ReadStructure): KnownSolute | CellFault {
-  const named = unlistedName(cells.solute);
-  if (named === "" && cells.cas === "" && cells.inchikey === "" && cells.smiles === "") {
+  const bare = cells.cas === "" && cells.inchikey === "" && cells.smiles === "";
+  if (bare && unlistedName(cells.solute) === "") {
     const found = cells.solute === "" ? "the cell is empty" : "the cell holds invisible characters only";
     return { field: "solute", code: "missing-solute", found };
   }

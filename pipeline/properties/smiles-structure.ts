@@ -37,15 +37,17 @@ export interface Library {
 const NO_LIBRARY =
   "the structure library is not installed: SMILES are compared letter by letter, and give no molar mass";
 
-const STEREO = /[\\/]|@+(?:(?:TH|AL|SP|TB|OH)\d+)?/g;
+const MARK = /[\\/@]/;
+const EVERY_MARK = /[\\/]|@+(?:(?:TH|AL|SP|TB|OH)\d+)?/g;
 
 /**
  * Loads a reader of structures; without the library (openchemlib, optional) every SMILES is answered with that fault.
- * Each text is read once.
+ * Each text is read once, for its composition; the forms that are compared are worked out when first asked for, since most
+ * structures are never compared.
  *
  * The code is the library's canonical code after moving protons so that a zwitterion and its neutral form agree
  * (`[NH3+]CC([O-])=O` is `NCC(O)=O`); salts keep their ions. Tautomers stay apart. Stereochemistry needs coordinates,
- * which the library makes up (2 ms); without marks of stereochemistry none are needed (0.5 ms).
+ * which the library makes up (2 ms); without marks of stereochemistry none are needed (0.3 ms).
  */
 export async function loadStructureReader(
   load: () => Promise<Library> = () => import("openchemlib"),
@@ -69,37 +71,75 @@ export async function loadStructureReader(
 }
 
 function structureOf(
-  { Molecule, CanonizerUtil }: Library,
+  library: Library,
   text: string,
   composition: SmilesComposition | undefined,
 ): Structure | StructureFault {
-  const formula = composition?.formula ?? "";
-  const molarMass = composition?.molarMass.value ?? Number.NaN;
+  const marked = MARK.test(text);
   try {
-    const flat = text.replace(STEREO, "");
-    const plain = Molecule.fromSmiles(flat, { noCoordinates: true, noStereo: true });
-    plain.canonizeCharge(true);
-    const skeleton = plain.getIDCode();
-    const same: Structure = {
-      ok: true,
-      code: skeleton,
-      skeleton,
-      formula,
-      molarMass,
-      tautomers: () => CanonizerUtil.getIDCode(plain, CanonizerUtil.NOSTEREO_TAUTOMER),
-      smiles: () => plain.toIsomericSmiles(),
-    };
-    if (flat === text) return same;
-    const full = placed(Molecule, text);
-    // Marks at an atom that is no stereocentre say nothing.
-    if (full === placed(Molecule, flat)) return same;
-    // Made from the code, because a symmetric structure can be written with its marks in several ways.
-    const smiles = () => Molecule.fromIDCode(full).toIsomericSmiles();
-    // Without coordinates the library takes an open double bond for E: a prefix keeps the two kinds of code apart.
-    return { ...same, code: `stereo ${full}`, smiles };
+    // The composition was read from the text without its marks; without a composition nothing was read.
+    if (marked || composition === undefined) library.Molecule.fromSmiles(text, { noCoordinates: true });
   } catch {
     return { ok: false, message: "not a SMILES that can be read" };
   }
+  const itself = `text ${text}`;
+  const skeleton = lazily(() => flatMolecule(library, text).getIDCode(), itself);
+  const code = lazily(() => (marked ? (stereoCode(library, text) ?? skeleton()) : skeleton()), itself);
+  return {
+    ok: true,
+    formula: composition?.formula ?? "",
+    molarMass: composition?.molarMass.value ?? Number.NaN,
+    get code() {
+      return code();
+    },
+    get skeleton() {
+      return skeleton();
+    },
+    tautomers: lazily(
+      () => library.CanonizerUtil.getIDCode(flatMolecule(library, text), library.CanonizerUtil.NOSTEREO_TAUTOMER),
+      itself,
+    ),
+    smiles: lazily(() => (code() === itself ? text : writtenFrom(library, text, code())), text),
+  };
+}
+
+/**
+ * Works a form out when it is first asked for, and keeps the text alone: a molecule takes kilobytes. A structure on which
+ * the library fails after all equals nothing but the same text.
+ */
+function lazily(compute: () => string, otherwise: string): () => string {
+  let known: string | undefined;
+  return () => {
+    try {
+      known ??= compute();
+    } catch {
+      known = otherwise;
+    }
+    return known;
+  };
+}
+
+/** The structure without its stereochemistry. */
+function flatMolecule({ Molecule }: Library, text: string): MoleculeClass {
+  const molecule = Molecule.fromSmiles(text.replace(EVERY_MARK, ""), { noCoordinates: true, noStereo: true });
+  molecule.canonizeCharge(true);
+  return molecule;
+}
+
+/** Without coordinates the library takes an open double bond for E: this keeps the two kinds of code apart. */
+const PLACED = "stereo ";
+
+/** Code with stereochemistry; undefined where the marks, at an atom that is no stereocentre, say nothing. */
+function stereoCode({ Molecule }: Library, text: string): string | undefined {
+  const full = placed(Molecule, text);
+  return full === placed(Molecule, text.replace(EVERY_MARK, "")) ? undefined : PLACED + full;
+}
+
+/** SMILES of a code with stereochemistry: a symmetric structure can be written with its marks in several ways. */
+function writtenFrom(library: Library, text: string, code: string): string {
+  return code.startsWith(PLACED)
+    ? library.Molecule.fromIDCode(code.slice(PLACED.length)).toIsomericSmiles()
+    : flatMolecule(library, text).toIsomericSmiles();
 }
 
 /** Canonical code with coordinates, which stereochemistry needs. */

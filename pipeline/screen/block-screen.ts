@@ -123,6 +123,34 @@ export function blocksOf(fit: RobustFit): Map<number, number[]> {
   return blocks;
 }
 
+/** A block re-read under every cause against the curve of the others, whatever its own offset says. */
+export function readBlock(
+  input: ScreenInput,
+  models: readonly [SystemModel, SystemModel],
+  suspectsOf: (system: number, source: number, rows: readonly number[]) => Suspects,
+  fit: RobustFit,
+  source: number,
+  points: readonly number[],
+  others: readonly number[],
+): Omit<OffBlock, "posterior"> {
+  const threshold = middle(points.map((point) => thresholdOf(input, fit.system, point)));
+  const sound = new Set(others);
+  fitSources(models[0], fit, (other) => sound.has(other));
+  const bare = { input, models, fit, points, source, threshold };
+  const { median, sd, deviations } = blockOffset(bare);
+  const suspects = suspectsOf(
+    fit.system,
+    source,
+    points.map((point) => fit.points.row[point]!),
+  );
+  const readings = blockReadings({ ...bare, suspects });
+  const { system } = fit;
+  return {
+    ...{ system, source, points, offset: median, z: median / sd, deviations, otherSources: others.length },
+    ...{ threshold, readings },
+  };
+}
+
 /** A block compared with the others; undefined where it is plainly within both limits. */
 function testBlock(
   input: ScreenInput,

@@ -3,9 +3,13 @@ import { textOf } from "../records/measurements.ts";
 import type { System } from "../records/systems.ts";
 import type { Suspects } from "./causes/cause.ts";
 import { reconciling } from "./conflict-causes.ts";
-import { type ScreenInput, sourceName } from "./screen-input.ts";
+import { type ScreenInput, sourceName, thresholdOf } from "./screen-input.ts";
+import { SAME_TEMPERATURE_K } from "./shared-temperatures.ts";
 import { fitSources, predict, type SystemModel } from "./system-model.ts";
 import { counted, inCelsius, listed, offBy, threeDigits } from "./wording.ts";
+
+/** Shared temperatures from which sources show that they read the same. */
+const LEAST_SHARED = 3;
 
 /** One flag for every system whose sources disagree without a majority: both readings laid out, nothing set aside. */
 export function conflictFlags(
@@ -14,7 +18,7 @@ export function conflictFlags(
   suspectsOf: (system: number, source: number, rows: readonly number[]) => Suspects,
 ): Flag[] {
   return input.fits.flatMap((fit) => {
-    if (fit.agreement !== "conflict") return [];
+    if (fit.agreement !== "conflict" || readsAlike(input, fit)) return [];
     return [
       {
         scope: "system",
@@ -53,6 +57,24 @@ function evidence(input: ScreenInput, fit: RobustFit, model: SystemModel): strin
     return `${names} (${how}) reads ${reads}${apart}`;
   });
   return `no majority among the sources: at ${inCelsius(temperatureK)} ${told.join("; ")}`;
+}
+
+/**
+ * Whether the camps read the same at all temperatures they share, three at least: then it is the curve that cannot follow
+ * them, and they have no quarrel.
+ */
+function readsAlike(input: ScreenInput, { system, points, camps }: RobustFit): boolean {
+  const campOf = new Map(camps.flatMap((camp, c) => camp.map((source) => [source, c] as const)));
+  let shared = 0;
+  for (let i = 0; i < points.n; i++) {
+    for (let j = i + 1; j < points.n; j++) {
+      if (campOf.get(points.source[i]!) === campOf.get(points.source[j]!)) continue;
+      if (!(Math.abs(points.temperatureK[i]! - points.temperatureK[j]!) < SAME_TEMPERATURE_K)) continue;
+      if (!(Math.abs(points.lnValue[i]! - points.lnValue[j]!) < thresholdOf(input, system, i))) return false;
+      shared++;
+    }
+  }
+  return shared >= LEAST_SHARED;
 }
 
 /** The same on the common bases, mole fraction and g/100 g solvent, without the one it is told in already. */

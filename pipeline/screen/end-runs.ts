@@ -1,16 +1,20 @@
+import type { RobustFit } from "../records/fits.ts";
 import { blocksOf } from "./block-screen.ts";
 import type { OffPoint } from "./point-screen.ts";
-import type { ScreenInput } from "./screen-input.ts";
-import { sourceName } from "./screen-input.ts";
+import { type ScreenInput, sourceName, thresholdOf } from "./screen-input.ts";
+import { AGREE_SHARE, SAME_TEMPERATURE_K } from "./shared-temperatures.ts";
 
 /** Off points at one end of a block that leave the curve together, to one side. */
 export interface EndRun {
   readonly points: ReadonlySet<number>;
   /** The point at the very end. */
   readonly outermost: number;
-  /** True where no other source reaches there: the curve itself may turn, and the run is one finding, not several. */
+  /**
+   * True where no other source reaches there, or where one does and reads the same: the curve itself may turn, and the run
+   * is one finding, not several.
+   */
   readonly oneFinding: boolean;
-  /** True where exactly one other sound source reaches there: either of the two could be the wrong one. */
+  /** True where exactly one other sound source reaches there and reads otherwise: either of the two could be wrong. */
   readonly contested: boolean;
   /** Temperatures of the run with what lies near, K. */
   readonly nearK: readonly [low: number, high: number];
@@ -48,15 +52,35 @@ export function endRun(input: ScreenInput, off: readonly OffPoint[]): EndRun | u
     const temperatures = run.map((point) => temperatureK[point]!);
     const [low, high] = [Math.min(...temperatures) - NEAR_K, Math.max(...temperatures) + NEAR_K];
     const seen = source.some((other, i) => other !== own && temperatureK[i]! >= low && temperatureK[i]! <= high);
-    const alone = seen ? "" : ", where no other source reaches: the curve itself may turn there (another solid)";
+    const alike = seen && isReadAlike(input, fit, run);
+    const turns = alike ? ", where another source reads the same" : ", where no other source reaches";
+    const alone = seen && !alike ? "" : `${turns}: the curve itself may turn there (another solid)`;
     return {
       points: new Set(run),
       outermost: order[0]!,
-      contested: seen && fit.soundSources.length === 2 && fit.soundSources.includes(own),
+      contested: seen && !alike && fit.soundSources.length === 2 && fit.soundSources.includes(own),
       nearK: [low, high],
-      oneFinding: !seen && run.length >= LEAST_ONE_FINDING,
+      oneFinding: (alike || !seen) && run.length >= LEAST_ONE_FINDING,
       words: `one of the ${run.length} ${end} points of ${sourceName(input, own)}, which leave the curve together${alone}`,
     };
   }
   return undefined;
+}
+
+/**
+ * Whether other sources read what the run reads, at the very same temperatures: values are compared with one another, not
+ * with a curve that may follow neither. Copies count here, for they do not part from what they repeat.
+ */
+function isReadAlike(input: ScreenInput, { system, points, deviation }: RobustFit, run: readonly number[]): boolean {
+  const apart = run.flatMap((point) => {
+    const beside = [...points.source.keys()].filter(
+      (i) =>
+        points.source[i] !== points.source[point] &&
+        Math.abs(points.temperatureK[i]! - points.temperatureK[point]!) < SAME_TEMPERATURE_K,
+    );
+    if (beside.length === 0) return [];
+    const nearest = Math.min(...beside.map((i) => Math.abs(points.lnValue[i]! - points.lnValue[point]!)));
+    return [nearest < Math.min(thresholdOf(input, system, point), AGREE_SHARE * Math.abs(deviation[point]!))];
+  });
+  return apart.length > 0 && apart.every(Boolean);
 }

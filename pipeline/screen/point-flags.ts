@@ -1,6 +1,7 @@
 import { studentTQuantile } from "../numerics/distributions.ts";
 import type { Flag, RobustFit } from "../records/fits.ts";
 import { textOf } from "../records/measurements.ts";
+import { bentRows } from "./bent-rows.ts";
 import { blocksOf } from "./block-screen.ts";
 import type { Suspects } from "./causes/cause.ts";
 import { competeForPoint, type Verdict } from "./causes/compete-point.ts";
@@ -32,6 +33,8 @@ export function pointFlags(
     return competeForPoint({ input, models, fit, point: one.point, suspects, threshold: one.threshold });
   });
   const bends = new Map<number, Verdict>();
+  const cleared = new Set<number>();
+  const added: { readonly off: OffPoint; readonly verdict: Verdict }[] = [];
   const runs = new Map<number, EndRun>();
   for (const same of byBlock(input, off)) {
     const run = endRun(
@@ -45,7 +48,17 @@ export function pointFlags(
       same.map((j) => off[j]!),
       same.map((j) => verdicts[j]!.weight),
     );
-    for (const j of same) if (bent?.explained.has(off[j]!.point)) bends.set(j, bent.verdict);
+    if (bent === undefined) continue;
+    const rows = bentRows(
+      input,
+      same.map((j) => off[j]!),
+      bent,
+    );
+    for (const one of rows.added) added.push({ off: one, verdict: bent.verdict });
+    for (const j of same) {
+      if (rows.cleared.has(off[j]!.point)) cleared.add(j);
+      else if (bent.explained.has(off[j]!.point)) bends.set(j, bent.verdict);
+    }
   }
   // A row with a slip of its own, such as a decimal point, is no part of a quarrel between sources.
   const slipped = (j: number) => !bends.has(j) && verdicts[j]!.cause !== undefined;
@@ -53,7 +66,9 @@ export function pointFlags(
   const quarrels = quarrelsOf(off, runs, (j) => slipped(j) || sure(j));
   return [
     ...[...quarrels.values()].map(({ off: one, run }) => contestedFlag(input, one, run)),
+    ...added.map(({ off: one, verdict }) => pointFlag(input, one, verdict, undefined)),
     ...off.flatMap((one, j) => {
+      if (cleared.has(j)) return [];
       const quarrel = quarrels.get(one.system);
       if (quarrel !== undefined && !slipped(j) && isContested(input, one, quarrel.run)) return [];
       return [pointFlag(input, one, bends.get(j) ?? verdicts[j]!, runs.get(j))];
@@ -134,8 +149,11 @@ function pointFlag(input: ScreenInput, off: OffPoint, verdict: Verdict, run: End
   return { ...named, proposedValue: Number(verdict.proposedValue.toPrecision(PROPOSED_DIGITS)) };
 }
 
-function evidence(input: ScreenInput, fit: RobustFit, { point, z, unsure, impossible }: OffPoint): string {
+function evidence(input: ScreenInput, fit: RobustFit, off: OffPoint): string {
+  const { point, z, unsure, impossible, bentBy } = off;
   if (impossible) return `no solubility is measured at ${inCelsius(fit.points.temperatureK[point]!)}`;
+  if (bentBy !== undefined)
+    return `the bend of its series puts it ${offBy(bentBy)} the curve of the other sources and the rest of its own`;
   const seen = `${offBy(fit.deviation[point]!)} ${comparison(fit, point)} (z = ${z.toFixed(1)})`;
   const expected = expectation(input, fit, point);
   const few = unsure ? "; few points are left to judge by, told because it is more than a factor 2" : "";

@@ -1,6 +1,7 @@
 import { normalQuantile, studentTSurvival } from "../numerics/distributions.ts";
 import { benjaminiHochbergThreshold } from "../numerics/multiple-testing.ts";
 import type { RobustFit } from "../records/fits.ts";
+import { RepeatKind } from "../records/repeats.ts";
 import { isPossibleTemperature } from "./possible-temperature.ts";
 import { type ScreenInput, thresholdOf } from "./screen-input.ts";
 
@@ -14,6 +15,8 @@ export interface OffPoint {
   readonly impossible: boolean;
   /** True where too few points are left to be sure: told only because it is off by more than a factor 2. */
   readonly unsure: boolean;
+  /** How far a bend of its series moves it, ln value, where it is off for that alone. */
+  readonly bentBy?: number;
 }
 
 /** Where few points are left, only this much is worth a flag. */
@@ -53,8 +56,20 @@ export function screenPoints(input: ScreenInput, blocked: ReadonlySet<string>): 
     }
   }
   const limit = benjaminiHochbergThreshold(pValues, q, total);
-  return candidates.filter(({ system, point, threshold, impossible }, j) => {
+  const off = candidates.filter(({ system, point, threshold, impossible }, j) => {
     return impossible || (pValues[j]! <= limit && Math.abs(input.fits[system]!.deviation[point]!) >= threshold);
+  });
+  return withoutSoundCopies(input, off);
+}
+
+/** A copy is off where what it repeats is off: it is the same value, though its own source may look set off from the curve. */
+function withoutSoundCopies({ fits }: ScreenInput, off: readonly OffPoint[]): OffPoint[] {
+  const told = new Set(off.map(({ system, point }) => `${system}:${point}`));
+  return off.filter(({ system, point, impossible }) => {
+    const { repeats } = fits[system]!;
+    if (impossible || repeats === undefined) return true;
+    if (repeats.kind[point]! < RepeatKind.copiedBlock) return true;
+    return repeats.kind[point] === RepeatKind.average || told.has(`${system}:${repeats.countedAs[point]}`);
   });
 }
 

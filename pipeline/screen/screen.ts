@@ -1,6 +1,6 @@
 import type { Flag, RobustFit } from "../records/fits.ts";
 import { blockFlags } from "./block-flags.ts";
-import { screenBlocks } from "./block-screen.ts";
+import { type OffBlock, screenBlocks } from "./block-screen.ts";
 import { calculatedFlags } from "./causes/calculated-value-copied.ts";
 import { createSuspectFinder } from "./causes/suspects.ts";
 import { conflictFlags } from "./conflicts.ts";
@@ -8,9 +8,11 @@ import { familyFlags } from "./families.ts";
 import { intervalFlags } from "./intervals.ts";
 import { isOutsideLiquid, liquidRangeFlags } from "./liquid-range.ts";
 import { judgeByMixtures } from "./mixture-screen.ts";
+import { patternBlocks } from "./pattern-blocks.ts";
 import { plausibilityFlags } from "./plausibility.ts";
 import { pointFlags, type SuspectFinder } from "./point-flags.ts";
 import { type OffPoint, screenPoints } from "./point-screen.ts";
+import { withoutTransitions } from "./possible-transitions.ts";
 import { redundantColumnFlags } from "./redundant-columns.ts";
 import { repeatFlags } from "./repeats.ts";
 import { type ScreenInput, thresholdOf } from "./screen-input.ts";
@@ -28,12 +30,18 @@ export function screen(input: ScreenInput): Flag[] {
   const capacity = input.fits.reduce((most, { points }) => Math.max(most, points.n), 1);
   const models: readonly [SystemModel, SystemModel] = [createSystemModel(capacity), createSystemModel(capacity)];
   const suspectsOf = createSuspectFinder(input);
-  const blocks = screenBlocks(input, models, suspectsOf);
-  const blocked = new Set(blocks.map(({ system, source }) => `${system}:${source}`));
-  const points = screenPoints(input, blocked);
+  const blocksOf = (blocks: readonly OffBlock[]) => new Set(blocks.map(({ system, source }) => `${system}:${source}`));
+  const single = screenBlocks(input, models, suspectsOf);
+  const throughout = patternBlocks(input, models, suspectsOf, blocksOf(single));
+  const offBlocks = [...single, ...throughout.blocks];
+  const offPoints = screenPoints(input, blocksOf(offBlocks));
+  const { blocks, points, flags: transitions } = withoutTransitions(input, models[0], offBlocks, offPoints);
+  const blocked = blocksOf(blocks);
   const mixtures = judgeByMixtures(input, new Set(blocks.map(({ system }) => system)));
   return [
     ...conflictFlags(input, models, suspectsOf),
+    ...throughout.flags,
+    ...transitions,
     ...blockFlags(input, blocks),
     ...pointFlags(input, models, points, suspectsOf),
     ...misreadTemperatures(input, models, points, blocked, suspectsOf),

@@ -22,7 +22,7 @@ interface Judged {
  * @param blocksOfSource all blocks of each source that could be judged
  */
 export function sourceWidePosteriors(blocks: readonly Judged[], blocksOfSource: Int32Array): number[][] {
-  const alone = blocks.map(({ readings }) => normalised(readings, ({ logPrior }) => Math.exp(logPrior)));
+  const alone = blocks.map(({ readings }) => ownPosterior(readings));
   const bySource = new Map<number, number[]>();
   for (const [j, { source }] of blocks.entries()) bySource.set(source, [...(bySource.get(source) ?? []), j]);
   const posteriors: number[][] = [...alone];
@@ -43,6 +43,11 @@ export function sourceWidePosteriors(blocks: readonly Judged[], blocksOfSource: 
     }
   }
   return posteriors;
+}
+
+/** Posterior probabilities of the readings of a block judged alone. */
+export function ownPosterior(readings: readonly BlockReading[]): number[] {
+  return normalised(readings, ({ logPrior }) => Math.exp(logPrior));
 }
 
 function normalised(readings: readonly BlockReading[], prior: (reading: BlockReading) => number): number[] {

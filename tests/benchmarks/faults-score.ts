@@ -133,6 +133,8 @@ function scoreRow(of: Scored, source: number, row: number): void {
   const bent = BENT.has(fault);
   if (bent) {
     if (of.majority) add("recall, bent series", flagged);
+    if (of.majority && !flagged)
+      miss(`bent ${fault} ${key} shift ${shift} not found, ${of.sources} sources, conflict ${of.conflict}`);
     // A flag on the whole block is one case, not one a row.
     const told = flag ?? (of.toldBlocks.has(key) ? undefined : of.ofBlock.get(key));
     if (flag === undefined) of.toldBlocks.add(key);

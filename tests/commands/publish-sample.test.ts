@@ -45,10 +45,18 @@ describe("the sample edition of the demo collection", () => {
     expect(run.stderr).not.toMatch(/\[(stale-ruling|wrong-ruling|contradicting-rulings|correction-impossible)\]/);
   });
 
-  test("has one recommended system, confirmed by name, and a doubtful one with the question still open", () => {
+  test("has every grade: recommended where confirmed by name, doubtful with a question open or ranges alone", () => {
     const { rows } = readTable(again, "systems.csv");
-    const graded = (grade: string) => rows.filter((row) => row.grade === grade).map(({ solute }) => solute);
-    expect(graded("recommended")).toEqual(["copper(II) sulfate"]);
-    expect(graded("doubtful")).toEqual(["caffeine"]);
+    const graded = (grade: string) =>
+      rows
+        .filter((row) => row.grade === grade)
+        .map(({ solute, solvent, composition }) => [solute, solvent, composition]);
+    expect(graded("recommended")).toEqual([["copper(II) sulfate", "water", ""]]);
+    expect(graded("doubtful")).toEqual([
+      ["caffeine", "ethyl acetate", ""],
+      ["ibuprofen", "water", ""],
+    ]);
+    // The one series of this composition is set aside, so that nothing is left to fit.
+    expect(graded("rejected")).toEqual([["paracetamol", "ethanol + water", "25:75 w/w"]]);
   });
 });

@@ -134,3 +134,14 @@ describe("a plot of characters", () => {
     expect(plot([{ x: 5, y: 3, mark: "A" }]).join("")).toContain("A");
   });
 });
+
+test("the text of a system whose solid changes says where, with limits, and names the branches", async () => {
+  const handbook = fileURLToPath(new URL("../../datasets/handbook/", import.meta.url));
+  const lines = (await shown(handbook, "sodium-sulfate-in-water")).split("\n");
+  const at = lines.findIndex((line) =>
+    /^the solid changes at 3\d\.\d °C \(95 % limits \d+\.\d to \d+\.\d °C\): two branches meet there$/.test(line),
+  );
+  expect(at).toBeGreaterThan(0);
+  expect(lines[at + 1]).toMatch(/p = 0\.00\d \(parametric bootstrap\)/);
+  expect(lines.filter((line) => /^curve of branch [12]: /.test(line))).toHaveLength(2);
+});

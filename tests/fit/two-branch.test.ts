@@ -220,16 +220,27 @@ describe.skipIf(!present)(
     );
     const pairOf = (name: string) => outcomes[names.indexOf(name)]?.pair;
 
-    test("16 of the 22 with a marked change of the solid and three points a side show it within 10 K", () => {
-      const able = names.filter((name) => marked.has(name) && changes(marked.get(name)!).length > 0);
-      const missed = able.filter((name) => {
-        const T = (pairOf(name)?.transition.temperatureK ?? Number.NaN) - 273.15;
+    const able = names.filter((name) => marked.has(name) && changes(marked.get(name)!).length > 0);
+    const missedBy = (celsiusOf: (name: string) => number) =>
+      able.filter((name) => {
+        const T = celsiusOf(name);
         return !changes(marked.get(name)!).some(([from, to]) => T >= from - 10 && T <= to + 10);
       });
+
+    test("18 of the 22 with a marked change of the solid and three points a side show it within 10 K", () => {
       expect(able).toHaveLength(22);
-      // Barium iodate and the nitrates of praseodymium, samarium and yttrium run through theirs without a visible kink;
-      // calcium iodate has a value that is no solubility (0.811 at 70 °C), cerium nitrate two changes 30 K apart.
-      expect(missed).toEqual(["Ba(IO3)2", "Ca(IO3)2", "Ce(NO3)3", "Pr(NO3)3", "Sm(NO3)3", "Y(NO3)3"]);
+      const missed = missedBy((name) => {
+        const found = outcomes[names.indexOf(name)]?.found;
+        return found?.sense === "falls" ? found.breakK - 273.15 : Number.NaN;
+      });
+      // Barium iodate and samarium nitrate run through theirs without a visible kink; calcium iodate has a value that is no
+      // solubility (0.811 at 70 °C) and scatters by 6 % without it; the four warm values of yttrium nitrate scatter too.
+      expect(missed).toEqual(["Ba(IO3)2", "Ca(IO3)2", "Sm(NO3)3", "Y(NO3)3"]);
+    });
+
+    test("17 of them are published as two branches: those of cerium nitrate, which changes twice, do not meet", () => {
+      const missed = missedBy((name) => (pairOf(name)?.transition.temperatureK ?? Number.NaN) - 273.15);
+      expect(missed).toEqual(["Ba(IO3)2", "Ca(IO3)2", "Ce(NO3)3", "Sm(NO3)3", "Y(NO3)3"]);
     });
 
     test("none of the 25 smoothest without a mark gets a break", () => {

@@ -77,15 +77,30 @@ const celsius = (temperatureK: number): string => `${(temperatureK - 273.15).toF
 const least = (...values: readonly number[]): number => Math.min(...values.filter((value) => !Number.isNaN(value)));
 const greatest = (...values: readonly number[]): number => Math.max(...values.filter((value) => !Number.isNaN(value)));
 
-/** Temperature of the highest solubility between two temperatures, by 0.5 K steps with both ends; the warmer of equals. */
-function hottest(massRatioAt: (temperatureK: number) => number, low: number, high: number): number {
+/** Whether a temperature keeps its distance from every transition. */
+function clearOfTransitions(temperatureK: number, transitionsK: readonly number[]): boolean {
+  // A band's own edge counts as clear although it is computed.
+  return transitionsK.every((t) => Math.abs(t - temperatureK) >= NEAR_TRANSITION_K - 1e-9);
+}
+
+/** An end of the range moved past every band about a transition that it lies in: the cold end upwards, the hot end downwards. */
+function movedClear(endK: number, transitionsK: readonly number[], direction: 1 | -1): number {
+  const inOrder = [...transitionsK].sort((a, b) => direction * (a - b));
+  return inOrder.reduce((end, t) => (clearOfTransitions(end, [t]) ? end : t + direction * NEAR_TRANSITION_K), endK);
+}
+
+/**
+ * Temperature of the highest solubility between two temperatures and clear of every transition, by 0.5 K steps with both
+ * ends and the edges of the bands about the transitions; the warmer of equals.
+ */
+function hottest({ massRatioAt, transitionsK }: CoolingConditions, low: number, high: number): number {
   const steps = Math.max(1, Math.ceil((high - low) / 0.5));
-  let best = low;
-  for (let i = 1; i <= steps; i++) {
-    const temperature = low + ((high - low) * i) / steps;
-    if (massRatioAt(temperature) >= massRatioAt(best)) best = temperature;
-  }
-  return best;
+  const grid = Array.from({ length: steps + 1 }, (_, i) => low + ((high - low) * i) / steps);
+  const edges = transitionsK.flatMap((t) => [t - NEAR_TRANSITION_K, t + NEAR_TRANSITION_K]);
+  return [...grid, ...edges.filter((t) => t > low && t < high)]
+    .filter((t) => clearOfTransitions(t, transitionsK))
+    .sort((a, b) => a - b)
+    .reduce((best, t) => (massRatioAt(t) >= massRatioAt(best) ? t : best), low);
 }
 
 /** Highest temperature in [low, high] at which S falls to `target`, by bisection; S must pass `target` in between. */
@@ -110,7 +125,9 @@ function recoveryLimits(hot: number, cold: number, R: number, halfHot: number, h
 
 /**
  * Plans a cooling crystallisation from one curve: hot end at the highest solubility that data, boiling point - 10 K and
- * the form's melting point - 20 K allow; cold end at the highest of data, freezing point + 5 K and 5 °C (common practice).
+ * the form's melting point - 20 K allow; cold end at the highest of data, freezing point + 5 K and 5 °C; neither within
+ * 5 K of a transition of the solid (common practice). Between them there may be transitions: the solution crystallises as
+ * the form stable at the cold end.
  * Equilibrium, pure solute, this solid form; no kinetics, cake hold-up or impurity effect.
  */
 export function planCooling(curve: Curve, conditions: CoolingConditions): CoolingPlan {
@@ -123,22 +140,14 @@ export function planCooling(curve: Curve, conditions: CoolingConditions): Coolin
     conditions.formMeltingPointK - BELOW_MELTING_K,
   );
   const coldest = greatest(low, conditions.freezingPointK + ABOVE_FREEZING_K, COLDEST_K);
-  // An end too near a transition moves away from it, into the range.
-  const near = (end: number) => conditions.transitionsK.filter((t) => Math.abs(t - end) < NEAR_TRANSITION_K);
-  const coldK = greatest(coldest, ...near(coldest).map((t) => t + NEAR_TRANSITION_K));
-  const ceiling = least(warmest, ...near(warmest).map((t) => t - NEAR_TRANSITION_K));
+  const coldK = movedClear(coldest, conditions.transitionsK, 1);
+  const ceiling = movedClear(warmest, conditions.transitionsK, -1);
   if (curve.model === "constant") return blank("measured at one temperature only");
   if (ceiling - coldK < SMALLEST_SPAN_K) {
     return blank(`usable span ${celsius(coldK)} to ${celsius(ceiling)} is below ${SMALLEST_SPAN_K} K`);
   }
-  const hotK = hottest(massRatioAt, coldK, ceiling);
+  const hotK = hottest(conditions, coldK, ceiling);
   if (hotK - coldK < SMALLEST_SPAN_K) return blank("solubility does not rise on heating: cooling brings nothing back");
-  const transition = near(hotK)[0];
-  if (transition !== undefined) {
-    return blank(
-      `the highest solubility lies within ${NEAR_TRANSITION_K} K of the transition at ${celsius(transition)}`,
-    );
-  }
   const crystal = conditions.crystalAt(coldK);
   if (crystal === undefined)
     return blank("which solid crystallises at the cold end cannot be told: name the solid form");

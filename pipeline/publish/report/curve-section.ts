@@ -81,7 +81,7 @@ function curvePart(curve: Curve, curves: number, more: Html): Html {
   const branch = curves > 1 ? `Branch ${curve.branch}: ` : "";
   return html`<h3>${branch}${curve.model}, ${celsius(low)} to ${celsius(high)} °C</h3>
 <p class="eq">${equationHtml(curve.model, letter)}, <var>T</var> in K</p>
-<div class="cols"><div>${wideTable(`Coefficients, ${curve.model}`, coefficientTable(curve))}
+<div class="cols"><div>${wideTable(`${branch}coefficients, ${curve.model}`, coefficientTable(curve))}
 <p>In a spreadsheet, <code>t</code> in °C, gives <var>${letter}</var>: <code>${spreadsheetFormula(curve)}</code></p></div>
 <div><dl class="facts">
 <dt>Points, sources, laboratories</dt><dd>${curve.n}, ${curve.nSources}, ${curve.nLaboratories}</dd>
@@ -91,7 +91,7 @@ function curvePart(curve: Curve, curves: number, more: Html): Html {
 <dt>Scatter between sources (SD)</dt><dd>${between}</dd>
 ${enthalpy === undefined ? "" : html`<dt>Apparent dissolution enthalpy</dt><dd>${significant(enthalpy.value / 1000, 4)} kJ/mol at ${celsius(enthalpy.temperatureK)} °C (95 % limits ${significant(enthalpy.low / 1000, 4)} to ${significant(enthalpy.high / 1000, 4)})</dd>`}
 ${more}</dl>${curve.notices.map((notice) => html`<p>Note: ${notice}.</p>`)}</div></div>
-${wideTable("Runners-up", runnersUp(curve))}`;
+${wideTable(`${branch}runners-up`, runnersUp(curve))}`;
 }
 
 /** Most round temperatures listed; a fine grid is thinned, its every row is in grid.csv. */
@@ -126,5 +126,5 @@ export function curveSection(view: SystemView, grid: readonly GridRow[]): Html {
   const curves = fit?.curves ?? [];
   if (curves.length === 0) return html`<h2 id="curve">Curve</h2><p>No curve: ${fit?.noCurve ?? "not fitted"}.</p>`;
   const values = grid.length === 0 ? "" : wideTable("Values at round temperatures", valueTable(grid));
-  return html`<h2 id="curve">Curve</h2>${transitionWords(fit?.transition)}${curves.map((curve, i) => curvePart(curve, curves.length, i === 0 ? idealFacts(view) : html``))}${values}`;
+  return html`<h2 id="curve">Curve</h2>${transitionWords(fit?.transition)}${curves.map((curve, i) => curvePart(curve, curves.length, i === curves.length - 1 ? idealFacts(view) : html``))}${values}`;
 }

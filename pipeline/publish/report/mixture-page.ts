@@ -76,7 +76,7 @@ function maxima({ model, percentOf, first, letter }: MixtureView): Html {
 <p>The solubility passes through a maximum between the ends: the first additions of either solvent to the other dissolve more.</p>
 ${wideTable(
   "Maximum over composition",
-  html`<table><caption>Maximum over composition at round temperatures. Flat range: compositions whose solubility is not told apart from the maximum. Above the better end: against the more soluble of the two ends of the compositions measured</caption><thead><tr><th scope="col" class="n">°C</th><th scope="col" class="n">% ${first}</th><th scope="col" class="n">Flat range, %</th><th scope="col" class="n">${letter}</th><th scope="col" class="n">g/100 g solvent</th><th scope="col" class="n">Above the better end, %</th><th scope="col" class="n">95 % limits</th></tr></thead><tbody>${rows}</tbody></table>`,
+  html`<table><caption>Maximum of ${letter} over composition at round temperatures${letter === "x" ? "; in g/100 g it lies nearer to the solvent of smaller molar mass" : ""}. Flat range: compositions whose solubility is not told apart from the maximum. Above the better end: against the more soluble of the two ends of the compositions measured</caption><thead><tr><th scope="col" class="n">°C</th><th scope="col" class="n">% ${first}</th><th scope="col" class="n">Flat range, %</th><th scope="col" class="n">${letter}</th><th scope="col" class="n">g/100 g solvent</th><th scope="col" class="n">Above the better end, %</th><th scope="col" class="n">95 % limits</th></tr></thead><tbody>${rows}</tbody></table>`,
 )}`;
 }
 

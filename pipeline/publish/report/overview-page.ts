@@ -93,12 +93,13 @@ function systemRow(edition: Edition, system: System, flags: readonly Flag[]): Ht
     high = Math.max(high, table.temperatureK[row] as number);
     sources.add(table.source[row] as number);
   }
-  const models = edition.fits[system.index]?.curves.map(({ model }) => model).join(", ");
+  const curves = edition.fits[system.index]?.curves ?? [];
+  const models = [...new Set(curves.map(({ model }) => model))].join(", ");
   const blocking = flags.filter((flag) => waits(edition, flag)).length;
   const liquid = [solvent, composition, medium].filter((part) => part !== "").join(", ");
   const flagged =
     blocking === 0 ? (flags.length === 0 ? "" : counted(flags.length, "remark")) : `${blocking} to decide`;
-  return html`<tr class="system"><th scope="row"><a href="${systemFile(system)}">${short(liquid, 90)}</a></th><td>${short(solidForm, 60)}</td><td class="n">${system.rows.length}</td><td class="n">${sources.size}</td><td class="n">${low === high ? celsius(low) : `${fixed(low - 273.15, 0)} to ${fixed(high - 273.15, 0)}`}</td><td>${rangeBar(low, high)}</td><td class="n">${atRoom(edition, system)}</td><td>${models || "none"}</td><td>${edition.grades[system.index]?.grade ?? ""}</td><td>${flagged}</td></tr>`;
+  return html`<tr class="system"><th scope="row"><a href="${systemFile(system)}">${short(liquid, 90)}</a></th><td>${short(solidForm, 60)}</td><td class="n">${system.rows.length}</td><td class="n">${sources.size}</td><td class="n">${low === high ? celsius(low) : `${fixed(low - 273.15, 0)} to ${fixed(high - 273.15, 0)}`}</td><td>${rangeBar(low, high)}</td><td class="n">${atRoom(edition, system)}</td><td>${models || "none"}${curves.length > 1 ? `, ${curves.length} branches` : ""}</td><td>${edition.grades[system.index]?.grade ?? ""}</td><td>${flagged}</td></tr>`;
 }
 
 /** Systems by solute, each solute a group of rows under its name. */

@@ -6,6 +6,12 @@ import { wideTable } from "./page.ts";
 const between = (low: number | undefined, high: number | undefined): string =>
   low === undefined || high === undefined ? "" : `${significant(low, 3)} to ${significant(high, 3)}`;
 
+/** What a table plans, told apart from that of another branch by its ends. */
+function titleOf({ T_hot_K: hot, T_cold_K: cold }: PlanningCoolingRow): string {
+  const ends = hot === undefined || cold === undefined ? "" : `, ${celsius(hot)} to ${celsius(cold)} °C`;
+  return `Cooling crystallisation${ends}`;
+}
+
 function coolingTable(row: PlanningCoolingRow): Html {
   const temperature = (kelvin: number | undefined) => (kelvin === undefined ? "" : `${celsius(kelvin)} °C`);
   const percent = (value: number | undefined) => (value === undefined ? "" : `${significant(value, 3)} %`);
@@ -36,12 +42,12 @@ function coolingTable(row: PlanningCoolingRow): Html {
       ([what, value, limits]) =>
         html`<tr><th scope="row">${what}</th><td class="n">${short(value, 80)}</td><td class="n">${limits}</td></tr>`,
     );
-  return html`<table><caption>Cooling crystallisation</caption><thead><tr><th scope="col">Figure</th><th scope="col" class="n">Value</th><th scope="col" class="n">95 % limits</th></tr></thead><tbody>${body}</tbody></table>`;
+  return html`<table><caption>${titleOf(row)}</caption><thead><tr><th scope="col">Figure</th><th scope="col" class="n">Value</th><th scope="col" class="n">95 % limits</th></tr></thead><tbody>${body}</tbody></table>`;
 }
 
 function coolingPart(row: PlanningCoolingRow): Html {
   if (row.blank_reason !== undefined) return html`<p>Cooling crystallisation, no figures: ${row.blank_reason}.</p>`;
-  return html`${wideTable("Cooling crystallisation", coolingTable(row))}${row.cautions === undefined ? "" : html`<p><b>Caution:</b> ${short(row.cautions, 600)}.</p>`}`;
+  return html`${wideTable(titleOf(row), coolingTable(row))}${row.cautions === undefined ? "" : html`<p><b>Caution:</b> ${short(row.cautions, 600)}.</p>`}`;
 }
 
 /** Planning figures of a system with their note; where data end, the reason instead of a figure. */

@@ -43,7 +43,7 @@ footer p{max-width:100ch}
 
 const TABLES = `
 table{border-collapse:collapse;font:.82rem/1.4 system-ui,"Segoe UI","DejaVu Sans",sans-serif;font-variant-numeric:tabular-nums}
-caption{text-align:left;padding:0 0 .35rem;font:italic .95rem/1.4 Georgia,"DejaVu Serif",serif;max-width:74ch}
+caption{text-align:left;padding:0 0 .35rem;font:italic .95rem/1.4 Georgia,"DejaVu Serif",serif;max-width:min(74ch,calc(100vw - 2rem))}
 th,td{padding:.22rem .8rem .22rem 0;text-align:left;vertical-align:top;border-bottom:1px solid var(--hair);max-width:26rem;overflow-wrap:break-word}
 .measurements{font-size:.78rem}.measurements th,.measurements td{padding-right:.6rem}
 .measurements tbody th[scope=rowgroup]{padding-top:.7rem;max-width:60rem}

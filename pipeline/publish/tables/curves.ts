@@ -139,7 +139,7 @@ function curveDocument(curve: Curve, edition: Edition): Loose<CurveDocument> {
       high_K: transition.high,
       probability: transition.probability,
     },
-    ...(curve.branch === 1 ? idealPart(edition.ideals[curve.system]) : {}),
+    ...(curve === edition.fits[curve.system]?.curves.at(-1) ? idealPart(edition.ideals[curve.system]) : {}),
     ...sourcesOfCurve(edition, curve),
     ...crossingsPart(edition, curve),
     notices: [...curve.notices],

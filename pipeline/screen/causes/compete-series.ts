@@ -8,12 +8,13 @@ import {
   seriesDensity,
   seriesLogDensity,
 } from "../system-model.ts";
+import { middle } from "../middle.ts";
 import type { Cause } from "./cause.ts";
 import { NAMED_ABOVE, type Verdict } from "./compete-point.ts";
 import { EVERY_CAUSE } from "./every-cause.ts";
 import { logSum } from "./log-sum.ts";
 import { type BlockSeries, growing, type Pattern } from "./pattern.ts";
-import { bentSeries } from "./pattern-density.ts";
+import { type Bent, bentSeries } from "./pattern-density.ts";
 
 /** A block some of whose points are off, as one series. */
 export interface SeriesCase {
@@ -31,10 +32,13 @@ export interface SeriesCase {
   readonly mayHydrate: boolean;
 }
 
-/** What bends a series, and the off points it accounts for. */
+/** What bends a series, and the points it accounts for. */
 export interface SeriesVerdict {
   readonly verdict: Verdict;
+  /** Off points that the bend explains. */
   readonly explained: ReadonlySet<number>;
+  /** How far the bend moves each point of the block but the strays, ln value, and what it leaves, in standard deviations. */
+  readonly moved: ReadonlyMap<number, { readonly by: number; readonly leftZ: number }>;
 }
 
 /** Rate of single faults among rows. Common practice. */
@@ -57,6 +61,9 @@ const WITNESS_K = 8;
 interface Tried {
   readonly logWeight: number;
   readonly explained: readonly number[];
+  /** The points that do not stray, in order, and the series of them under the pattern. */
+  readonly rest: readonly number[];
+  readonly bent: Bent;
 }
 
 /**
@@ -91,7 +98,7 @@ export function competeForSeries(of: SeriesCase): SeriesVerdict | undefined {
     const tried = tryPattern(of, order, off, pattern);
     if (tried !== undefined) total += STRETCH_RATE * pattern.weight * Math.exp(tried.logWeight - none);
   }
-  let best: { cause: Cause; pattern: Pattern; explained: readonly number[] } | undefined;
+  let best: { cause: Cause; pattern: Pattern; tried: Tried } | undefined;
   let bestSum = 0;
   for (const cause of EVERY_CAUSE) {
     let sum = 0;
@@ -104,7 +111,7 @@ export function competeForSeries(of: SeriesCase): SeriesVerdict | undefined {
       sum += weight;
       if (weight <= top) continue;
       top = weight;
-      winner = { cause, pattern, explained: tried.explained };
+      winner = { cause, pattern, tried };
     }
     total += sum;
     if (sum <= bestSum) continue;
@@ -115,7 +122,23 @@ export function competeForSeries(of: SeriesCase): SeriesVerdict | undefined {
   if (best === undefined || !(probability > NAMED_ABOVE)) return undefined;
   const { name, lookAt } = best.cause;
   const verdict = { cause: name, detail: best.pattern.detail, lookAt, probability, proposedValue: undefined };
-  return { verdict, explained: new Set(best.explained) };
+  return { verdict, explained: new Set(best.tried.explained), moved: movedBy(of, best.pattern, best.tried) };
+}
+
+/** What a bend does to each of its points. */
+function movedBy(
+  { fit, model }: SeriesCase,
+  { kind }: Pattern,
+  { rest, bent: { left, leftSd } }: Tried,
+): SeriesVerdict["moved"] {
+  const { temperatureK, lnValue } = seriesOf(fit, rest);
+  const offset = kind === "level" ? 0 : middle(left);
+  return new Map(
+    rest.map((point, i) => {
+      const deviation = lnValue[i]! - predictCurve(model, temperatureK[i]!).mean;
+      return [point, { by: deviation - left[i]!, leftZ: Math.abs(left[i]! - offset) / leftSd[i]! }];
+    }),
+  );
 }
 
 /**
@@ -171,7 +194,8 @@ function tryPattern(
   const { fit, model } = of;
   const variance = fit.betweenSd ** 2;
   const first = bentSeries(model, seriesOf(fit, order), variance, pattern);
-  const z = new Map(order.map((point, i) => [point, Math.abs(first.left[i]!) / first.leftSd[i]!]));
+  const offset = pattern.kind === "level" ? 0 : middle(first.left);
+  const z = new Map(order.map((point, i) => [point, Math.abs(first.left[i]! - offset) / first.leftSd[i]!]));
   const strays = new Set(off.filter((point) => z.get(point)! > STRAY_Z));
   const touched = order.filter((_, i) => (pattern.kind === "level" ? i >= pattern.from : pattern.shape[i] !== 0));
   const explained = touched.filter((point) => of.offWeight.has(point) && !strays.has(point));
@@ -180,12 +204,12 @@ function tryPattern(
     // A plateau lies below the curve, and all its values are the same.
     if (fit.deviation[explained[0]!]! > 0 || touched.some((point) => z.get(point)! > LEVEL_Z)) return undefined;
   }
-  if (strays.size === 0) return { logWeight: first.logDensity, explained };
+  if (strays.size === 0) return { logWeight: first.logDensity, explained, rest: order, bent: first };
   const rest = order.filter((point) => !strays.has(point));
   const without = withoutPoints(pattern, order, strays);
   if (without === undefined) return undefined;
-  const { logDensity } = bentSeries(model, seriesOf(fit, rest), variance, without);
-  return { logWeight: logDensity + logWeightOf(of, [], [...strays]), explained };
+  const bent = bentSeries(model, seriesOf(fit, rest), variance, without);
+  return { logWeight: bent.logDensity + logWeightOf(of, [], [...strays]), explained, rest, bent };
 }
 
 /** Whether a bend shows in more than one point: two that are off, or one and another that sides with it. */

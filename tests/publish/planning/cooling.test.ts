@@ -65,11 +65,6 @@ describe("a cooling plan is left blank, with the reason in words, where", () => 
       /one temperature/,
     ],
     ["heating does not raise the solubility", () => plan(5, 60, { massRatioAt: (t) => 30 / t }), /does not rise/],
-    [
-      "the solubility is highest within 5 K of a transition",
-      () => plan(5, 60, { massRatioAt: (t) => 0.3 - Math.abs(t - C(40)) / 200, transitionsK: [C(38)] }),
-      /transition at 38\.0 °C/,
-    ],
     ["the solid at the cold end cannot be told", () => plan(5, 60, { crystalAt: () => undefined }), /solid/],
     [
       "the hot solution would hold less solvent than its crystals: they melt in their own on the way up",
@@ -88,6 +83,34 @@ describe("a cooling plan is left blank, with the reason in words, where", () => 
     expect(found.blankReason).toMatch(reason);
     expect([found.maxRecovery, found.workingRecovery, found.solventMLPerG]).toEqual([undefined, undefined, undefined]);
   });
+});
+
+describe("where the solubility is highest within 5 K of a transition", () => {
+  const peak = (belowPerK: number, abovePerK: number) => (t: number) =>
+    0.3 - (t < C(40) ? belowPerK * (C(40) - t) : abovePerK * (t - C(40)));
+
+  test.each([
+    ["above the transition, where the solubility falls the slower", 0.005, 0.001, 45],
+    ["below the transition, where that is the higher", 0.001, 0.005, 35],
+  ])("the hot end lies 5 K %s", (_, belowPerK, abovePerK, hot) => {
+    const found = plan(5, 68, { massRatioAt: peak(belowPerK, abovePerK), transitionsK: [C(40)] });
+    expect(found.blankReason).toBe("");
+    expect((found.hotK ?? 0) - 273.15).toBeCloseTo(hot, 9);
+    expect(found.hotMassRatio).toBeCloseTo(peak(belowPerK, abovePerK)(C(hot)), 9);
+  });
+
+  test("it keeps clear of a second transition 8 K away as well", () => {
+    const found = plan(5, 68, { massRatioAt: peak(0.005, 0.001), transitionsK: [C(40), C(48)] });
+    expect((found.hotK ?? 0) - 273.15).toBeCloseTo(53, 9);
+  });
+
+  test("there is no plan where that leaves less than 20 K", () => {
+    expect(plan(5, 28, { transitionsK: [C(26)] }).blankReason).toMatch(/span 5\.0 °C to 21\.0 °C/);
+  });
+});
+
+test("an end moves past two transitions whose bands overlap", () => {
+  expect(plan(5, 60, { transitionsK: [C(51), C(58)] })).toMatchObject({ hotK: C(46), coldK: C(5), blankReason: "" });
 });
 
 test("an end within 5 K of a transition moves 5 K away from it, into the range", () => {

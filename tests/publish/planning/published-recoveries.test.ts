@@ -1,5 +1,6 @@
 import { describe, expect, test } from "vitest";
-import { equilibriumRecovery } from "../../../pipeline/publish/planning/cooling.ts";
+import { type CoolingPlan, equilibriumRecovery, planCooling } from "../../../pipeline/publish/planning/cooling.ts";
+import type { Curve } from "../../../pipeline/records/fits.ts";
 
 // g unsolvated per 100 g water: CRC Handbook of Chemistry and Physics, 98th edition (2017), table Aqueous Solubility of
 // Inorganic Compounds at Various Temperatures, as read in a public copy of it.
@@ -80,5 +81,61 @@ describe("the recovery at equilibrium of a cooling crystallisation", () => {
     expect(equilibriumRecovery(0.7, 1 / 1.7, 2.7)).toBeUndefined();
     expect(equilibriumRecovery(0.7, 0.9, 2.7)).toBeUndefined();
     expect(equilibriumRecovery(0.58, 0.57, 2.7)).toBeGreaterThan(0);
+  });
+});
+
+/** A plan from values of that table, ln S straight between them: the ends of the range are the ends of the plan. */
+function planFrom(
+  values: readonly (readonly [celsius: number, percent: number])[],
+  form: string,
+  massFactor: number,
+  transition?: number,
+): CoolingPlan {
+  const kelvin = (celsius: number) => celsius + 273.15;
+  const massRatioAt = (T: number) => {
+    const i = Math.max(
+      1,
+      values.findIndex(([celsius]) => T <= kelvin(celsius) + 1e-9),
+    );
+    const [[t0, s0], [t1, s1]] = [values[i - 1], values[i]] as [readonly [number, number], readonly [number, number]];
+    return (s0 / 100) * (s1 / s0) ** ((T - kelvin(t0)) / (t1 - t0));
+  };
+  const range = [
+    kelvin((values[0] as readonly [number, number])[0]),
+    kelvin((values.at(-1) as readonly [number, number])[0]),
+  ];
+  return planCooling({ model: "van 't Hoff", temperatureRangeK: range } as unknown as Curve, {
+    ...{ massRatioAt, halfWidthAt: () => 0.01, boilingPointK: kelvin(100), freezingPointK: kelvin(0) },
+    ...{ formMeltingPointK: Number.NaN, crystalAt: () => ({ form, massFactor }), solventDensity20C: 998.2 },
+    ...{ transitionsK: transition === undefined ? [] : [kelvin(transition)], excessSolventPercent: 10 },
+  });
+}
+
+describe("a whole plan from values of that table", () => {
+  test("of copper(II) sulfate between 20 and 80 °C gives 73.1 % of the pentahydrate", () => {
+    const plan = planFrom(
+      [
+        [20, 20.05],
+        [80, 56.99],
+      ],
+      "pentahydrate",
+      249.677 / 159.602,
+    );
+    expect(plan).toMatchObject({ crystalForm: "pentahydrate", hotK: 353.15, coldK: 293.15 });
+    expect(plan.maxRecovery?.value).toBeCloseTo(73.1, 1);
+  });
+
+  test("of sodium carbonate between 10 and 40 °C, across its transition at 35 °C, gives 94.7 % of the decahydrate", () => {
+    const plan = planFrom(
+      [
+        [10, 12.11],
+        [40, 48.81],
+      ],
+      "decahydrate",
+      286.138 / 105.988,
+      35,
+    );
+    expect(plan).toMatchObject({ crystalForm: "decahydrate", hotK: 313.15, coldK: 283.15 });
+    expect(plan.maxRecovery?.value).toBeCloseTo(94.7, 1);
   });
 });

@@ -1,1 +1,0 @@
-export { relativeRounding as roundingOf } from "../numerics/decimal-rounding.ts";
