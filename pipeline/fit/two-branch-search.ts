@@ -1,5 +1,6 @@
 import type { RobustFit } from "../records/fits.ts";
 import { RepeatKind } from "../records/repeats.ts";
+import { quickHint } from "./quick-hint.ts";
 import { breakPoints, type FoundBreak, findBreak, likelyBreak, whetherToSearch } from "./two-branch-fit.ts";
 
 /** A system in which a break may be looked for. */
@@ -27,6 +28,8 @@ export type RefitAtBreaks = (
 
 /** Breaks nearer than this are one, K. */
 const SAME_BREAK_K = 0.5;
+/** Statistic of the quickest look from which a closer one is worth its time. */
+const QUICK = 5;
 /** Points left out from which it may be the curve that is wrong, and not they; one, where the curve may break elsewhere. */
 const SEVERAL = 2;
 
@@ -93,7 +96,9 @@ function keptCount({ kept }: RobustFit): number {
 /** Whether a system is looked at at all: the smooth fit leaves points out or may break, or a quick search finds anything. */
 function worthALook(robust: RobustFit, knownK: readonly number[]): boolean {
   const suspicious = !Number.isNaN(robust.breakTemperatureK) || leftOut(robust) >= SEVERAL;
-  return suspicious || whetherToSearch(breakPoints(robust), knownK).worth;
+  if (suspicious) return true;
+  if (knownK.length === 0 && quickHint(robust) < QUICK) return false;
+  return whetherToSearch(breakPoints(robust), knownK).worth;
 }
 
 /** Points of sound sources that the fit leaves out. */

@@ -74,13 +74,32 @@ export function solventProperties(
   };
 }
 
+/** Most temperatures at which the density of one substance is kept. */
+const KEPT = 4096;
+
+/** Densities of pure liquids met so far, by temperature (K): the systems of one solvent share them. */
+const densities = new WeakMap<Substance, Map<number, Quantity | undefined>>();
+
+function pureDensity(substance: Substance, temperatureK: number): Quantity | undefined {
+  let known = densities.get(substance);
+  if (known === undefined) {
+    known = new Map();
+    densities.set(substance, known);
+  }
+  const before = known.get(temperatureK);
+  if (before !== undefined || known.has(temperatureK)) return before;
+  const density = liquidDensity(substance, temperatureK);
+  if (known.size < KEPT) known.set(temperatureK, density);
+  return density;
+}
+
 /** Properties of one substance; `wet` is the standard uncertainty of its water content as a mass fraction. */
 function pureProperties(substance: Substance, wet: number) {
   const M = substance.molarMass ?? Number.NaN;
   const ofWater = wet * (M / WATER_MOLAR_MASS - 1);
   const ofMass = Math.hypot((substance.molarMassUncertainty ?? 0) / M, ofWater);
   const densityAt = (temperatureK: number): Quantity | undefined => {
-    const density = liquidDensity(substance, temperatureK);
+    const density = pureDensity(substance, temperatureK);
     if (density === undefined || wet === 0) return density;
     const inRange = Math.min(WARMEST_K, Math.max(COLDEST_K, temperatureK));
     const [dry, moist] = [1, 1 - wet].map((w) => ethanolWaterDensityAt(w, inRange)?.value ?? Number.NaN);

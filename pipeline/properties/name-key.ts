@@ -12,6 +12,12 @@ const GREEK: ReadonlyMap<string, string> = new Map(
 
 const PLAIN = /^[A-Za-z\d()[\],.'+ -]*$/;
 
+/** What is folded in a name of plain characters: crystal water after an x, and the sign of a racemate. */
+const FOLDED_PLAIN = / [xX]|\(\+/;
+
+/** Letters that stand in no formula: symbols have two at most, and an x may mark crystal water. */
+const WORD = /[a-wyz]{3}/;
+
 /** Letters that tell stereoisomers apart, where they stand alone: `D-`, `(2R,3S)`, `DL-`. */
 const DESCRIPTOR = /(?<![\p{L}])(?:[DLRSEZ]|DL|LD|RS|SR)(?![\p{L}])/u;
 
@@ -57,8 +63,9 @@ export function nameKey(name: string): string {
  * @example unlistedName("  HX‑7  Mesylate") // "hx-7 mesylate"
  */
 export function unlistedName(name: string): string {
-  const folded = foldSpelling(name).replace(/ +/g, " ").trim();
-  if (!("fault" in parseFormula(folded))) return folded;
+  const plain = PLAIN.test(name) && !FOLDED_PLAIN.test(name);
+  const folded = (plain ? name : foldSpelling(name)).replace(/ +/g, " ").trim();
+  if (!WORD.test(folded) && !("fault" in parseFormula(folded))) return folded;
   return folded
     .split(/(?<![\p{L}])([DLRSEZ]|DL|LD|RS|SR)(?![\p{L}])/u)
     .map((part) => (DESCRIPTOR.test(part) && part.length <= 2 ? part : part.toLowerCase()))

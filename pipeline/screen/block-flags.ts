@@ -58,7 +58,8 @@ function verdictOf({ readings, posterior }: OffBlock): Verdict {
     if (sum < bestSum || (sum === bestSum && posterior[r]! <= bestShare)) continue;
     bestSum = sum;
     bestShare = posterior[r]!;
-    best = { cause, detail, lookAt, probability: sum, proposedValue: undefined };
+    // Shares of one whole, summed: rounding may take them past 1.
+    best = { cause, detail, lookAt, probability: Math.min(1, sum), proposedValue: undefined };
   }
   return decided(best, bestSum);
 }

@@ -32,7 +32,7 @@ const [USUAL_SCATTER, USUAL_FREEDOM] = [0.02, 3];
 /**
  * Offsets of a file from the collection's curves: in each system the mean of its deviations, rows that are off by
  * themselves left out, with limits from the scatter within the file (pooled over its systems) and the uncertainty of the
- * curve, which all rows share; over the systems the random-effects mean after Paule and Mandel.
+ * curve, which all rows share; a system is left out where no row remains; over the systems the random-effects mean after Paule and Mandel.
  *
  * @param judged rows of the file; those with a deviation are used
  * @param curveSd standard deviation of the curve at a row, ln value
@@ -47,7 +47,10 @@ export function fileOffsets(
     if (row.system === undefined || row.deviation === undefined || !Number.isFinite(row.deviation)) continue;
     blocks.set(row.system, [...(blocks.get(row.system) ?? []), row]);
   }
-  const sound = [...blocks].map(([system, rows]) => ({ system, rows: withoutSlips(rows) }));
+  const sound = [...blocks]
+    .map(([system, rows]) => ({ system, rows: withoutSlips(rows) }))
+    // Two rows far apart are both far from their middle: such a block says nothing of the offset.
+    .filter(({ rows }) => rows.length > 0);
   let [squares, freedom] = [USUAL_FREEDOM * USUAL_SCATTER ** 2, USUAL_FREEDOM];
   for (const { rows } of sound) {
     const mean = meanOf(rows);

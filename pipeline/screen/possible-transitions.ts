@@ -16,7 +16,7 @@ const MOST_Z = 3;
 /** Least scatter by which residuals are judged, ln value. */
 const LEAST_SD = 0.02;
 /** Fall of the bounded loss that a break must bring: more than any one point can. */
-const LEAST_FALL = 14;
+const LEAST_FALL = 9;
 /** Larger deviations are slips, and no change of the solid, ln value. */
 const LARGEST = Math.log(3);
 const ROUNDS = 4;

@@ -105,7 +105,8 @@ describe.each(["demo", "handbook"])("merging datasets/%s", (collection) => {
 
   test.each(Object.entries(SCHEMA_OF))("writes %s with rows that keep their schema", (name, schema) => {
     const { columns, records } = tables[name] as Table;
-    expect(records.length).toBeGreaterThan(0);
+    // The handbook holds no mixed solvents; the demo holds rows for every table.
+    if (!(collection === "handbook" && name === "mixtures.csv")) expect(records.length).toBeGreaterThan(0);
     const errors = records.flatMap((record, i) =>
       recordErrors(schema, columns, record).map((error) => `${name}:${i + 2} ${error}`),
     );
