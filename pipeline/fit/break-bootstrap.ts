@@ -96,6 +96,7 @@ const FUTILE: readonly (readonly [replicates: number, exceedances: number])[] = 
  * stopped as soon as p can no longer fall below `level`, or will hardly do so.
  *
  * @param seed starts the random numbers: the same for the same system on every machine
+ * @param most replicates behind a test that is not stopped
  * @see Davison and Hinkley, Bootstrap Methods and their Application (1997), section 4.2; the law of the statistic is not
  *   chi-square because the position has no meaning under the smooth model: Davies, Biometrika 74 (1987) 33-43.
  */
@@ -105,16 +106,17 @@ export function bootstrapBreak(
   sense: Sense,
   level: number,
   seed: number,
+  most = REPLICATES,
 ): BootstrapTest {
   const { rows, n, smooth, heldCurvature, smoothSum } = scan;
   const random = seededRandom(seed);
   const freedom = pooledDegreesOfFreedom + Math.max(1, n - SMOOTH_COEFFICIENTS);
   const sd = Math.sqrt((pooledDegreesOfFreedom + smoothSum) / freedom);
-  const most = Math.ceil(level * (REPLICATES + 1)) - 1;
+  const enough = Math.ceil(level * (most + 1)) - 1;
   const values = new Float64Array(rows);
-  const replicates = new Float64Array(REPLICATES);
+  const replicates = new Float64Array(most);
   let exceedances = 0;
-  for (let r = 0; r < REPLICATES; r++) {
+  for (let r = 0; r < most; r++) {
     for (let i = 0; i < n; i++) values[i] = sd * random.normal();
     values[n] = heldCurvature ? random.normal() : 0;
     values[n + 1] = 0;
@@ -126,10 +128,10 @@ export function bootstrapBreak(
     if (replicates[r]! < statistic) continue;
     exceedances++;
     const futile = level <= 0.01 && FUTILE.some(([after, many]) => r < after && exceedances >= many);
-    if (exceedances >= most || futile)
+    if (exceedances >= enough || futile)
       return { probability: (1 + exceedances) / (2 + r), replicates: replicates.subarray(0, r + 1).sort() };
   }
-  return { probability: (1 + exceedances) / (1 + REPLICATES), replicates: replicates.sort() };
+  return { probability: (1 + exceedances) / (1 + most), replicates: replicates.sort() };
 }
 
 /** Seed from a system's id: FNV-1a, 32 bits. */

@@ -24,8 +24,8 @@ export interface BreakProfile {
   readonly highK: number;
 }
 
-/** Positions over all temperatures, and about the best of them. */
-const [POSITIONS, FINE_POSITIONS] = [600, 20];
+/** Positions over all temperatures for the estimate and, more of them, for its limits; and about the best one. */
+const [POSITIONS, LIMIT_POSITIONS, FINE_POSITIONS] = [200, 600, 20];
 /** Level at which the points must ask for more curvature in one branch than is usual. */
 const CURVATURE_LEVEL = 0.01;
 
@@ -51,7 +51,8 @@ export function breakProfile(
   curvature: "as asked for" | "usual" = "as asked for",
 ): BreakProfile | undefined {
   const distinct = distinctTemperatures(points);
-  const search = { side, perGap: Math.max(2, Math.round(POSITIONS / Math.max(1, distinct.length))) };
+  const perGap = (positions: number) => Math.max(2, Math.round(positions / Math.max(1, distinct.length)));
+  const search = { side, perGap: perGap(POSITIONS) };
   const held = bestOf(points, search, sense);
   if (held === undefined) return undefined;
   const free = curvature === "usual" ? undefined : bestOf(points, { ...search, freeCurvatureChange: true }, sense);
@@ -61,7 +62,7 @@ export function breakProfile(
   const breakK = scan.breakK[best.position]!;
   const t = limitFactor(brokenDegreesOfFreedom(points.n));
   const least = best.gain - t * t * brokenVariance(points.n, scan.smoothSum - best.gain);
-  const wide = breakScan(points, { ...search, side: side - 1, freeCurvatureChange });
+  const wide = breakScan(points, { side: side - 1, perGap: perGap(LIMIT_POSITIONS), freeCurvatureChange });
   return { breakK, ...limitsOf(wide ?? scan, sense, least, breakK) };
 }
 

@@ -1,6 +1,7 @@
 import type { RisingKink } from "../records/fits.ts";
+import { breakSide } from "./break-carried.ts";
 import { type BreakPoints, distinctTemperatures } from "./break-scan.ts";
-import { breakSide, type FoundBreak } from "./two-branch-fit.ts";
+import type { FoundBreak } from "./two-branch-fit.ts";
 
 /** A break as a kink with the slopes (1/K) of straight lines through the three nearest temperatures on either side. */
 export function kinkOf(points: BreakPoints, { breakK, probability }: FoundBreak): RisingKink {

@@ -180,6 +180,8 @@ function subjectsOfBreaks(systems: readonly System[], robust: readonly RobustFit
     const { agreement, points } = robust[i] as RobustFit;
     if (system.identity.solidForm !== "unspecified" || agreement !== "agreed") return [];
     const excluded = () => outside(points.temperatureK, context.liquidRangeK(system));
-    return [{ system: i, seed: seedOf(system.id), knownK: context.transitionsK?.(system) ?? [], excluded }];
+    const knownK = context.transitionsK?.(system) ?? [];
+    // The seed is worked out where it is asked for: most systems are smooth, and never ask.
+    return [{ ...{ system: i, knownK, excluded }, seed: () => seedOf(system.id) }];
   });
 }

@@ -1,7 +1,7 @@
 import { equalVotes, robustRegression } from "../numerics/robust-regression.ts";
 import { memberDeviations } from "./mixture-deletion.ts";
 import { allMemberSums, type MemberSums } from "./mixture-information.ts";
-import { leftOutPrediction } from "./mixture-left-out.ts";
+import { leftOutJudge } from "./mixture-left-out.ts";
 import type { MixturePoints } from "./mixture-points.ts";
 import { fitMembers, type MixtureScales } from "./mixture-regression.ts";
 import { FLEXIBLE_SURFACE, publishedSurface } from "./mixture-surfaces.ts";
@@ -147,7 +147,7 @@ function moveMember(
   const sums = allMemberSums(points, use, FLEXIBLE_SURFACE, centreK, scales);
   for (const m of [...inUse, ...apart.keys()]) {
     const others = inUse.size - (inUse.has(m) ? 1 : 0);
-    const said = others < 3 ? undefined : leftOutPrediction(points, use, sums, m, centreK, scales, "anywhere");
+    const said = others < 3 ? undefined : leftOutJudge(points, use, sums, m, centreK, scales, "anywhere")();
     if (said === undefined) continue;
     const z = Math.abs(said.meanDeviation) / said.meanSd;
     if (apart.has(m) && (z < READMIT_Z || Math.abs(said.meanDeviation) < LEAST_DEVIATION)) {

@@ -3,8 +3,11 @@ import { isInside, type MixtureRange, mixtureRange } from "../curves/mixture-ran
 import type { LeftOutPrediction } from "../records/mixtures.ts";
 import type { MemberSums } from "./mixture-information.ts";
 import type { MixturePoints } from "./mixture-points.ts";
-import { fitMembers, type MixtureScales, rowAt, rowValue } from "./mixture-regression.ts";
+import { fitMembers, type MixtureRegression, type MixtureScales, rowAt, rowValue } from "./mixture-regression.ts";
 import { FLEXIBLE_SURFACE } from "./mixture-surfaces.ts";
+
+/** What the other systems say of one, each of its points taken at its own composition or at another. */
+export type LeftOutJudge = (fractionOf?: (point: number) => number) => LeftOutPrediction | undefined;
 
 /**
  * What the other systems of a mixture say of one: the flexible surface fitted without it.
@@ -13,10 +16,9 @@ import { FLEXIBLE_SURFACE } from "./mixture-surfaces.ts";
  * @param sums sums of all members over those points
  * @param where inside the compositions and temperatures of the others only, so that a pure solvent, beyond which nothing
  *   lies, is never judged; or anywhere, with a standard deviation that grows outside as the priors allow
- * @param fractionOf mass fraction at which a point is judged; its own where absent
- * @returns undefined where the other systems determine no surface, or reach none of the points
+ * @returns gives undefined where the other systems determine no surface, or reach none of the points
  */
-export function leftOutPrediction(
+export function leftOutJudge(
   points: MixturePoints,
   use: Uint8Array,
   sums: readonly MemberSums[],
@@ -24,11 +26,26 @@ export function leftOutPrediction(
   centreK: number,
   scales: MixtureScales,
   where: "inside" | "anywhere" = "inside",
-  fractionOf: (point: number) => number = (i) => points.fraction[i]!,
-): LeftOutPrediction | undefined {
+): LeftOutJudge {
   const fit = fitMembers(points, except(sums, member), FLEXIBLE_SURFACE, centreK, scales);
-  if (fit === undefined) return undefined;
+  if (fit === undefined) return () => undefined;
   const inside = where === "anywhere" ? () => true : insideOf(rangeOfOthers(points, use, member));
+  const degreesOfFreedom = judgingDegreesOfFreedom(sums.filter(({ n }, m) => n > 0 && m !== member).length);
+  return (fractionOf = (i) => points.fraction[i]!) => {
+    const said = predictionOf(points, use, member, fit, scales, inside, fractionOf);
+    return said && { ...said, degreesOfFreedom };
+  };
+}
+
+function predictionOf(
+  points: MixturePoints,
+  use: Uint8Array,
+  member: number,
+  fit: MixtureRegression,
+  scales: MixtureScales,
+  inside: (fraction: number, temperatureK: number) => boolean,
+  fractionOf: (point: number) => number,
+): Omit<LeftOutPrediction, "degreesOfFreedom"> | undefined {
   const own = Int32Array.from(
     { length: points.start[member + 1]! - points.start[member]! },
     (_, k) => points.start[member]! + k,
@@ -61,7 +78,6 @@ export function leftOutPrediction(
     meanSd: Math.sqrt(
       quadraticForm(fit.covariance, mean.row, fit.columns) + scales.lackOfFitVariance + mean.noise / mean.n ** 2,
     ),
-    degreesOfFreedom: judgingDegreesOfFreedom(sums.filter(({ n }, m) => n > 0 && m !== member).length),
   };
 }
 

@@ -1,7 +1,7 @@
 import type { MixtureMember } from "../records/mixtures.ts";
 import type { MemberSums } from "./mixture-information.ts";
 import type { KeptMixture } from "./mixture-keep.ts";
-import { leftOutPrediction } from "./mixture-left-out.ts";
+import { leftOutJudge } from "./mixture-left-out.ts";
 import type { MixturePoints } from "./mixture-points.ts";
 import type { MixtureScales } from "./mixture-regression.ts";
 import type { MixtureGroup } from "./mixture-systems.ts";
@@ -43,11 +43,10 @@ function memberOf(mixture: FittedMixture, m: number): MixtureMember {
   const fractions = Float64Array.from(own, (i) => points.fraction[i]!);
   const fraction = own.length > 0 ? meanFraction(fractions) : ofKey;
   const whyNot = used.length > 0 ? undefined : reasonWhyNot(mixture, m, own);
-  const leftOut = leftOutPrediction(points, kept.use, sums, m, centreK, scales);
+  const judge = leftOutJudge(points, kept.use, sums, m, centreK, scales);
+  const leftOut = judge();
   const turned = fraction > 0 && fraction < 1 && Math.abs(fraction - 0.5) > NEARLY_HALF;
-  const reversed = turned
-    ? leftOutPrediction(points, kept.use, sums, m, centreK, scales, "inside", (i) => 1 - points.fraction[i]!)
-    : undefined;
+  const reversed = turned ? judge((i) => 1 - points.fraction[i]!) : undefined;
   return {
     ...{ system: system.index, fraction, fractions, nUsed: used.length },
     temperatureRangeK: rangeOf(Array.from(used, (i) => points.temperatureK[i]!)),

@@ -1,10 +1,11 @@
 import { requireInside } from "../curves/fitted-range.ts";
 import type { Curve, Transition } from "../records/fits.ts";
+import { breakSide } from "./break-carried.ts";
 import { type BreakProfile, breakProfile } from "./break-profile.ts";
 import type { BreakPoints } from "./break-scan.ts";
 import { isCurve, publishedCurve } from "./published-curve.ts";
 import type { CurveContext, CurveSubject } from "./system-models.ts";
-import { breakPoints, breakSide, findBreak } from "./two-branch-fit.ts";
+import { breakPoints, findBreak } from "./two-branch-fit.ts";
 import type { SearchedBreak } from "./two-branch-search.ts";
 
 /** Two curves that meet where the solid changes. */

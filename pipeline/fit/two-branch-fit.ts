@@ -9,6 +9,13 @@ import {
   leastStatistic,
   type Sense,
 } from "./break-bootstrap.ts";
+import {
+  breakSide,
+  carriedByOnePoint,
+  carriedByOneSource,
+  LEFT_OUT_LEVEL,
+  seenWithinSources,
+} from "./break-carried.ts";
 import { breakHint } from "./break-hint.ts";
 import {
   type BreakPoints,
@@ -16,7 +23,6 @@ import {
   breakScan,
   type DistinctTemperature,
   distinctTemperatures,
-  inner,
   smoothRival,
 } from "./break-scan.ts";
 import { limitFactor } from "./limit-factor.ts";
@@ -30,12 +36,8 @@ export interface FoundBreak {
   readonly probability: number;
 }
 
-/** Distinct temperatures needed on either side of a break. */
-export const breakSide = 3;
 /** A break is published only below this probability. */
 const LEVEL = 0.01;
-/** Without any one point, and without any one source where the rest can show it, the break must pass this level. */
-const LEFT_OUT_LEVEL = 0.05;
 /** Share of the usual variance so small that a system's own residuals alone tell its scatter. */
 const QUIET = 0.02;
 /** Statistic of a change of slope alone from which a closer look is worth its time. */
@@ -173,19 +175,16 @@ function judgeAt(
   if (scan === undefined) return undefined;
   const best = bestBreak(scan, scan.residuals, scan.smoothSum, sense);
   if (best.position < 0 || best.statistic < leastStatistic(points.n, level)) return undefined;
-  if (fallsNearAnEnd(points, scan, best, sense)) return undefined;
   if (sense === "falls" && mayRise(points.n, scan, best)) return undefined;
   const breakK = scan.breakK[best.position]!;
   if (!seenWithinSources(points, breakK)) return undefined;
   const rival = smoothRival(points);
   if (rival <= scan.smoothSum - best.gain || (sense === "rises" && withinScatter(points.n, rival))) return undefined;
-  const enough = leastStatistic(points.n, LEFT_OUT_LEVEL);
-  const withoutOne = leastWithoutOne(points, scan, best.position, sense, enough);
-  if (withoutOne === 0) return undefined;
   const { probability, replicates } = bootstrapBreak(scan, best.statistic, sense, level, seed);
-  if (probability >= level) return undefined;
+  if (probability >= level || fallsNearAnEnd(points, scan, best, sense)) return undefined;
   const critical = replicates[Math.ceil((1 - LEFT_OUT_LEVEL) * replicates.length) - 1]!;
-  if (withoutOne <= critical || carriedByOneSource(points, breakK, sense, seed)) return undefined;
+  if (carriedByOnePoint(points, scan, best.position, sense, critical)) return undefined;
+  if (carriedByOneSource(points, breakK, sense, seed)) return undefined;
   return { sense, breakK, probability };
 }
 
@@ -215,73 +214,4 @@ function fallsNearAnEnd(points: BreakPoints, scan: BreakScan, best: BestBreak, s
 function mayRise(n: number, scan: BreakScan, { gain }: BestBreak): boolean {
   const rising = bestBreak(scan, scan.residuals, scan.smoothSum, "rises").gain;
   return gain - rising <= limitFactor(brokenDegreesOfFreedom(n)) ** 2 * brokenVariance(n, scan.smoothSum - gain);
-}
-
-/**
- * Whether sources that cross the break, each with two points on either side, have three temperatures a side between
- * them: sources that lie wholly on one side differ in slope for other reasons too.
- */
-function seenWithinSources(points: BreakPoints, breakK: number): boolean {
-  const crossing: number[] = [];
-  for (let b = 0; b < points.nBlocks; b++) {
-    const sides = [0, 0];
-    for (let i = 0; i < points.n; i++) if (points.block[i] === b) sides[points.temperatureK[i]! <= breakK ? 0 : 1]!++;
-    if (sides[0]! >= 2 && sides[1]! >= 2) crossing.push(b);
-  }
-  const ofCrossing = (cold: boolean) =>
-    distinctTemperatures(
-      without(points, (i) => !crossing.includes(points.block[i]!) || points.temperatureK[i]! <= breakK !== cold),
-    ).length >= breakSide;
-  return ofCrossing(true) && ofCrossing(false);
-}
-
-/**
- * The least statistic with any one point left out; 0 as soon as one is at most `enough`. Points that bring most of the gain are
- * left out first: they are the ones that may carry the break alone.
- */
-function leastWithoutOne(points: BreakPoints, scan: BreakScan, position: number, sense: Sense, enough: number): number {
-  const { rows, directions, residuals } = scan;
-  const at = 2 * rows * position;
-  const along = [at, at + rows].map((from) => inner(directions, from, residuals, 0, rows));
-  const brought = (i: number) =>
-    Math.abs(residuals[i]! * (along[0]! * directions[at + i]! + along[1]! * directions[at + rows + i]!));
-  const order = Array.from({ length: points.n }, (_, i) => i).sort((i, k) => brought(k) - brought(i) || i - k);
-  let least = Number.POSITIVE_INFINITY;
-  for (const left of order) {
-    const rest = breakScan(
-      without(points, (k) => k === left),
-      { side: breakSide - 1, perGap: 2 },
-    );
-    if (rest === undefined) return 0;
-    least = Math.min(least, bestBreak(rest, rest.residuals, rest.smoothSum, sense).statistic);
-    if (least <= enough) return 0;
-  }
-  return least;
-}
-
-function carriedByOneSource(points: BreakPoints, breakK: number, sense: Sense, seed: number): boolean {
-  for (let b = 0; points.nBlocks > 1 && b < points.nBlocks; b++) {
-    const rest = without(points, (i) => points.block[i] === b);
-    if (!seenWithinSources(rest, breakK)) continue;
-    const scan = breakScan(rest, { side: breakSide, perGap: 2 });
-    if (scan === undefined) continue;
-    const { statistic } = bestBreak(scan, scan.residuals, scan.smoothSum, sense);
-    if (bootstrapBreak(scan, statistic, sense, LEFT_OUT_LEVEL, seed).probability >= LEFT_OUT_LEVEL) return true;
-  }
-  return false;
-}
-
-/** The points without some of them; sources are numbered anew. */
-function without(points: BreakPoints, leftOut: (i: number) => boolean): BreakPoints {
-  const use = Array.from({ length: points.n }, (_, i) => i).filter((i) => !leftOut(i));
-  const blocks = [...new Set(use.map((i) => points.block[i]!))];
-  return {
-    ...points,
-    n: use.length,
-    temperatureK: Float64Array.from(use, (i) => points.temperatureK[i]!),
-    lnValue: Float64Array.from(use, (i) => points.lnValue[i]!),
-    variance: Float64Array.from(use, (i) => points.variance[i]!),
-    block: Int32Array.from(use, (i) => blocks.indexOf(points.block[i]!)),
-    nBlocks: blocks.length,
-  };
 }

@@ -8,7 +8,7 @@ export interface BranchSubject {
   /** Position of the system among the fits. */
   readonly system: number;
   /** Starts the random numbers of its bootstrap. */
-  readonly seed: number;
+  readonly seed: () => number;
   /** Listed transitions of the solid, K. */
   readonly knownK: readonly number[];
   /** 1 = the point takes no part in any fit. */
@@ -72,7 +72,7 @@ function searchOne(
   const known = new Map<string, FoundBreak | undefined>();
   const judged = (robust: RobustFit) => {
     const key = robust.kept.join("");
-    if (!known.has(key)) known.set(key, findBreak(breakPoints(robust), seed, knownK));
+    if (!known.has(key)) known.set(key, findBreak(breakPoints(robust), seed(), knownK));
     return known.get(key);
   };
   const agreed = refits.filter(({ agreement }) => agreement !== "conflict");

@@ -19,13 +19,15 @@ export interface IdentityRegister {
   readonly remarks: (Remark & { readonly source: string; readonly line: number })[];
   /** Exact compositions of the mixtures met, by position of the identity: mass fractions by name. */
   readonly compositions: Map<number, Map<string, ReadonlyMap<string, number>>>;
+  /** What rows were resolved to that do not depend on their value, by their cells: sources spell alike. */
+  readonly resolved: Map<string, ResolvedIdentity | CellFault>;
 }
 
 /** An empty register. */
 export function createIdentityRegister(): IdentityRegister {
   return {
     ...{ identities: [], solutes: new Map(), solvents: new Map(), positions: new Map() },
-    ...{ remarks: [], compositions: new Map() },
+    ...{ remarks: [], compositions: new Map(), resolved: new Map() },
   };
 }
 
@@ -80,9 +82,16 @@ export function identifySource(
 ): IdentifiedSource {
   const get = Object.fromEntries(IDENTITY_FIELDS.map((field) => [field, cellGetter(source.places, field)]));
   const text = (field: string, reading: Reading): string => (get[field] as (reading: Reading) => string)(reading);
-  const varying = IDENTITY_FIELDS.filter(
+  const varies = IDENTITY_FIELDS.filter(
     (field) => source.places[field]?.kind === "column" || source.readings.some((reading) => reading.own?.[field]),
-  ).map((field) => get[field] as (reading: Reading) => string);
+  );
+  const varying = varies.map((field) => get[field] as (reading: Reading) => string);
+  const [any] = source.readings;
+  /** What the cells of all rows have in common: with a row's own key it tells its cells among all sources. */
+  const fixed = JSON.stringify([
+    source.decimal,
+    ...IDENTITY_FIELDS.map((field) => (any === undefined || varies.includes(field) ? 0 : text(field, any))),
+  ]);
   const unit = unitGetter(source.places, "solubility");
   const soluteBasis = cellGetter(source.places, "solute_basis");
   const rowValue = (reading: Reading): RowValue => ({
@@ -92,9 +101,19 @@ export function identifySource(
   });
   /** Keys of rows whose solvent follows from their own value: it becomes a part of the key. */
   const ofValue = new Set<string>();
-  const resolve = (reading: Reading, key: string): Identified | CellFault => {
+  const dependsOnValue = (found: ResolvedIdentity | CellFault, reading: Reading) =>
+    "code" in found ? countsSolute(text("composition_basis", reading)) : found.ofValue;
+  const resolveCells = (reading: Reading, key: string): ResolvedIdentity | CellFault => {
+    const cells = fixed + key;
+    const known = all.resolved.get(cells);
+    if (known !== undefined) return known;
     const found = resolveIdentity((field) => text(field, reading), index, structure, source.decimal, rowValue(reading));
-    if ("code" in found ? countsSolute(text("composition_basis", reading)) : found.ofValue) ofValue.add(key);
+    if (!dependsOnValue(found, reading)) all.resolved.set(cells, found);
+    return found;
+  };
+  const resolve = (reading: Reading, key: string): Identified | CellFault => {
+    const found = resolveCells(reading, key);
+    if (dependsOnValue(found, reading)) ofValue.add(key);
     if ("code" in found) return found;
     const others = ["solvent", "solid_form"].flatMap((field) => lookAlikeRemarks(text(field, reading)));
     for (const remark of [...found.solute.remarks, ...others]) {

@@ -6,6 +6,7 @@ import { blocksOf } from "./block-screen.ts";
 import type { Suspects } from "./causes/cause.ts";
 import { competeForPoint, type Verdict } from "./causes/compete-point.ts";
 import { competeForSeries } from "./causes/compete-series.ts";
+import { rereadSeries } from "./causes/reread-series.ts";
 import { contestedFlag, isContested, SURE } from "./contested-ends.ts";
 import { type EndRun, endRun } from "./end-runs.ts";
 import type { OffPoint } from "./point-screen.ts";
@@ -47,6 +48,7 @@ export function pointFlags(
       models[0],
       same.map((j) => off[j]!),
       same.map((j) => verdicts[j]!.weight),
+      suspectsOf,
     );
     if (bent === undefined) continue;
     const rows = bentRows(
@@ -108,7 +110,13 @@ function byBlock({ fits }: ScreenInput, off: readonly OffPoint[]): number[][] {
 }
 
 /** What bends the series of off points of one block, if anything does. */
-function bendOf(input: ScreenInput, model: SystemModel, off: readonly OffPoint[], weights: readonly number[]) {
+function bendOf(
+  input: ScreenInput,
+  model: SystemModel,
+  off: readonly OffPoint[],
+  weights: readonly number[],
+  suspectsOf: SuspectFinder,
+) {
   const { system, point } = off[0]!;
   const fit = input.fits[system]!;
   if (fit.agreement !== "agreed" || off.some(({ impossible }) => impossible)) return undefined;
@@ -118,7 +126,9 @@ function bendOf(input: ScreenInput, model: SystemModel, off: readonly OffPoint[]
   const offWeight = new Map(off.map((one, j) => [one.point, weights[j]!]));
   const mayHydrate = input.about[system]?.kind === "aqueous salt";
   const tolerance = off[0]!.threshold;
-  return competeForSeries({ model, fit, source, points, offWeight, method, mayHydrate, tolerance });
+  const rows = points.map((i) => fit.points.row[i]!);
+  const rereadings = rereadSeries(input, suspectsOf(system, source, rows));
+  return competeForSeries({ model, fit, source, points, offWeight, method, mayHydrate, tolerance, rereadings });
 }
 
 /** `read at 40.0 °C it lies 1.2 % above the curve`. */

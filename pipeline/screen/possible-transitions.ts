@@ -19,7 +19,10 @@ const LEAST_SD = 0.02;
 const LEAST_FALL = 9;
 /** Larger deviations are slips, and no change of the solid, ln value. */
 const LARGEST = Math.log(3);
-const ROUNDS = 4;
+/** Points beyond so many standard deviations from which a break is tried: one alone cannot bring the fall. */
+const [LEAST_DOUBTFUL, DOUBTFUL_Z] = [2, 3];
+/** Places for a break that are tried at most, and rounds of leaving out what does not follow. */
+const [MOST_TRIED, ROUNDS] = [12, 3];
 
 /** A change of the solid that the points of a system speak for, though they are too few to show it. */
 interface PossibleTransition {
@@ -47,18 +50,23 @@ export function withoutTransitions(
   points: readonly OffPoint[],
 ): WithoutTransitions {
   const transitions = new Map<number, PossibleTransition>();
-  for (const system of new Set([...blocks, ...points].map((one) => one.system))) {
-    const found = transitionOf(model, input.fits[system]!);
+  const small = points.filter(({ system, point }) => Math.abs(input.fits[system]!.deviation[point]!) < LARGEST);
+  for (const system of new Set(
+    [...blocks.filter(({ offset }) => Math.abs(offset) < LARGEST), ...small].map((one) => one.system),
+  )) {
+    const fit = input.fits[system]!;
+    const found = doubtful(fit) < LEAST_DOUBTFUL ? undefined : transitionOf(model, fit);
     if (found !== undefined) transitions.set(system, found);
   }
   const explains = (system: number, point: number) =>
-    transitions.get(system)?.explained.has(point) === true &&
-    Math.abs(input.fits[system]!.deviation[point]!) < LARGEST;
+    transitions.get(system)?.explained.has(point) === true && Math.abs(input.fits[system]!.deviation[point]!) < LARGEST;
   const offBlocks = blocks.filter(({ system, points: own }) => !own.every((point) => explains(system, point)));
   const offPoints = points.filter(({ system, point }) => !explains(system, point));
   const eased = new Set(
     [...blocks, ...points]
-      .filter((one) => !(offBlocks as readonly unknown[]).includes(one) && !(offPoints as readonly unknown[]).includes(one))
+      .filter(
+        (one) => !(offBlocks as readonly unknown[]).includes(one) && !(offPoints as readonly unknown[]).includes(one),
+      )
       .map(({ system }) => system),
   );
   return {
@@ -66,6 +74,14 @@ export function withoutTransitions(
     points: offPoints,
     flags: [...eased].map((system) => notice(input.fits[system]!, transitions.get(system)!)),
   };
+}
+
+/** Points that look off, but by no more than another solid could make them. */
+function doubtful({ deviation, noiseSd }: RobustFit): number {
+  let count = 0;
+  for (const [i, by] of deviation.entries())
+    if (Math.abs(by) > DOUBTFUL_Z * noiseSd[i]! && Math.abs(by) < LARGEST) count++;
+  return count;
 }
 
 /** The break that lowers the bounded loss of all sources together most, if by enough. */
@@ -78,7 +94,8 @@ function transitionOf(model: SystemModel, fit: RobustFit): PossibleTransition | 
   if (temperatures.length < LEAST_TEMPERATURES) return undefined;
   let best: PossibleTransition | undefined;
   let least = boundedLoss(model, fit, usable, Number.NaN).loss - LEAST_FALL;
-  for (let j = SIDE; j <= temperatures.length - SIDE; j++) {
+  const step = Math.ceil(temperatures.length / MOST_TRIED);
+  for (let j = SIDE; j <= temperatures.length - SIDE; j += step) {
     const breakK = (temperatures[j - 1]! + temperatures[j]!) / 2;
     const { loss, explained } = boundedLoss(model, fit, usable, breakK);
     if (!(model.model.coefficients[SLOPE_CHANGE]! < 0) || loss >= least) continue;

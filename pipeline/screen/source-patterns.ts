@@ -50,6 +50,8 @@ const [LEAST_SYSTEMS, LEAST_OTHERS, LEAST_POINTS] = [4, 2, 3];
 const MOST_OF_ONE = 9;
 /** Fall of the bounded loss that a pattern must bring, per system and in all; by chance it is about 1 in all. */
 const [LEAST_FALL_EACH, LEAST_FALL] = [1.5, 16];
+/** Fall by which an error of temperature must beat one factor. */
+const CLEARLY_MORE = 5;
 /** Part of the amplitude by which one size differs between systems. */
 const ALIKE_TO = 0.15;
 /** Share of the systems that must side with the pattern. */
@@ -63,7 +65,9 @@ const MOSTLY = 0.7;
  * widens the very scales by which its points are judged: block by block it passes.
  */
 export function sourcePattern(input: ScreenInput, model: SystemModel, source: number): SourcePattern | undefined {
-  const systems = input.fits.filter((fit) => fit.agreement === "agreed" && othersOf(fit, source).length >= LEAST_OTHERS);
+  const systems = input.fits.filter(
+    (fit) => fit.agreement === "agreed" && othersOf(fit, source).length >= LEAST_OTHERS,
+  );
   const step = Math.max(1, systems.length / SAMPLE);
   const blocks: BesideOthers[] = [];
   for (let at = 0; at < systems.length; at += step) {
@@ -86,7 +90,8 @@ export function sourcePattern(input: ScreenInput, model: SystemModel, source: nu
         Math.min(MOST_OF_ONE, (size - amplitude) ** 2 / (variance + spread)),
       0,
     );
-    if (fall <= bestFall || siding < MOSTLY * sizes.length) continue;
+    // Where all curves are equally steep, an error of temperature is one factor: it must explain clearly more.
+    if (fall <= bestFall + (best === undefined ? 0 : CLEARLY_MORE) || siding < MOSTLY * sizes.length) continue;
     bestFall = fall;
     best = { source, kind, amplitude, ...scatterAbout(blocks, kind, amplitude), systems: sizes.length, siding };
   }

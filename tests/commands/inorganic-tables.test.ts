@@ -94,4 +94,8 @@ describe.skipIf(absent)("two wide tables of inorganic salts in water", () => {
     expect(told.size).toBeGreaterThan(0.9 * long.length);
     expect(flagsOf(edition, "block-off-curve")).toEqual([]);
   });
+
+  test("are never said to disagree, for at every temperature they read the same", () => {
+    expect(flagsOf(edition, "sources-disagree", "sources-part-once").map(({ id }) => id)).toEqual([]);
+  });
 });

@@ -292,6 +292,25 @@ describe("single values that are off are found", () => {
     expect(blocking.map(({ code }) => code)).toContain("off-curve");
   });
 
+  test("E29: boric acid in mass % under g/100 mL is a mistaken basis, no loss in a filter", () => {
+    for (const celsius of [80, 100]) {
+      const flags = flagsAt(
+        edition,
+        "encyclopedia-organic-pages",
+        lineOf("encyclopedia-organic-pages", "boric acid", celsius),
+      );
+      const off = flags.find(({ code }) => code === "off-curve");
+      expect(off).toMatchObject({
+        suspectedCause: "basis mix-up",
+        causeDetail: "g/100 mL solvent should read g/100 g solution",
+      });
+    }
+  });
+
+  test("E11: the newer table of NaOH is not blamed for the older one's values", () => {
+    for (const celsius of [10, 20, 30]) expect(codesAt(CRC98, "sodium hydroxide", celsius)).not.toContain("off-curve");
+  });
+
   test("E10: the older AgNO3 table is told against the two newer ones that agree, at the very temperatures", () => {
     const told = flagsOf(edition).find(
       ({ code, id }) => code === "off-the-others" && id.includes("teaching-table-a@silver-nitrate"),
@@ -327,7 +346,9 @@ describe("series that cannot be read as they stand are found", () => {
 
   test("E15: the pentahydrate taken as weighed per water added is one finding on the series", () => {
     const flags = flagsAt(edition, "e15-added", 4).filter(({ severity }) => severity === "blocking");
-    expect(flags.map(({ scope }) => scope)).toEqual(["block"]);
+    expect(flags).toMatchObject([
+      { scope: "block", suspectedCause: "hydrate basis", causeDetail: "mass is hydrate equivalent per total solvent" },
+    ]);
   });
 
   test("E25: the rest of the naphthalene series parts from the mole fractions it was computed from", () => {

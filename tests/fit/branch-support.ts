@@ -31,7 +31,7 @@ export function branchesOf(
   );
   const seed = (system: number) => seedOf(`system ${system}`);
   const subjects = fits.flatMap(({ agreement }, system) =>
-    agreement === "agreed" ? [{ system, seed: seed(system), knownK: [] }] : [],
+    agreement === "agreed" ? [{ system, seed: () => seed(system), knownK: [] }] : [],
   );
   const all = searchBreaks(subjects, fits, (wanted) =>
     wanted.length === 0

@@ -111,4 +111,35 @@ describe("two sources that part at one end", () => {
       /^a and b agree but for one end: from 40\.0 °C to 50\.0 °C they part, at the end a lies \d\d % above the curve that follows b, and no third source says which is right$/,
     );
   });
+
+  test("have no quarrel where they read the same at the same temperatures: it is the curve that turns", () => {
+    const both = [5, 12, 19, 26, 33, 40, 47, 54];
+    const turned = (step: number) =>
+      series(both, (value, i) => Number((step * value * Math.exp(i > 5 ? 0.4 : 0)).toPrecision(4)));
+    const sound = { a: series([5, 15, 25, 35, 45]), b: series([8, 18, 28, 38, 48]) };
+    const flags = screened([{ a: turned(1), b: turned(1.004) }, sound, sound]);
+    expect(flags.filter(({ code }) => code === "sources-disagree")).toEqual([]);
+    for (const flag of flags.filter(({ code }) => code === "off-curve"))
+      expect(flag.evidence).toContain("another source reads the same: the curve itself may turn there");
+  });
+});
+
+describe("a bent series held against two others", () => {
+  test("has only those rows flagged that the bend moves, not the sound end of its own", () => {
+    const flags = screened([{ a: bent((t) => Math.max(0, t - 15) * 0.016), ...others() }]);
+    const rows = flags.map(({ row }) => row!).sort((a, b) => a - b);
+    expect(rows[0]).toBeGreaterThanOrEqual(2);
+    expect(rows).toContain(6);
+    expect(new Set(flags.map(({ suspectedCause }) => suspectedCause))).toEqual(new Set(["solvent lost"]));
+  });
+
+  test("that one mistaken basis straightens had that, and lost nothing", () => {
+    // Solute per mass of solution written as mole fraction: equal at high dilution but for a factor, bent above.
+    const perMass = RANGE.map((t): Reading => {
+      const x = thousandX(t) / 1000;
+      return [t, Number(((1000 * 3 * x) / (3 * x + 1 - x)).toPrecision(4))];
+    });
+    const flags = screened([{ a: perMass, ...others() }]);
+    expect(flags.map(({ suspectedCause }) => suspectedCause)).toEqual(["no simple cause"]);
+  });
 });

@@ -1,7 +1,9 @@
+import { relativeRounding } from "../../numerics/decimal-rounding.ts";
 import type { RobustFit } from "../../records/fits.ts";
 import { middle } from "../middle.ts";
 import { isPossibleTemperature } from "../possible-temperature.ts";
 import type { ScreenInput } from "../screen-input.ts";
+import { SAME_TEMPERATURE_K } from "../shared-temperatures.ts";
 import { fitSources, predict, predictCurve, type Series, type SystemModel, seriesLogDensity } from "../system-model.ts";
 import { bentReadings, LEFT_OVER } from "./bent-block.ts";
 import type { Cause, CauseName, Explanation, Suspects } from "./cause.ts";
@@ -61,6 +63,8 @@ const STRAY_LOG_DENSITY = Math.log(0.03 / 3);
 export const IMPOSSIBLE = -1e6;
 /** At most this share of a block may be stray. */
 const STRAY_SHARE = 0.25;
+/** Share of such mistakes made in taking over another source of the system, rows that show it, and finest number (ln value). */
+const [TAKEN_SHARE, LEAST_TAKEN, FINEST] = [0.05, 3, 5e-4];
 /** Part of the material threshold from which a point sides with the offset of its block. */
 const ALIKE_SHARE = 0.7;
 
@@ -151,6 +155,13 @@ function joined(readings: readonly BlockReading[]): BlockReading[] {
 function explained(of: BlockCase, how: Explanation, between: number): number | undefined {
   const series = seriesOf(of, how);
   if (series === undefined) return undefined;
+  const byCurve = onCurve(of, how, series, between);
+  const takenOver = how.system === undefined ? takenOverDensity(of, series) : undefined;
+  return byCurve === undefined || takenOver === undefined ? (byCurve ?? takenOver) : Math.max(byCurve, takenOver);
+}
+
+/** The same by the curve of the others, or by that of the system the block is said to belong to. */
+function onCurve(of: BlockCase, how: Explanation, series: Series, between: number): number | undefined {
   if (how.system !== undefined) fitSources(of.models[1], of.input.fits[how.system]!, (s) => s !== of.source);
   const model = of.models[how.system === undefined ? 0 : 1];
   const residuals = series.lnValue.map((y, i) => y - predictCurve(model, series.temperatureK[i]!).mean);
@@ -164,6 +175,29 @@ function explained(of: BlockCase, how: Explanation, between: number): number | u
   );
   if (middle(away) > LEFT_OVER * middle(noise)) return undefined;
   return densityOf(of, model, series, between);
+}
+
+/**
+ * Log density of a re-read block that gives, at the same temperatures, the values of another source, to the digit or within
+ * the scatter between sources: the table was taken over without its basis, and no curve, which may follow neither, need be
+ * asked. Undefined where fewer than three rows or half of them do.
+ */
+function takenOverDensity({ fit, source, points, suspects }: BlockCase, series: Series): number | undefined {
+  if (series.lnValue.length < points.length) return undefined;
+  const densities = series.lnValue.flatMap((lnValue, i) => {
+    const rounding = Math.max(FINEST, relativeRounding(suspects.reportedValue(suspects.rows[i]!)));
+    const apart = [...fit.points.source].flatMap((other, j) => {
+      const away = Math.abs(fit.points.temperatureK[j]! - series.temperatureK[i]!);
+      return other === source || !(away < SAME_TEMPERATURE_K) ? [] : [Math.abs(fit.points.lnValue[j]! - lnValue)];
+    });
+    const nearest = Math.min(...apart);
+    const variance = 2 * (series.noiseVariance[i]! + fit.betweenSd ** 2);
+    if (nearest <= rounding) return [-Math.log(2 * rounding)];
+    return nearest ** 2 > 9 * variance ? [] : [-0.5 * (nearest ** 2 / variance + Math.log(2 * Math.PI * variance))];
+  });
+  if (densities.length < LEAST_TAKEN || densities.length < points.length / 2) return undefined;
+  const others = (points.length - densities.length) * STRAY_LOG_DENSITY;
+  return Math.log(TAKEN_SHARE) + others + densities.reduce((sum, density) => sum + density, 0);
 }
 
 /** The block re-read; rows that a shift leaves without a number count as stray. */

@@ -1,36 +1,14 @@
 import type { RobustFit } from "../../records/fits.ts";
-import {
-  curveSlope,
-  fitSources,
-  predictCurve,
-  type Series,
-  type SystemModel,
-  seriesDensity,
-  seriesLogDensity,
-} from "../system-model.ts";
 import { middle } from "../middle.ts";
+import { curveSlope, fitSources, predictCurve, seriesLogDensity } from "../system-model.ts";
 import type { Cause } from "./cause.ts";
 import { NAMED_ABOVE, type Verdict } from "./compete-point.ts";
 import { EVERY_CAUSE } from "./every-cause.ts";
 import { logSum } from "./log-sum.ts";
 import { type BlockSeries, growing, type Pattern } from "./pattern.ts";
-import { type Bent, bentSeries } from "./pattern-density.ts";
-
-/** A block some of whose points are off, as one series. */
-export interface SeriesCase {
-  readonly model: SystemModel;
-  readonly fit: RobustFit;
-  readonly source: number;
-  /** Points of the block at possible temperatures. */
-  readonly points: readonly number[];
-  /** Weight of each off point on its own: every cause of a single row and "none" together, a density of ln value. */
-  readonly offWeight: ReadonlyMap<number, number>;
-  readonly method: string;
-  /** Material threshold, ln value. */
-  readonly tolerance: number;
-  /** The solid may be another hydrate in one source than in the others: a salt in water. */
-  readonly mayHydrate: boolean;
-}
+import { bentSeries } from "./pattern-density.ts";
+import { tryReading } from "./reread-series.ts";
+import { logWeightOf, type SeriesCase, STRAY_Z, seriesOf, type Tried } from "./series-case.ts";
 
 /** What bends a series, and the points it accounts for. */
 export interface SeriesVerdict {
@@ -41,8 +19,6 @@ export interface SeriesVerdict {
   readonly moved: ReadonlyMap<number, { readonly by: number; readonly leftZ: number }>;
 }
 
-/** Rate of single faults among rows. Common practice. */
-const SINGLE_RATE = 0.03;
 /** Rate of series over which the stable solid changes where no other source would see it. Common practice. */
 const CHANGE_OF_SOLID_RATE = 0.1;
 /** Rate of series of a salt in water that are of another hydrate at one end than those of the other sources. */
@@ -51,19 +27,17 @@ const HYDRATE_RATE = 0.05;
 const [STRETCH_RATE, STRETCH_SD] = [0.01, 0.4];
 /** Part of the material threshold from which a point sides with those that are off. */
 const SIDES_SHARE = 0.4;
-/** An off point farther than this from the bent series, in standard deviations, is off for its own reason. */
-const STRAY_Z = 4;
 /** No value on a plateau is farther from it, in standard deviations. */
 const LEVEL_Z = 3;
 /** Another source bears witness where it has a kept point this near the outermost off point, K. */
 const WITNESS_K = 8;
 
-interface Tried {
-  readonly logWeight: number;
-  readonly explained: readonly number[];
-  /** The points that do not stray, in order, and the series of them under the pattern. */
-  readonly rest: readonly number[];
-  readonly bent: Bent;
+/** The likeliest way of a cause. */
+interface Winner {
+  readonly cause: Cause;
+  readonly detail: string;
+  readonly kind: Pattern["kind"] | "reading";
+  readonly tried: Tried;
 }
 
 /**
@@ -98,12 +72,21 @@ export function competeForSeries(of: SeriesCase): SeriesVerdict | undefined {
     const tried = tryPattern(of, order, off, pattern);
     if (tried !== undefined) total += STRETCH_RATE * pattern.weight * Math.exp(tried.logWeight - none);
   }
-  let best: { cause: Cause; pattern: Pattern; tried: Tried } | undefined;
+  let best: Winner | undefined;
   let bestSum = 0;
   for (const cause of EVERY_CAUSE) {
     let sum = 0;
     let top = 0;
     let winner: typeof best;
+    for (const reading of witnessed ? of.rereadings.filter((one) => one.cause === cause) : []) {
+      const tried = tryReading(of, order, off, reading);
+      if (tried === undefined) continue;
+      const weight = reading.rate * Math.exp(tried.logWeight - none);
+      sum += weight;
+      if (weight <= top) continue;
+      top = weight;
+      winner = { cause, detail: reading.detail, kind: "reading", tried };
+    }
     for (const pattern of cause.bending?.patterns({ temperatureK, lnValue, slope, curve, method: of.method }) ?? []) {
       const tried = witnessed || pattern.kind === "level" ? tryPattern(of, order, off, pattern) : undefined;
       if (tried === undefined) continue;
@@ -111,7 +94,7 @@ export function competeForSeries(of: SeriesCase): SeriesVerdict | undefined {
       sum += weight;
       if (weight <= top) continue;
       top = weight;
-      winner = { cause, pattern, tried };
+      winner = { cause, detail: pattern.detail, kind: pattern.kind, tried };
     }
     total += sum;
     if (sum <= bestSum) continue;
@@ -121,14 +104,14 @@ export function competeForSeries(of: SeriesCase): SeriesVerdict | undefined {
   const probability = bestSum / total;
   if (best === undefined || !(probability > NAMED_ABOVE)) return undefined;
   const { name, lookAt } = best.cause;
-  const verdict = { cause: name, detail: best.pattern.detail, lookAt, probability, proposedValue: undefined };
-  return { verdict, explained: new Set(best.tried.explained), moved: movedBy(of, best.pattern, best.tried) };
+  const verdict = { cause: name, detail: best.detail, lookAt, probability, proposedValue: undefined };
+  return { verdict, explained: new Set(best.tried.explained), moved: movedBy(of, best.kind, best.tried) };
 }
 
 /** What a bend does to each of its points. */
 function movedBy(
   { fit, model }: SeriesCase,
-  { kind }: Pattern,
+  kind: Winner["kind"],
   { rest, bent: { left, leftSd } }: Tried,
 ): SeriesVerdict["moved"] {
   const { temperatureK, lnValue } = seriesOf(fit, rest);
@@ -172,16 +155,6 @@ function logWeightOfOtherBent(of: SeriesCase, others: ReadonlySet<number>): numb
     ),
   );
   return ways.length === 0 ? Number.NEGATIVE_INFINITY : apart + logSum(ways);
-}
-
-/** ln weight of points as read, times that of single faults. */
-function logWeightOf(of: SeriesCase, sound: readonly number[], single: readonly number[]): number {
-  const { model, fit, offWeight } = of;
-  const weight = single.reduce((sum, point) => sum + Math.log(SINGLE_RATE * offWeight.get(point)!), 0);
-  if (sound.length === 0) return weight;
-  const { temperatureK, lnValue, noiseVariance } = seriesOf(fit, sound);
-  const deviations = lnValue.map((y, i) => y - predictCurve(model, temperatureK[i]!).mean);
-  return weight + seriesDensity(model, temperatureK, noiseVariance, fit.betweenSd ** 2)(deviations);
 }
 
 /** The block under a pattern; off points that stray from it count as single faults. Undefined where it explains none. */
@@ -262,12 +235,4 @@ function hasWitness({ points, kept }: RobustFit, others: ReadonlySet<number>, of
       (source, i) => others.has(source) && kept[i] === 1 && Math.abs(points.temperatureK[i]! - T) <= WITNESS_K,
     ),
   );
-}
-
-function seriesOf({ points, noiseSd }: RobustFit, of: readonly number[]): Series {
-  return {
-    temperatureK: of.map((point) => points.temperatureK[point]!),
-    lnValue: of.map((point) => points.lnValue[point]!),
-    noiseVariance: of.map((point) => noiseSd[point]! ** 2),
-  };
 }
