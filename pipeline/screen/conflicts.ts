@@ -3,8 +3,8 @@ import { textOf } from "../records/measurements.ts";
 import type { System } from "../records/systems.ts";
 import type { Suspects } from "./causes/cause.ts";
 import { reconciling } from "./conflict-causes.ts";
+import { SAME_TEMPERATURE_K } from "./same-temperature.ts";
 import { type ScreenInput, sourceName, thresholdOf } from "./screen-input.ts";
-import { SAME_TEMPERATURE_K } from "./shared-temperatures.ts";
 import { fitSources, predict, type SystemModel } from "./system-model.ts";
 import { counted, inCelsius, listed, offBy, threeDigits } from "./wording.ts";
 

@@ -1,7 +1,8 @@
 import type { Flag, RobustFit } from "../records/fits.ts";
 import { materialThreshold } from "./material-threshold.ts";
+import { SAME_TEMPERATURE_K } from "./same-temperature.ts";
 import { type ScreenInput, sourceName } from "./screen-input.ts";
-import { AGREE_SHARE, comparablePoints, SAME_TEMPERATURE_K } from "./shared-temperatures.ts";
+import { AGREE_SHARE, comparablePoints } from "./shared-temperatures.ts";
 import { inCelsius, offBy, threeDigits } from "./wording.ts";
 
 /** Shared temperatures from which two sources show how well they agree, and how well that must be, ln value. */

@@ -2,11 +2,10 @@ import type { Flag, RobustFit } from "../records/fits.ts";
 import { RepeatKind } from "../records/repeats.ts";
 import { isOutsideLiquid } from "./liquid-range.ts";
 import { middle } from "./middle.ts";
+import { SAME_TEMPERATURE_K } from "./same-temperature.ts";
 import { type ScreenInput, sourceName, thresholdOf } from "./screen-input.ts";
 import { counted, inCelsius, listed, offBy } from "./wording.ts";
 
-/** Temperatures that agree to this (K) are the same. */
-export const SAME_TEMPERATURE_K = 0.011;
 /** A value is off the others beyond this many standard deviations of the difference. */
 const OFF_Z = 4;
 /** Others agree where they lie within this share of the distance to the value that is off. */

@@ -1,5 +1,7 @@
 import { describe, expect, test } from "vitest";
-import { type More, type Reading, screened, series, thousandX } from "./support.ts";
+import { bentRows } from "../../pipeline/screen/bent-rows.ts";
+import type { OffPoint } from "../../pipeline/screen/point-screen.ts";
+import { inputOf, type More, type Reading, type Sources, screened, series, thousandX } from "./support.ts";
 
 const RANGE = [10, 17, 24, 31, 38, 45, 52];
 /** Two good sources over the whole range, 2 % apart. */
@@ -125,21 +127,39 @@ describe("two sources that part at one end", () => {
 });
 
 describe("a bent series held against two others", () => {
-  test("has only those rows flagged that the bend moves, not the sound end of its own", () => {
-    const flags = screened([{ a: bent((t) => Math.max(0, t - 15) * 0.016), ...others() }]);
-    const rows = flags.map(({ row }) => row!).sort((a, b) => a - b);
-    expect(rows[0]).toBeGreaterThanOrEqual(2);
-    expect(rows).toContain(6);
-    expect(new Set(flags.map(({ suspectedCause }) => suspectedCause))).toEqual(new Set(["solvent lost"]));
+  const off = (point: number): OffPoint => ({
+    system: 0,
+    point,
+    z: 5,
+    threshold: 0.1,
+    impossible: false,
+    unsure: false,
+  });
+  const verdict = {
+    cause: "solvent lost",
+    detail: "",
+    probability: 0.9,
+    proposedValue: undefined,
+    lookAt: "",
+  } as const;
+  const moved = new Map([
+    [0, { by: 0.01, leftZ: 1 }],
+    [4, { by: 0.2, leftZ: 5 }],
+    [5, { by: 0.2, leftZ: 0.5 }],
+    [6, { by: 0.4, leftZ: 0.5 }],
+  ]);
+  const rows = (sources: Sources) =>
+    bentRows(inputOf([sources]), [off(0), off(6)], { verdict, explained: new Set([6]), moved });
+
+  test("has those rows flagged that the bend moves materially, not the sound end of its own", () => {
+    const { added, cleared } = rows({ a: series(RANGE), ...others() });
+    expect(added.map(({ point, bentBy }) => [point, bentBy])).toEqual([[5, 0.2]]);
+    expect([...cleared]).toEqual([0]);
   });
 
-  test("that one mistaken basis straightens had that, and lost nothing", () => {
-    // Solute per mass of solution written as mole fraction: equal at high dilution but for a factor, bent above.
-    const perMass = RANGE.map((t): Reading => {
-      const x = thousandX(t) / 1000;
-      return [t, Number(((1000 * 3 * x) / (3 * x + 1 - x)).toPrecision(4))];
-    });
-    const flags = screened([{ a: perMass, ...others() }]);
-    expect(flags.map(({ suspectedCause }) => suspectedCause)).toEqual(["no simple cause"]);
+  test("stays as it was found where a single other source cannot say where the curve lies", () => {
+    const { added, cleared } = rows({ a: series(RANGE), b: others().b });
+    expect(added).toEqual([]);
+    expect(cleared.size).toBe(0);
   });
 });
