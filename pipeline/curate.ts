@@ -5,6 +5,7 @@ import { rowResults } from "./fit/row-results.ts";
 import { gradeEdition } from "./grade/edition-grades.ts";
 import { groupIntoSystems } from "./group/systems.ts";
 import { compositionNotices } from "./identify/composition-notices.ts";
+import { compositionLiquid } from "./identify/mixture-fractions.ts";
 import { identityNotices } from "./identify/notices.ts";
 import { createIdentityRegister, type IdentityRegister, identifySource } from "./identify/source.ts";
 import { indexSubstances, structureReader } from "./identify/substance-tables.ts";
@@ -82,7 +83,11 @@ export async function curate(
   };
   const first = fitEdition(table, systems, context);
   const { scales } = first;
-  const mixtures = fitMixtures(table, systems, robustOf(first.fits), scales);
+  const liquidOf = (name: string) => {
+    const solvent = register.solvents.get(name);
+    return solvent && compositionLiquid(solvent);
+  };
+  const mixtures = fitMixtures(table, systems, robustOf(first.fits), scales, liquidOf);
 
   onStage("screen");
   const flags = [
@@ -144,7 +149,7 @@ export async function curate(
     systems,
     fits,
     scales,
-    mixtures: touched.length === 0 ? mixtures : fitMixtures(decided, systems, robustOf(fits), scales),
+    mixtures: touched.length === 0 ? mixtures : fitMixtures(decided, systems, robustOf(fits), scales, liquidOf),
     flags,
     rulings,
     refused,

@@ -1,3 +1,4 @@
+import type { CompositionLiquid } from "../bases/compositions.ts";
 import {
   cornersOf,
   fractionLimits,
@@ -10,6 +11,7 @@ import type { MeasurementTable } from "../records/measurements.ts";
 import type { MixtureModel, Mixtures, NoMixtureModel } from "../records/mixtures.ts";
 import type { System } from "../records/systems.ts";
 import { sameTemperatureK } from "./kept-points.ts";
+import type { BinaryLiquids } from "./mixture-exchange.ts";
 import { allMemberSums } from "./mixture-information.ts";
 import { keepMixture } from "./mixture-keep.ts";
 import { differenceHalfWidth, mixtureLimits } from "./mixture-limits.ts";
@@ -34,12 +36,14 @@ export const fewestTemperatures = 3;
  * Exact compositions of the rows are used, not those of the systems. What stays out of the curves of the systems stays
  * out of the surface; what contradicts the other compositions is left out besides ({@link keepMixture}).
  * @param robust robust screening fits, by position of the system
+ * @param liquidOf molar mass and density of a solvent by its name, where known
  */
 export function fitMixtures(
   table: MeasurementTable,
   systems: readonly System[],
   robust: readonly RobustFit[],
   scales: PooledScales,
+  liquidOf: (name: string) => CompositionLiquid | undefined = () => undefined,
 ): Mixtures {
   const models: MixtureModel[] = [];
   const without: NoMixtureModel[] = [];
@@ -48,6 +52,7 @@ export function fitMixtures(
       group,
       mixturePoints(table, group, (system) => robust[system] as RobustFit),
       scales,
+      liquidsOf(group, liquidOf),
     );
     if ("reason" in outcome) without.push(outcome);
     else models.push(outcome);
@@ -55,11 +60,20 @@ export function fitMixtures(
   return { models, without };
 }
 
+function liquidsOf(
+  { solvents: [first, second] }: MixtureGroup,
+  liquidOf: (name: string) => CompositionLiquid | undefined,
+): BinaryLiquids | undefined {
+  const [one, two] = [liquidOf(first), liquidOf(second)];
+  return one === undefined || two === undefined ? undefined : [one, two];
+}
+
 /** The model of one mixture, or the reason why there is none. */
 export function mixtureModel(
   group: MixtureGroup,
   points: MixturePoints,
   pooled: PooledScales,
+  liquids?: BinaryLiquids,
 ): MixtureModel | NoMixtureModel {
   const none = (reason: string): NoMixtureModel => ({
     ...{ id: group.id, solvents: group.solvents, reason },
@@ -91,7 +105,7 @@ export function mixtureModel(
     newSourceVariance: newSourceVariance(points, used, pooled),
   };
   const temperatureRangeK = spanOf(pick(points.temperatureK, used));
-  const members = mixtureMembers({ group, points, kept, sums, published, centreK, scales: estimated });
+  const members = mixtureMembers({ group, points, kept, sums, published, centreK, scales: estimated, liquids });
   const maximumAt = (T: number) =>
     innerMaximum(range, T, published.value, (w, other, t) => differenceHalfWidth(basis, w, other, t));
   const model = {

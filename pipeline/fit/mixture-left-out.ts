@@ -1,13 +1,14 @@
 import { quadraticForm } from "../curves/coefficient-transformation.ts";
 import { isInside, type MixtureRange, mixtureRange } from "../curves/mixture-range.ts";
 import type { LeftOutPrediction } from "../records/mixtures.ts";
+import type { Exchange } from "./mixture-exchange.ts";
 import type { MemberSums } from "./mixture-information.ts";
 import type { MixturePoints } from "./mixture-points.ts";
 import { fitMembers, type MixtureRegression, type MixtureScales, rowAt, rowValue } from "./mixture-regression.ts";
 import { FLEXIBLE_SURFACE } from "./mixture-surfaces.ts";
 
-/** What the other systems say of one, each of its points taken at its own composition or at another. */
-export type LeftOutJudge = (fractionOf?: (point: number) => number) => LeftOutPrediction | undefined;
+/** What the other systems say of one, each of its points taken at its own composition or as another reading has it. */
+export type LeftOutJudge = (reading?: Pick<Exchange, "fraction" | "shift">) => LeftOutPrediction | undefined;
 
 /**
  * What the other systems of a mixture say of one: the flexible surface fitted without it.
@@ -31,8 +32,9 @@ export function leftOutJudge(
   if (fit === undefined) return () => undefined;
   const inside = where === "anywhere" ? () => true : insideOf(rangeOfOthers(points, use, member));
   const degreesOfFreedom = judgingDegreesOfFreedom(sums.filter(({ n }, m) => n > 0 && m !== member).length);
-  return (fractionOf = (i) => points.fraction[i]!) => {
-    const said = predictionOf(points, use, member, fit, scales, inside, fractionOf);
+  const asWritten = { fraction: (i: number) => points.fraction[i]!, shift: () => 0 };
+  return (reading = asWritten) => {
+    const said = predictionOf(points, use, member, fit, scales, inside, reading);
     return said && { ...said, degreesOfFreedom };
   };
 }
@@ -44,7 +46,7 @@ function predictionOf(
   fit: MixtureRegression,
   scales: MixtureScales,
   inside: (fraction: number, temperatureK: number) => boolean,
-  fractionOf: (point: number) => number,
+  { fraction: fractionOf, shift }: Pick<Exchange, "fraction" | "shift">,
 ): Omit<LeftOutPrediction, "degreesOfFreedom"> | undefined {
   const own = Int32Array.from(
     { length: points.start[member + 1]! - points.start[member]! },
@@ -66,7 +68,7 @@ function predictionOf(
     sd[k] = Math.sqrt(shared + scales.variance[i]!);
     if (!counts(i)) return;
     for (let j = 0; j < row.length; j++) mean.row[j]! += row[j]!;
-    mean.deviation += points.lnValue[i]! - predicted[k]!;
+    mean.deviation += points.lnValue[i]! + shift(i) - predicted[k]!;
     mean.noise += scales.variance[i]!;
     mean.n++;
   });

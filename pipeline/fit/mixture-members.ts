@@ -1,4 +1,5 @@
 import type { MixtureMember } from "../records/mixtures.ts";
+import { type BinaryLiquids, exchanges } from "./mixture-exchange.ts";
 import type { MemberSums } from "./mixture-information.ts";
 import type { KeptMixture } from "./mixture-keep.ts";
 import { leftOutJudge } from "./mixture-left-out.ts";
@@ -17,6 +18,7 @@ export interface FittedMixture {
   readonly published: PublishedMixture;
   readonly centreK: number;
   readonly scales: MixtureScales;
+  readonly liquids: BinaryLiquids | undefined;
 }
 
 /** Compositions nearer to half and half than this are the same either way round, mass fraction. */
@@ -28,7 +30,7 @@ export function mixtureMembers(mixture: FittedMixture): MixtureMember[] {
 }
 
 function memberOf(mixture: FittedMixture, m: number): MixtureMember {
-  const { group, points, kept, sums, published, centreK, scales } = mixture;
+  const { group, points, kept, sums, published, centreK, scales, liquids } = mixture;
   const own = Int32Array.from(
     { length: points.start[m + 1]! - points.start[m]! },
     (_, k) => (points.start[m] as number) + k,
@@ -41,12 +43,15 @@ function memberOf(mixture: FittedMixture, m: number): MixtureMember {
   const { system, fraction: ofKey } = group.members[m]!;
   const mean = (values: readonly number[]) => values.reduce((sum, value) => sum + value, 0) / values.length;
   const fractions = Float64Array.from(own, (i) => points.fraction[i]!);
-  const fraction = own.length > 0 ? meanFraction(fractions) : ofKey;
+  const fraction = own.length > 0 ? meanFraction(own, (i) => points.fraction[i]!) : ofKey;
   const whyNot = used.length > 0 ? undefined : reasonWhyNot(mixture, m, own);
   const judge = leftOutJudge(points, kept.use, sums, m, centreK, scales);
   const leftOut = judge();
   const turned = fraction > 0 && fraction < 1 && Math.abs(fraction - 0.5) > NEARLY_HALF;
-  const reversed = turned ? judge((i) => 1 - points.fraction[i]!) : undefined;
+  const reversed = (turned ? exchanges(points, liquids) : []).flatMap((exchange) => {
+    const said = judge(exchange);
+    return said === undefined ? [] : [{ ...said, of: exchange.of, fraction: meanFraction(own, exchange.fraction) }];
+  });
   return {
     ...{ system: system.index, fraction, fractions, nUsed: used.length },
     temperatureRangeK: rangeOf(Array.from(used, (i) => points.temperatureK[i]!)),
@@ -55,12 +60,13 @@ function memberOf(mixture: FittedMixture, m: number): MixtureMember {
     meanDeviation: mean(residuals),
     ...(whyNot === undefined ? {} : { whyNot }),
     ...(leftOut === undefined ? {} : { leftOut }),
-    ...(reversed === undefined ? {} : { reversed }),
+    reversed,
   };
 }
 
 /** Mean of the compositions, which equal ones must not miss by rounding. */
-function meanFraction(fractions: Float64Array): number {
+function meanFraction(own: Int32Array, fractionOf: (point: number) => number): number {
+  const fractions = Array.from(own, fractionOf);
   const [low, high] = [fractions.reduce((a, b) => Math.min(a, b)), fractions.reduce((a, b) => Math.max(a, b))];
   return Math.min(high, Math.max(low, fractions.reduce((sum, w) => sum + w, 0) / fractions.length));
 }

@@ -1,5 +1,6 @@
+import { parseUnit } from "../bases/units.ts";
 import type { RobustFit } from "../records/fits.ts";
-import type { MeasurementTable } from "../records/measurements.ts";
+import { type MeasurementTable, textOf } from "../records/measurements.ts";
 import type { MixtureGroup } from "./mixture-systems.ts";
 
 /** The points of all systems of a mixture, one after the other: parallel arrays. */
@@ -15,6 +16,8 @@ export interface MixturePoints {
   readonly fractionU: Float64Array;
   readonly temperatureK: Float64Array;
   readonly lnValue: Float64Array;
+  /** 1 = the mole fraction stays when the composition of the solvent is read otherwise: the value was reported as one. */
+  readonly keepsMoleFraction: Uint8Array;
   /** Scatter within its source that the screening fit assumed, SD of ln value. */
   readonly noiseSd: Float64Array;
   /** Source of each point, numbered from 0 in order of first point. */
@@ -46,14 +49,15 @@ export function mixturePoints(
     ...{ n, sources, members: fits.length, member: new Int32Array(n), point: new Int32Array(n) },
     ...{ fraction: new Float64Array(n), fractionU: new Float64Array(n), temperatureK: new Float64Array(n) },
     ...{ lnValue: new Float64Array(n), noiseSd: new Float64Array(n) },
-    ...{ source: new Int32Array(n), candidate: new Uint8Array(n) },
+    ...{ source: new Int32Array(n), candidate: new Uint8Array(n), keepsMoleFraction: new Uint8Array(n) },
   };
+  const perAmount = new Map<number, boolean>();
   let at = 0;
   fits.forEach(({ points }, m) => {
     all.start[m + 1] = all.start[m]! + points.n;
   });
   fits.forEach(({ points, kept, noiseSd, agreement }, m) => {
-    const key = group.members[m]!.fraction;
+    const { system, fraction: key } = group.members[m]!;
     for (let i = 0; i < points.n; i++, at++) {
       const row = points.row[i]!;
       const exact = table.firstFraction[row]!;
@@ -65,11 +69,23 @@ export function mixturePoints(
       all.temperatureK[at] = points.temperatureK[i]!;
       all.lnValue[at] = points.lnValue[i]!;
       all.noiseSd[at] = noiseSd[i]! > 0 && noiseSd[i]! < 10 ? noiseSd[i]! : UNKNOWN_NOISE;
+      all.keepsMoleFraction[at] =
+        system.fitBasis === "ln r" || isPerAmount(table, table.reportedUnit[row]!, perAmount) ? 1 : 0;
       all.source[at] = numberOf(sources, points.source[i]!);
       all.candidate[at] = kept[i] === 1 && agreement !== "conflict" && usable(all, at) ? 1 : 0;
     }
   });
   return all;
+}
+
+/** True for a unit that counts moles of solvent; `known` keeps the answers by code of the unit. */
+function isPerAmount(table: MeasurementTable, code: number, known: Map<number, boolean>): boolean {
+  const before = known.get(code);
+  if (before !== undefined) return before;
+  const parsed = parseUnit(textOf(table, code));
+  const answer = parsed.kind === "unit" && parsed.unit.basis.startsWith("mole ");
+  known.set(code, answer);
+  return answer;
 }
 
 /** Temperatures of liquid solvents, K: common practice. One far outside would decide every slope over temperature. */

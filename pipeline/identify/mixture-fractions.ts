@@ -76,12 +76,12 @@ export function sharesBesideSolute(
   return place === 0 ? shares : [...shares].reverse();
 }
 
-/** Molar mass and density at 20 °C of the components; NaN where unknown. */
-function liquidsOf(components: readonly Substance[]): readonly CompositionLiquid[] {
-  return components.map((substance) => ({
+/** Molar mass (g/mol) and density at 20 °C (kg/m3) of a solvent; NaN where unknown. */
+export function compositionLiquid(substance: Substance): CompositionLiquid {
+  return {
     molarMass: substance.molarMass ?? Number.NaN,
     density20C: liquidDensity(substance, MEASURED_OUT_K)?.value ?? Number.NaN,
-  }));
+  };
 }
 
 const isEthanolAndWater = (components: readonly Substance[]): boolean =>
@@ -105,7 +105,7 @@ export function massFractionsOf(
     const w = massFractions(basis, ordered, [], ALCOHOLOMETRY);
     return ethanolFirst ? w : [...w].reverse();
   }
-  const liquids = liquidsOf(components);
+  const liquids = components.map(compositionLiquid);
   const w = massFractions(basis, shares, liquids, ALCOHOLOMETRY);
   if (!w.some(Number.isNaN)) return w;
   const wanting = basis === "mole" ? "molarMass" : "density20C";

@@ -110,8 +110,16 @@ export interface MixtureMember {
   readonly meanDeviation: number;
   /** What the other systems say of it. */
   readonly leftOut?: LeftOutPrediction;
-  /** The same with the two solvents exchanged (w1 read as w2), for a composition written the wrong way round. */
-  readonly reversed?: LeftOutPrediction;
+  /** The same with the two solvents exchanged, for a composition written the wrong way round: one entry a way of it. */
+  readonly reversed: readonly ExchangedPrediction[];
+}
+
+/** What the other systems say of one whose two solvents are read exchanged. */
+export interface ExchangedPrediction extends LeftOutPrediction {
+  /** What was exchanged: parts by mass, or volumes before mixing. */
+  readonly of: "masses" | "volumes";
+  /** Mass fraction of the first solvent, so read: mean over its points. */
+  readonly fraction: number;
 }
 
 /** Why the systems of a solute in a binary solvent have no common model. */

@@ -45,7 +45,8 @@ function blockFlag(input: ScreenInput, block: OffBlock, verdict: Verdict): Flag 
 
 /** The most likely cause of an off block, its ways summed, given that the block is not sound as read. */
 function verdictOf({ readings, posterior }: OffBlock): Verdict {
-  const off = 1 - (posterior[readings.findIndex(({ key }) => key === AS_READ)] ?? 0);
+  // Added up, not taken from 1: where the block is hardly off, rounding would make a probability above 1.
+  const off = readings.reduce((sum, { key }, r) => (key === AS_READ ? sum : sum + posterior[r]!), 0);
   const sums = new Map<string, number>();
   for (const [r, { cause }] of readings.entries())
     if (cause !== undefined) sums.set(cause, (sums.get(cause) ?? 0) + posterior[r]! / off);
@@ -61,7 +62,7 @@ function verdictOf({ readings, posterior }: OffBlock): Verdict {
     // Shares of one whole, summed: rounding may take them past 1.
     best = { cause, detail, lookAt, probability: Math.min(1, sum), proposedValue: undefined };
   }
-  return decided(best, bestSum);
+  return decided(best, Math.min(1, bestSum));
 }
 
 /**

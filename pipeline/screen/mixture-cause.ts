@@ -31,23 +31,27 @@ export function compositionCause(
   function left(power: number): number {
     return Math.abs(meanDeviation - power * Math.LN10);
   }
-  const mixUpWeight = reversed === undefined ? 0 : MIX_UP_PRIOR * density(reversed.meanDeviation, reversed.meanSd);
+  const weights = reversed.map(
+    ({ meanDeviation: left, meanSd: sd }) => (MIX_UP_PRIOR / reversed.length) * density(left, sd),
+  );
+  const mixUpWeight = weights.reduce((sum, weight) => sum + weight, 0);
+  const likeliest = reversed[weights.indexOf(Math.max(...weights))];
   const tenWeight = TEN_PRIOR * density(meanDeviation - ten * Math.LN10, meanSd);
   const none = (1 - MIX_UP_PRIOR - TEN_PRIOR) * density(meanDeviation, UNEXPLAINED_SD);
   const total = mixUpWeight + tenWeight + none;
   if (
-    reversed !== undefined &&
+    likeliest !== undefined &&
     mixUpWeight > NAMED_FROM * total &&
-    Math.abs(reversed.meanDeviation) < WITHIN * reversed.meanSd
+    Math.abs(likeliest.meanDeviation) < WITHIN * likeliest.meanSd
   ) {
-    const turned = `${percent(1 - fraction)}:${percent(fraction)} w/w`;
+    const turned = `${percent(likeliest.fraction)}:${percent(1 - likeliest.fraction)} w/w`;
     return {
       named: {
         suspectedCause: "composition mix-up",
-        causeDetail: `the two solvents exchanged: ${turned} instead of ${percent(fraction)}:${percent(1 - fraction)} w/w`,
+        causeDetail: `the ${likeliest.of} of the two solvents exchanged: ${turned} instead of ${percent(fraction)}:${percent(1 - fraction)} w/w`,
         causeProbability: mixUpWeight / total,
       },
-      words: `read as ${turned} it lies ${offBy(reversed.meanDeviation)} them`,
+      words: `read as ${turned} it lies ${offBy(likeliest.meanDeviation)} them`,
       lookAt: "Look at the proportion of the solvents: which of the two it counts.",
     };
   }

@@ -66,7 +66,7 @@ test("A proportion written the wrong way round is named as such", () => {
   const flag = only(judged(readings).flags);
   expect(flag.suspectedCause).toBe("composition mix-up");
   expect(flag.severity).toBe("blocking");
-  expect(flag.causeDetail).toBe("the two solvents exchanged: 80:20 w/w instead of 20:80 w/w");
+  expect(flag.causeDetail).toBe("the masses of the two solvents exchanged: 80:20 w/w instead of 20:80 w/w");
   expect(flag.causeProbability).toBeGreaterThan(0.9);
   expect(flag.evidence).toContain("read as 80:20 w/w it lies");
 });

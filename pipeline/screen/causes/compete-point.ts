@@ -33,7 +33,7 @@ export const LOOK_AGAIN =
   "Look the value and its temperature up in the notebook or the original table; if they stand, measure again.";
 
 /** Prior probability of a random error, and how its size in ln value is spread. Common practice. */
-const NONE_PRIOR = 0.9;
+const NONE_PRIOR = 0.85;
 const [NONE_LEAST, NONE_MOST] = [0.14, 2];
 const NONE_WIDEST = 10;
 /** Share of random errors of any size at all. */
