@@ -2,6 +2,11 @@ import { fewestTemperatures, largestUsualC, smallestSpanK } from "../curves/modi
 import type { Candidate } from "./candidate.ts";
 import type { FittedModels } from "./system-models.ts";
 
+/** A temperature as notices tell it, for people read °C: `32.4 °C`. */
+export function inCelsius(temperatureK: number): string {
+  return `${(temperatureK - 273.15).toFixed(1)} °C`;
+}
+
 /**
  * What a reader of a curve should know: how few points bear it, why no richer model was tried, an unusual heat
  * capacity, and which between-source scatter stands behind the limits. One sentence each, with its figures.
@@ -56,7 +61,7 @@ function aboutHeatCapacity(chosen: Candidate): string[] {
 function aboutBreak({ points, breakTemperatureK }: FittedModels): string[] {
   if (!(breakTemperatureK > points.lowK && breakTemperatureK < points.highK)) return [];
   return [
-    `the points seem to break at ${breakTemperatureK.toFixed(1)} K, as where the solid changes: one smooth curve spans both sides`,
+    `the points seem to break at ${inCelsius(breakTemperatureK)}, as where the solid changes: one smooth curve spans both sides`,
   ];
 }
 

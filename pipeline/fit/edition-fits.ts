@@ -4,6 +4,7 @@ import type { Settings } from "../records/settings.ts";
 import { type System, type SystemPoints, systemPoints } from "../records/systems.ts";
 import { seedOf } from "./break-bootstrap.ts";
 import { kinkOf } from "./break-slopes.ts";
+import { inCelsius } from "./curve-notices.ts";
 import { isCurve, publishedCurve } from "./published-curve.ts";
 import { type PooledFit, robustFits } from "./robust-fit.ts";
 import { twoBranchCurves } from "./two-branch-curves.ts";
@@ -130,7 +131,7 @@ function fitSystems(
 /** The one curve of a system that seems to break, where two branches could not be drawn: said in its notices. */
 function withSuspectedBreak(curve: Curve, found: SearchedBreak | undefined): Curve {
   if (found?.sense !== "falls") return curve;
-  const notice = `the points break near ${found.breakK.toFixed(1)} K as where the solid changes (p = ${found.probability.toFixed(3)} under one smooth curve), but curves through the points on either side do not meet: one curve spans both, and may follow neither`;
+  const notice = `the points break near ${inCelsius(found.breakK)} as where the solid changes (p = ${found.probability.toFixed(3)} under one smooth curve), but curves through the points on either side do not meet: one curve spans both, and may follow neither`;
   return { ...curve, notices: [notice, ...curve.notices] };
 }
 

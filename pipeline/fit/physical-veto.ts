@@ -1,5 +1,6 @@
 import type { FitBasis } from "../records/systems.ts";
 import type { Candidate } from "./candidate.ts";
+import { inCelsius } from "./curve-notices.ts";
 import type { KeptPoints } from "./kept-points.ts";
 
 /** A turn is believed where the rise beside it is at least this many standard errors on both sides. */
@@ -31,7 +32,7 @@ export function physicalVeto(candidate: Candidate, points: KeptPoints, basis: Fi
   });
   const doubted = rises.filter(({ believed }) => !believed).sort((a, b) => a.rise - b.rise)[0];
   if (doubted !== undefined)
-    return `turns at ${turnK.toFixed(1)} K inside the data, a change of ${(100 * doubted.rise).toFixed(1)} % that the scatter explains`;
+    return `turns at ${inCelsius(turnK)} inside the data, a change of ${(100 * doubted.rise).toFixed(1)} % that the scatter explains`;
   return undefined;
 }
 

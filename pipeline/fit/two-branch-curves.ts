@@ -3,6 +3,7 @@ import type { Curve, Transition } from "../records/fits.ts";
 import { breakSide } from "./break-carried.ts";
 import { type BreakProfile, breakProfile } from "./break-profile.ts";
 import type { BreakPoints } from "./break-scan.ts";
+import { inCelsius } from "./curve-notices.ts";
 import { isCurve, publishedCurve } from "./published-curve.ts";
 import type { CurveContext, CurveSubject } from "./system-models.ts";
 import { breakPoints, findBreak } from "./two-branch-fit.ts";
@@ -118,7 +119,7 @@ function withRange(curve: Curve, range: readonly [number, number]): Curve {
 }
 
 function aboutTransition({ temperatureK, low, high, probability }: Transition, branch: 1 | 2, apart: number): string[] {
-  const where = `the solid changes at ${temperatureK.toFixed(1)} K (95 % limits ${low.toFixed(1)} to ${high.toFixed(1)} K; p = ${probability.toFixed(3)} under one smooth curve): this is the branch ${branch === 1 ? "below" : "above"} it`;
+  const where = `the solid changes at ${inCelsius(temperatureK)} (95 % limits ${inCelsius(low)} to ${inCelsius(high)}; p = ${probability.toFixed(3)} under one smooth curve): this is the branch ${branch === 1 ? "below" : "above"} it`;
   return apart > 0.001 ? [where, `the branches miss each other there by ${(100 * apart).toFixed(1)} %`] : [where];
 }
 
@@ -128,6 +129,6 @@ function aboutSecond({ robust, breakK }: SearchedBreak, curve: Curve, branch: 1 
   const second = findBreak(breakPoints(robust, own), seed);
   if (second === undefined || second.sense === "rises") return [];
   return [
-    `the points of this branch seem to break again near ${second.breakK.toFixed(1)} K (p = ${second.probability.toFixed(3)}): one ${curve.model} curve spans both sides`,
+    `the points of this branch seem to break again near ${inCelsius(second.breakK)} (p = ${second.probability.toFixed(3)}): one ${curve.model} curve spans both sides`,
   ];
 }

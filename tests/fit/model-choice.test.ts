@@ -67,7 +67,7 @@ test("A turn inside the data is passed over where the scatter explains it and be
     slope: (T) => -2e-5 * (T - 320),
     standardErrorOfRise: () => 0.01,
   };
-  expect(physicalVeto(turning, range, "ln x")).toMatch(/turns at 320.0 K inside the data, a change of 0.1 %/);
+  expect(physicalVeto(turning, range, "ln x")).toMatch(/turns at 46.8 °C inside the data, a change of 0.1 %/);
   expect(physicalVeto({ ...turning, standardErrorOfRise: () => 0.0004 }, range, "ln x")).toBeUndefined();
 });
 
