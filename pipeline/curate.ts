@@ -1,11 +1,11 @@
 import { type FitContext, fitAgain, fitEdition } from "./fit/edition-fits.ts";
 import { idealComparison } from "./fit/ideal-comparison.ts";
-import { fitMixtures } from "./fit/mixture-fit.ts";
+import { fitMixtures } from "./fit/mixtures/mixture-fit.ts";
 import { rowResults } from "./fit/row-results.ts";
 import { gradeEdition } from "./grade/edition-grades.ts";
 import { groupIntoSystems } from "./group/systems.ts";
-import { compositionNotices } from "./identify/composition-notices.ts";
-import { compositionLiquid } from "./identify/mixture-fractions.ts";
+import { compositionNotices } from "./identify/mixtures/composition-notices.ts";
+import { compositionLiquid } from "./identify/mixtures/mixture-fractions.ts";
 import { identityNotices } from "./identify/notices.ts";
 import { createIdentityRegister, type IdentityRegister, identifySource } from "./identify/source.ts";
 import { indexSubstances, structureReader } from "./identify/substance-tables.ts";

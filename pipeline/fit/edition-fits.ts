@@ -2,16 +2,16 @@ import type { Curve, PooledScales, RobustFit, SystemFit } from "../records/fits.
 import type { MeasurementTable } from "../records/measurements.ts";
 import type { Settings } from "../records/settings.ts";
 import { type System, type SystemPoints, systemPoints } from "../records/systems.ts";
-import { seedOf } from "./break-bootstrap.ts";
-import { kinkOf } from "./break-slopes.ts";
+import { seedOf } from "./branches/break-bootstrap.ts";
+import { kinkOf } from "./branches/break-slopes.ts";
+import { twoBranchCurves } from "./branches/two-branch-curves.ts";
+import { breakPoints } from "./branches/two-branch-fit.ts";
+import { type SearchedBreak, searchBreaks } from "./branches/two-branch-search.ts";
 import { inCelsius } from "./curve-notices.ts";
 import { isCurve, publishedCurve } from "./published-curve.ts";
-import { type PooledFit, robustFits } from "./robust-fit.ts";
-import { twoBranchCurves } from "./two-branch-curves.ts";
-import { breakPoints } from "./two-branch-fit.ts";
-import { type SearchedBreak, searchBreaks } from "./two-branch-search.ts";
-import { withStandings } from "./with-standings.ts";
-import { writtenValues } from "./written-values.ts";
+import { writtenValues } from "./repeats/written-values.ts";
+import { type PooledFit, robustFits } from "./robust/robust-fit.ts";
+import { withStandings } from "./sources/with-standings.ts";
 
 /** What fitting an edition needs to know besides its rows. */
 export interface FitContext {

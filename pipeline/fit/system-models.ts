@@ -12,11 +12,11 @@ import type { System } from "../records/systems.ts";
 import { type Candidate, type CommonFit, fitLinear, type LinearFit, linearCandidate } from "./candidate.ts";
 import type { FitWorkspace } from "./fit-workspace.ts";
 import type { KeptPoints } from "./kept-points.ts";
-import { lackOfCurvature } from "./lack-of-curvature.ts";
 import { fitLambdaH } from "./lambda-h-fit.ts";
 import { type Choice, chooseModel } from "./model-choice.ts";
 import { physicalVeto } from "./physical-veto.ts";
-import { ONE_TEMPERATURE_SPAN_K } from "./robust-prepare.ts";
+import { lackOfCurvature } from "./robust/lack-of-curvature.ts";
+import { ONE_TEMPERATURE_SPAN_K } from "./robust/robust-prepare.ts";
 import {
   type FitWeighting,
   firstFit,

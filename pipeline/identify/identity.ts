@@ -4,12 +4,12 @@ import type { CellFault } from "../records/cells.ts";
 import type { ReadingSolvent } from "../records/identified.ts";
 import type { DecimalMark } from "../records/number-text.ts";
 import type { Identity } from "../records/systems.ts";
-import { readBasisCell } from "./composition-words.ts";
-import { type RowValue, soluteFractionOf } from "./row-value.ts";
+import { readBasisCell } from "./mixtures/composition-words.ts";
+import { type RowValue, soluteFractionOf } from "./mixtures/row-value.ts";
+import { changesLiquor, solventWithGuest } from "./mixtures/solvate-liquor.ts";
 import { type ResolvedForm, resolveForm } from "./solid-form.ts";
 import { type KnownSolute, resolveSolute } from "./solute.ts";
 import type { ReadStructure } from "./solute-cells.ts";
-import { changesLiquor, solventWithGuest } from "./solvate-liquor.ts";
 import { resolveSolvent } from "./solvent.ts";
 import { stereoBeyondName } from "./stereochemistry.ts";
 

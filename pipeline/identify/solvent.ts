@@ -4,9 +4,9 @@ import type { CellFault } from "../records/cells.ts";
 import type { MadeUp, ReadingSolvent, SolventPart } from "../records/identified.ts";
 import { parseNumber } from "../records/number-text.ts";
 import type { Identity } from "../records/systems.ts";
-import { type CompositionCells, resolveMixture } from "./mixture.ts";
-import { type NamedMixture, readMixtureCell, unknownSolvent } from "./mixture-cell.ts";
-import { listedSubstance } from "./mixture-names.ts";
+import { type CompositionCells, resolveMixture } from "./mixtures/mixture.ts";
+import { type NamedMixture, readMixtureCell, unknownSolvent } from "./mixtures/mixture-cell.ts";
+import { listedSubstance } from "./mixtures/mixture-names.ts";
 
 /** Everything a row says of its solvent. */
 export interface SolventCells extends CompositionCells {

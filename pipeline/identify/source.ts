@@ -4,8 +4,8 @@ import type { Identified, IdentifiedSource } from "../records/identified.ts";
 import type { Reading, SourceTable } from "../records/readings.ts";
 import type { Identity } from "../records/systems.ts";
 import { countsSolute, IDENTITY_FIELDS, type ResolvedIdentity, resolveIdentity } from "./identity.ts";
+import type { RowValue } from "./mixtures/row-value.ts";
 import { type RegisteredSolute, rememberSolute } from "./registered-solutes.ts";
-import type { RowValue } from "./row-value.ts";
 import { lookAlikeRemarks, type Remark } from "./solute.ts";
 import type { ReadStructure } from "./solute-cells.ts";
 

@@ -1,9 +1,9 @@
 import type { RobustFit } from "../records/fits.ts";
 import { blocksOf } from "./block-screen.ts";
+import { AGREE_SHARE } from "./plausibility/shared-temperatures.ts";
 import type { OffPoint } from "./point-screen.ts";
 import { SAME_TEMPERATURE_K } from "./same-temperature.ts";
 import { type ScreenInput, sourceName, thresholdOf } from "./screen-input.ts";
-import { AGREE_SHARE } from "./shared-temperatures.ts";
 
 /** Off points at one end of a block that leave the curve together, to one side. */
 export interface EndRun {

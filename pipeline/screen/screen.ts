@@ -9,7 +9,7 @@ import { intervalFlags } from "./intervals.ts";
 import { isOutsideLiquid, liquidRangeFlags } from "./liquid-range.ts";
 import { judgeByMixtures } from "./mixture-screen.ts";
 import { patternBlocks } from "./pattern-blocks.ts";
-import { plausibilityFlags } from "./plausibility.ts";
+import { plausibilityFlags } from "./plausibility/plausibility.ts";
 import { pointFlags, type SuspectFinder } from "./point-flags.ts";
 import { type OffPoint, screenPoints } from "./point-screen.ts";
 import { withoutTransitions } from "./possible-transitions.ts";

@@ -1,4 +1,4 @@
-import { robustFits } from "../../pipeline/fit/robust-fit.ts";
+import { robustFits } from "../../pipeline/fit/robust/robust-fit.ts";
 import type { Flag } from "../../pipeline/records/fits.ts";
 import { DEFAULT_SETTINGS } from "../../pipeline/records/generated/collection.ts";
 import { materialThreshold } from "../../pipeline/screen/material-threshold.ts";

@@ -8,8 +8,8 @@ import { spawnSync } from "node:child_process";
 import { uniformFloat64 } from "pure-rand/distribution/uniformFloat64";
 import { xoroshiro128plus } from "pure-rand/generator/xoroshiro128plus";
 import { isCurve, publishedCurve } from "../../pipeline/fit/published-curve.ts";
-import { robustFits } from "../../pipeline/fit/robust-fit.ts";
-import { sourceStandings } from "../../pipeline/fit/source-standing.ts";
+import { robustFits } from "../../pipeline/fit/robust/robust-fit.ts";
+import { sourceStandings } from "../../pipeline/fit/sources/source-standing.ts";
 import type { SystemPoints } from "../../pipeline/records/systems.ts";
 import { plainPoints, plainSystem } from "../fit/plain-system.ts";
 

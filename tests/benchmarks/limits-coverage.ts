@@ -11,7 +11,7 @@
 import { uniformFloat64 } from "pure-rand/distribution/uniformFloat64";
 import { xoroshiro128plus } from "pure-rand/generator/xoroshiro128plus";
 import { isCurve, publishedCurve } from "../../pipeline/fit/published-curve.ts";
-import { robustFits } from "../../pipeline/fit/robust-fit.ts";
+import { robustFits } from "../../pipeline/fit/robust/robust-fit.ts";
 import type { PooledScales, RobustFit } from "../../pipeline/records/fits.ts";
 import type { SystemPoints } from "../../pipeline/records/systems.ts";
 import { plainSystem } from "../fit/plain-system.ts";

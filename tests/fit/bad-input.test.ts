@@ -1,7 +1,7 @@
 import fc from "fast-check";
 import { expect, test } from "vitest";
 import { isCurve, publishedCurve } from "../../pipeline/fit/published-curve.ts";
-import { robustFits } from "../../pipeline/fit/robust-fit.ts";
+import { robustFits } from "../../pipeline/fit/robust/robust-fit.ts";
 import type { Curve, NoCurve } from "../../pipeline/records/fits.ts";
 import type { SystemPoints } from "../../pipeline/records/systems.ts";
 import { curveThrough, defaultContext, expectCurve, plainPoints, plainSystem } from "./plain-system.ts";

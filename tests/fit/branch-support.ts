@@ -1,8 +1,8 @@
-import { seedOf } from "../../pipeline/fit/break-bootstrap.ts";
-import type { BreakPoints } from "../../pipeline/fit/break-scan.ts";
-import { robustFits } from "../../pipeline/fit/robust-fit.ts";
-import { type BranchPair, twoBranchCurves } from "../../pipeline/fit/two-branch-curves.ts";
-import { type SearchedBreak, searchBreaks } from "../../pipeline/fit/two-branch-search.ts";
+import { seedOf } from "../../pipeline/fit/branches/break-bootstrap.ts";
+import type { BreakPoints } from "../../pipeline/fit/branches/break-scan.ts";
+import { type BranchPair, twoBranchCurves } from "../../pipeline/fit/branches/two-branch-curves.ts";
+import { type SearchedBreak, searchBreaks } from "../../pipeline/fit/branches/two-branch-search.ts";
+import { robustFits } from "../../pipeline/fit/robust/robust-fit.ts";
 import { type RandomSource, seededRandom } from "../../pipeline/numerics/random.ts";
 import type { RobustFit } from "../../pipeline/records/fits.ts";
 import type { FitBasis, SystemPoints } from "../../pipeline/records/systems.ts";

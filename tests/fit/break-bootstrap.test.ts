@@ -1,8 +1,8 @@
 import { describe, expect, test } from "vitest";
-import { bestBreak, bootstrapBreak, leastStatistic, seedOf } from "../../pipeline/fit/break-bootstrap.ts";
-import { breakProfile } from "../../pipeline/fit/break-profile.ts";
-import { type BreakPoints, breakScan, smoothRival } from "../../pipeline/fit/break-scan.ts";
-import { findBreak } from "../../pipeline/fit/two-branch-fit.ts";
+import { bestBreak, bootstrapBreak, leastStatistic, seedOf } from "../../pipeline/fit/branches/break-bootstrap.ts";
+import { breakProfile } from "../../pipeline/fit/branches/break-profile.ts";
+import { type BreakPoints, breakScan, smoothRival } from "../../pipeline/fit/branches/break-scan.ts";
+import { findBreak } from "../../pipeline/fit/branches/two-branch-fit.ts";
 import { leastSquares } from "../../pipeline/numerics/least-squares.ts";
 import { seededRandom } from "../../pipeline/numerics/random.ts";
 import { breakPointsOf } from "./branch-support.ts";

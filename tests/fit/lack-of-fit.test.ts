@@ -1,6 +1,6 @@
 import { describe, expect, test } from "vitest";
-import { sharedDeviation } from "../../pipeline/fit/lack-of-fit.ts";
-import type { RobustWorkspace } from "../../pipeline/fit/robust-workspace.ts";
+import { sharedDeviation } from "../../pipeline/fit/robust/lack-of-fit.ts";
+import type { RobustWorkspace } from "../../pipeline/fit/robust/robust-workspace.ts";
 
 /** A workspace of one point by each of two sound sources: temperature (K) and deviation (ln value), standard deviation 0.03. */
 function twoPoints(own: readonly [number, number], other: readonly [number, number]): RobustWorkspace {

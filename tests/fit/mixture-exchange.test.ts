@@ -1,6 +1,6 @@
 import { expect, test } from "vitest";
-import { exchanges } from "../../pipeline/fit/mixture-exchange.ts";
-import type { MixturePoints } from "../../pipeline/fit/mixture-points.ts";
+import { exchanges } from "../../pipeline/fit/mixtures/mixture-exchange.ts";
+import type { MixturePoints } from "../../pipeline/fit/mixtures/mixture-points.ts";
 
 // Ethanol and water: densities at 20 °C of OIML R 22 (789.24 and 998.20 kg/m3), molar masses by IUPAC 2021 weights.
 const ETHANOL = { molarMass: 46.069, density20C: 789.24 };

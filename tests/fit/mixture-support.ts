@@ -1,5 +1,5 @@
-import { fitMixtures } from "../../pipeline/fit/mixture-fit.ts";
-import { robustFits } from "../../pipeline/fit/robust-fit.ts";
+import { fitMixtures } from "../../pipeline/fit/mixtures/mixture-fit.ts";
+import { robustFits } from "../../pipeline/fit/robust/robust-fit.ts";
 import type { PooledScales, RobustFit } from "../../pipeline/records/fits.ts";
 import { DEFAULT_SETTINGS } from "../../pipeline/records/generated/collection.ts";
 import { createMeasurementTable, type MeasurementTable } from "../../pipeline/records/measurements.ts";

@@ -1,8 +1,8 @@
 import { expect, test } from "vitest";
 import type { Candidate } from "../../pipeline/fit/candidate.ts";
-import { lackOfCurvature } from "../../pipeline/fit/lack-of-curvature.ts";
 import { chooseModel } from "../../pipeline/fit/model-choice.ts";
 import { physicalVeto } from "../../pipeline/fit/physical-veto.ts";
+import { lackOfCurvature } from "../../pipeline/fit/robust/lack-of-curvature.ts";
 import { curveThrough, expectCurve, plainPoints } from "./plain-system.ts";
 
 function candidate(model: Candidate["model"], parameterCount: number, aicc: number, leaveOneOut: number): Candidate {

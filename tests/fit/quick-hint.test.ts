@@ -1,5 +1,5 @@
 import { expect, test } from "vitest";
-import { quickHint } from "../../pipeline/fit/quick-hint.ts";
+import { quickHint } from "../../pipeline/fit/branches/quick-hint.ts";
 import { pooledDegreesOfFreedom } from "../../pipeline/fit/system-scale.ts";
 import { leastSquares } from "../../pipeline/numerics/least-squares.ts";
 import { seededRandom } from "../../pipeline/numerics/random.ts";

@@ -1,6 +1,6 @@
 import fc from "fast-check";
 import { describe, expect, test } from "vitest";
-import { type RobustSystem, robustFits } from "../../pipeline/fit/robust-fit.ts";
+import { type RobustSystem, robustFits } from "../../pipeline/fit/robust/robust-fit.ts";
 import { seededRandom } from "../../pipeline/numerics/random.ts";
 import type { RobustFit } from "../../pipeline/records/fits.ts";
 import type { SystemPoints } from "../../pipeline/records/systems.ts";

@@ -1,5 +1,5 @@
 import { describe, expect, test } from "vitest";
-import { voteBySource } from "../../pipeline/fit/source-vote.ts";
+import { voteBySource } from "../../pipeline/fit/robust/source-vote.ts";
 
 const sure = new Float64Array(5).fill(1e-6);
 const vote = (...location: number[]) => voteBySource([...location.keys()], Float64Array.from(location), sure, 0.18);

@@ -3,7 +3,7 @@ import { describe, expect, test } from "vitest";
 import { fitWorkspace } from "../../pipeline/fit/fit-workspace.ts";
 import { generalisedLeastSquares } from "../../pipeline/fit/generalised-least-squares.ts";
 import { setRandomIntercept } from "../../pipeline/fit/random-intercept.ts";
-import { robustFits } from "../../pipeline/fit/robust-fit.ts";
+import { robustFits } from "../../pipeline/fit/robust/robust-fit.ts";
 import { systemScale } from "../../pipeline/fit/system-scale.ts";
 import { pauleMandel } from "../../pipeline/numerics/between-group.ts";
 import { ownLnU, type SystemPoints, sharedVarianceOf } from "../../pipeline/records/systems.ts";

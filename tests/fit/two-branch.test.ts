@@ -1,8 +1,8 @@
 import { existsSync, readFileSync } from "node:fs";
 import { fileURLToPath } from "node:url";
 import { describe, expect, test } from "vitest";
-import { kinkOf } from "../../pipeline/fit/break-slopes.ts";
-import { findBreak } from "../../pipeline/fit/two-branch-fit.ts";
+import { kinkOf } from "../../pipeline/fit/branches/break-slopes.ts";
+import { findBreak } from "../../pipeline/fit/branches/two-branch-fit.ts";
 import { seededRandom } from "../../pipeline/numerics/random.ts";
 import { risingKinkFlags } from "../../pipeline/screen/rising-kink.ts";
 import { branchesOf, breakPointsOf, pointsOfRows, world } from "./branch-support.ts";

@@ -1,6 +1,6 @@
 import { describe, expect, test } from "vitest";
-import { compositionNotices } from "../../pipeline/identify/composition-notices.ts";
 import { resolveIdentity } from "../../pipeline/identify/identity.ts";
+import { compositionNotices } from "../../pipeline/identify/mixtures/composition-notices.ts";
 import { createIdentityRegister, register } from "../../pipeline/identify/source.ts";
 import { programIndex } from "../properties/read-tables.ts";
 

@@ -47,7 +47,9 @@ describe("the part of an uncertainty that the rows of a source share", () => {
 
   test("holds no density that was measured on the very solution: that is the row's own", async () => {
     const measured = { ...columns, solution_density: { column: "d", unit: "g/mL" } };
-    const { table } = await normaliseTable("s,l,T,c,u,d\nparacetamol,absolute ethanol,25,200,1,0.86\n", { columns: measured });
+    const { table } = await normaliseTable("s,l,T,c,u,d\nparacetamol,absolute ethanol,25,200,1,0.86\n", {
+      columns: measured,
+    });
     // What is left are the two molar masses.
     expect(table.sharedU[0]).toBeLessThan(1e-4);
     expect(table.relativeU[0]).toBeGreaterThan(0.01);

@@ -1,5 +1,5 @@
-import { robustFits } from "../../pipeline/fit/robust-fit.ts";
-import { writtenValues } from "../../pipeline/fit/written-values.ts";
+import { writtenValues } from "../../pipeline/fit/repeats/written-values.ts";
+import { robustFits } from "../../pipeline/fit/robust/robust-fit.ts";
 import type { Flag } from "../../pipeline/records/fits.ts";
 import { DEFAULT_SETTINGS } from "../../pipeline/records/generated/collection.ts";
 import { codeOf, createMeasurementTable } from "../../pipeline/records/measurements.ts";
