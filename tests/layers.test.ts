@@ -169,7 +169,7 @@ describe("the top level of the project", () => {
   test("holds the folders of the layout, the documents of a project and configuration, nothing else", () => {
     const folders = ["build", "datasets", "node_modules", "pipeline", "reports", "schemas", "tests"];
     const files = ["CHANGELOG.md", "DEVELOPERS.md", "LICENSE", "README.md", "package.json", "package-lock.json"];
-    const config = ["biome.json", "tsconfig.json", "tsconfig.build.json", "vitest.config.ts"];
+    const config = ["biome.json", "tsconfig.json", "vitest.config.ts"];
     const needed = ["datasets", "pipeline", "schemas", "tests", ...files];
     const entries = readdirSync(ROOT).filter((name) => !name.startsWith("."));
     expect(entries.filter((name) => ![...folders, ...files, ...config].includes(name))).toEqual([]);

@@ -56,7 +56,7 @@ describe("the package, packed and installed in another folder", () => {
     const out = join(user, "tables");
     const merged = await saltern("merge", join(installed, "datasets", "demo"), "--out", out, "--json");
     expect(merged.code, merged.stderr).toBe(1);
-    expect(JSON.parse(merged.stdout).counts).toMatchObject({ sources: 9, readings: 374, refused: 7 });
+    expect(JSON.parse(merged.stdout).counts).toMatchObject({ sources: 11, readings: 434, refused: 9 });
     expect(existsSync(join(out, "report", "index.html"))).toBe(true);
   });
 

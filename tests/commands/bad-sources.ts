@@ -176,7 +176,7 @@ export const SOURCES: Readonly<Record<string, BadSource>> = {
   hostile: {
     what: "names with escape and bidirectional characters and markup",
     table: rows('"\u001b[31m\u202edrowssap<script>",\u001b]0;x\u0007water,25,1', "\u202e<b>&x,water,25,1"),
-    ...{ accepted: 1, codes: ["unknown-solvent"] },
+    ...{ accepted: 1, codes: ["unknown-mixture-partner"] },
   },
   "shared-name": {
     what: "a source that another card's file is named after",
