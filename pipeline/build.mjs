@@ -29,7 +29,13 @@ if (stale || !process.argv.includes("--when-stale")) {
       // Two folders deep, as the modules lie in pipeline/: they find schemas and datasets by `../../`.
       chunkNames: "parts/[name]-[hash]",
       ...{ bundle: true, splitting: true, format: "esm", platform: "node", target: "node20" },
-      ...{ packages: "external", charset: "utf8", legalComments: "none", logLevel: "warning" },
+      ...{
+        external: ["openchemlib", "commander", "cli-progress"],
+        mainFields: ["module", "main"],
+        charset: "utf8",
+        legalComments: "none",
+        logLevel: "warning",
+      },
     });
     if (/"\.\.\/\.\.\//.test(readFileSync(join(fresh, "main.js"), "utf8"))) {
       throw new Error("main.js holds a module that looks for its data two folders up: import it lazily");
