@@ -7,7 +7,7 @@ import { needsRuling } from "../records/edition.ts";
 import type { Curve, SystemFit } from "../records/fits.ts";
 import type { CurveChange, MergedSystem } from "../records/generated/check-result.ts";
 import type { SourceTable } from "../records/readings.ts";
-import type { System } from "../records/systems.ts";
+import { type System, solventInWords } from "../records/systems.ts";
 
 /** The collection with the file as one more source, and where that stands in its list. */
 export interface Merged {
@@ -43,13 +43,13 @@ export function ifMerged({ edition: before }: Curated, { edition: after, source 
   return touched.map((system) => {
     const old = known.get(system.key);
     const [fitBefore, fitAfter] = [old && before.fits[old.index], after.fits[system.index]];
-    const { solute, solidForm, solvent, composition } = system.identity;
+    const { solute, solidForm } = system.identity;
     const [recoveryBefore, recoveryAfter] = [oldPlans.get(system.id), newPlans.get(system.id)];
     return {
       system: system.id,
       solute,
       solid_form: solidForm,
-      solvent: composition === "" ? solvent : `${solvent} (${composition})`,
+      solvent: solventInWords(system.identity),
       curve_before: old === undefined ? "new system" : curveWords(fitBefore),
       curve_after: curveWords(fitAfter),
       points_before: pointsOf(fitBefore),

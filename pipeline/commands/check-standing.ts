@@ -1,6 +1,7 @@
 import type { Edition } from "../records/edition.ts";
 import type { CheckResult, SystemOffset } from "../records/generated/check-result.ts";
 import type { MeasurementTable } from "../records/measurements.ts";
+import { solventInWords } from "../records/systems.ts";
 import { fileOffsets } from "../screen/file-offset.ts";
 import type { JudgedRow } from "../screen/verdicts.ts";
 
@@ -34,12 +35,12 @@ export function standingOf(
   });
   const told = offsets.map(({ system: index, rows, offset, low, high }): SystemOffset => {
     const system = edition.systems[index] as Edition["systems"][number];
-    const { solute, solidForm, solvent, composition } = system.identity;
+    const { solute, solidForm } = system.identity;
     return {
       system: system.id,
       solute,
       solid_form: solidForm,
-      solvent: composition === "" ? solvent : `${solvent} (${composition})`,
+      solvent: solventInWords(system.identity),
       rows: rows.length,
       other_sources: Math.max(0, ...(edition.fits[index]?.curves ?? []).map(({ nSources }) => nSources)),
       offset_percent: percent(offset),

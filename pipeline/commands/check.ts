@@ -16,7 +16,7 @@ import { readSingleSource } from "../read/source.ts";
 import type { CheckedRow, CheckResult } from "../records/generated/check-result.ts";
 import { type MeasurementTable, textOf } from "../records/measurements.ts";
 import type { SourceTable } from "../records/readings.ts";
-import type { Identity } from "../records/systems.ts";
+import { type Identity, solventInWords } from "../records/systems.ts";
 import { type JudgedRow, judgeRows, type KnownSystem, VERDICTS } from "../screen/verdicts.ts";
 import { repeatsOf, type Suspicion, suspicionsOf } from "./check-findings.ts";
 import { ifMerged, mergeNew } from "./check-merged.ts";
@@ -150,7 +150,7 @@ function checkedRow(
     system: systemId(identity),
     solute: identity.solute,
     solid_form: identity.solidForm,
-    solvent: identity.solvent,
+    solvent: solventInWords(identity),
     temperature_K: table.temperatureK[row] as number,
     reported_value: reported,
     reported_unit: unit,

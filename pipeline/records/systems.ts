@@ -25,6 +25,11 @@ export interface Identity {
   readonly aqueousSalt: boolean;
 }
 
+/** The solvent with its composition, as people read it: `ethanol`, `ethanol + water (70:30 w/w)`. */
+export function solventInWords({ solvent, composition }: Pick<Identity, "solvent" | "composition">): string {
+  return composition === "" ? solvent : `${solvent} (${composition})`;
+}
+
 /** What is fitted: the natural logarithm of the mole fraction, or of the mass ratio where no molar mass is known. */
 export type FitBasis = "ln x" | "ln r";
 
