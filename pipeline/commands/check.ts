@@ -3,7 +3,7 @@ import { basename } from "node:path";
 import { isLogarithmic } from "../bases/written-precision.ts";
 import { type Curated, curate } from "../curate.ts";
 import { systemId, systemKey } from "../group/systems.ts";
-import { nearNameQuestion } from "../identify/notices.ts";
+import { identityNotices, nearNameQuestion } from "../identify/notices.ts";
 import { identifySource } from "../identify/source.ts";
 import { structureReader } from "../identify/substance-tables.ts";
 import { type Normalised, normaliseEdition } from "../normalise/edition.ts";
@@ -53,14 +53,17 @@ async function readNew(file: string, { collection, card, like }: CheckOptions): 
 interface NewRows extends Normalised {
   readonly source: SourceTable;
   readonly refusedRows: readonly Problem[];
+  /** What is worth telling of the file and refuses nothing: of its form, and of the names and identifiers in its rows. */
+  readonly notices: readonly Problem[];
 }
 
 async function normaliseNew(source: SourceTable, { index, register, edition }: Curated): Promise<NewRows> {
   const identified = identifySource(source, index, await structureReader([source]), register);
+  const about = identityNotices(register, index, [source]).filter(({ place }) => place.source === source.name);
   const normalised = normaliseEdition([identified], [0], register.identities, edition.settings);
   const refusedRows = [...source.refused, ...identified.refused, ...normalised.refused];
   refusedRows.sort((a, b) => (a.place.line ?? 0) - (b.place.line ?? 0));
-  return { ...normalised, source, refusedRows };
+  return { ...normalised, source, refusedRows, notices: [...source.notices, ...about] };
 }
 
 /** What the collection knows, by identity. */
@@ -105,6 +108,7 @@ export async function check(file: string, options: CheckOptions, terminal: Termi
   };
   if (options.json) terminal.print(JSON.stringify(result));
   else for (const line of [...verdictLines(result), ...mergedLines(result)]) terminal.print(line);
+  for (const notice of rows.notices) terminal.tell(`notice: ${formatProblem(notice)}`);
   for (const refused of rows.refusedRows) terminal.tell(formatProblem(refused));
   return rows.refusedRows.length > 0 || checked.some(needsLook) ? Exit.needsYou : Exit.done;
 }
@@ -178,6 +182,6 @@ function resultOf(file: string, { edition }: Curated, rows: NewRows, checked: re
     verdicts: counts as unknown as CheckResult["verdicts"],
     rows: [...checked],
     problems: rows.refusedRows.map(noticeOf),
-    notices: rows.source.notices.map(noticeOf),
+    notices: rows.notices.map(noticeOf),
   };
 }
