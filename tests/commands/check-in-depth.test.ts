@@ -150,3 +150,12 @@ describe("a file that repeats the collection", () => {
     for (const { change_percent } of merged[0]?.changes ?? []) expect(Math.abs(change_percent)).toBeLessThan(0.1);
   });
 });
+
+test("A name with a letter of another script is told with its line, and a mixture with its composition", async () => {
+  const { stdout, stderr } = await checked(
+    ["p\u0430racetamol,form I,ethanol,25,18.2", "paracetamol,form I,ethanol/water 76:24 w/w,30,28.5"],
+    false,
+  );
+  expect(stderr).toMatch(/^notice: .*june\.csv:2: .*Cyrillic "\u0430" \(U\+0430\).*\[look-alike-letters\]/m);
+  expect(stdout).toContain("paracetamol (form I) in ethanol + water (76:24 w/w) at 30.0 °C");
+});
