@@ -3,6 +3,7 @@ import { join } from "node:path";
 import { beforeAll, describe, expect, test } from "vitest";
 import type { Summary } from "../../pipeline/records/generated/summary.ts";
 import { bytes, HEADER, ROW, SOURCES } from "./bad-sources.ts";
+import { inProcess } from "./in-process.ts";
 import { cardFor, type Run, readJson, readTable, saltern, scratch, writeFiles } from "./saltern.ts";
 
 const folder = scratch();
@@ -105,7 +106,7 @@ describe("what stops the whole command with 2", () => {
     const place = join(folder, "whole");
     rmSync(place, { recursive: true, force: true });
     writeFiles(place, files);
-    const result = await saltern(["merge", place, "--out", join(folder, "whole-out")]);
+    const result = await inProcess(["merge", place, "--out", join(folder, "whole-out")]);
     expect(result.stderr).not.toMatch(/^\s+at .*[:(]\d+/m);
     return result;
   };
@@ -135,8 +136,11 @@ describe("what stops the whole command with 2", () => {
 
   test("a collection that is a file, or does not exist", async () => {
     writeFileSync(join(folder, "a-file"), "x");
-    for (const place of ["a-file", "nowhere"]) {
-      const { code, stderr } = await saltern(["merge", join(folder, place), "--out", join(folder, "whole-out")]);
+    for (const [place, start] of [
+      ["a-file", inProcess],
+      ["nowhere", saltern],
+    ] as const) {
+      const { code, stderr } = await start(["merge", join(folder, place), "--out", join(folder, "whole-out")]);
       expect([place, code]).toEqual([place, 2]);
       expect(stderr).not.toContain("a fault in saltern");
     }

@@ -4,6 +4,7 @@ import { beforeAll, describe, expect, test } from "vitest";
 import type { CheckResult } from "../../pipeline/records/generated/check-result.ts";
 import type { ConvertResult } from "../../pipeline/records/generated/convert-result.ts";
 import { documentErrors } from "../schemas/table-rows.ts";
+import { inProcess } from "./in-process.ts";
 import { cardFor, copyOf, ended, type Run, saltern, scratch, writeFiles } from "./saltern.ts";
 
 const folder = scratch();
@@ -21,6 +22,7 @@ beforeAll(() => {
 
 describe("saltern check", () => {
   const file = join(folder, "new-rows", "new.csv");
+  const places: Readonly<Record<string, string>> = { FILE: file, DEMO: demo, NOWHERE: join(folder, "nowhere") };
   // Paracetamol form I in ethanol of the demo: about 17.92 g/100 g solvent at 25 °C.
   const table = [
     "Compound,Form,Solvent,T,S,u(S),n,Solid checked by,Remarks",
@@ -64,7 +66,7 @@ describe("saltern check", () => {
     const before = readdirSync(demo, { recursive: true }).sort();
     writeFiles(join(folder, "new-rows"), { "good.csv": `${table.slice(0, 2).join("\n")}\n` });
     const good = join(folder, "new-rows", "good.csv");
-    ended(await saltern(["check", good, "--collection", demo, "--like", "harbour-2026-gravimetry"]), 0);
+    ended(await inProcess(["check", good, "--collection", demo, "--like", "harbour-2026-gravimetry"]), 0);
     expect(readdirSync(demo, { recursive: true }).sort()).toEqual(before);
   });
 
@@ -74,51 +76,42 @@ describe("saltern check", () => {
       "mine.source.json": cardFor("mine"),
     });
     for (const more of [[], ["--card", join(folder, "beside", "mine.source.json")]]) {
-      ended(await saltern(["check", join(folder, "beside", "mine.csv"), "--collection", demo, ...more]), 0);
+      ended(await inProcess(["check", join(folder, "beside", "mine.csv"), "--collection", demo, ...more]), 0);
     }
   });
 
   test.each([
     ["no card at all", ["check", "FILE", "--collection", "DEMO"]],
     ["a source that the collection has not", ["check", "FILE", "--collection", "DEMO", "--like", "nobody"]],
-    ["a card that is not there", ["check", "FILE", "--collection", "DEMO", "--card", "nowhere.json"]],
-    [
-      "a table that is not there",
-      ["check", "nowhere.csv", "--collection", "DEMO", "--like", "harbour-2026-gravimetry"],
-    ],
+    ["a card that is not there", ["check", "FILE", "--collection", "DEMO", "--card", "NOWHERE"]],
+    ["a table that is not there", ["check", "NOWHERE", "--collection", "DEMO", "--like", "harbour-2026-gravimetry"]],
     [
       "a collection that is not there",
-      ["check", "FILE", "--collection", "nowhere", "--like", "harbour-2026-gravimetry"],
+      ["check", "FILE", "--collection", "NOWHERE", "--like", "harbour-2026-gravimetry"],
     ],
   ])("ends with 2 for %s", async (_, arguments_) => {
-    const run = await saltern(
-      arguments_.map((text) => (text === "FILE" ? file : text === "DEMO" ? demo : text)),
-      { cwd: folder },
-    );
+    const run = await inProcess(arguments_.map((text) => places[text] ?? text));
+    ended(run, 2);
+    expect(run.stderr).toMatch(/to mend: /);
+  });
+
+  test("ends with 2 as a program too, in any working folder", async () => {
+    const more = ["--collection", "demo", "--like", "harbour-2026-gravimetry"];
+    const run = await saltern(["check", "nowhere.csv", ...more], { cwd: folder });
     ended(run, 2);
     expect(run.stderr).toMatch(/to mend: /);
   });
 });
 
 describe("saltern convert", () => {
-  const convert = (value: string, to: string, more: readonly string[] = [], temperature = "20 °C") => {
+  const asked = (value: string, to: string, more: readonly string[] = []) => {
     const solute = more.includes("--solute") ? [] : ["--solute", "KNO3"];
-    return saltern([
-      "convert",
-      value,
-      "--to",
-      to,
-      ...solute,
-      "--solvent",
-      "water",
-      "--temperature",
-      temperature,
-      ...more,
-    ]);
+    return ["convert", value, "--to", to, ...solute, "--solvent", "water", "--temperature", "20 °C", ...more];
   };
+  const convert = (...of: Parameters<typeof asked>) => inProcess(asked(...of));
 
   test("prints value, uncertainty, steps and assumptions, for people and as JSON", async () => {
-    const text = await convert("31.6 g/100 g solvent", "mole fraction");
+    const text = await saltern(asked("31.6 g/100 g solvent", "mole fraction"));
     ended(text, 0);
     for (const word of ["mole fraction", "standard uncertainty", "steps", "assumptions"]) {
       expect(text.stdout).toContain(word);
@@ -143,7 +136,7 @@ describe("saltern convert", () => {
     ["more than all of the solution", "120 g/100 g solution", "mole fraction"],
     ["a target that leaves the basis open", "3 g/100 g solvent", "g/100 mL"],
   ])("ends with 2 for %s", async (_, value, to) => {
-    const run = await saltern([
+    const run = await inProcess([
       ...["convert", "--to", to, "--solute", "KNO3", "--solvent", "water", "--temperature", "20 °C", "--", value],
     ]);
     ended(run, 2);

@@ -3,6 +3,7 @@ import { existsSync, readdirSync, readFileSync } from "node:fs";
 import { join } from "node:path";
 import { beforeAll, describe, expect, test } from "vitest";
 import { documentErrors } from "../schemas/table-rows.ts";
+import { inProcess } from "./in-process.ts";
 import { COMMAND, cardFor, ended, saltern, scratch, writeFiles } from "./saltern.ts";
 
 const folder = scratch();
@@ -30,7 +31,7 @@ describe("the help", () => {
   });
 
   test.each(COMMANDS)("of %s tells its usage, every option, and the exit codes", async (command) => {
-    const run = await saltern([command, "--help"]);
+    const run = await inProcess([command, "--help"]);
     ended(run, 0);
     expect(run.stderr).toBe("");
     expect(run.stdout).toContain(`Usage: saltern ${command}`);
@@ -65,12 +66,24 @@ describe("what the command does not understand ends with 2 and a message, and do
     ["an argument too many", ["merge", "x", "y", "--out", "z"]],
     ["two options that exclude each other", ["check", "f", "--collection", "c", "--card", "a", "--like", "b"]],
   ])("%s", async (_, arguments_) => {
+    const run = await inProcess(arguments_);
+    ended(run, 2);
+    expect(run.stdout).toBe("");
+    expect(run.stderr).not.toBe("");
+    expect(run.stderr).not.toMatch(/^\s+at /m);
+    expect(existsSync("y")).toBe(false);
+  });
+
+  test.each([
+    ["no command", []],
+    ["an unknown option of a command", ["merge", "x", "--out", "y", "--fast"]],
+  ])("%s, as a program too", async (_, arguments_) => {
     const run = await saltern(arguments_, { cwd: folder });
     ended(run, 2);
     expect(run.stdout).toBe("");
     expect(run.stderr).not.toBe("");
     expect(run.stderr).not.toMatch(/^\s+at /m);
-    expect(readdirSync(folder).sort()).not.toContain("y");
+    expect(readdirSync(folder)).not.toContain("y");
   });
 
   test("a command that does not exist is answered with the near one", async () => {
@@ -84,7 +97,7 @@ describe("saltern new", () => {
     const started = await saltern(["new", collection]);
     ended(started, 0);
     expect(started.stdout).toContain("merge");
-    const merged = await saltern(["merge", collection, "--out", join(folder, "new-out"), "--json"]);
+    const merged = await inProcess(["merge", collection, "--out", join(folder, "new-out"), "--json"]);
     ended(merged, 0);
     const { counts, needs_you, notices } = JSON.parse(merged.stdout);
     expect(needs_you).toBe(false);
@@ -109,7 +122,7 @@ describe("saltern new", () => {
   test("never writes into a folder in use, nor over a file", async () => {
     writeFiles(folder, { "used/letter.txt": "dear", "just-a-file": "x" });
     for (const place of ["used", "just-a-file", "just-a-file/below"]) {
-      const run = await saltern(["new", join(folder, place)]);
+      const run = await inProcess(["new", join(folder, place)]);
       ended(run, 3);
       expect(run.stderr).toMatch(/to mend: /);
       expect(run.stderr).not.toContain("a fault in saltern");

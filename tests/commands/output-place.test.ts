@@ -12,6 +12,7 @@ import {
 import { tmpdir } from "node:os";
 import { join } from "node:path";
 import { afterAll, beforeAll, describe, expect, test } from "vitest";
+import { inProcess } from "./in-process.ts";
 import { cardFor, ROOT, type Run, run, saltern, scratch, writeFiles } from "./saltern.ts";
 
 const folder = scratch();
@@ -47,14 +48,17 @@ describe("a place for the tables that cannot be used ends with 3", () => {
 
   test("where it is the collection, a folder that holds it, or its sources", async () => {
     for (const out of [collection, folder, join(collection, "sources")]) {
-      couldNotWrite(await saltern(["merge", collection, "--out", out]), "output-is-input");
+      couldNotWrite(await inProcess(["merge", collection, "--out", out]), "output-is-input");
     }
     expect(readdirSync(collection).sort()).toEqual(["collection.json", "sources"]);
   });
 
   test("where it lies below a file", async () => {
     writeFiles(folder, { "a-file": "x" });
-    couldNotWrite(await saltern(["merge", collection, "--out", join(folder, "a-file", "out")]), "output-not-writable");
+    couldNotWrite(
+      await inProcess(["merge", collection, "--out", join(folder, "a-file", "out")]),
+      "output-not-writable",
+    );
   });
 
   test("where the folder around it may not be written to", async (context) => {
@@ -107,7 +111,7 @@ describe("the tables appear as a whole", () => {
   test("over those of an earlier run, with nothing of it left and nothing beside them", async () => {
     const out = join(folder, "tables");
     writeFiles(out, { "summary.json": '{"format":1,"program_version":"0","files":[]}', "planning-old.csv": "x" });
-    expect((await saltern(["merge", collection, "--out", out, "--no-report"])).code).toBe(0);
+    expect((await inProcess(["merge", collection, "--out", out, "--no-report"])).code).toBe(0);
     expect(existsSync(join(out, "planning-old.csv"))).toBe(false);
     expect(existsSync(join(out, "measurements.csv"))).toBe(true);
     expect(hidden(folder)).toEqual([]);
@@ -116,7 +120,7 @@ describe("the tables appear as a whole", () => {
   test("after an interrupted swap, even where the next command refuses its input", async () => {
     const place = join(folder, "interrupted");
     writeFiles(place, { ".out.saltern-old/summary.json": '{"format":1,"program_version":"0","files":[]}' });
-    const { code } = await saltern(["merge", join(folder, "nowhere"), "--out", join(place, "out")]);
+    const { code } = await inProcess(["merge", join(folder, "nowhere"), "--out", join(place, "out")]);
     expect(code).toBe(2);
     expect(readdirSync(place)).toEqual(["out"]);
   });
@@ -124,7 +128,7 @@ describe("the tables appear as a whole", () => {
   test("and a command that is refused its input leaves no temporary folder", async () => {
     const place = join(folder, "refused");
     mkdirSync(place);
-    expect((await saltern(["merge", join(folder, "nowhere"), "--out", join(place, "out")])).code).toBe(2);
+    expect((await inProcess(["merge", join(folder, "nowhere"), "--out", join(place, "out")])).code).toBe(2);
     expect(readdirSync(place)).toEqual([]);
   });
 

@@ -3,6 +3,7 @@ import { join } from "node:path";
 import { beforeAll, describe, expect, test } from "vitest";
 import type { RuleResult } from "../../pipeline/records/generated/rule-result.ts";
 import { documentErrors } from "../schemas/table-rows.ts";
+import { inProcess } from "./in-process.ts";
 import { FLAG, hidden, rule, writeCollection } from "./ruled-collection.ts";
 import { readTable, saltern, scratch } from "./saltern.ts";
 
@@ -101,7 +102,7 @@ test("a file that a spreadsheet saved again keeps its style, and not a byte befo
     /\r\ndata steward;2026-04-01;R0002;off-curve@alpha:4;set aside;;;looked at;"a; b";sha256:\w+\r\n$/,
   );
   expect(rulings(place).startsWith(before)).toBe(true);
-  const merge = await saltern(["merge", place, "--out", join(folder, "third-tables"), "--no-report"]);
+  const merge = await inProcess(["merge", place, "--out", join(folder, "third-tables"), "--no-report"]);
   expect(merge.stderr).toContain("rulings.csv: a byte-order mark, semicolons between the cells, line ends CR LF");
   expect(
     readTable(join(folder, "third-tables"), "flags.csv").rows.find(({ flag_id }) => flag_id === FLAG)?.ruling,

@@ -1,5 +1,7 @@
+import { readdirSync, rmSync } from "node:fs";
+import { join } from "node:path";
 import { fileURLToPath } from "node:url";
-import { beforeAll, describe, expect, test } from "vitest";
+import { beforeAll, describe, expect, onTestFinished, test } from "vitest";
 import { findSystem } from "../../pipeline/commands/find-system.ts";
 import { show } from "../../pipeline/commands/show.ts";
 import { textPlot } from "../../pipeline/commands/text-plot.ts";
@@ -7,8 +9,20 @@ import { curate } from "../../pipeline/curate.ts";
 import type { InputError } from "../../pipeline/problems/input-error.ts";
 import { readCollection } from "../../pipeline/read/collection.ts";
 import { makeHostileCollection } from "../report/hostile-collection.ts";
+import { copyOf, scratch } from "./saltern.ts";
 
 const demo = fileURLToPath(new URL("../../datasets/demo/", import.meta.url));
+
+/** The demo with four of its sources: what is shown of a system needs no others, and show curates all of them. */
+const fewer = join(scratch(), "demo");
+beforeAll(() => {
+  copyOf("demo", fewer);
+  const kept = ["harbour-2026-", "crystal-lab-2025-clear-points", "report-2019-mole-fractions"];
+  for (const name of readdirSync(join(fewer, "sources"))) {
+    if (!kept.some((source) => name.startsWith(source))) rmSync(join(fewer, "sources", name));
+  }
+  rmSync(join(fewer, "rulings.csv"));
+});
 
 /** Runs show and returns what it printed. */
 async function shown(collection: string, system: string, json = false): Promise<string> {
@@ -61,7 +75,7 @@ describe("a system is found", () => {
 });
 
 test("a system that is not there is refused with the ids that were close", async () => {
-  const error = await shown(demo, "caffein in ethyl acetat").catch((e: InputError) => e);
+  const error = await shown(fewer, "caffein in ethyl acetat").catch((e: InputError) => e);
   expect((error as InputError).problem).toMatchObject({
     code: "bad-argument",
     mend: expect.stringMatching(/^did you mean caffeine-in-ethyl-acetate-/),
@@ -69,8 +83,8 @@ test("a system that is not there is refused with the ids that were close", async
 });
 
 test("the text tells who measured, the equation, values inside the range and every flag; the JSON tells the same", async () => {
-  const text = await shown(demo, "benzoic acid in toluene");
-  const json = JSON.parse(await shown(demo, "benzoic acid in toluene", true)) as {
+  const text = await shown(fewer, "benzoic acid in toluene");
+  const json = JSON.parse(await shown(fewer, "benzoic acid in toluene", true)) as {
     curves: { T_min_K: number; T_max_K: number; values: { temperature_K: number; g_per_100g_solvent: number }[] }[];
     sources: { letter: string; source: string; measurements: number; kept: number }[];
     flags: { flag_id: string }[];
@@ -92,6 +106,7 @@ test("the text tells who measured, the equation, values inside the range and eve
 
 test("no control or bidirectional character of the data reaches the terminal, and a long name is cut", async () => {
   const folder = makeHostileCollection();
+  onTestFinished(() => rmSync(folder, { recursive: true, force: true }));
   for (const part of ["bell", "left", "x".repeat(50)]) {
     const text = await shown(folder, part);
     expect(/\p{Bidi_Control}|(?!\n)\p{Cc}/u.exec(text)?.[0], part).toBeUndefined();
