@@ -12,11 +12,26 @@ export interface SubstanceTables {
   readonly propertyValues: readonly TableRow[];
 }
 
+interface Indexed {
+  readonly index: SubstanceIndex;
+  readonly notices: readonly Problem[];
+}
+
+/** Indexes made, by the program's tables and the group's: `check` curates the same collection twice. */
+const known = new WeakMap<SubstanceTables, WeakMap<SubstanceTables, Indexed>>();
+
 /** The index of all substances, a group's own tables laid over the program's, and what is wrong with the group's. */
-export function indexSubstances(
-  program: SubstanceTables,
-  own: SubstanceTables,
-): { readonly index: SubstanceIndex; readonly notices: readonly Problem[] } {
+export function indexSubstances(program: SubstanceTables, own: SubstanceTables): Indexed {
+  const ofProgram = known.get(program) ?? new WeakMap<SubstanceTables, Indexed>();
+  known.set(program, ofProgram);
+  const before = ofProgram.get(own);
+  if (before !== undefined) return before;
+  const made = indexed(program, own);
+  ofProgram.set(own, made);
+  return made;
+}
+
+function indexed(program: SubstanceTables, own: SubstanceTables): Indexed {
   const cells = (rows: readonly TableRow[]) => rows.map(({ values }) => values);
   const layer = (origin: string, { substances, solidForms, propertyValues }: SubstanceTables) => ({
     origin,

@@ -46,8 +46,18 @@ export interface PropertyTables {
 /** Folder of the program's own tables; the same depth below the project for the source and the compiled program. */
 const PROPERTIES = fileURLToPath(new URL("../../datasets/properties/", import.meta.url));
 
-/** The program's own tables of substances, solid forms and property values. @throws InputError where one is damaged */
-export async function readProgramTables(folder = PROPERTIES): Promise<PropertyTables> {
+let ownTables: Promise<PropertyTables> | undefined;
+
+/**
+ * The program's own tables of substances, solid forms and property values; read once, for they are part of the program.
+ * @throws InputError where one is damaged
+ */
+export function readProgramTables(): Promise<PropertyTables> {
+  ownTables ??= readPropertyTables(PROPERTIES);
+  return ownTables;
+}
+
+async function readPropertyTables(folder: string): Promise<PropertyTables> {
   return {
     origin: "datasets/properties",
     substances: await readOwnTable(folder, "substances.csv", "datasets/properties/"),
@@ -85,14 +95,17 @@ async function readRows(path: string, place: Place, kind: TableKind): Promise<Ta
   const delimiter = await orClose(text, () => findDelimiter(head, columns, place));
   const rows: TableRow[] = [];
   let headings: readonly string[] | undefined;
+  let positions: readonly number[] = [];
   await cutIntoRecords(pieces, { delimiter, firstLine: 1, place }, (cells, line) => {
     if (cells.every((cell) => cell === "")) return;
     if (headings === undefined) {
-      headings = checkedHeadings(cells, kind, { ...place, line });
+      const checked = checkedHeadings(cells, kind, { ...place, line });
+      headings = checked;
+      positions = columns.map((column) => checked.indexOf(column));
       return;
     }
     checkWidth(cells, headings, { ...place, line });
-    const values = Object.fromEntries(columns.map((column) => [column, cells[headings?.indexOf(column) ?? -1] ?? ""]));
+    const values = Object.fromEntries(columns.map((column, i) => [column, cells[positions[i] ?? -1] ?? ""]));
     rows.push({ file: place.file, line, values });
   });
   return rows;
