@@ -1,4 +1,4 @@
-// Builds the command: one file a command and what they share, for Node takes half a second to open four hundred modules.
+// Builds the command: one file a command and what they share, for Node opens four hundred modules slowly.
 // With --when-stale it does nothing while build/ is newer than every source, so that `npm run demo` and `npm test` never
 // run yesterday's program. Types are checked by `npm run types`, not here.
 import { chmodSync, existsSync, mkdtempSync, readdirSync, readFileSync, renameSync, rmSync, statSync } from "node:fs";
