@@ -1,11 +1,7 @@
 import { fewestTemperatures, largestUsualC, smallestSpanK } from "../curves/modified-apelblat.ts";
+import { inCelsius } from "../records/temperature-text.ts";
 import type { Candidate } from "./candidate.ts";
 import type { FittedModels } from "./system-models.ts";
-
-/** A temperature as notices tell it, for people read °C: `32.4 °C`. */
-export function inCelsius(temperatureK: number): string {
-  return `${(temperatureK - 273.15).toFixed(1)} °C`;
-}
 
 /**
  * What a reader of a curve should know: how few points bear it, why no richer model was tried, an unusual heat

@@ -2,12 +2,12 @@ import type { Curve, PooledScales, RobustFit, SystemFit } from "../records/fits.
 import type { MeasurementTable } from "../records/measurements.ts";
 import type { Settings } from "../records/settings.ts";
 import { type System, type SystemPoints, systemPoints } from "../records/systems.ts";
+import { inCelsius } from "../records/temperature-text.ts";
 import { seedOf } from "./branches/break-bootstrap.ts";
 import { kinkOf } from "./branches/break-slopes.ts";
 import { twoBranchCurves } from "./branches/two-branch-curves.ts";
 import { breakPoints } from "./branches/two-branch-fit.ts";
 import { type SearchedBreak, searchBreaks } from "./branches/two-branch-search.ts";
-import { inCelsius } from "./curve-notices.ts";
 import { isCurve, publishedCurve } from "./published-curve.ts";
 import { writtenValues } from "./repeats/written-values.ts";
 import { type PooledFit, robustFits } from "./robust/robust-fit.ts";

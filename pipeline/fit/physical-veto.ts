@@ -1,6 +1,6 @@
 import type { FitBasis } from "../records/systems.ts";
+import { inCelsius } from "../records/temperature-text.ts";
 import type { Candidate } from "./candidate.ts";
-import { inCelsius } from "./curve-notices.ts";
 import type { KeptPoints } from "./kept-points.ts";
 
 /** A turn is believed where the rise beside it is at least this many standard errors on both sides. */

@@ -1,11 +1,12 @@
 import type { Flag, RobustFit } from "../records/fits.ts";
+import { inCelsius } from "../records/temperature-text.ts";
 import type { OffBlock } from "./block-screen.ts";
 import { competeAcrossSystems } from "./causes/across-systems.ts";
 import { AS_READ } from "./causes/compete-block.ts";
 import { decided, type Verdict } from "./causes/compete-point.ts";
 import { middle } from "./middle.ts";
 import { type ScreenInput, sourceName } from "./screen-input.ts";
-import { counted, inCelsius, offBy } from "./wording.ts";
+import { counted, offBy } from "./wording.ts";
 
 /** A lower block up to this factor could be a more stable solid; a larger one hardly. Common practice. */
 const LARGEST_FORM_RATIO = Math.log(10);

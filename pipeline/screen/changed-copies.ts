@@ -2,8 +2,9 @@ import { relativeRounding } from "../numerics/decimal-rounding.ts";
 import type { Flag, RobustFit } from "../records/fits.ts";
 import { textOf } from "../records/measurements.ts";
 import { type CopiedBlock, RepeatKind } from "../records/repeats.ts";
+import { inCelsius } from "../records/temperature-text.ts";
 import { type ScreenInput, sourceName } from "./screen-input.ts";
-import { inCelsius, offBy } from "./wording.ts";
+import { offBy } from "./wording.ts";
 
 /** Equal values wanted for each one that differs: where more differ, the tables are different editions. */
 const EQUAL_PER_DIFFERENT = 4;

@@ -1,12 +1,13 @@
 import type { Flag, RobustFit } from "../records/fits.ts";
 import { textOf } from "../records/measurements.ts";
 import type { System } from "../records/systems.ts";
+import { inCelsius } from "../records/temperature-text.ts";
 import type { Suspects } from "./causes/cause.ts";
 import { reconciling } from "./conflict-causes.ts";
 import { SAME_TEMPERATURE_K } from "./same-temperature.ts";
 import { type ScreenInput, sourceName, thresholdOf } from "./screen-input.ts";
 import { fitSources, predict, type SystemModel } from "./system-model.ts";
-import { counted, inCelsius, listed, offBy, threeDigits } from "./wording.ts";
+import { counted, listed, offBy, threeDigits } from "./wording.ts";
 
 /** Shared temperatures from which sources show that they read the same. */
 const LEAST_SHARED = 3;

@@ -1,8 +1,9 @@
 import type { Flag } from "../records/fits.ts";
+import { inCelsius } from "../records/temperature-text.ts";
 import type { EndRun } from "./end-runs.ts";
 import type { OffPoint } from "./point-screen.ts";
 import { type ScreenInput, sourceName } from "./screen-input.ts";
-import { inCelsius, offBy } from "./wording.ts";
+import { offBy } from "./wording.ts";
 
 /** A cause must be this sure for one of two sources to be taken for the wrong one. */
 export const SURE = 0.8;

@@ -7,10 +7,11 @@ import {
 } from "../curves/compare-curves.ts";
 import type { Flag, RobustFit } from "../records/fits.ts";
 import type { System } from "../records/systems.ts";
+import { inCelsius } from "../records/temperature-text.ts";
 import { materialThreshold } from "./material-threshold.ts";
 import { middle } from "./middle.ts";
 import type { ScreenInput } from "./screen-input.ts";
-import { counted, inCelsius, listed, offBy } from "./wording.ts";
+import { counted, listed, offBy } from "./wording.ts";
 
 /** Name of the form of rows that name none. */
 const UNSPECIFIED = "unspecified";

@@ -1,6 +1,7 @@
 import type { Flag } from "../records/fits.ts";
 import { RowState, textOf } from "../records/measurements.ts";
 import type { System } from "../records/systems.ts";
+import { inCelsius } from "../records/temperature-text.ts";
 import {
   asReported,
   contradictionLimit,
@@ -13,7 +14,7 @@ import {
   outsideBy,
 } from "./interval-gap.ts";
 import type { ScreenInput } from "./screen-input.ts";
-import { counted, inCelsius, threeDigits } from "./wording.ts";
+import { counted, threeDigits } from "./wording.ts";
 
 /** Where no curve reaches, a point or range this near in temperature is compared, K. */
 const NEAR_K = 3;

@@ -1,8 +1,9 @@
 import type { Flag } from "../records/fits.ts";
+import { inCelsius } from "../records/temperature-text.ts";
 import { blocksOf } from "./block-screen.ts";
 import type { ScreenedSystem, ScreenInput } from "./screen-input.ts";
 import { sourceName } from "./screen-input.ts";
-import { counted, inCelsius } from "./wording.ts";
+import { counted } from "./wording.ts";
 
 /** A solute lowers the freezing point of its solvent; this much (K per unit of mole fraction) is left unremarked. */
 const FREEZING_DEPRESSION_K = 300;

@@ -2,9 +2,10 @@ import { studentTSurvival } from "../numerics/distributions.ts";
 import { benjaminiHochbergThreshold } from "../numerics/multiple-testing.ts";
 import type { Flag } from "../records/fits.ts";
 import type { LeftOutPrediction, MixtureMember, MixtureModel } from "../records/mixtures.ts";
+import { inCelsius } from "../records/temperature-text.ts";
 import { compositionCause } from "./mixture-cause.ts";
 import { type ScreenInput, thresholdOf } from "./screen-input.ts";
-import { counted, inCelsius, offBy } from "./wording.ts";
+import { counted, offBy } from "./wording.ts";
 
 /** What the mixtures of an edition say of its systems. */
 export interface MixtureJudgement {

@@ -1,6 +1,7 @@
 import { studentTQuantile } from "../numerics/distributions.ts";
 import type { Flag, RobustFit } from "../records/fits.ts";
 import { textOf } from "../records/measurements.ts";
+import { inCelsius } from "../records/temperature-text.ts";
 import { bentRows } from "./bent-rows.ts";
 import { blocksOf } from "./block-screen.ts";
 import type { Suspects } from "./causes/cause.ts";
@@ -13,7 +14,7 @@ import type { OffPoint } from "./point-screen.ts";
 import { isPossibleTemperature } from "./possible-temperature.ts";
 import type { ScreenInput } from "./screen-input.ts";
 import type { SystemModel } from "./system-model.ts";
-import { counted, inCelsius, offBy, threeDigits } from "./wording.ts";
+import { counted, offBy, threeDigits } from "./wording.ts";
 
 /** Digits of a proposed value: more than any measurement has. */
 const PROPOSED_DIGITS = 8;

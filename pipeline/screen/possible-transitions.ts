@@ -1,11 +1,12 @@
 import { SLOPE_CHANGE } from "../curves/screening-basis.ts";
 import type { Flag, RobustFit } from "../records/fits.ts";
+import { inCelsius } from "../records/temperature-text.ts";
 import type { OffBlock } from "./block-screen.ts";
 import type { OffPoint } from "./point-screen.ts";
 import { isPossibleTemperature } from "./possible-temperature.ts";
 import type { ScreenInput } from "./screen-input.ts";
 import { fitSources, predict, predictCurve, type SystemModel } from "./system-model.ts";
-import { counted, inCelsius } from "./wording.ts";
+import { counted } from "./wording.ts";
 
 /** Distinct temperatures on either side of a break, and in all, from which one is tried. */
 const [SIDE, LEAST_TEMPERATURES] = [2, 5];

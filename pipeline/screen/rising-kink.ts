@@ -1,5 +1,6 @@
 import type { Flag, SystemFit } from "../records/fits.ts";
-import { inCelsius, threeDigits } from "./wording.ts";
+import { inCelsius } from "../records/temperature-text.ts";
+import { threeDigits } from "./wording.ts";
 
 /**
  * One notice for every system whose slope d ln value/dT rises on heating at a break. At an equilibrium transition of the

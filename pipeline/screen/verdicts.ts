@@ -4,6 +4,7 @@ import type { Curve } from "../records/fits.ts";
 import { type MeasurementTable, RowState } from "../records/measurements.ts";
 import type { Settings } from "../records/settings.ts";
 import type { System } from "../records/systems.ts";
+import { inCelsius } from "../records/temperature-text.ts";
 import {
   contradictionLimit,
   intervalOf,
@@ -13,7 +14,7 @@ import {
   outsideBy,
 } from "./interval-gap.ts";
 import { materialThreshold } from "./material-threshold.ts";
-import { inCelsius, offBy, threeDigits } from "./wording.ts";
+import { offBy, threeDigits } from "./wording.ts";
 
 /** What `check` says of a new row. */
 export const VERDICTS = ["fits", "off the curve", "outside the range", "new system", "cannot tell"] as const;

@@ -3,12 +3,6 @@ export function threeDigits(value: number): string {
   return String(Number(value.toPrecision(3)));
 }
 
-/** A temperature in K as °C with one decimal. */
-export function inCelsius(temperatureK: number): string {
-  const text = (temperatureK - 273.15).toFixed(1);
-  return `${text === "-0.0" ? "0.0" : text} °C`;
-}
-
 /** How far a value lies from what is expected: `34 % below`, `12 % above`, `9.8 times` for more than a factor 3. */
 export function offBy(deviation: number): string {
   if (Math.abs(deviation) > Math.log(3)) {

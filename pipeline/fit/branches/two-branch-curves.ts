@@ -1,6 +1,6 @@
 import { requireInside } from "../../curves/fitted-range.ts";
 import type { Curve, Transition } from "../../records/fits.ts";
-import { inCelsius } from "../curve-notices.ts";
+import { inCelsius } from "../../records/temperature-text.ts";
 import { isCurve, publishedCurve } from "../published-curve.ts";
 import type { CurveContext, CurveSubject } from "../system-models.ts";
 import { breakSide } from "./break-carried.ts";

@@ -1,9 +1,10 @@
 import type { Flag, RobustFit } from "../../records/fits.ts";
+import { inCelsius } from "../../records/temperature-text.ts";
 import { noticeOn } from "../block-notice.ts";
 import { blocksOf } from "../block-screen.ts";
 import { middle } from "../middle.ts";
 import { type ScreenInput, sourceName } from "../screen-input.ts";
-import { counted, inCelsius, threeDigits } from "../wording.ts";
+import { counted, threeDigits } from "../wording.ts";
 
 /** Measured density and estimate may differ by this, relative, and by as much more per mass fraction of solute. */
 const [ALWAYS, PER_MASS_FRACTION] = [0.03, 0.5];

@@ -1,9 +1,10 @@
 import type { Flag, RobustFit } from "../../records/fits.ts";
+import { inCelsius } from "../../records/temperature-text.ts";
 import { noticeOn } from "../block-notice.ts";
 import { blocksOf } from "../block-screen.ts";
 import { isOutsideLiquid } from "../liquid-range.ts";
 import { type ScreenInput, sourceName } from "../screen-input.ts";
-import { counted, inCelsius, threeDigits } from "../wording.ts";
+import { counted, threeDigits } from "../wording.ts";
 
 /** Melting points and temperatures are known to about this, K. */
 const MARGIN_K = 1;

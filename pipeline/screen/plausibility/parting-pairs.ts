@@ -1,8 +1,9 @@
 import type { Flag, RobustFit } from "../../records/fits.ts";
+import { inCelsius } from "../../records/temperature-text.ts";
 import { materialThreshold } from "../material-threshold.ts";
 import { SAME_TEMPERATURE_K } from "../same-temperature.ts";
 import { type ScreenInput, sourceName } from "../screen-input.ts";
-import { inCelsius, offBy, threeDigits } from "../wording.ts";
+import { offBy, threeDigits } from "../wording.ts";
 import { AGREE_SHARE, comparablePoints } from "./shared-temperatures.ts";
 
 /** Shared temperatures from which two sources show how well they agree, and how well that must be, ln value. */

@@ -1,10 +1,11 @@
 import type { Flag, RobustFit } from "../../records/fits.ts";
 import { RepeatKind } from "../../records/repeats.ts";
+import { inCelsius } from "../../records/temperature-text.ts";
 import { isOutsideLiquid } from "../liquid-range.ts";
 import { middle } from "../middle.ts";
 import { SAME_TEMPERATURE_K } from "../same-temperature.ts";
 import { type ScreenInput, sourceName, thresholdOf } from "../screen-input.ts";
-import { counted, inCelsius, listed, offBy } from "../wording.ts";
+import { counted, listed, offBy } from "../wording.ts";
 
 /** A value is off the others beyond this many standard deviations of the difference. */
 const OFF_Z = 4;

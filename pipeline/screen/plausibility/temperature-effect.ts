@@ -1,8 +1,9 @@
 import type { Flag, RobustFit } from "../../records/fits.ts";
+import { inCelsius } from "../../records/temperature-text.ts";
 import { blocksOf } from "../block-screen.ts";
 import { middle } from "../middle.ts";
 import { type ScreenInput, sourceName } from "../screen-input.ts";
-import { counted, inCelsius } from "../wording.ts";
+import { counted } from "../wording.ts";
 
 /** Points, and span in K, from which a series shows how it changes with temperature. */
 const [LEAST_POINTS, LEAST_SPAN_K] = [3, 10];
