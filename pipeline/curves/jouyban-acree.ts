@@ -76,50 +76,6 @@ export function writeDesignRow(
   }
 }
 
-/** Writes the derivative of the design row with respect to T (1/K) at constant composition. */
-export function writeTemperatureSlopeRow(
-  row: Float64Array,
-  at: number,
-  fraction: number,
-  temperatureK: number,
-  centreK: number,
-  terms: number,
-): void {
-  const [w1, w2] = [fraction, 1 - fraction];
-  const du = -centreK / (temperatureK * temperatureK);
-  row[at] = 0;
-  row[at + 1] = w1 * du;
-  row[at + 2] = 0;
-  row[at + 3] = w2 * du;
-  let excess = w1 * w2 * du;
-  for (let i = 0; i < terms; i++) {
-    row[at + PURE_COEFFICIENTS + i] = excess;
-    excess *= w1 - w2;
-  }
-}
-
-/** Writes the derivative of the design row with respect to w1 (w2 = 1 - w1) at constant temperature. */
-export function writeCompositionSlopeRow(
-  row: Float64Array,
-  at: number,
-  fraction: number,
-  temperatureK: number,
-  centreK: number,
-  terms: number,
-): void {
-  const d = 2 * fraction - 1;
-  const u = (centreK - temperatureK) / temperatureK;
-  row[at] = 1;
-  row[at + 1] = u;
-  row[at + 2] = -1;
-  row[at + 3] = -u;
-  // w1 w2 = (1 - d^2)/4 with d = w1 - w2, and dd/dw1 = 2.
-  for (let i = 0; i < terms; i++) {
-    const ofPower = i === 0 ? 0 : i * d ** (i - 1) * (1 - d * d);
-    row[at + PURE_COEFFICIENTS + i] = ((1 + u) * (ofPower - 2 * d ** (i + 1))) / 2;
-  }
-}
-
 /**
  * Matrix M (p x p, row-major) with (A1, B1, A2, B2, J0 ...) = M (centred coefficients): A = a - b, B = T0 b, J = T0 j.
  *

@@ -6,9 +6,7 @@ import {
   lnValue,
   PURE_COEFFICIENTS,
   publishedFromCentred,
-  writeCompositionSlopeRow,
   writeDesignRow,
-  writeTemperatureSlopeRow,
 } from "../../pipeline/curves/jouyban-acree.ts";
 import {
   cornersOf,
@@ -18,7 +16,6 @@ import {
   mixtureRange,
   temperatureLimits,
 } from "../../pipeline/curves/mixture-range.ts";
-import { numericDerivative } from "./check.ts";
 
 const everywhere = mixtureRange([0, 0, 1, 1], [270, 350, 270, 350]);
 
@@ -65,31 +62,6 @@ test("The centred design row times centred coefficients is the published form", 
       const size = centred.reduce((sum, value) => sum + Math.abs(value), 1);
       expect(Math.abs(fromRow - byHand(published, w, T))).toBeLessThan(1e-11 * size);
       expect(coefficientNames(terms)).toHaveLength(centred.length);
-    }),
-  );
-});
-
-test("The slope rows are the numeric derivatives of the design row over temperature and over composition", () => {
-  fc.assert(
-    fc.property(fc.integer({ min: 0, max: 3 }), fractions, temperatures, (terms, w, T) => {
-      const p = PURE_COEFFICIENTS + terms;
-      const [overT, overW, row] = [new Float64Array(p), new Float64Array(p), new Float64Array(p)];
-      writeTemperatureSlopeRow(overT, 0, w, T, 300, terms);
-      writeCompositionSlopeRow(overW, 0, w, T, 300, terms);
-      const at = (fraction: number, t: number, j: number) => {
-        writeDesignRow(row, 0, fraction, t, 300, terms);
-        return row[j] as number;
-      };
-      for (let j = 0; j < p; j++) {
-        expect(overT[j]).toBeCloseTo(
-          numericDerivative((t) => at(w, t, j), T),
-          9,
-        );
-        expect(overW[j]).toBeCloseTo(
-          numericDerivative((f) => at(f, T, j), w, 0.001),
-          9,
-        );
-      }
     }),
   );
 });
